@@ -1,0 +1,36 @@
+import type { Manifest } from '../manifest/manifest.ts';
+import type { RecordNode, Records } from '../records/record.ts';
+import type { SealsFile, Standing } from '../records/seal.ts';
+import type { SeriesDifference } from '../series/difference.ts';
+import type { Reading } from './readings.ts';
+
+/** What one rule found, as far as rules of the second pass need it. */
+export interface Found {
+  readonly rule: string;
+  readonly record: string;
+}
+
+/** Everything that rules may ask about one manifest in one snapshot; computed before they run, frozen. */
+export interface Facts {
+  readonly manifest: Manifest;
+  readonly records: Records;
+  readonly sealsFile: SealsFile;
+  /** By record id; one for each present record. */
+  readonly standings: ReadonlyMap<string, Standing>;
+  /** The date of the verdict, ISO 8601. */
+  readonly today: string;
+  /** The manifest of the commit that this state is compared with; null if there was none or it can't be read. */
+  readonly before: Manifest | null;
+  /** Own files of records in other manifests of this snapshot: path to manifest and record. */
+  readonly claimedElsewhere: ReadonlyMap<string, { readonly manifest: string; readonly record: string }>;
+  /** Values taken from the model's own files, in the manifest's order. */
+  readonly readings: readonly Reading[];
+  /** For each changed file of a stale record that reads as a series: what changed, in the data's own terms. */
+  readonly differences: ReadonlyMap<string, SeriesDifference>;
+  /** Findings of the first pass; empty during it. */
+  readonly found: readonly Found[];
+  /** The phase in force: the manifest's, or the one asked for on the command line. */
+  readonly phase: string;
+  /** The present record of that id, or undefined. */
+  record(id: string): RecordNode | undefined;
+}

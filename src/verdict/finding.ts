@@ -1,0 +1,75 @@
+/** The level of a finding as it counts in this run. */
+export type Level = 'block' | 'warn' | 'note';
+
+/** One thing that a rule found, as reports and dossier see it. Keys as in the JSON report. */
+export interface Finding {
+  readonly rule: string;
+  readonly level: Level;
+  readonly record: string;
+  readonly message: string;
+  /** From the top of the repository. */
+  readonly file: string;
+  readonly line: number;
+  readonly column: number;
+  readonly stated: string | number | null;
+  readonly found: string | number | null;
+  readonly unit: string | null;
+  readonly trail: readonly string[];
+  readonly detail: readonly string[];
+  readonly source: string;
+  readonly clear: string;
+  /** The base revision had it already. */
+  readonly standing: boolean;
+  /** The waiver or acceptance that lets it pass, as `reason (person, date)`; null when none does. */
+  readonly waived: string | null;
+  readonly accepted: string | null;
+  /** Of rule, record and subject; never of wording, figures or lines. */
+  readonly fingerprint: string;
+}
+
+export type State = 'missing' | 'incomplete' | 'unsealed' | 'stale' | 'contradicted' | 'sound';
+
+export interface RecordSummary {
+  readonly id: string;
+  readonly state: State;
+  readonly grade: string | null;
+  readonly sealed_on: string | null;
+  readonly sealed_by: string | null;
+}
+
+/** A departure in force, said in every verdict. */
+export interface DepartureSummary {
+  readonly of: string;
+  readonly now: string;
+  readonly because: string;
+  readonly loosens: boolean;
+}
+
+export interface ManifestVerdict {
+  readonly path: string;
+  readonly study: string | null;
+  readonly phase: string;
+  readonly records: readonly RecordSummary[];
+  readonly findings: readonly Finding[];
+  readonly departures: readonly DepartureSummary[];
+}
+
+export interface Totals {
+  readonly records: number;
+  readonly sound: number;
+  readonly block: number;
+  readonly warn: number;
+  readonly note: number;
+  readonly waived: number;
+  readonly accepted: number;
+}
+
+/** The outcome of one check: the JSON report's content. */
+export interface Verdict {
+  readonly format: 'stoplog-findings/1';
+  readonly at: string;
+  readonly base: string | null;
+  readonly manifests: readonly ManifestVerdict[];
+  readonly totals: Totals;
+  readonly verdict: 'pass' | 'blocked';
+}
