@@ -1,0 +1,22 @@
+import { spawnSync } from 'node:child_process';
+
+/** Whether an outside tool that a test checks us against is here, and why not. */
+export interface Outside {
+  readonly available: boolean;
+  /** For the title of a skipped test; empty where the tool is here. */
+  readonly reason: string;
+}
+
+/**
+ * Looks for a tool by starting it (`git-lfs version`, `sha256sum --version`). Use as
+ * `it.skipIf(!lfs.available)(...)`. With STOPLOG_REQUIRE_OUTSIDE=1 an absent tool is an error and not a skip.
+ */
+export function outside(tool: string, args: readonly string[] = ['--version']): Outside {
+  const tried = spawnSync(tool, args, { stdio: 'ignore' });
+  if (tried.error === undefined && tried.status === 0) return { available: true, reason: '' };
+  const reason = `${tool} could not be started here (${tried.error?.message ?? `status ${tried.status}`})`;
+  if (process.env.STOPLOG_REQUIRE_OUTSIDE === '1') {
+    throw new Error(`${reason}, and STOPLOG_REQUIRE_OUTSIDE=1 asks for it.`);
+  }
+  return { available: false, reason };
+}
