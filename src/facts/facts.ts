@@ -10,6 +10,14 @@ export interface Found {
   readonly record: string;
 }
 
+/** What departures, waivers and acceptances may name. Handed in by the caller: rules come after facts. */
+export interface KnownRules {
+  /** By rule id: the phase from which it blocks, or `warn`. */
+  readonly rules: ReadonlyMap<string, string>;
+  /** By threshold, such as `balance.residual_share`. */
+  readonly limits: ReadonlyMap<string, { readonly default: number; readonly looser: 'higher' | 'lower' }>;
+}
+
 /** Everything that rules may ask about one manifest in one snapshot; computed before they run, frozen. */
 export interface Facts {
   readonly manifest: Manifest;
@@ -29,6 +37,7 @@ export interface Facts {
   readonly differences: ReadonlyMap<string, SeriesDifference>;
   /** Findings of the first pass; empty during it. */
   readonly found: readonly Found[];
+  readonly known: KnownRules;
   /** The phase in force: the manifest's, or the one asked for on the command line. */
   readonly phase: string;
   /** The present record of that id, or undefined. */

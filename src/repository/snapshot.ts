@@ -61,6 +61,8 @@ export interface Snapshot {
   stream(path: string): AsyncIterable<Uint8Array>;
   /** Content of a blob by id, for showing what changed since a seal; null when the object is not in the repository. */
   readBlob(blob: string, limit?: number): Promise<Uint8Array | null>;
+  /** Content of a path in the commit that this state follows (HEAD for work tree and index, the first parent for a revision); null where there is none. */
+  readBefore(path: string): Promise<Uint8Array | null>;
   /** Ends git children and removes temporary files. */
   close(): Promise<void>;
 }

@@ -1,5 +1,5 @@
 import type { Facts } from '../facts/facts.ts';
-import type { FieldPath } from '../manifest/manifest.ts';
+import type { FieldPath, Problem } from '../manifest/manifest.ts';
 import type { Area, RecordNode } from '../records/record.ts';
 
 /** How far a study has come, in order. A rule starts to block at a phase. */
@@ -46,6 +46,8 @@ export interface Limit {
   readonly default: number;
   readonly unit: string;
   readonly states: string;
+  /** Which way a departure asks for less. */
+  readonly looser: 'higher' | 'lower';
 }
 
 /** Limits by name as the rule sees them: defaults with the project's departures applied. */
@@ -58,8 +60,20 @@ export interface Source {
   readonly citation: string;
 }
 
-/** What a rule is asked about: the manifest as a whole, or each record of an area (a placeholder where the area is absent). */
-export type Scope = 'manifest' | Area;
+/** A manifest that could not be read: all that can be said of it. */
+export interface UnreadManifest {
+  readonly path: string;
+  readonly problems: readonly Problem[];
+}
+
+/**
+ * What a rule is asked about: `file`, a manifest that can't be read (no facts then); `manifest`, the manifest as
+ * a whole; or an area: each of its records, and a placeholder where an area of one record is absent.
+ */
+export type Scope = 'file' | 'manifest' | Area;
+
+type Asked<S extends Scope> = S extends Area ? RecordNode<S> : S extends 'file' ? UnreadManifest : null;
+type Given<S extends Scope> = S extends 'file' ? null : Facts;
 
 export interface Rule<S extends Scope = Scope> {
   /** `area.what-is-wrong`, as in the README's table. */
@@ -82,7 +96,7 @@ export interface Rule<S extends Scope = Scope> {
   /** By name; the departure's threshold is `<area of the id>.<name>`. */
   readonly limits?: Readonly<Record<string, Limit>>;
   /** Pure: no file, git, clock or locale. Returns data; never throws. */
-  check(record: S extends Area ? RecordNode<S> : null, facts: Facts, limits: Limits): readonly Draft[];
+  check(record: Asked<S>, facts: Given<S>, limits: Limits): readonly Draft[];
 }
 
 /** Fixes the scope's type so that `check` gets the record it asked for. */

@@ -1,0 +1,80 @@
+import { resolve } from 'node:path';
+import { Failure } from '../failure.ts';
+import { jsonReport } from '../reports/json.ts';
+import { textReport } from '../reports/text.ts';
+import { openSnapshot } from '../repository/open-snapshot.ts';
+import { openRepository } from '../repository/repository.ts';
+import type { At } from '../repository/snapshot.ts';
+import type { Phase } from '../rules/rule.ts';
+import type { Verdict } from '../verdict/finding.ts';
+import type { Context, ExitStatus } from './command.ts';
+import { examine } from './examine.ts';
+import { manifestName, sealsName } from './studies.ts';
+import { writeFileSafely } from './write-file.ts';
+
+export interface CheckOptions {
+  readonly at: string;
+  readonly only?: string;
+  readonly phase?: Phase;
+  readonly report: readonly string[];
+  readonly cache: boolean;
+  readonly quiet?: boolean;
+  readonly color?: boolean;
+}
+
+const kinds = ['text', 'json'] as const;
+type Kind = (typeof kinds)[number];
+
+interface Report {
+  readonly kind: Kind;
+  /** `-` for standard output, else a path. */
+  readonly to: string;
+}
+
+/** `stoplog check`: 0 when nothing blocks, 1 when something does. */
+export async function checkCommand(context: Context, options: CheckOptions): Promise<ExitStatus> {
+  const reports = (options.report.length > 0 ? options.report : ['text']).map(readReport);
+  const repository = await openRepository(context.cwd, context.environment);
+  const snapshot = await openSnapshot(repository, readAt(options.at), {
+    alsoUntracked: [manifestName, sealsName],
+    remember: options.cache,
+  });
+  try {
+    const verdict = await examine(snapshot, {
+      today: context.today,
+      only: options.only,
+      phase: options.phase,
+    });
+    for (const { kind, to } of reports) {
+      const text = write(kind, verdict, options, to === '-' && context.color);
+      if (to === '-') context.write(text);
+      else await writeFileSafely(resolve(context.cwd, to), text);
+    }
+    return verdict.verdict === 'pass' ? 0 : 1;
+  } finally {
+    await snapshot.close();
+  }
+}
+
+/** `worktree`, `index`, or anything else as a revision. */
+export function readAt(at: string): At {
+  return at === 'worktree' || at === 'index' ? { kind: at } : { kind: 'revision', revision: at };
+}
+
+function write(kind: Kind, verdict: Verdict, options: CheckOptions, color: boolean): string {
+  if (kind === 'json') return jsonReport(verdict);
+  return textReport(verdict, { color: options.color ?? color, quiet: options.quiet ?? false });
+}
+
+function readReport(given: string): Report {
+  const [kind, ...path] = given.split('=');
+  const known = kinds.find((one) => one === kind);
+  if (known === undefined) {
+    throw new Failure(
+      'usage',
+      `\`--report ${given}\` asks for a kind of report that does not exist.`,
+      `Kinds: ${kinds.join(', ')}; as \`--report json=findings.json\`, or \`--report json\` for standard output.`,
+    );
+  }
+  return { kind: known, to: path.length === 0 ? '-' : path.join('=') };
+}

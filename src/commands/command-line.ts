@@ -1,0 +1,111 @@
+import { Command, CommanderError, Option } from 'commander';
+import { Failure } from '../failure.ts';
+import { caution } from '../reports/caution.ts';
+import { phases } from '../rules/rule.ts';
+import { checkCommand } from './check.ts';
+import type { Context, ExitStatus } from './command.ts';
+import { hookAdd, hookList, hookRemove } from './hook.ts';
+import { rulesCommand } from './rules.ts';
+import { sealCommand } from './seal.ts';
+import { version } from './version.ts';
+
+/** Reads the command line, runs the command, returns the exit status. Throws a Failure for what could not be done. */
+export async function runCommandLine(words: readonly string[], context: Context): Promise<ExitStatus> {
+  let status: ExitStatus = 0;
+  const run =
+    <Given extends unknown[]>(action: (context: Context, ...given: Given) => Promise<ExitStatus>) =>
+    async (...given: Given): Promise<void> => {
+      status = await action(context, ...given);
+    };
+  const program = describe(run);
+  for (const one of [program, ...program.commands.flatMap((command) => [command, ...command.commands])]) {
+    one.exitOverride();
+    one.configureOutput({ writeOut: context.write, writeErr: () => {}, getOutHelpWidth: () => 100 });
+  }
+  try {
+    await program.parseAsync([...words], { from: 'user' });
+  } catch (error) {
+    if (!(error instanceof CommanderError)) throw error;
+    if (error.exitCode === 0) return 0;
+    throw usage(error, program);
+  }
+  return status;
+}
+
+type Run = <Given extends unknown[]>(
+  action: (context: Context, ...given: Given) => Promise<ExitStatus>,
+) => (...given: Given) => Promise<void>;
+
+function describe(run: Run): Command {
+  const program = new Command('stoplog')
+    .description(
+      'Holds back a commit or pull request until the records of a catchment model are complete and still true.',
+    )
+    .version(version, '--version')
+    .helpOption('--help', 'say how to use this')
+    .helpCommand(false)
+    .addHelpText('after', `\nExit status: 0 pass, 1 blocked, 2 could not check.\n\n${caution}`);
+  const at = new Option('--at <content>', '`worktree`, `index` (what is staged), or a revision').default(
+    'worktree',
+  );
+
+  program
+    .command('check')
+    .description('check the records against the files: the main job')
+    .addOption(at)
+    .option('--only <what>', 'one record, one area (such as `inputs`), or one manifest’s folder')
+    .addOption(new Option('--phase <phase>', 'judge as if the study had come this far').choices(phases))
+    .option('--report <kind=path>', '`text` or `json`, to a file or to `-`; may be repeated', collect, [])
+    .option('--no-cache', 'read every file anew instead of remembering digests')
+    .option('--quiet', 'print only what blocks')
+    .option('--color', 'colour the text report also where the output is no terminal')
+    .option('--no-color', 'never colour it')
+    .action(run(checkCommand));
+
+  program
+    .command('seal')
+    .description('after review, fingerprint records and what they rest on')
+    .argument('[records...]', 'such as `inputs.rainfall`')
+    .option('--all', 'every record that needs it')
+    .option('--figures', 'first write the recomputed figures into the manifest; old and new are shown')
+    .option('--because <reason>', 'why a record is sealed though its outputs did not change with its inputs')
+    .option('--moved', 'follow files and records that were renamed, keeping who sealed them and when')
+    .addOption(at)
+    .option('--only <folder>', 'one manifest’s folder')
+    .action(run(sealCommand));
+
+  program
+    .command('rules')
+    .description('list every rule, or explain one: when it fires, why, its source, how to clear it')
+    .argument('[id]', 'such as `seal.stale`')
+    .action(run(rulesCommand));
+
+  const hook = program
+    .command('hook')
+    .description('git hooks that check what is about to be committed or pushed');
+  hook
+    .command('add')
+    .description('install them; hooks that are there are kept and run first')
+    .action(run(hookAdd));
+  hook
+    .command('remove')
+    .description('take them out; what was there before is put back')
+    .action(run(hookRemove));
+  hook.command('list').description('say which hooks are there').action(run(hookList));
+  return program;
+}
+
+function collect(value: string, before: readonly string[]): readonly string[] {
+  return [...before, value];
+}
+
+function usage(error: CommanderError, program: Command): Failure {
+  const known = program.commands.map((command) => command.name()).join(', ');
+  const said = error.message.replace(/^error: /, '');
+  return new Failure(
+    'usage',
+    error.code === 'commander.help' ? 'no command was given.' : `${said}.`.replace(/\.\.$/, '.'),
+    `Commands: ${known}. \`stoplog --help\` or \`stoplog COMMAND --help\` says more.`,
+    error,
+  );
+}

@@ -1,0 +1,16 @@
+/** What the outside world gives a command, and where its words go. Only main.ts makes a real one. */
+export interface Context {
+  readonly cwd: string;
+  readonly environment: Readonly<Record<string, string | undefined>>;
+  /** ISO 8601 date by which waivers expire and seals are dated. */
+  readonly today: string;
+  /** Whether standard output is a terminal that shows colours. */
+  readonly color: boolean;
+  /** Standard output: what was asked for. */
+  write(text: string): void;
+  /** Standard error: what goes beside it. */
+  tell(text: string): void;
+}
+
+/** 0 pass, 1 blocked, 2 could not check (thrown as a Failure). */
+export type ExitStatus = 0 | 1;

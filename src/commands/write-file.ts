@@ -1,0 +1,35 @@
+import { randomBytes } from 'node:crypto';
+import { open, realpath, rename, rm, stat } from 'node:fs/promises';
+import { Failure } from '../failure.ts';
+
+/**
+ * Writes a file whole or not at all: to a temporary file beside it, then renamed. Keeps the mode of a file that
+ * is there, and writes through a link to the file it leads to. Throws Failure 'unwritable-file'.
+ */
+export async function writeFileSafely(path: string, content: string | Uint8Array): Promise<void> {
+  const target = await realpath(path).catch(() => path);
+  const temporary = `${target}.${randomBytes(6).toString('hex')}.tmp`;
+  try {
+    const mode = await stat(target).then(
+      (found) => found.mode & 0o777,
+      () => 0o666,
+    );
+    const file = await open(temporary, 'wx', mode);
+    try {
+      await file.writeFile(content);
+      await file.sync();
+    } finally {
+      await file.close();
+    }
+    await rename(temporary, target);
+  } catch (error) {
+    await rm(temporary, { force: true });
+    const reason = error instanceof Error ? error.message : String(error);
+    throw new Failure(
+      'unwritable-file',
+      `${path} could not be written (${reason}).`,
+      'Nothing was changed. Check the folder’s permissions and the free space, then try again.',
+      error,
+    );
+  }
+}

@@ -1,0 +1,55 @@
+import { mkdtempSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import type { Context } from './commands/command.ts';
+import { runCommandLine } from './commands/command-line.ts';
+import { Failure } from './failure.ts';
+
+const context: Context = {
+  cwd: process.cwd(),
+  environment: process.env,
+  today: dateOf(process.env.SOURCE_DATE_EPOCH),
+  color: wantsColor(),
+  write: (text) => void process.stdout.write(text),
+  tell: (text) => void process.stderr.write(text),
+};
+
+process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+  // A reader that has seen enough (`| head`) is no failure of ours.
+  if (error.code !== 'EPIPE') throw error;
+});
+
+try {
+  process.exitCode = await runCommandLine(process.argv.slice(2), context);
+} catch (error) {
+  process.exitCode = 2;
+  const failure = error instanceof Failure ? error : internal(error);
+  context.tell(`stoplog could not do this: ${failure.message}\n${failure.next}\n`);
+}
+
+/** Today's date here, or that of SOURCE_DATE_EPOCH where a reproducible run sets it. */
+function dateOf(epoch: string | undefined): string {
+  const now = epoch !== undefined && /^\d+$/.test(epoch) ? new Date(Number(epoch) * 1000) : new Date();
+  const local = epoch === undefined ? now.getTime() - now.getTimezoneOffset() * 60_000 : now.getTime();
+  return new Date(local).toISOString().slice(0, 10);
+}
+
+function wantsColor(): boolean {
+  const { NO_COLOR, FORCE_COLOR, TERM } = process.env;
+  if (NO_COLOR !== undefined && NO_COLOR !== '') return false;
+  if (FORCE_COLOR !== undefined && FORCE_COLOR !== '0') return true;
+  return process.stdout.isTTY === true && TERM !== 'dumb';
+}
+
+/** A fault of Stoplog's own: the details go to a file, not to the screen. */
+function internal(error: unknown): Failure {
+  const details = error instanceof Error ? (error.stack ?? error.message) : String(error);
+  const file = join(mkdtempSync(join(tmpdir(), 'stoplog-')), 'fault.txt');
+  writeFileSync(file, `stoplog ${STOPLOG_VERSION}, node ${process.version}\n${details}\n`);
+  return new Failure(
+    'internal',
+    'a fault in Stoplog itself stopped this run.',
+    `Nothing was changed. Please report it with the details in ${file}.`,
+    error,
+  );
+}

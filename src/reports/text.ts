@@ -1,0 +1,138 @@
+import { Chalk, type ChalkInstance } from 'chalk';
+import type { Finding, Level, ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import { passes } from '../verdict/judge.ts';
+import { caution } from './caution.ts';
+import { plain } from './escape.ts';
+import { foldStale, type Group, groupByRecord } from './fold.ts';
+import { wrap } from './wrap.ts';
+
+export interface TextOptions {
+  readonly color: boolean;
+  /** Only what blocks, and nothing at all on a pass. */
+  readonly quiet: boolean;
+}
+
+const width = 100;
+const indent = ' '.repeat(5);
+const headings: Readonly<Record<Level, string>> = { block: 'BLOCKED', warn: 'WARNED', note: 'NOTED' };
+/** How many records that are stale from one cause are shown one by one. */
+const shownPerCause = 12;
+
+/** The verdict for a terminal: what is held back and why, what to do, then the tally. */
+export function textReport(verdict: Verdict, { color, quiet }: TextOptions): string {
+  if (quiet && verdict.verdict === 'pass') return '';
+  const paint = new Chalk({ level: color ? 1 : 0 });
+  const levels: readonly Level[] = quiet ? ['block'] : ['block', 'warn', 'note'];
+  const lines = verdict.manifests.flatMap((manifest, index) => [
+    ...(index > 0 ? [''] : []),
+    ...opening(verdict, manifest, index === 0 ? paint.bold('stoplog') : ' '.repeat(7)),
+    ...levels.flatMap((level) => section(manifest, level, paint)),
+    ...(quiet ? [] : answered(manifest)),
+  ]);
+  const { block, warn, note } = verdict.totals;
+  const tally = `${count(block, 'finding')} to clear, ${count(warn, 'warning')}, ${count(note, 'note')}`;
+  const pass = verdict.verdict === 'pass';
+  lines.push('', `${pass ? paint.green.bold('PASS') : paint.red.bold('BLOCKED')}   ${tally}`);
+  if (pass) lines.push('', ...wrap(caution, width).map((line) => paint.dim(line)));
+  return `${lines.join('\n')}\n`;
+}
+
+function opening(verdict: Verdict, manifest: ManifestVerdict, name: string): readonly string[] {
+  const sound = manifest.records.filter((record) => record.state === 'sound').length;
+  const study = plain(manifest.study ?? manifest.path);
+  const column = Math.max(study.length, 28) + 4;
+  const where = verdict.base === null ? verdict.at : `${verdict.at}, against ${verdict.base}`;
+  return [
+    `${name}   ${study.padEnd(column)}${plain(where)}`,
+    `${' '.repeat(10)}${`phase ${manifest.phase}`.padEnd(column)}${sound} of ${count(manifest.records.length, 'record')} sound`,
+  ];
+}
+
+function section(manifest: ManifestVerdict, level: Level, paint: ChalkInstance): readonly string[] {
+  const groups = groupByRecord(
+    manifest.findings.filter((finding) => finding.level === level && passes(finding) === null),
+  );
+  if (groups.length === 0) return [];
+  const tint = { block: paint.red.bold, warn: paint.yellow.bold, note: paint.bold }[level];
+  const { shown, folded } = foldStale(groups, shownPerCause);
+  return [
+    '',
+    tint(`${headings[level]}   ${count(groups.length, 'record')}`),
+    ...shown.flatMap((group) => recordLines(group, manifest, paint)),
+    ...[...folded].flatMap(([cause, records]) => [
+      '',
+      `${indent}and ${count(records.length, 'more record')} that rest on ${plain(cause)}`,
+    ]),
+  ];
+}
+
+function recordLines(
+  [record, findings]: Group,
+  manifest: ManifestVerdict,
+  paint: ChalkInstance,
+): readonly string[] {
+  const state = manifest.records.find(({ id }) => id === record)?.state;
+  const [first] = findings;
+  const title = `  ${plain(record)}${state === undefined || state === 'sound' ? '' : `   ${state}`}`;
+  const place = first === undefined ? '' : `${plain(first.file)}:${first.line}`;
+  const gap = ' '.repeat(Math.max(3, width - title.length - place.length));
+  return [
+    '',
+    `${paint.bold(title)}${gap}${paint.dim(place)}`,
+    ...findings.flatMap((finding) => findingLines(finding, place, paint)),
+  ];
+}
+
+function findingLines(finding: Finding, placeOfRecord: string, paint: ChalkInstance): readonly string[] {
+  const place = `${plain(finding.file)}:${finding.line}`;
+  const hanging = `${indent}${' '.repeat(11)}`;
+  const [step = '', ...more] = wrap(plain(finding.clear), width - hanging.length);
+  return [
+    ...wrap(plain(finding.message), width - indent.length).map((line) => indent + line),
+    ...comparison(finding),
+    ...finding.detail.map((line) => indent + plain(line)),
+    ...(finding.trail.length > 1
+      ? wrap(`rests on ${finding.trail.slice(1).map(plain).join(' <- ')}`, width - indent.length).map(
+          (line) => indent + line,
+        )
+      : []),
+    ...(place === placeOfRecord ? [] : [indent + paint.dim(`at ${place}`)]),
+    `${indent}${paint.cyan('to clear')}   ${step}`,
+    ...more.map((line) => hanging + line),
+    paint.dim(`${hanging}(${finding.rule})`),
+  ];
+}
+
+function comparison({ stated, found, unit }: Finding): readonly string[] {
+  if (stated === null && found === null) return [];
+  const shown = (value: string | number | null) => (value === null ? 'nothing' : plain(String(value)));
+  return [`${indent}stated ${shown(stated)}, found ${shown(found)}${unit === null ? '' : ` ${plain(unit)}`}`];
+}
+
+/** Findings that pass by somebody's signed word, and departures from the default levels: always said. */
+function answered(manifest: ManifestVerdict): readonly string[] {
+  const lines = [
+    ...manifest.findings.flatMap((finding) => {
+      const reason = passes(finding);
+      const how = finding.waived === null ? 'accepted' : 'waived';
+      return reason === null ? [] : [`${how}: ${finding.rule} on ${finding.record}: ${reason}`];
+    }),
+    ...manifest.departures.map(
+      ({ of, now, because, loosens }) =>
+        `departed: ${of} now ${now}${loosens ? ', less than the default asks for' : ''}: ${because}`,
+    ),
+  ];
+  if (lines.length === 0) return [];
+  return [
+    '',
+    'BY SOMEBODY’S WORD',
+    ...lines.flatMap((line) =>
+      wrap(plain(line), width - 2).map((part, index) => (index === 0 ? `  ${part}` : indent + part)),
+    ),
+  ];
+}
+
+/** `1 record`, `12 records`. */
+export function count(number: number, noun: string): string {
+  return `${number} ${noun}${number === 1 ? '' : 's'}`;
+}
