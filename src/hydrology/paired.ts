@@ -26,16 +26,42 @@ export interface Paired {
 /** A value, or the reason in words why there is none. Never NaN, never a stand-in number. */
 export type Statistic<T = number> = { readonly value: T } | { readonly undefined: string };
 
+/** Example: defined('wet') -> {value: 'wet'} */
 export function defined<T>(value: T): { readonly value: T } {
   return { value };
 }
 
+/** Example: undefinedBecause('no pairs') -> {undefined: 'no pairs'} */
 export function undefinedBecause(reason: string): { readonly undefined: string } {
   return { undefined: reason };
 }
 
+/** Example: isDefined(undefinedBecause('no pairs')) -> false */
 export function isDefined<T>(statistic: Statistic<T>): statistic is { readonly value: T } {
   return 'value' in statistic;
+}
+
+/**
+ * A computed number; a reason instead when the arithmetic left the range of numbers.
+ * Example: computed(Number.POSITIVE_INFINITY) -> {undefined: 'the values are too large or too small to compute with'}
+ */
+export function computed(value: number): Statistic {
+  return Number.isFinite(value)
+    ? { value }
+    : undefinedBecause('the values are too large or too small to compute with');
+}
+
+/**
+ * Several numbers computed together; the same reason when one of them is no finite number.
+ * Example: computedTogether({slope: 1, r: 0.5}) -> {value: {slope: 1, r: 0.5}}
+ */
+export function computedTogether<T extends object>(parts: T): Statistic<T> {
+  for (const part of Object.values(parts)) {
+    if (typeof part !== 'number') continue;
+    const checked = computed(part);
+    if (!isDefined(checked)) return checked;
+  }
+  return defined(parts);
 }
 
 /** A value that may be missing, as readers hand it over. */
@@ -45,6 +71,7 @@ export type Value = number | null;
  * Pairs two lists that already stand step beside step, one step a day from 1970-01-01: a pair is dropped when either
  * member is missing or not finite. For series of equal steps without dates, and for tests.
  * Throws a RangeError when the lists differ in length.
+ * Example: pairInOrder({observed: [1, null, 3], simulated: [2, 2, 4]}).dropped.missingObserved -> 1
  */
 export function pairInOrder(sides: {
   readonly observed: ArrayLike<Value>;
@@ -74,7 +101,10 @@ export function pairInOrder(sides: {
   };
 }
 
-/** Share of the window's steps that gave a pair, 0 to 1; undefined for a window without steps. */
+/**
+ * Share of the window's steps that gave a pair, 0 to 1; undefined for a window without steps.
+ * Example: pairedShare(pairInOrder({observed: [1, null], simulated: [2, 2]})) -> {value: 0.5}
+ */
 export function pairedShare(paired: Paired): Statistic {
   if (paired.windowSteps === 0) return undefinedBecause('the window holds no steps');
   return defined(paired.observed.length / paired.windowSteps);
