@@ -12,7 +12,7 @@ import { nashSutcliffe } from './nash-sutcliffe.ts';
  * Undefined: as NSE; any negative flow; observations all zero.
  * Variant: adding to each series a hundredth of its own mean hides bias; here both get that of the observations, over the same pairs.
  * Source: Pushpalatha et al. 2012, J. Hydrol. 420-421:171-182.
- * Example: logNashSutcliffe(pairInOrder({observed: [0, 0.4, 1.6, 3.1], simulated: [0.1, 0.3, 1.9, 2.6]})) -> {value: 0.7824}
+ * Example: logNashSutcliffe(pairInOrder({observed: [0, 0, 0.4, 1.6, 0.9, 0, 0.2, 3.1], simulated: [0.05, 0, 0.3, 1.9, 0.7, 0.1, 0, 2.6]})) -> {value: 0.5168}
  */
 export function logNashSutcliffe(paired: Paired): Statistic {
   const offset = logOffset(paired);

@@ -7,41 +7,32 @@ export interface RatingBasis {
   readonly variable: string;
 }
 
-/**
- * Every name under which a record can say what it is rated by: table, time step and variable, such as `moriasi-2015-daily-flow`.
- *
- * Formula: <table>-<step>-<variable>, streamflow written `flow`, blanks as hyphens
- * Inputs: none.
- * Range: one name for each step and variable that a table publishes limits for.
- * Read: a rating without its time step is incomplete, so the name holds it.
- * Undefined: never.
- * Source: definition.
- * Example: ratingBases().has('moriasi-2007-monthly-phosphorus') -> true
- */
-export function ratingBases(): ReadonlyMap<string, RatingBasis> {
-  const names = new Map<string, RatingBasis>();
-  for (const table of ratingTables)
-    for (const row of table.rows)
-      for (const step of row.steps)
-        for (const variable of row.variables) {
+/** By name: every table, time step and variable that limits are published for. */
+export const ratingBases: ReadonlyMap<string, RatingBasis> = new Map(
+  ratingTables.flatMap((table) =>
+    table.rows.flatMap((row) =>
+      row.steps.flatMap((step) =>
+        row.variables.map((variable) => {
           const short = variable === 'streamflow' ? 'flow' : variable.replaceAll(' ', '-');
-          names.set(`${table.id}-${step}-${short}`, { table: table.id, step, variable });
-        }
-  return names;
-}
+          return [`${table.id}-${step}-${short}`, { table: table.id, step, variable }] as const;
+        }),
+      ),
+    ),
+  ),
+);
 
 /**
- * What a name such as `moriasi-2015-daily-flow` stands for.
+ * What a record means that says it is rated by `moriasi-2015-daily-flow`.
  *
- * Formula: the entry of `ratingBases`
+ * Formula: <table>-<step>-<variable>, streamflow written `flow`, blanks as hyphens
  * Inputs: the name.
  * Range: one of the published table, step and variable.
- * Read: hand the result on to `rateScore`.
+ * Read: a rating without its time step is incomplete, so the name holds it; hand the result on to `rateScore`.
  * Undefined: no table publishes limits under that name.
  * Source: definition.
  * Example: ratingBasis('moriasi-2015-daily-flow') -> {value: {table: 'moriasi-2015', step: 'daily', variable: 'streamflow'}}
  */
 export function ratingBasis(name: string): Statistic<RatingBasis> {
-  const basis = ratingBases().get(name);
+  const basis = ratingBases.get(name);
   return basis ? defined(basis) : undefinedBecause(`no published table gives limits named ${name}`);
 }
