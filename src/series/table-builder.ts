@@ -1,0 +1,100 @@
+import type { Step } from './step.ts';
+import { Listing, stepFaults } from './step-faults.ts';
+import type { SeriesProblem, SeriesTable, TimeAt } from './table.ts';
+
+/**
+ * Arrays that a builder has done with, for the next one: the first touch of fresh memory costs more than reading a file into it
+ * (measured). Several files may be on their way at once, each with arrays of its own.
+ */
+const spare: Float64Array[] = [];
+const spareAtMost = 16;
+const firstLength = 1 << 16;
+
+/** Rows as they are read, in arrays that grow by doubling; sorted and cut to size at the end. */
+export class TableBuilder {
+  readonly problems = new Listing<SeriesProblem>();
+  private rows = 0;
+  private capacity = firstLength;
+  private minutes = take();
+  private lines = take();
+  private values: Float64Array[];
+  private latest = Number.NEGATIVE_INFINITY;
+  private readonly outOfOrder = new Listing<TimeAt>();
+
+  constructor(columns: number) {
+    this.values = Array.from({ length: columns }, take);
+  }
+
+  get isEmpty(): boolean {
+    return this.rows === 0 && this.problems.total === 0;
+  }
+
+  /** `values` holds one number for each column, NaN where missing; it is copied. */
+  add(line: number, minutes: number, values: Float64Array): void {
+    if (this.rows === this.capacity) this.grow();
+    const row = this.rows++;
+    this.minutes[row] = minutes;
+    this.lines[row] = line;
+    for (let column = 0; column < values.length; column++)
+      (this.values[column] as Float64Array)[row] = values[column] as number;
+    if (minutes >= this.latest) this.latest = minutes;
+    else this.outOfOrder.add({ line, minutes });
+  }
+
+  /** The table; to be called once, at the end. */
+  table(about: {
+    readonly file: string;
+    readonly unit: string;
+    readonly step: Step | null;
+    readonly names: readonly string[];
+  }): SeriesTable {
+    const { names, ...rest } = about;
+    const { rows } = this;
+    const order = this.outOfOrder.total === 0 ? null : risingOrder(this.minutes.subarray(0, rows));
+    const minutes = copy(this.minutes, new Float64Array(rows), order);
+    const lines = copy(this.lines, new Uint32Array(rows), order);
+    const columns = this.values.map((from, column) => {
+      const values = copy(from, new Float64Array(rows), order);
+      let missing = 0;
+      for (let row = 0; row < rows; row++) if (Number.isNaN(values[row])) missing++;
+      return { name: names[column] ?? '', values, missing };
+    });
+    for (const array of [this.minutes, this.lines, ...this.values])
+      if (spare.length < spareAtMost && array.length === firstLength) spare.push(array);
+    const { problems, outOfOrder } = this;
+    return {
+      ...rest,
+      minutes,
+      lines,
+      columns,
+      problems,
+      outOfOrder,
+      ...stepFaults(minutes, lines, about.step),
+    };
+  }
+
+  private grow(): void {
+    this.capacity *= 2;
+    const grown = (array: Float64Array) => copy(array, new Float64Array(this.capacity), null);
+    this.minutes = grown(this.minutes);
+    this.lines = grown(this.lines);
+    this.values = this.values.map(grown);
+  }
+}
+
+function take(): Float64Array {
+  return spare.pop() ?? new Float64Array(firstLength);
+}
+
+/** Places of rows in rising order of time; of one time in the order of the file. */
+function risingOrder(minutes: Float64Array): Uint32Array {
+  const order = Uint32Array.from(minutes.keys());
+  return order.sort((one, other) => (minutes[one] as number) - (minutes[other] as number) || one - other);
+}
+
+/** Fills `to` from the beginning of `from`, or in that order. */
+function copy<T extends Float64Array | Uint32Array>(from: Float64Array, to: T, order: Uint32Array | null): T {
+  if (order === null) to.set(from.length > to.length ? from.subarray(0, to.length) : from);
+  else for (let row = 0; row < to.length; row++) to[row] = from[order[row] as number] as number;
+  return to;
+}
