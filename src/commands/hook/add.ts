@@ -1,0 +1,84 @@
+import { mkdir, rename } from 'node:fs/promises';
+import { dirname, join, relative } from 'node:path';
+import type { Repository } from '../../repository/repository.ts';
+import { type Before, earlierName, withBlock } from './block.ts';
+import { hookHome } from './home.ts';
+import { type HookContent, interpreter, isThere, lookAtHook } from './look.ts';
+import { type Done, type HookReport, reportHooks } from './report.ts';
+import { type HookName, hookNames, scriptForGit, scriptForHusky } from './script.ts';
+import { change, writeHook } from './write.ts';
+
+/**
+ * Writes the hooks. One that is there is kept and runs first; one of ours that someone changed is left alone.
+ * Failures: 'usage' (a repository where they would not run, see `hookHome`), 'unreadable-file', 'unwritable-file'.
+ */
+export async function addHooks(
+  repository: Repository,
+  { hooks = hookNames }: { readonly hooks?: readonly HookName[] } = {},
+): Promise<HookReport> {
+  const home = await hookHome(repository);
+  let foldersMade = await makeFolders(home.folder);
+  const done = new Map<string, Done>();
+  for (const hook of hooks) {
+    const there = await lookAtHook(home, hook);
+    done.set(there.file, await addHook(there, foldersMade));
+    foldersMade = 0; // The first hook remembers them for all.
+  }
+  return reportHooks(repository, done);
+}
+
+async function addHook(there: HookContent, foldersMade: number): Promise<Done> {
+  if (there.found === 'changed') return 'left';
+  if (there.block !== null) return renew(there, there.block);
+  if (there.content === null) {
+    const mode = there.home.starter === 'git' ? 0o755 : 0o644;
+    await writeHook(there.file, compose(there, { was: 'nothing', foldersMade }, ''), mode);
+    return 'written';
+  }
+  if (there.home.starter === 'husky') {
+    const content = compose(there, { was: 'the lines below', foldersMade }, there.content);
+    await writeHook(there.file, content, there.mode);
+    return 'written';
+  }
+  await moveAside(there, async (earlier) => {
+    await writeHook(there.file, compose(there, { was: `the hook ${earlier}`, foldersMade }, ''), 0o755);
+  });
+  return 'written';
+}
+
+/** Brings a hook of ours to the text of this version, with what it remembers. */
+async function renew(there: HookContent, block: Before & { readonly rest: string }): Promise<Done> {
+  const content = compose(there, block, block.rest);
+  const skipped = there.home.starter === 'git' && !there.executable;
+  if (content === there.content && !skipped) return 'none';
+  await writeHook(there.file, content, skipped ? 0o755 : there.mode);
+  return 'renewed';
+}
+
+/** The text of a hook of ours: with husky around the project's own lines, else whole. */
+function compose({ hook, home }: HookContent, before: Before, rest: string): string {
+  return home.starter === 'husky'
+    ? withBlock(rest, scriptForHusky(hook), before)
+    : withBlock(interpreter, scriptForGit(hook, earlierName(before)), before);
+}
+
+/** Gives the earlier hook a free name beside it, and its own back where ours could not be written. */
+async function moveAside(there: HookContent, write: (earlier: string) => Promise<void>): Promise<void> {
+  const folder = dirname(there.file);
+  let name = `${there.hook}.local`;
+  for (let number = 2; await isThere(join(folder, name)); number += 1) name = `${there.hook}.local-${number}`;
+  const aside = join(folder, name);
+  await change(there.file, () => rename(there.file, aside));
+  try {
+    await write(name);
+  } catch (error) {
+    await rename(aside, there.file);
+    throw error;
+  }
+}
+
+/** How many folders had to be made. */
+async function makeFolders(folder: string): Promise<number> {
+  const outermost = await change(folder, () => mkdir(folder, { recursive: true }));
+  return outermost === undefined ? 0 : relative(dirname(outermost), folder).split(/[\\/]/).length;
+}

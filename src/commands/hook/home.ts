@@ -1,0 +1,133 @@
+import { existsSync, statSync } from 'node:fs';
+import { readFile } from 'node:fs/promises';
+import { basename, dirname, isAbsolute, join, relative } from 'node:path';
+import { Failure } from '../../failure.ts';
+import { ask, type Question } from '../../repository/git.ts';
+import type { Repository } from '../../repository/repository.ts';
+
+/** A folder in which hooks lie. */
+export interface HookHome {
+  /** Absolute. With husky the project's own scripts, not the ones that husky makes. */
+  readonly folder: string;
+  readonly starter: 'git' | 'husky';
+  /** Whether git comes here now: `core.hooksPath` may have led elsewhere since, or husky is not set up. */
+  readonly inForce: boolean;
+  /** What people should know about hooks in this folder; whole sentences. */
+  readonly notes: readonly string[];
+}
+
+interface HooksPath {
+  readonly scope: string;
+  /** As it is written in the settings of git. */
+  readonly value: string;
+}
+
+const hooksPath: Question<HooksPath | null> = {
+  args: ['config', '--null', '--show-scope', '--get', 'core.hooksPath'],
+  statuses: [1],
+  parse(output, status) {
+    const [scope = '', value = ''] = output.toString('utf8').split('\0');
+    return status === 0 ? { scope, value } : null;
+  },
+};
+
+const tracksAnythingIn = (folder: string): Question<boolean> => ({
+  args: ['ls-files', '-z', '--', folder],
+  parse: (output) => output.length > 0,
+});
+
+/**
+ * The folder where this repository's hooks belong. Throws Failure 'usage', with the reason, where no hook of ours
+ * would run or where it would run in other repositories too.
+ */
+export async function hookHome(repository: Repository): Promise<HookHome> {
+  const top = workTree(repository);
+  const { hooksFolder } = repository;
+  const setting = await ask(repository, hooksPath);
+  const within = setting !== null && isInside(hooksFolder, top);
+  if (within && basename(hooksFolder) === '_') {
+    return huskyHome(dirname(hooksFolder), existsSync(join(hooksFolder, 'h')), top);
+  }
+  if (setting === null && (await huskyIsPlanned(top))) return huskyHome(join(top, '.husky'), false, top);
+  if (setting !== null) refuseElsewhere(repository, setting, within);
+
+  const notes: string[] = [];
+  if (within && (await ask(repository, tracksAnythingIn(hooksFolder)))) {
+    notes.push(`git tracks ${relative(top, hooksFolder)}: what changes there reaches others with a commit.`);
+  } else if (within && !isAbsolute(setting.value)) {
+    notes.push(
+      `core.hooksPath is ${setting.value}, taken from the top of each work tree, and git does not track that folder: ` +
+        'in another work tree or clone it is missing, and git then runs no hook and does not say so.',
+    );
+  } else if (repository.gitDirectory !== repository.commonDirectory) {
+    notes.push('These hooks serve every work tree of this repository.');
+  }
+  return { folder: hooksFolder, starter: 'git', inForce: true, notes };
+}
+
+/** Other folders where hooks of ours may lie since before `core.hooksPath` was set or husky came or went. */
+export function formerHomes(repository: Repository, now: HookHome): readonly HookHome[] {
+  const former = { inForce: false, notes: [] };
+  const homes: HookHome[] = [
+    { ...former, folder: join(repository.commonDirectory, 'hooks'), starter: 'git' },
+    { ...former, folder: join(workTree(repository), '.husky'), starter: 'husky' },
+  ];
+  return homes.filter((home) => home.folder !== now.folder);
+}
+
+function huskyHome(folder: string, inForce: boolean, top: string): HookHome {
+  const name = relative(top, folder);
+  const notes = [`${name} belongs to the project: what changes there reaches others with a commit.`];
+  if (!inForce) {
+    notes.push(
+      `husky is not set up in this work tree, so git runs no hook here and does not say so. Set it up with \`npm install\` (its \`prepare\` script does it) or \`npx husky\` in ${top}.`,
+    );
+  }
+  return { folder, starter: 'husky', inForce, notes };
+}
+
+/** A fresh clone of a project with husky: its scripts are there, and `npm install` will set `core.hooksPath`. */
+async function huskyIsPlanned(top: string): Promise<boolean> {
+  if (!existsSync(join(top, '.husky'))) return false;
+  const project = await readFile(join(top, 'package.json'), 'utf8').catch(() => '');
+  return project.includes('husky');
+}
+
+function workTree({ top, bare, cwd }: Repository): string {
+  if (top !== null) return top;
+  throw bare
+    ? new Failure(
+        'usage',
+        `${cwd} is a bare repository: it has no work tree, so nobody commits in it and these hooks would never run.`,
+        'Run `stoplog hook add` in the clones where people work.',
+      )
+    : new Failure(
+        'usage',
+        `${cwd} is inside git’s own folder, which has no work tree.`,
+        'Change to the top of the work tree and try again.',
+      );
+}
+
+function refuseElsewhere(repository: Repository, { scope, value }: HooksPath, within: boolean): void {
+  const { hooksFolder, commonDirectory } = repository;
+  const ownFolder = join(commonDirectory, 'hooks');
+  if (existsSync(hooksFolder) && !statSync(hooksFolder).isDirectory()) {
+    throw new Failure(
+      'usage',
+      `core.hooksPath is ${value}, which is no folder, so git runs no hooks here.`,
+      `Give this repository hooks again: git config core.hooksPath '${ownFolder}'`,
+    );
+  }
+  if ((scope === 'global' || scope === 'system') && !within && !isInside(hooksFolder, commonDirectory)) {
+    throw new Failure(
+      'usage',
+      `core.hooksPath is ${value} in your ${scope} git settings: all your repositories share that folder, and a hook there would hold back commits in each of them.`,
+      `Give this repository hooks of its own, which then run instead of the shared ones: git config core.hooksPath '${ownFolder}'`,
+    );
+  }
+}
+
+function isInside(path: string, folder: string): boolean {
+  const way = relative(folder, path);
+  return way !== '' && !isAbsolute(way) && way.split(/[\\/]/)[0] !== '..';
+}

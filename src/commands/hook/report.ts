@@ -1,0 +1,40 @@
+import type { Repository } from '../../repository/repository.ts';
+import { formerHomes, type HookHome, hookHome } from './home.ts';
+import { type HookState, lookAtHook } from './look.ts';
+import { hookNames } from './script.ts';
+import { findTool, type Tool } from './tool.ts';
+
+/**
+ * `written` new; `renewed` ours, brought to this version's text or made executable again; `left` ours once, and
+ * changed by someone since; `removed` leaves nothing; `restored` leaves what was there before; `none` no change.
+ */
+export type Done = 'written' | 'renewed' | 'left' | 'removed' | 'restored' | 'none';
+
+export interface HookReport {
+  readonly home: HookHome;
+  /** Every hook in its home, then those of ours that lie where git does not look now. */
+  readonly hooks: readonly (HookState & { readonly done: Done })[];
+  readonly tool: Tool;
+}
+
+/** What is there now, and what was done to it, by file. Failures: 'usage' (see `hookHome`), 'unreadable-file'. */
+export async function reportHooks(
+  repository: Repository,
+  done: ReadonlyMap<string, Done> = new Map(),
+): Promise<HookReport> {
+  const home = await hookHome(repository);
+  const hooks: (HookState & { done: Done })[] = [];
+  for (const one of [home, ...formerHomes(repository, home)]) {
+    for (const hook of hookNames) {
+      const { content, mode, block, ...state } = await lookAtHook(one, hook);
+      const did = done.get(state.file) ?? 'none';
+      if (one === home || block !== null || did !== 'none') hooks.push({ ...state, done: did });
+    }
+  }
+  return { home, hooks, tool: await findTool(repository) };
+}
+
+/** `stoplog hook list`, as data. */
+export function listHooks(repository: Repository): Promise<HookReport> {
+  return reportHooks(repository);
+}

@@ -1,0 +1,85 @@
+/** The hooks that `stoplog hook add` writes, as git names them. */
+export const hookNames = ['pre-commit', 'pre-merge-commit', 'pre-push'] as const;
+export type HookName = (typeof hookNames)[number];
+
+const holdsBack: Record<HookName, string> = {
+  'pre-commit': 'commit',
+  'pre-merge-commit': 'merge',
+  'pre-push': 'push',
+};
+
+/** Where a project keeps a Stoplog of its own, from the top of the work tree, which is where git starts hooks. */
+export const bundleInProject = 'node_modules/stoplog/dist/stoplog.mjs';
+
+/** The bundle is started with node: going through npx takes ten times as long as a plain commit. */
+const findStoplog = (hook: HookName) => `held() {
+  echo "This ${holdsBack[hook]} is held back, since Stoplog could not check the records of the model." >&2
+  printf '%s\\n' "$@" >&2
+  exit 1
+}
+# No network is used, and reading certificates would slow the start.
+unset NODE_EXTRA_CA_CERTS
+command -v node >/dev/null || held \\
+  "Node.js was not found on PATH ($PATH)." \\
+  "Install Node.js 20.19 or later. If it is installed and a graphical program runs git for you," \\
+  "start that program from a terminal in which 'node --version' answers."
+if [ -f ${bundleInProject} ]; then
+  stoplog() { node ${bundleInProject} "$@"; }
+fi
+command -v stoplog >/dev/null || held \\
+  "Stoplog was found neither in $PWD/node_modules nor on PATH." \\
+  "Install it for yourself:                     npm install --global stoplog" \\
+  "or, where the project has a package.json:    npm install --save-dev stoplog"
+`;
+
+const readPushed = `# What is pushed, one reference a line; kept because it can be read only once.
+pushed=$(cat) || exit
+tell_pushed() { if [ -n "$pushed" ]; then printf '%s\\n' "$pushed"; fi; }
+`;
+
+/** Of `LOCAL-REFERENCE LOCAL-ID REMOTE-REFERENCE REMOTE-ID` only the first may hold blanks: it is read from its end. */
+const findCommits = `# The commits that are pushed, each once, tags followed to theirs. An id of zeros is a deletion.
+commits=$(tell_pushed | while IFS= read -r line; do
+  line=\${line% * *}
+  id=\${line##* }
+  case $id in (*[!0]*) git rev-parse --verify --quiet "$id^{commit}" || : ;; esac
+done | sort -u) || exit
+if [ -z "$commits" ]; then exit 0; fi
+`;
+
+/** `first` runs what comes before the check; it is given what to put in front of a command that reads the hook's input. */
+function script(hook: HookName, first: (input: string) => string): string {
+  if (hook !== 'pre-push') return `${first('')}${findStoplog(hook)}stoplog check --at index\nexit\n`;
+  const check =
+    'status=0\nfor commit in $commits; do stoplog check --at "$commit" || status=1; done\nexit $status\n';
+  return readPushed + first('tell_pushed | ') + findCommits + findStoplog(hook) + check;
+}
+
+/**
+ * Our part of a hook that git starts itself. `earlier` names the hook that was there before, moved aside in the
+ * same folder: it runs first, if executable (git skips others), with the same arguments and input.
+ */
+export function scriptForGit(hook: HookName, earlier: string | null): string {
+  return script(hook, (input) =>
+    earlier === null
+      ? ''
+      : `# The hook that was here before runs first; what it holds back stays held back.
+earlier=\${0%/*}/${earlier}
+if [ -x "$earlier" ]; then ${input}"$earlier" "$@" || exit; fi
+`,
+  );
+}
+
+/**
+ * Our part of a hook that husky starts with `sh -e`. The lines below it run first, in a shell of their own: they
+ * may stage files or end with `exit 0`, and the check still sees what will be committed.
+ */
+export function scriptForHusky(hook: HookName): string {
+  const text = script(
+    hook,
+    (input) => `# The lines below this block run first; what they hold back stays held back.
+${input}STOPLOG_BELOW=run sh -e "$0" "$@" || exit
+`,
+  );
+  return `if [ "\${STOPLOG_BELOW-}" != run ]; then\n${text.replace(/^(?=.)/gm, '  ')}fi\nunset STOPLOG_BELOW\n`;
+}
