@@ -1,9 +1,9 @@
 /**
  * Calendar arithmetic of ISO 8601 (Gregorian, also before 1582) on day numbers: days since 1970-01-01, which is 0.
- * Times of day are minutes since 1970-01-01T00:00 on the clock of the station; no zone and no daylight saving.
+ * Times below a day are seconds since 1970-01-01T00:00 on the clock of the station; no zone and no daylight saving.
  */
 
-export const minutesOfDay = 1440;
+export const secondsOfDay = 86_400;
 
 export interface CalendarDate {
   readonly year: number;
@@ -110,9 +110,9 @@ export function formatDate(day: number): string {
 }
 
 /** `2007-01-14T09:30`, with seconds only where there are any. */
-export function formatMinutes(minutes: number): string {
-  const day = Math.floor(minutes / minutesOfDay);
-  const seconds = Math.round((minutes - day * minutesOfDay) * 60);
+export function formatSeconds(timeSeconds: number): string {
+  const day = Math.floor(timeSeconds / secondsOfDay);
+  const seconds = Math.floor(timeSeconds - day * secondsOfDay);
   const clock = `${two(Math.floor(seconds / 3600))}:${two(Math.floor(seconds / 60) % 60)}`;
   return `${formatDate(day)}T${clock}${seconds % 60 === 0 ? '' : `:${two(seconds % 60)}`}`;
 }

@@ -1,3 +1,4 @@
+import { secondsOfDay } from './calendar.ts';
 import type { Step } from './step.ts';
 import { Days, type TimeOfRow, timeFor } from './time-text.ts';
 
@@ -46,7 +47,7 @@ export function parsePattern(pattern: string, step: Step | null): readonly Part[
   if (fields.has('dayOfYear') && (fields.has('month') || fields.has('day')))
     return 'the day of the year goes with neither month nor day';
   const finest = fields.has('dayOfYear') || (fields.has('month') && fields.has('day'));
-  if (step?.kind === 'minutes' && !finest) return 'it gives no day, which this step needs';
+  if (step?.kind === 'seconds' && !finest) return 'it gives no day, which this step needs';
   return parts;
 }
 
@@ -81,11 +82,11 @@ export function patternTime(column: number, parts: readonly Part[], step: Step |
       }
     }
     if (at !== end || read.minute > 59 || read.second > 59) return Number.NaN;
-    const minutes = read.hour * 60 + read.minute + read.second / 60;
-    if (minutes > 1440) return Number.NaN;
+    const seconds = read.hour * 3600 + read.minute * 60 + read.second;
+    if (seconds > secondsOfDay) return Number.NaN;
     const day = byDayOfYear
       ? days.ofYear(read.year, read.dayOfYear)
       : days.of(read.year, read.month, read.day);
-    return time(day, minutes);
+    return time(day, seconds);
   };
 }

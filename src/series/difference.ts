@@ -29,9 +29,9 @@ export function differenceOfSeries(before: SeriesTable, after: SeriesTable): Ser
     const now = valuesOf(after, name);
     let i = 0;
     let j = 0;
-    while (i < before.minutes.length || j < after.minutes.length) {
-      const oldTime = before.minutes[i] ?? Number.POSITIVE_INFINITY;
-      const newTime = after.minutes[j] ?? Number.POSITIVE_INFINITY;
+    while (i < before.timeSeconds.length || j < after.timeSeconds.length) {
+      const oldTime = before.timeSeconds[i] ?? Number.POSITIVE_INFINITY;
+      const newTime = after.timeSeconds[j] ?? Number.POSITIVE_INFINITY;
       const time = Math.min(oldTime, newTime);
       const oldValue = oldTime === time ? old[i++] : undefined;
       const newValue = newTime === time ? now[j++] : undefined;

@@ -24,8 +24,8 @@ export type TimeLayout =
 
 /** How a file of a time series is laid out. Keys as in the manifest, so that a fragment of it serves as it stands. */
 export interface SeriesLayout {
-  readonly time: TimeLayout;
-  readonly values: ColumnReference | readonly ColumnReference[];
+  readonly time?: TimeLayout | undefined;
+  readonly values?: ColumnReference | readonly ColumnReference[] | undefined;
   /** `comma` unless stated; `blank` stands for runs of blanks and tabs. */
   readonly separator?: 'comma' | 'semicolon' | 'tab' | 'blank' | undefined;
   /** `point` unless stated. */

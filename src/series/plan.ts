@@ -19,6 +19,8 @@ export function planOf(layout: SeriesLayout): Plan | string {
   const step = layout.step === undefined ? null : parseStep(layout.step);
   if (step === null && layout.step !== undefined)
     return `step "${layout.step}" is neither "irregular" nor a whole ISO 8601 duration such as P1D, PT15M or P1M`;
+  if (layout.time === undefined) return 'no column of the time is stated';
+  if (layout.values === undefined) return 'no column of values is stated';
   const time = timeReader(layout.time, step, layout.utc_offset);
   if (typeof time === 'string') return time;
   const decimalMark = layout.decimal === 'comma' ? comma : point;

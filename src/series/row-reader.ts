@@ -97,8 +97,8 @@ export class RowReader {
     if (rows.torn || rows.count < this.narrowest || rows.count > this.widest) {
       if (!this.rowHolds(this.widest)) return;
     }
-    const minutes = timeOf(rows);
-    if (Number.isNaN(minutes)) {
+    const timeSeconds = timeOf(rows);
+    if (Number.isNaN(timeSeconds)) {
       const found = this.timePlaces.map((place) => rows.text(place)).join(' ');
       const column = plan.time.columns.map((name) => columnName(name)).join(', ');
       this.refuse(plan.time.expected, quoted(found), plan.time.advice, column);
@@ -125,7 +125,7 @@ export class RowReader {
         return;
       } else values[column] = number;
     }
-    this.table.add(rows.line, minutes, values);
+    this.table.add(rows.line, timeSeconds, values);
   }
 
   /** Whether a row of unusual shape can be read all the same: empty fields may follow the last column. */

@@ -20,21 +20,21 @@ export interface StepFaults {
 }
 
 /** Where rows in rising order of time break the step: the same time again, off the grid that the first row sets, steps that no row holds. */
-export function stepFaults(minutes: Float64Array, lines: Uint32Array, step: Step | null): StepFaults {
+export function stepFaults(timeSeconds: Float64Array, lines: Uint32Array, step: Step | null): StepFaults {
   const repeated = new Listing<TimeAt>();
   const offStep = new Listing<TimeAt>();
   const absent = new Listing<Gap>();
-  const first = minutes[0] ?? 0;
+  const first = timeSeconds[0] ?? 0;
   const regular = step !== null && step.kind !== 'irregular';
   let reached = 0;
-  for (let row = 1; row < minutes.length; row++) {
-    const time = minutes[row] as number;
-    const passed = time - (minutes[row - 1] as number);
-    if (step?.kind === 'minutes' && passed === step.length) {
+  for (let row = 1; row < timeSeconds.length; row++) {
+    const time = timeSeconds[row] as number;
+    const passed = time - (timeSeconds[row - 1] as number);
+    if (step?.kind === 'seconds' && passed === step.length) {
       reached++;
       continue;
     }
-    const at = { line: lines[row] as number, minutes: time };
+    const at = { line: lines[row] as number, timeSeconds: time };
     if (passed === 0) repeated.add(at);
     else if (regular) {
       const steps = stepsBetween(first, time, step);
@@ -44,8 +44,8 @@ export function stepFaults(minutes: Float64Array, lines: Uint32Array, step: Step
       if (between > 0)
         absent.add(
           {
-            firstMinutes: afterSteps(first, reached + 1, step),
-            lastMinutes: afterSteps(first, whole - 1, step),
+            firstSeconds: afterSteps(first, reached + 1, step),
+            lastSeconds: afterSteps(first, whole - 1, step),
             steps: between,
           },
           between,

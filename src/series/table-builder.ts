@@ -15,7 +15,7 @@ export class TableBuilder {
   readonly problems = new Listing<SeriesProblem>();
   private rows = 0;
   private capacity = firstLength;
-  private minutes = take();
+  private timeSeconds = take();
   private lines = take();
   private values: Float64Array[];
   private latest = Number.NEGATIVE_INFINITY;
@@ -30,15 +30,15 @@ export class TableBuilder {
   }
 
   /** `values` holds one number for each column, NaN where missing; it is copied. */
-  add(line: number, minutes: number, values: Float64Array): void {
+  add(line: number, timeSeconds: number, values: Float64Array): void {
     if (this.rows === this.capacity) this.grow();
     const row = this.rows++;
-    this.minutes[row] = minutes;
+    this.timeSeconds[row] = timeSeconds;
     this.lines[row] = line;
     for (let column = 0; column < values.length; column++)
       (this.values[column] as Float64Array)[row] = values[column] as number;
-    if (minutes >= this.latest) this.latest = minutes;
-    else this.outOfOrder.add({ line, minutes });
+    if (timeSeconds >= this.latest) this.latest = timeSeconds;
+    else this.outOfOrder.add({ line, timeSeconds });
   }
 
   /** The table; to be called once, at the end. */
@@ -50,8 +50,8 @@ export class TableBuilder {
   }): SeriesTable {
     const { names, ...rest } = about;
     const { rows } = this;
-    const order = this.outOfOrder.total === 0 ? null : risingOrder(this.minutes.subarray(0, rows));
-    const minutes = copy(this.minutes, new Float64Array(rows), order);
+    const order = this.outOfOrder.total === 0 ? null : risingOrder(this.timeSeconds.subarray(0, rows));
+    const timeSeconds = copy(this.timeSeconds, new Float64Array(rows), order);
     const lines = copy(this.lines, new Uint32Array(rows), order);
     const columns = this.values.map((from, column) => {
       const values = copy(from, new Float64Array(rows), order);
@@ -59,24 +59,24 @@ export class TableBuilder {
       for (let row = 0; row < rows; row++) if (Number.isNaN(values[row])) missing++;
       return { name: names[column] ?? '', values, missing };
     });
-    for (const array of [this.minutes, this.lines, ...this.values])
+    for (const array of [this.timeSeconds, this.lines, ...this.values])
       if (spare.length < spareAtMost && array.length === firstLength) spare.push(array);
     const { problems, outOfOrder } = this;
     return {
       ...rest,
-      minutes,
+      timeSeconds,
       lines,
       columns,
       problems,
       outOfOrder,
-      ...stepFaults(minutes, lines, about.step),
+      ...stepFaults(timeSeconds, lines, about.step),
     };
   }
 
   private grow(): void {
     this.capacity *= 2;
     const grown = (array: Float64Array) => copy(array, new Float64Array(this.capacity), null);
-    this.minutes = grown(this.minutes);
+    this.timeSeconds = grown(this.timeSeconds);
     this.lines = grown(this.lines);
     this.values = this.values.map(grown);
   }
@@ -87,9 +87,11 @@ function take(): Float64Array {
 }
 
 /** Places of rows in rising order of time; of one time in the order of the file. */
-function risingOrder(minutes: Float64Array): Uint32Array {
-  const order = Uint32Array.from(minutes.keys());
-  return order.sort((one, other) => (minutes[one] as number) - (minutes[other] as number) || one - other);
+function risingOrder(timeSeconds: Float64Array): Uint32Array {
+  const order = Uint32Array.from(timeSeconds.keys());
+  return order.sort(
+    (one, other) => (timeSeconds[one] as number) - (timeSeconds[other] as number) || one - other,
+  );
 }
 
 /** Fills `to` from the beginning of `from`, or in that order. */

@@ -26,13 +26,13 @@ export interface SeriesProblem {
 /** A time as the file has it, and the line (from 1) where it stands. */
 export interface TimeAt {
   readonly line: number;
-  readonly minutes: number;
+  readonly timeSeconds: number;
 }
 
 /** Steps in a row without a value: start of the first and the last of them. */
 export interface Gap {
-  readonly firstMinutes: number;
-  readonly lastMinutes: number;
+  readonly firstSeconds: number;
+  readonly lastSeconds: number;
   readonly steps: number;
 }
 
@@ -56,10 +56,10 @@ export interface SeriesTable {
   /** Null where the layout states none: then nothing is said on order, repeats and absent steps but the first two. */
   readonly step: Step | null;
   /**
-   * Start of each step as the file labels it, in minutes since 1970-01-01T00:00 on the station's clock. Daily and longer steps
+   * Start of each step as the file labels it, in seconds since 1970-01-01T00:00 on the station's clock. Daily and longer steps
    * stand at 00:00 of their date, monthly and yearly ones on the first day.
    */
-  readonly minutes: Float64Array;
+  readonly timeSeconds: Float64Array;
   /** Line of each row, from 1. */
   readonly lines: Uint32Array;
   readonly columns: readonly SeriesColumn[];

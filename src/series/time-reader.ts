@@ -1,4 +1,4 @@
-import { minutesOfDay, parseDate } from './calendar.ts';
+import { parseDate, secondsOfDay } from './calendar.ts';
 import { parsePattern, patternTime } from './date-pattern.ts';
 import type { ColumnReference, TimeLayout } from './layout.ts';
 import { wholeNumberAt } from './number-text.ts';
@@ -42,7 +42,7 @@ export function timeReader(
       timeOf: (places) => partsTime(places, step, (days, year, day) => days.ofYear(year, day)),
     };
   const { year, month, day, hour } = layout;
-  if (day === undefined && (hour !== undefined || step?.kind === 'minutes'))
+  if (day === undefined && (hour !== undefined || step?.kind === 'seconds'))
     return 'the time has year and month, but no day, which this step needs';
   return {
     columns: [year, month, ...(day === undefined ? [] : [day]), ...(hour === undefined ? [] : [hour])],
@@ -91,7 +91,7 @@ function partsTime(
       numbers[part] = number;
     }
     const [first = 0, second = 0, third = 0, hour = 0] = numbers;
-    return hour > 24 ? Number.NaN : time(dayOf(days, first, second, third), hour * 60);
+    return hour > 24 ? Number.NaN : time(dayOf(days, first, second, third), hour * 3600);
   };
 }
 
@@ -116,12 +116,14 @@ function counterReader(
   };
 }
 
-/** Minutes of `2001-01-01` or `2001-01-01T06:00`; null for other text. */
+/** Seconds of `2001-01-01` or `2001-01-01T06:00`; null for other text. */
 function startsAt(text: string): number | null {
-  const parts = /^(.{10})(?:[T ](\d{2}):(\d{2}))?$/.exec(text);
+  const parts = /^(.{10})(?:[T ](\d{2}):(\d{2})(?::(\d{2}))?)?$/.exec(text);
   const day = parseDate(parts?.[1] ?? '');
-  const [hour, minute] = [Number(parts?.[2] ?? 0), Number(parts?.[3] ?? 0)];
-  return day === null || hour > 23 || minute > 59 ? null : day * minutesOfDay + hour * 60 + minute;
+  const [hour = 0, minute = 0, second = 0] = parts?.slice(2).map((part) => Number(part ?? 0)) ?? [];
+  return day === null || hour > 23 || minute > 59 || second > 59
+    ? null
+    : day * secondsOfDay + hour * 3600 + minute * 60 + second;
 }
 
 function fieldOf(rows: Rows, field: number): [number, number] {

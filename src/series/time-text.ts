@@ -1,8 +1,8 @@
-import { dayNumber, daysInMonth, isLeapYear, minutesOfDay } from './calendar.ts';
+import { dayNumber, daysInMonth, isLeapYear, secondsOfDay } from './calendar.ts';
 import type { Rows } from './rows.ts';
 import { isByDate, type Step, startOfStep } from './step.ts';
 
-/** The time of the current row in minutes since 1970-01-01T00:00; NaN where the row has none that the layout allows. */
+/** The time of the current row in seconds since 1970-01-01T00:00; NaN where the row has none that the layout allows. */
 export type TimeOfRow = (rows: Rows) => number;
 
 /** Day numbers of dates that mostly come in order: the month's first day is kept. NaN for a date that does not exist. */
@@ -30,11 +30,11 @@ export class Days {
   }
 }
 
-/** Puts day and minutes together as the step asks: of daily and longer steps only the date counts. */
-export function timeFor(step: Step | null): (day: number, minutes: number) => number {
-  if (step === null || !isByDate(step)) return (day, minutes) => day * minutesOfDay + minutes;
-  if (step.kind === 'months') return (day) => startOfStep(day * minutesOfDay, step);
-  return (day) => day * minutesOfDay;
+/** Puts day and seconds of the day together as the step asks: of daily and longer steps only the date counts. */
+export function timeFor(step: Step | null): (day: number, seconds: number) => number {
+  if (step === null || !isByDate(step)) return (day, seconds) => day * secondsOfDay + seconds;
+  if (step.kind === 'months') return (day) => startOfStep(day * secondsOfDay, step);
+  return (day) => day * secondsOfDay;
 }
 
 /** Two digits as a number; -1 where there are not two. */
@@ -54,7 +54,7 @@ const hyphen = 0x2d;
 const colon = 0x3a;
 
 /**
- * Minutes from UTC of an offset `Z`, `+10:00`, `-0330` or `+10`; null for other text.
+ * Seconds from UTC of an offset `Z`, `+10:00`, `-0330` or `+10`; null for other text.
  */
 export function parseOffset(text: string): number | null {
   if (text === 'Z' || text === 'z') return 0;
@@ -62,12 +62,12 @@ export function parseOffset(text: string): number | null {
   if (parts === null) return null;
   const [hours, minutes] = [Number(parts[2]), Number(parts[3] ?? 0)];
   if (hours > 23 || minutes > 59) return null;
-  return (parts[1] === '-' ? -1 : 1) * (hours * 60 + minutes);
+  return (parts[1] === '-' ? -1 : 1) * (hours * 3600 + minutes * 60);
 }
 
 /**
  * Reads ISO 8601 in its extended form. `YYYY-MM` serves for steps of months and `YYYY` for steps of years, and both where no
- * step is stated. Times with an offset are brought to `stationOffset` (minutes from UTC) or, where that is null, to the offset
+ * step is stated. Times with an offset are brought to `stationOffset` (seconds from UTC) or, where that is null, to the offset
  * of the first of them.
  */
 export function isoTime(column: number, step: Step | null, stationOffset: number | null): TimeOfRow {
@@ -77,13 +77,13 @@ export function isoTime(column: number, step: Step | null, stationOffset: number
   const yearsServe = step === null || (step.kind === 'months' && step.length % 12 === 0);
   let station = stationOffset;
 
-  /** Minutes of a clock time with or without offset, such as `13:00`, `24:00`, `13:00:30Z`. */
+  /** Seconds of the day of a clock time with or without offset, such as `13:00`, `24:00`, `13:00:30Z`. */
   function clock(bytes: Uint8Array, start: number, end: number): number {
     const hour = two(bytes, start);
     const minute = bytes[start + 2] === colon ? two(bytes, start + 3) : -1;
     if (end - start < 5 || hour < 0 || minute < 0 || hour > 24 || minute > 59) return Number.NaN;
     if (hour === 24 && minute > 0) return Number.NaN;
-    if (end - start === 5) return hour * 60 + minute;
+    if (end - start === 5) return hour * 3600 + minute * 60;
     const text = Buffer.from(bytes.subarray(start + 5, end)).toString('latin1');
     const parts = /^(?::([0-5]\d(?:\.\d+)?))?([Zz]|[+-].*)?$/.exec(text);
     const offset = parts?.[2] === undefined ? null : parseOffset(parts[2]);
@@ -91,7 +91,7 @@ export function isoTime(column: number, step: Step | null, stationOffset: number
     const seconds = Number(parts[1] ?? 0);
     if (hour === 24 && seconds > 0) return Number.NaN;
     station ??= offset;
-    return hour * 60 + minute + seconds / 60 + (offset === null ? 0 : (station ?? 0) - offset);
+    return hour * 3600 + minute * 60 + seconds + (offset === null ? 0 : (station ?? 0) - offset);
   }
 
   return (rows) => {
@@ -110,7 +110,7 @@ export function isoTime(column: number, step: Step | null, stationOffset: number
     if (length === 10) return time(day, 0);
     const between = bytes[start + 10];
     if (between !== 0x54 && between !== 0x20) return Number.NaN;
-    const minutes = clock(bytes, start + 11, end);
-    return Number.isNaN(minutes) ? minutes : time(day, minutes);
+    const seconds = clock(bytes, start + 11, end);
+    return Number.isNaN(seconds) ? seconds : time(day, seconds);
   };
 }
