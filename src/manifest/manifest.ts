@@ -19,6 +19,8 @@ export interface Manifest {
   readonly data: ManifestData;
   /** Where a field stands: its key for a mapping entry, its first character for a list entry; the nearest existing ancestor when the field is absent. */
   position(field: FieldPath): Position;
+  /** The text of a scalar as it is written (`0.70`, not 0.7); null where the field is absent or no plain scalar. */
+  source(field: FieldPath): string | null;
 }
 
 /** One fault of a manifest. All faults are reported at once. */

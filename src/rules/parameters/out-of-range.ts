@@ -1,0 +1,32 @@
+import { rule } from '../rule.ts';
+import { searchedParameters } from './searched.ts';
+
+export const parametersOutOfRange = rule({
+  id: 'parameters.out-of-range',
+  scope: 'parameters',
+  from: 'calibration',
+  means: 'contradicted',
+  statement:
+    'A calibrated value lies outside the range it was searched in, or the range ends before it begins.',
+  why: 'The search can’t have found it there: either the value or the range is not the one that was used.',
+  source: { basis: 'house', citation: 'Our own choice: both ends of the range belong to it.' },
+  clear: 'Correct the value or the range to what the calibration used.',
+  check: ({ id, fragment }) =>
+    searchedParameters(fragment.values ?? []).flatMap(({ name, index, searched, what, low, high, unit }) => {
+      if (searched >= low && searched <= high) return [];
+      return [
+        {
+          record: id,
+          field: ['parameters', 'values', index],
+          subject: name,
+          stated: `${low} to ${high}`,
+          found: searched,
+          ...(unit === '' ? {} : { unit }),
+          message:
+            low > high
+              ? `The range of ${name} ends at ${high}, below its beginning at ${low}.`
+              : `The ${what} of ${name} lies outside its own range.`,
+        },
+      ];
+    }),
+});
