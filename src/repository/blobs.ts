@@ -14,6 +14,8 @@ export interface FoundBlob {
   readonly bytes: number;
   /** In chunks that may be kept only until the next one. */
   chunks(): AsyncIterable<Uint8Array>;
+  /** All of it, in memory of its own. */
+  whole(): Promise<Uint8Array>;
 }
 
 /** A blob that is in memory already. */
@@ -23,16 +25,23 @@ export function blobOf(content: Uint8Array): FoundBlob {
     async *chunks() {
       yield content;
     },
+    whole: async () => content,
   };
 }
 
-/** All of a blob in memory of its own. */
-export async function wholeOf(blob: FoundBlob): Promise<Uint8Array> {
-  const whole = new Uint8Array(blob.bytes);
-  let at = 0;
-  for await (const chunk of blob.chunks()) {
-    whole.set(chunk, at);
-    at += chunk.length;
-  }
-  return whole;
+/** A blob that comes in chunks. */
+export function blobFrom(bytes: number, chunks: () => AsyncIterable<Uint8Array>): FoundBlob {
+  return {
+    bytes,
+    chunks,
+    async whole() {
+      const whole = new Uint8Array(bytes);
+      let at = 0;
+      for await (const chunk of chunks()) {
+        whole.set(chunk, at);
+        at += chunk.length;
+      }
+      return whole;
+    },
+  };
 }

@@ -1,6 +1,6 @@
-import { createHash } from 'node:crypto';
+import { createHash, hash } from 'node:crypto';
 import { Failure } from '../failure.ts';
-import { type Blobs, blobOf, type FoundBlob, wholeOf } from './blobs.ts';
+import { type Blobs, blobOf, type FoundBlob } from './blobs.ts';
 import type { BlobDigest, DigestMemory } from './digest-memory.ts';
 import type { FindLarge } from './large-files.ts';
 import { followLinks } from './links.ts';
@@ -21,6 +21,9 @@ const whyOf = {
 /** What `read` takes into memory unless told otherwise; series are streamed. */
 const defaultLimitBytes = 256 * 1024 * 1024;
 
+/** Up to here one call on the whole is faster than a hash fed in chunks. */
+const hashedWholeBytes = 256 * 1024;
+
 /** Answers a snapshot's questions about content, from its listing and the places where content is kept. */
 export function contentOf(
   listing: Listing,
@@ -35,89 +38,102 @@ export function contentOf(
   );
   let targets: Promise<ReadonlyMap<string, string>> | undefined;
 
-  /** What all links of the snapshot say; asked for once, and only if a path could lead over one. */
-  async function linkTargets(): Promise<ReadonlyMap<string, string>> {
+  /** What all links of the snapshot say; asked for once, and only where a path could lead over one. */
+  async function linkTargets(paths: readonly string[]): Promise<ReadonlyMap<string, string>> {
+    if (crossings.length === 0 || paths.every((path) => ordinary(path) !== undefined)) return new Map();
+    targets ??= readTargets();
+    return targets;
+  }
+
+  async function readTargets(): Promise<ReadonlyMap<string, string>> {
     const found = new Map<string, string>();
     const ids = crossings.filter(({ mode }) => mode === '120000').map(({ blob }) => blob);
     await blobs.visit([...new Set(ids)], async (id, blob) => {
-      if (blob !== null) found.set(id, nameFromBytes(Buffer.from(await wholeOf(blob))));
+      if (blob !== null) found.set(id, nameFromBytes(Buffer.from(await blob.whole())));
     });
     return found;
   }
 
-  async function locate(path: string): Promise<Located> {
+  function ordinary(path: string): Entry | undefined {
     const entry = listing.entries.get(path);
-    if (entry?.mode.startsWith('100')) return entry;
-    if (crossings.length === 0) return missing(path);
-    targets ??= linkTargets();
-    const led = followLinks(path, listing.entries, await targets);
+    return entry?.mode.startsWith('100') ? entry : undefined;
+  }
+
+  function locate(path: string, links: ReadonlyMap<string, string>): Located {
+    const entry = ordinary(path);
+    if (entry !== undefined) return entry;
+    const led = followLinks(path, listing.entries, links);
     if (led.kind === 'submodule') return { why: 'submodule', blob: led.entry.blob };
     if (led.kind !== 'path') return { why: whyOf[led.kind], blob: led.link?.blob ?? null };
-    const reached = listing.entries.get(led.path);
+    const reached = ordinary(led.path);
     if (reached !== undefined) return reached;
-    const { why } = missing(led.path);
+    const why = missing(led.path);
     return why === 'absent' && led.link !== null
       ? { why: 'link-dangling', blob: led.link.blob }
       : { why, blob: null };
   }
 
-  function missing(path: string): { readonly why: Unavailable; readonly blob: null } {
-    const why = unmerged.has(path) ? 'unmerged' : intended.has(path) ? 'intent-to-add' : 'absent';
-    return { why, blob: null };
+  function missing(path: string): Unavailable {
+    return unmerged.has(path) ? 'unmerged' : intended.has(path) ? 'intent-to-add' : 'absent';
   }
 
-  async function digestAll(ids: readonly string[]): Promise<void> {
-    await blobs.visit(ids, async (id, blob) => {
+  async function digestAll(located: Iterable<Located>): Promise<void> {
+    const unknown = new Set<string>();
+    for (const found of located) {
+      if ('mode' in found && memory.get(found.blob) === undefined) unknown.add(found.blob);
+    }
+    if (unknown.size === 0) return;
+    await blobs.visit([...unknown], async (id, blob) => {
       if (blob !== null) memory.set(id, await digestOf(blob));
     });
   }
 
-  async function identityOf(blob: string): Promise<FileIdentity> {
+  function identityOf(found: Located): FileIdentity | Promise<FileIdentity> {
+    if (!('mode' in found)) return { kind: 'unavailable', ...found };
+    const { blob } = found;
     const known = memory.get(blob);
     if (known === undefined) return { kind: 'unavailable', why: 'not-fetched', blob };
-    const { sha256, bytes, kind } = known;
+    const { kind, sha256, bytes } = known;
     if (kind === 'content') return { kind: 'file', sha256, bytes, blob };
-    const large = await findLarge({ sha256, bytes, extended: kind === 'extended-pointer' });
-    return { kind: 'pointer', sha256, bytes, blob, present: large !== null };
+    const extended = kind === 'extended-pointer';
+    return findLarge({ sha256, bytes, extended }).then((large) => {
+      return { kind: 'pointer', sha256, bytes, blob, present: large !== null };
+    });
   }
 
   /** What a blob stands for: its own content, or that of the Git LFS pointer that it is; null where that is not here. */
   async function open(id: string): Promise<FoundBlob | null> {
     const blob = await blobs.open(id);
     if (blob === null || blob.bytes >= pointerBytesBelow) return blob;
-    const content = await wholeOf(blob);
+    const content = await blob.whole();
     const pointer = parsePointer(content);
     return pointer === null ? blobOf(content) : findLarge(pointer);
   }
 
+  async function openPath(path: string): Promise<FoundBlob | Unavailable> {
+    const found = locate(path, await linkTargets([path]));
+    return 'mode' in found ? ((await open(found.blob)) ?? 'not-fetched') : found.why;
+  }
+
   return {
     async identify(paths) {
-      const located = new Map<string, Located>();
-      for (const path of paths) located.set(path, await locate(path));
-      const wanted = [...located.values()].flatMap((found) => ('mode' in found ? [found.blob] : []));
-      const unknown = new Set(wanted.filter((blob) => memory.get(blob) === undefined));
-      await digestAll([...unknown]);
-      const identities = new Map<string, FileIdentity>();
-      for (const [path, found] of located) {
-        identities.set(
-          path,
-          'mode' in found ? await identityOf(found.blob) : { kind: 'unavailable', ...found },
-        );
-      }
-      return identities;
+      const asked = [...paths];
+      const links = await linkTargets(asked);
+      const located = asked.map((path) => locate(path, links));
+      await digestAll(located);
+      const identities = await Promise.all(located.map(identityOf));
+      return new Map(asked.map((path, place) => [path, identities[place] as FileIdentity]));
     },
     async read(path, limit) {
-      const found = await locate(path);
-      const blob = 'mode' in found ? await open(found.blob) : null;
-      return blob && wholeWithin(blob, limit, path);
+      const blob = await openPath(path);
+      return typeof blob === 'string' ? null : wholeWithin(blob, limit, path);
     },
     async *stream(path) {
-      const found = await locate(path);
-      const blob = 'mode' in found ? await open(found.blob) : null;
-      if (blob !== null) return yield* blob.chunks();
+      const blob = await openPath(path);
+      if (typeof blob !== 'string') return yield* blob.chunks();
       throw new Failure(
         'unreadable-file',
-        `The content of ${path} is not here (${'mode' in found ? 'not-fetched' : found.why}).`,
+        `The content of ${path} is not here (${blob}).`,
         'Fetch it, or mend the link that should lead to it.',
       );
     },
@@ -128,24 +144,26 @@ export function contentOf(
   };
 }
 
-/** Hashes a blob as it comes; a Git LFS pointer stands for what it names. */
+/** Hashes a blob, a large one as it comes; a Git LFS pointer stands for what it names. */
 async function digestOf(blob: FoundBlob): Promise<BlobDigest> {
-  if (blob.bytes < pointerBytesBelow) {
-    const content = await wholeOf(blob);
-    const pointer = parsePointer(content);
-    if (pointer !== null) {
-      const { sha256, bytes, extended } = pointer;
-      return { sha256, bytes, kind: extended ? 'extended-pointer' : 'pointer' };
-    }
-    return { sha256: createHash('sha256').update(content).digest('hex'), bytes: blob.bytes, kind: 'content' };
+  const { bytes } = blob;
+  if (bytes > hashedWholeBytes) {
+    const hashed = createHash('sha256');
+    for await (const chunk of blob.chunks()) hashed.update(chunk);
+    return { sha256: hashed.digest('hex'), bytes, kind: 'content' };
   }
-  const hash = createHash('sha256');
-  for await (const chunk of blob.chunks()) hash.update(chunk);
-  return { sha256: hash.digest('hex'), bytes: blob.bytes, kind: 'content' };
+  const content = await blob.whole();
+  const pointer = parsePointer(content);
+  if (pointer === null) return { sha256: hash('sha256', content, 'hex'), bytes, kind: 'content' };
+  return {
+    sha256: pointer.sha256,
+    bytes: pointer.bytes,
+    kind: pointer.extended ? 'extended-pointer' : 'pointer',
+  };
 }
 
 function wholeWithin(blob: FoundBlob, limit = defaultLimitBytes, name: string): Promise<Uint8Array> {
-  if (blob.bytes <= limit) return wholeOf(blob);
+  if (blob.bytes <= limit) return blob.whole();
   throw new Failure(
     'unreadable-file',
     `${name} has ${blob.bytes} bytes, more than the ${limit} bytes that are read at once.`,

@@ -18,7 +18,6 @@ export interface DigestMemory {
 }
 
 const firstLine = 'stoplog digests 1';
-const entryForm = /^([0-9a-f]{40}|[0-9a-f]{64}) (content|pointer|extended-pointer) ([0-9a-f]{64}) (\d+)$/;
 /** Above this the oldest entries go. */
 const mostEntries = 200_000;
 
@@ -76,10 +75,9 @@ export function digestsFromText(text: string): Map<string, BlobDigest> {
   const end = text.lastIndexOf('\n', text.length - 2) + 1;
   const body = text.slice(0, end);
   if (!body.startsWith(`${firstLine}\n`) || text.slice(end) !== `${digestOf(body)}\n`) return digests;
-  for (const line of body.split('\n')) {
-    const [, blob, kind, sha256, bytes] = entryForm.exec(line) ?? [];
-    if (blob === undefined || sha256 === undefined) continue;
-    digests.set(blob, { kind: kind as BlobDigest['kind'], sha256, bytes: Number(bytes) });
+  for (const line of body.split('\n').slice(1, -1)) {
+    const [blob, kind, sha256, bytes] = line.split(' ') as [string, BlobDigest['kind'], string, string];
+    digests.set(blob, { kind, sha256, bytes: Number(bytes) });
   }
   return digests;
 }

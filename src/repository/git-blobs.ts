@@ -1,4 +1,4 @@
-import { type Blobs, blobOf, type FoundBlob, wholeOf } from './blobs.ts';
+import { type Blobs, blobFrom, blobOf, type FoundBlob } from './blobs.ts';
 import type { Place } from './git.ts';
 import { isObjectId, type ObjectFormat } from './object-id.ts';
 import { ObjectReader } from './object-reader.ts';
@@ -7,8 +7,9 @@ import { ObjectReader } from './object-reader.ts';
 const smallBytes = 4 * 1024 * 1024;
 
 /**
- * Blobs from git's objects. One git child answers everything in turn; a large blob that is being streamed
- * keeps that child, and the next question starts another. So readers may go through several streams in step.
+ * Blobs from git's objects. A visit has a git child of its own. Another answers single questions in turn; a
+ * large blob that is being streamed keeps that child, and the next question starts another, so that readers
+ * may go through several streams in step.
  * Only full ids are asked for: git would take any other text as a revision.
  */
 export function gitBlobs(place: Place, objectFormat: ObjectFormat): Blobs {
@@ -16,8 +17,8 @@ export function gitBlobs(place: Place, objectFormat: ObjectFormat): Blobs {
   let free: ObjectReader | null = null;
   let turn: Promise<unknown> = Promise.resolve();
 
-  const start = () => {
-    const reader = new ObjectReader(place);
+  const start = (list?: readonly string[]) => {
+    const reader = new ObjectReader(place, list);
     living.add(reader);
     return reader;
   };
@@ -54,20 +55,23 @@ export function gitBlobs(place: Place, objectFormat: ObjectFormat): Blobs {
   }
 
   return {
-    visit: (ids, visitor) =>
-      inTurn(async (reader) => {
-        if (ids.length > 0) reader.ask(ids);
+    async visit(ids, visitor) {
+      if (ids.length === 0) return;
+      const reader = start(ids);
+      try {
         for (const id of ids) await visitor(id, await reader.next(id));
-      }),
+      } finally {
+        await end(reader);
+      }
+    },
     open: async (id) =>
       isObjectId(id, objectFormat)
         ? inTurn(async (reader) => {
-            reader.ask([id]);
-            const blob = await reader.next(id);
+            const blob = await reader.ask(id);
             if (blob === null) return null;
-            if (blob.bytes <= smallBytes) return blobOf(await wholeOf(blob));
+            if (blob.bytes <= smallBytes) return blobOf(await blob.whole());
             free = null;
-            return { bytes: blob.bytes, chunks: () => large(reader, blob) };
+            return blobFrom(blob.bytes, () => large(reader, blob));
           })
         : null,
     async close() {

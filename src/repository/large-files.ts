@@ -1,7 +1,7 @@
 import { createReadStream } from 'node:fs';
 import { stat } from 'node:fs/promises';
 import { join } from 'node:path';
-import type { FoundBlob } from './blobs.ts';
+import { blobFrom, type FoundBlob } from './blobs.ts';
 import type { Pointer } from './pointer.ts';
 
 /** Finds the content that a Git LFS pointer names, where it was fetched; null elsewhere. */
@@ -14,6 +14,6 @@ export function largeFilesIn(commonDirectory: string): FindLarge {
     const file = join(commonDirectory, 'lfs', 'objects', sha256.slice(0, 2), sha256.slice(2, 4), sha256);
     const found = await stat(file).catch(() => null);
     if (found?.size !== bytes) return null;
-    return { bytes, chunks: () => createReadStream(file, { highWaterMark: 256 * 1024 }) };
+    return blobFrom(bytes, () => createReadStream(file, { highWaterMark: 256 * 1024 }));
   };
 }

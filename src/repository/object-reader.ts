@@ -7,8 +7,9 @@ const lineFeed = 10;
 const nothing = Buffer.alloc(0);
 
 /**
- * One `git cat-file --batch` that stays open: ids go in, contents come out in the same order. Bytes wait in
- * the pipe until they are asked for, so a slow reader slows git and fills no memory.
+ * One `git cat-file --batch`: ids go in, contents come out in the same order. Bytes wait in the pipe until
+ * they are asked for, so a slow reader slows git and fills no memory. A reader made for a list of ids gets
+ * larger chunks, many objects in one; a reader without one stays open for questions.
  */
 export class ObjectReader {
   readonly #place: Place;
@@ -22,9 +23,9 @@ export class ObjectReader {
   /** Of the object in hand: the line feed after its content is still to come. */
   #open = false;
 
-  constructor(place: Place) {
+  constructor(place: Place, list?: readonly string[]) {
     this.#place = place;
-    this.#child = startGit(place, ['cat-file', '--batch']);
+    this.#child = startGit(place, ['cat-file', '--batch', ...(list === undefined ? [] : ['--buffer'])]);
     this.#output = this.#child.stdout[Symbol.asyncIterator]();
     this.#child.stderr.on('data', (chunk: Buffer) => {
       this.#errors += chunk.toString();
@@ -34,38 +35,60 @@ export class ObjectReader {
       this.#child.on('error', (cause) => resolve({ status: -1, cause }));
       this.#child.on('close', (status) => resolve({ status: status ?? -1 }));
     });
+    if (list !== undefined) this.#child.stdin.end(`${list.join('\n')}\n`);
   }
 
-  /** Asks for objects by full id; `next` then answers one after another. */
-  ask(ids: readonly string[]): void {
-    this.#child.stdin.write(`${ids.join('\n')}\n`);
+  /** Asks for one object by its full id. */
+  ask(id: string): Promise<FoundBlob | null> {
+    this.#child.stdin.write(`${id}\n`);
+    return this.next(id);
   }
 
-  /** The next object that was asked for; null if it is not there or is no blob. Skips what is unread of the one before. */
+  /** The next object of the list; null if it is not there or is no blob. Skips what is unread of the one before. */
   async next(id: string): Promise<FoundBlob | null> {
-    for await (const _ of this.#chunks());
+    if (this.#open) for await (const _ of this.#chunks());
     const [name, type, size] = (await this.#line()).split(' ');
     if (name !== id) throw new Error(`git answered for object ${name} when asked for ${id}`);
     if (type === 'missing' || size === undefined) return null;
     this.#left = Number(size);
     this.#open = true;
-    return type === 'blob' ? { bytes: this.#left, chunks: () => this.#chunks() } : null;
+    if (type !== 'blob') return null;
+    return { bytes: this.#left, chunks: () => this.#chunks(), whole: () => this.#whole() };
   }
 
   async end(): Promise<void> {
     this.#child.kill();
+    // Output that nobody reads would keep the child from closing.
+    this.#child.stdout.destroy();
     await this.#ended;
   }
 
   async *#chunks(): AsyncGenerator<Buffer> {
-    while (this.#left > 0) {
-      if (this.#ahead.length === 0) this.#ahead = await this.#more();
-      const chunk = this.#ahead.subarray(0, this.#left);
-      this.#ahead = this.#ahead.subarray(chunk.length);
-      this.#left -= chunk.length;
-      yield chunk;
+    while (this.#left > 0) yield await this.#chunk();
+    await this.#finish();
+  }
+
+  async #whole(): Promise<Uint8Array> {
+    const whole = new Uint8Array(this.#left);
+    for (let at = 0; this.#left > 0; ) {
+      const chunk = await this.#chunk();
+      whole.set(chunk, at);
+      at += chunk.length;
     }
-    if (!this.#open) return;
+    await this.#finish();
+    return whole;
+  }
+
+  async #chunk(): Promise<Buffer> {
+    if (this.#ahead.length === 0) this.#ahead = await this.#more();
+    const chunk = this.#ahead.subarray(0, this.#left);
+    this.#ahead = this.#ahead.subarray(chunk.length);
+    this.#left -= chunk.length;
+    return chunk;
+  }
+
+  /** A line feed follows the content; anything else means that its size was not as stated. */
+  async #finish(): Promise<void> {
     this.#open = false;
     const rest = await this.#line();
     if (rest !== '')
