@@ -1,0 +1,143 @@
+import type { KnownRules } from '../facts/facts.ts';
+import { balanceMissing } from './balance/missing.ts';
+import { evaluationMissing } from './evaluation/missing.ts';
+import { evaluationSingleScore } from './evaluation/single-score.ts';
+import { evaluationUnseen } from './evaluation/unseen.ts';
+import { inputsDayUnstated } from './inputs/day-unstated.ts';
+import { inputsGapUntreated } from './inputs/gap-untreated.ts';
+import { inputsLicenceMissing } from './inputs/licence-missing.ts';
+import { inputsRetrievedMissing } from './inputs/retrieved-missing.ts';
+import { inputsSourceMissing } from './inputs/source-missing.ts';
+import { inputsUnitMissing } from './inputs/unit-missing.ts';
+import { interventionsDefaultUnstated } from './interventions/default-unstated.ts';
+import { interventionsUndeclared } from './interventions/undeclared.ts';
+import { interventionsUnrepresented } from './interventions/unrepresented.ts';
+import { manifestCircle } from './manifest/circle.ts';
+import { manifestClaimedTwice } from './manifest/claimed-twice.ts';
+import { manifestLoosened } from './manifest/loosened.ts';
+import { manifestNoMatch } from './manifest/no-match.ts';
+import { manifestOutsideRepository } from './manifest/outside-repository.ts';
+import { manifestPlaceholder } from './manifest/placeholder.ts';
+import { manifestUnaccountedFile } from './manifest/unaccounted-file.ts';
+import { manifestUnknownRecord } from './manifest/unknown-record.ts';
+import { manifestUnreadable } from './manifest/unreadable.ts';
+import { modelAssumptionUnanswered } from './model/assumption-unanswered.ts';
+import { modelExecutableUnidentified } from './model/executable-unidentified.ts';
+import { modelJustificationMissing } from './model/justification-missing.ts';
+import { modelReleaseMissing } from './model/release-missing.ts';
+import { modelVersionMissing } from './model/version-missing.ts';
+import { modelVersionVague } from './model/version-vague.ts';
+import { parametersAtBound } from './parameters/at-bound.ts';
+import { parametersChangeDiffers } from './parameters/change-differs.ts';
+import { parametersIncomplete } from './parameters/incomplete.ts';
+import { parametersMissing } from './parameters/missing.ts';
+import { parametersOutOfRange } from './parameters/out-of-range.ts';
+import { periodsCalibrationMissing } from './periods/calibration-missing.ts';
+import { periodsOutsideData } from './periods/outside-data.ts';
+import { periodsOutsideSimulation } from './periods/outside-simulation.ts';
+import { periodsOverlap } from './periods/overlap.ts';
+import { periodsShort } from './periods/short.ts';
+import { periodsValidationMissing } from './periods/validation-missing.ts';
+import { periodsWarmUpMissing } from './periods/warm-up-missing.ts';
+import { periodsWarmUpShort } from './periods/warm-up-short.ts';
+import { readingDiffers } from './reading/differs.ts';
+import { readingNotFound } from './reading/not-found.ts';
+import type { Rule } from './rule.ts';
+import { thresholdName } from './run.ts';
+import { runsMissing } from './runs/missing.ts';
+import { scenariosConditionsMissing } from './scenarios/conditions-missing.ts';
+import { setupChoiceMissing } from './setup/choice-missing.ts';
+import { setupChoiceUnjustified } from './setup/choice-unjustified.ts';
+import { studyContactMissing } from './study/contact-missing.ts';
+import { studyLicenceUnknown } from './study/licence-unknown.ts';
+import { studyLiteratureMissing } from './study/literature-missing.ts';
+import { studyNeedsMissing } from './study/needs-missing.ts';
+import { studyPhaseBehind } from './study/phase-behind.ts';
+import { studyPurposeMissing } from './study/purpose-missing.ts';
+import { uncertaintyBandMissing } from './uncertainty/band-missing.ts';
+import { uncertaintySourceUnaddressed } from './uncertainty/source-unaddressed.ts';
+import { waiverExpired } from './waiver/expired.ts';
+import { waiverUnsigned } from './waiver/unsigned.ts';
+import { waiverUnused } from './waiver/unused.ts';
+
+/** Every rule, area by area, in the order of the README's table. */
+export const rules: readonly Rule[] = [
+  manifestUnreadable,
+  manifestPlaceholder,
+  manifestNoMatch,
+  manifestOutsideRepository,
+  manifestUnaccountedFile,
+  manifestCircle,
+  manifestUnknownRecord,
+  manifestClaimedTwice,
+  manifestLoosened,
+  waiverExpired,
+  waiverUnused,
+  waiverUnsigned,
+  studyPurposeMissing,
+  studyLiteratureMissing,
+  studyContactMissing,
+  studyLicenceUnknown,
+  studyNeedsMissing,
+  studyPhaseBehind,
+  modelVersionMissing,
+  modelReleaseMissing,
+  modelVersionVague,
+  modelExecutableUnidentified,
+  modelJustificationMissing,
+  modelAssumptionUnanswered,
+  readingDiffers,
+  readingNotFound,
+  inputsSourceMissing,
+  inputsRetrievedMissing,
+  inputsLicenceMissing,
+  inputsUnitMissing,
+  inputsDayUnstated,
+  inputsGapUntreated,
+  periodsWarmUpMissing,
+  periodsWarmUpShort,
+  periodsOverlap,
+  periodsOutsideSimulation,
+  periodsOutsideData,
+  periodsShort,
+  periodsCalibrationMissing,
+  periodsValidationMissing,
+  setupChoiceMissing,
+  setupChoiceUnjustified,
+  parametersMissing,
+  parametersIncomplete,
+  parametersOutOfRange,
+  parametersAtBound,
+  parametersChangeDiffers,
+  evaluationMissing,
+  evaluationSingleScore,
+  evaluationUnseen,
+  balanceMissing,
+  interventionsUndeclared,
+  interventionsUnrepresented,
+  interventionsDefaultUnstated,
+  uncertaintySourceUnaddressed,
+  uncertaintyBandMissing,
+  runsMissing,
+  scenariosConditionsMissing,
+];
+
+/** Ids that were rules once, with what became of each. They are never used again. */
+export const retired: Readonly<Record<string, string>> = {};
+
+/** What departures, waivers and acceptances may name. */
+export function knownRules(): KnownRules {
+  return {
+    rules: new Map(rules.map((rule) => [rule.id, rule.from])),
+    limits: new Map(
+      rules.flatMap((rule) =>
+        Object.entries(rule.limits ?? {}).map(([name, limit]) => [thresholdName(rule, name), limit] as const),
+      ),
+    ),
+  };
+}
+
+/** The rule of that id, or undefined. */
+export function findRule(id: string): Rule | undefined {
+  return rules.find((rule) => rule.id === id);
+}

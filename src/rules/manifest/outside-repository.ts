@@ -1,0 +1,35 @@
+import { rule } from '../rule.ts';
+
+export const manifestOutsideRepository = rule({
+  id: 'manifest.outside-repository',
+  scope: 'manifest',
+  from: 'setup',
+  means: 'incomplete',
+  statement: 'A path leaves the repository, directly or through a symbolic link.',
+  why: 'What lies outside is on one machine only and can change unseen; Stoplog reads nothing out there.',
+  source: { basis: 'definition', citation: 'A record is about files that the repository holds.' },
+  clear:
+    'Bring the file into the repository, or describe it with `stored: elsewhere` by its SHA-256, size and place.',
+  check: (_, { records }) => [
+    ...records.unmatched
+      .filter(({ why }) => why === 'outside-repository')
+      .map(({ record, pattern, field }) => ({
+        record,
+        field,
+        subject: pattern,
+        stated: pattern,
+        message: `\`${pattern}\` leads out of the repository.`,
+      })),
+    ...[...records.nodes.values()].flatMap(({ id, claims }) =>
+      [...claims.values()]
+        .filter(({ identity }) => identity.kind === 'unavailable' && identity.why === 'link-outside')
+        .map(({ path, field }) => ({
+          record: id,
+          field,
+          subject: path,
+          stated: path,
+          message: `${path} is a symbolic link that leads out of the repository.`,
+        })),
+    ),
+  ],
+});
