@@ -15,7 +15,7 @@ const banner = '// Made from schemas/manifest.schema.json by src/build/generate.
 
 /** Every generated file: path from the top of the repository -> content. */
 export async function generate() {
-  const schema = JSON.parse(await readFile(join(top, 'schemas/manifest.schema.json'), 'utf8'));
+  const schema = writtenOut(JSON.parse(await readFile(join(top, 'schemas/manifest.schema.json'), 'utf8')));
   const branches = branchNames(schema);
   return new Map([
     ['src/manifest/data.generated.ts', await types(schema)],
@@ -29,29 +29,14 @@ export async function writeGenerated() {
   for (const [path, content] of await generate()) await writeFile(join(top, path), content);
 }
 
-/** A named type for each entry of `$defs`. A `$ref` becomes that name, and shared keys (`allOf`) are written out. */
+/** A named type for each entry of `$defs`; a `$ref` becomes that name, so that none is made twice. */
 async function types(schema) {
   const typed = (node) => {
     if (Array.isArray(node)) return node.map(typed);
     if (node === null || typeof node !== 'object') return node;
-    const {
-      $ref,
-      allOf,
-      properties,
-      propertyNames,
-      $defs,
-      if: _if,
-      then: _then,
-      else: _else,
-      ...rest
-    } = node;
-    return {
-      ...mapValues(rest, typed),
-      ...(node.description === undefined ? {} : { description: told(node) }),
-      ...($ref === undefined ? {} : { tsType: defName($ref) }),
-      ...(properties === undefined ? {} : { properties: mapValues(propertiesOf(schema, node), typed) }),
-      ...($defs === undefined ? {} : { $defs: mapValues($defs, typed) }),
-    };
+    const { $ref, propertyNames, ...rest } = mapValues(node, typed);
+    if (typeof rest.description === 'string') rest.description = told(node);
+    return $ref === undefined ? rest : { ...rest, tsType: defName($ref) };
   };
   const text = await compile(typed(schema), schema.title, {
     additionalProperties: false,
@@ -95,10 +80,7 @@ function kindsOf(schema) {
     if (node.$ref !== undefined) return kindOf(resolve(schema, node), defName(node.$ref));
     if (kinds[place] !== undefined) return place;
     const parts = [
-      ...Object.entries(propertiesOf(schema, node)).map(([key, value]) => [
-        key,
-        kindOf(value, `${place}.${key}`),
-      ]),
+      ...Object.entries(node.properties ?? {}).map(([key, value]) => [key, kindOf(value, `${place}.${key}`)]),
       ...(node.items ? [['[]', kindOf(node.items, `${place}.[]`)]] : []),
       ...(node.additionalProperties ? [['*', kindOf(node.additionalProperties, `${place}.*`)]] : []),
       ...(node.anyOf ?? []).flatMap((member) => Object.entries(kinds[kindOf(member, place)] ?? {})),
@@ -180,10 +162,22 @@ function withoutTelling(schema) {
   return JSON.parse(text);
 }
 
-/** The keys of a map, shared ones (`allOf`) first. */
-function propertiesOf(schema, node) {
-  const shared = (node.allOf ?? []).map((member) => propertiesOf(schema, resolve(schema, member)));
-  return Object.assign({}, ...shared, node.properties);
+/** The same schema with the keys that maps share (`allOf`) and the demands on names written out where they are used. */
+function writtenOut(schema) {
+  const write = (node) => {
+    if (Array.isArray(node)) return node.map(write);
+    if (node === null || typeof node !== 'object') return node;
+    const { allOf, unevaluatedProperties, ...rest } = mapValues(node, write);
+    if (rest.propertyNames !== undefined) rest.propertyNames = resolve(schema, rest.propertyNames);
+    if (allOf === undefined) return rest;
+    const shared = allOf.map((member) => write(resolve(schema, member)).properties);
+    return {
+      ...rest,
+      properties: Object.assign({}, ...shared, rest.properties),
+      additionalProperties: unevaluatedProperties,
+    };
+  };
+  return write(schema);
 }
 
 function resolve(schema, node) {

@@ -1,0 +1,141 @@
+import { isMap, isScalar, isSeq, type Node, type Pair, type Scalar, type YAMLMap } from 'yaml';
+import { Failure } from '../failure.ts';
+import { locator } from './locate.ts';
+import { type FieldPath, fieldName, type Manifest } from './manifest.ts';
+import { keyText, type ScalarValue, scalarText } from './scalar-text.ts';
+import { parseYaml } from './yaml-text.ts';
+
+export interface ScalarEdit {
+  readonly field: FieldPath;
+  readonly value: ScalarValue;
+}
+
+/** New text for a part of the old. */
+interface Splice {
+  readonly start: number;
+  readonly end: number;
+  readonly text: string;
+}
+
+/** Keys that are missing below a node, with the maps between. */
+type Missing = Map<string, ScalarValue | Missing>;
+
+/**
+ * The manifest's text with other values in single fields. Every other byte stays: comments, order, blanks, line ends. A
+ * value keeps its quoting, a number at least the decimals it was written with. A key that is not there yet is put
+ * after its siblings, with the maps that are missing between. Throws Failure 'cannot-seal' for a field that is a list or a map,
+ * and for one that repeats another part of the manifest through an alias.
+ */
+export function replaceScalars(manifest: Manifest, edits: readonly ScalarEdit[]): string {
+  const { text } = manifest;
+  const { root } = parseYaml(text);
+  if (root === null) return text;
+  // Aliases are not followed: what changed behind one would change elsewhere too.
+  const locate = locator(root, new Map());
+  const splices: Splice[] = [];
+  const missing = new Map<YAMLMap | Scalar, Missing>();
+
+  for (const { field, value } of edits) {
+    const { key, value: node, depth } = locate(field);
+    const below = field.slice(depth).map(String);
+    const empty = isScalar(node) && node.value === null;
+    if (below.length === 0 && isScalar(node)) splices.push(replaced(text, node, scalarText(value, node)));
+    else if (below.length === 0 && node === null && key !== null)
+      splices.push(afterKey(key, scalarText(value)));
+    else if (below.length > 0 && (isMap(node) || empty)) add(missing, node, below, value);
+    else throw cannotWrite(manifest, field);
+  }
+  for (const [node, keys] of missing) {
+    splices.push(isMap(node) ? inserted(text, node, keys) : replaced(text, node, flowMap(keys)));
+  }
+  return spliced(text, splices);
+}
+
+function add<N>(missing: Map<N, Missing>, node: N, below: readonly string[], value: ScalarValue): void {
+  let keys = missing.get(node) ?? new Map();
+  missing.set(node, keys);
+  for (const key of below.slice(0, -1)) {
+    const deeper: Missing = keys.get(key) ?? new Map();
+    keys.set(key, deeper);
+    keys = deeper;
+  }
+  keys.set(below.at(-1) ?? '', value);
+}
+
+function replaced(text: string, node: Scalar, written: string): Splice {
+  const [start = 0, end = 0] = node.range ?? [];
+  const before = start === end && text[start - 1] === ':' ? ' ' : '';
+  // A block text (`|`) ends with its line end, which the next key needs.
+  const after = /\r?\n$/.exec(text.slice(start, end))?.[0] ?? '';
+  return { start, end, text: before + written + after };
+}
+
+/** For a key of a flow map that has neither colon nor value. */
+function afterKey(key: Node, written: string): Splice {
+  const end = key.range?.[1] ?? 0;
+  return { start: end, end, text: `: ${written}` };
+}
+
+/** Keys put after the last one of a map, in the way the map is written. */
+function inserted(text: string, map: YAMLMap, keys: Missing): Splice {
+  const [start = 0] = map.range ?? [];
+  const last = map.items.at(-1) as Pair<Node, Node | null> | undefined;
+  if (last === undefined) return { start: start + 1, end: start + 1, text: entries(keys).join(', ') };
+  const end = lastOffset(last.value ?? last.key);
+  if (map.flow)
+    return {
+      start: end,
+      end,
+      text: entries(keys)
+        .map((entry) => `, ${entry}`)
+        .join(''),
+    };
+
+  const indent = ' '.repeat(start - (text.lastIndexOf('\n', start - 1) + 1));
+  const lineEnd = text.includes('\r\n') ? '\r\n' : '\n';
+  const lines = entries(keys)
+    .map((entry) => indent + entry + lineEnd)
+    .join('');
+  if (text[end - 1] === '\n') return { start: end, end, text: lines };
+  const next = text.indexOf('\n', end) + 1;
+  if (next > 0) return { start: next, end: next, text: lines };
+  return { start: text.length, end: text.length, text: lineEnd + lines.slice(0, -lineEnd.length) };
+}
+
+/** Where the text of a node ends; for a block map or list, where its last entry ends. */
+function lastOffset(node: Node): number {
+  if ((isMap(node) || isSeq(node)) && !node.flow) {
+    const last = node.items.at(-1) as Node | Pair<Node, Node | null>;
+    return lastOffset('value' in last && 'key' in last ? ((last.value ?? last.key) as Node) : (last as Node));
+  }
+  return node.range?.[1] ?? 0;
+}
+
+function entries(keys: Missing): readonly string[] {
+  return [...keys].map(
+    ([key, value]) => `${keyText(key)}: ${value instanceof Map ? flowMap(value) : scalarText(value)}`,
+  );
+}
+
+function flowMap(keys: Missing): string {
+  return `{${entries(keys).join(', ')}}`;
+}
+
+function spliced(text: string, splices: readonly Splice[]): string {
+  let out = '';
+  let at = 0;
+  for (const { start, end, text: written } of [...splices].sort((a, b) => a.start - b.start)) {
+    out += text.slice(at, start) + written;
+    at = end;
+  }
+  return out + text.slice(at);
+}
+
+function cannotWrite(manifest: Manifest, field: FieldPath): Failure {
+  const { line } = manifest.position(field);
+  return new Failure(
+    'cannot-seal',
+    `${manifest.path}:${line}: the figure of \`${fieldName(field)}\` can't be written: a list, a map or an alias (\`*name\`) stands there.`,
+    'Write the figure there by hand, without an alias.',
+  );
+}

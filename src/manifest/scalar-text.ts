@@ -1,0 +1,30 @@
+import { parseDocument, type Scalar } from 'yaml';
+
+export type ScalarValue = string | number | boolean;
+
+/** A value as YAML; in the manner of the scalar that it takes the place of, if there is one. */
+export function scalarText(value: ScalarValue, old?: Scalar): string {
+  if (old?.value === value && old.type === 'PLAIN') return old.source ?? String(value);
+  if (typeof value === 'number') return numberText(value, old?.source);
+  if (typeof value === 'boolean') return String(value);
+  if (old?.type === 'QUOTE_SINGLE' && !/\p{Cc}/u.test(value)) return `'${value.replaceAll("'", "''")}'`;
+  if ((old?.type ?? 'PLAIN') === 'PLAIN' && isPlain(value)) return value;
+  return JSON.stringify(value);
+}
+
+export function keyText(key: string): string {
+  return isPlain(key) ? key : JSON.stringify(key);
+}
+
+/** With as many decimals as before, if that loses nothing. */
+function numberText(value: number, before = ''): string {
+  const decimals = /\.(\d+)$/.exec(before)?.[1]?.length ?? 0;
+  const fixed = value.toFixed(Math.min(decimals, 100));
+  return Number(fixed) === value ? fixed : String(value);
+}
+
+/** Whether a text means itself without quotes, inside brackets too. */
+function isPlain(text: string): boolean {
+  const document = parseDocument(`[${text}]`, { schema: 'core' });
+  return document.errors.length === 0 && JSON.stringify(document.toJS()) === JSON.stringify([text]);
+}
