@@ -20,7 +20,7 @@ export function snapshotFromMemory(files: FilesInMemory, before: FilesInMemory =
   const entries: Entry[] = [];
   for (const [path, file] of Object.entries(files)) {
     const isLink = typeof file === 'object' && 'link' in file;
-    const content = Buffer.from(isLink ? file.link : file);
+    const content = new Uint8Array(Buffer.from(isLink ? file.link : file));
     const blob = objectId('blob', content, 'sha1');
     contents.set(blob, content);
     entries.push({ path, mode: isLink ? '120000' : '100644', blob });
