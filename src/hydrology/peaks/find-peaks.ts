@@ -23,11 +23,14 @@ export function findPeaks(series: {
   const byHeight = found.toSorted((a, b) => at(b) - at(a) || b - a);
   for (const peak of byHeight) {
     const near = (other: number) =>
-      Math.abs((positions[peak] ?? 0) - (positions[other] ?? 0)) < minimumDistance;
+      Math.abs((positions[peak] ?? 0) - (positions[other] ?? 0)) < minimumDistance - rounding;
     if (!kept.some(near)) kept.push(peak);
   }
   return kept.sort((a, b) => a - b);
 }
+
+/** Positions of hours are fractions of a day, whose differences are not exact. */
+const rounding = 1e-6;
 
 function localMaxima(values: ArrayLike<number>): number[] {
   const found: number[] = [];

@@ -56,8 +56,8 @@ export function peakHits(of: {
     let nearest: { observed: number; simulated: number } | null = null;
     for (const candidate of unused) {
       const hit = { observed: peak, simulated: candidate };
-      if (Math.abs(delay(hit)) > of.toleranceDays) continue;
-      if (nearest === null || Math.abs(delay(hit)) < Math.abs(delay(nearest))) nearest = hit;
+      if (Math.abs(delay(hit)) > of.toleranceDays + rounding) continue;
+      if (nearest === null || Math.abs(delay(hit)) < Math.abs(delay(nearest)) - rounding) nearest = hit;
     }
     if (nearest === null) continue;
     hits.push(nearest);
@@ -82,6 +82,9 @@ export function peakHits(of: {
     delayDays: overHits(delay),
   });
 }
+
+/** Times of hours are fractions of a day, whose differences are not exact. */
+const rounding = 1e-6;
 
 function share(part: number, whole: number, whenNone: string): Statistic {
   return whole === 0 ? undefinedBecause(whenNone) : computed(part / whole);
