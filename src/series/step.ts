@@ -79,3 +79,13 @@ export function formatTime(timeSeconds: number, step: Step): string {
   if (step.kind === 'irregular' && timeSeconds === day * secondsOfDay) return formatDate(day);
   return isByDate(step) ? formatDate(day) : formatSeconds(timeSeconds);
 }
+
+/** A step as ISO 8601 writes it, in the largest units that divide it. */
+export function formatStep(step: Step): string {
+  if (step.kind === 'irregular') return 'irregular';
+  const { kind, length } = step;
+  if (kind === 'months') return length % 12 === 0 ? `P${length / 12}Y` : `P${length}M`;
+  if (length % secondsOfDay === 0) return `P${length / secondsOfDay}D`;
+  if (length % 3600 === 0) return `PT${length / 3600}H`;
+  return length % 60 === 0 ? `PT${length / 60}M` : `PT${length}S`;
+}

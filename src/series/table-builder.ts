@@ -1,3 +1,4 @@
+import { copied, risingOrder } from './rising.ts';
 import type { Step } from './step.ts';
 import { Listing, stepFaults } from './step-faults.ts';
 import type { SeriesProblem, SeriesTable, TimeAt } from './table.ts';
@@ -50,11 +51,11 @@ export class TableBuilder {
   }): SeriesTable {
     const { names, ...rest } = about;
     const { rows } = this;
-    const order = this.outOfOrder.total === 0 ? null : risingOrder(this.timeSeconds.subarray(0, rows));
-    const timeSeconds = copy(this.timeSeconds, new Float64Array(rows), order);
-    const lines = copy(this.lines, new Uint32Array(rows), order);
+    const order = risingOrder(this.timeSeconds.subarray(0, rows));
+    const timeSeconds = copied(this.timeSeconds, new Float64Array(rows), order);
+    const lines = copied(this.lines, new Uint32Array(rows), order);
     const columns = this.values.map((from, column) => {
-      const values = copy(from, new Float64Array(rows), order);
+      const values = copied(from, new Float64Array(rows), order);
       let missing = 0;
       for (let row = 0; row < rows; row++) if (Number.isNaN(values[row])) missing++;
       return { name: names[column] ?? '', values, missing };
@@ -75,7 +76,7 @@ export class TableBuilder {
 
   private grow(): void {
     this.capacity *= 2;
-    const grown = (array: Float64Array) => copy(array, new Float64Array(this.capacity), null);
+    const grown = (array: Float64Array) => copied(array, new Float64Array(this.capacity), null);
     this.timeSeconds = grown(this.timeSeconds);
     this.lines = grown(this.lines);
     this.values = this.values.map(grown);
@@ -84,19 +85,4 @@ export class TableBuilder {
 
 function take(): Float64Array {
   return spare.pop() ?? new Float64Array(firstLength);
-}
-
-/** Places of rows in rising order of time; of one time in the order of the file. */
-function risingOrder(timeSeconds: Float64Array): Uint32Array {
-  const order = Uint32Array.from(timeSeconds.keys());
-  return order.sort(
-    (one, other) => (timeSeconds[one] as number) - (timeSeconds[other] as number) || one - other,
-  );
-}
-
-/** Fills `to` from the beginning of `from`, or in that order. */
-function copy<T extends Float64Array | Uint32Array>(from: Float64Array, to: T, order: Uint32Array | null): T {
-  if (order === null) to.set(from.length > to.length ? from.subarray(0, to.length) : from);
-  else for (let row = 0; row < to.length; row++) to[row] = from[order[row] as number] as number;
-  return to;
 }

@@ -1,0 +1,100 @@
+import { defined, type Paired, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
+import { secondsOfDay, type Window } from './calendar.ts';
+import { calendarYears, type YearBegins } from './hydrological-year.ts';
+import { type Series, withoutRepeats } from './series.ts';
+import { afterSteps, formatStep, type Step, sameStep, startOfStep, stepsBetween } from './step.ts';
+import { extentOf, holds, stepsIn } from './step-extent.ts';
+import { spansOf } from './windows.ts';
+
+export interface Pairing {
+  readonly observed: Series;
+  readonly simulated: Series;
+  /** Whole days, both ends included. A step longer than a day belongs to a window that holds all of it. */
+  readonly windows: readonly Window[];
+  /** Days that are kept out even where a window holds them, such as the warm-up. */
+  readonly leftOut?: readonly Window[];
+  /** What a yearly value stands for; calendar years unless stated. */
+  readonly yearBegins?: YearBegins;
+}
+
+/**
+ * Pairs observed with simulated values of the same step. A step at which either is missing or absent is dropped and counted.
+ * Irregular observations, such as grab samples, are paired with the simulated step that holds them, and the window then has as
+ * many steps as there are observations; several in one step leave it without a value.
+ * Undefined: the two series have different regular steps.
+ */
+export function pairByDate(pairing: Pairing): Statistic<Paired> {
+  const { simulated, windows, leftOut = [], yearBegins = calendarYears } = pairing;
+  const sampled = pairing.observed.step.kind === 'irregular';
+  if (!sampled && !sameStep(pairing.observed.step, simulated.step))
+    return undefinedBecause(
+      `the observed series has the step ${formatStep(pairing.observed.step)}, the simulated one ${formatStep(simulated.step)}; bring them to one step first`,
+    );
+  const observed = sampled ? onStepsOf(simulated, pairing.observed) : pairing.observed;
+  const { step } = simulated;
+  const spans = spansOf(windows, leftOut);
+  const most = Math.min(observed.values.length, simulated.values.length);
+  const pairs = {
+    observed: new Float64Array(most),
+    simulated: new Float64Array(most),
+    times: new Float64Array(most),
+  };
+  let count = 0;
+  let seen = 0;
+  const dropped = { missingObserved: 0, missingSimulated: 0, outsideWindow: 0 };
+  let span = 0;
+  let o = 0;
+  let s = 0;
+  while (o < observed.values.length || (s < simulated.values.length && !sampled)) {
+    const observedTime = observed.timeSeconds[o] ?? Number.POSITIVE_INFINITY;
+    const simulatedTime = simulated.timeSeconds[s] ?? Number.POSITIVE_INFINITY;
+    const time = Math.min(observedTime, simulatedTime);
+    const observedValue = observedTime === time ? (observed.values[o++] as number) : Number.NaN;
+    const simulatedValue = simulatedTime === time ? (simulated.values[s++] as number) : Number.NaN;
+    if (sampled && observedTime !== time) continue;
+    const extent = extentOf(time, step, yearBegins);
+    while (span < spans.length && (spans[span]?.untilSeconds ?? 0) <= extent.fromSeconds) span++;
+    const within = spans[span];
+    if (within === undefined || !holds(within, extent)) {
+      dropped.outsideWindow++;
+      continue;
+    }
+    seen++;
+    const hasObserved = Number.isFinite(observedValue);
+    const hasSimulated = Number.isFinite(simulatedValue);
+    if (hasObserved && hasSimulated) {
+      pairs.observed[count] = observedValue;
+      pairs.simulated[count] = simulatedValue;
+      pairs.times[count] = time / secondsOfDay;
+      count++;
+    } else if (hasSimulated) dropped.missingObserved++;
+    else if (hasObserved) dropped.missingSimulated++;
+  }
+  const origin = observed.timeSeconds[0] ?? simulated.timeSeconds[0] ?? 0;
+  const onGrid = spans.reduce((steps, each) => steps + stepsIn(each, origin, step, yearBegins), 0);
+  // Rows off the grid are steps too, though the grid does not foresee them.
+  const windowSteps = sampled ? seen : Math.max(onGrid, seen);
+  return defined({
+    observed: pairs.observed.slice(0, count),
+    simulated: pairs.simulated.slice(0, count),
+    times: pairs.times.slice(0, count),
+    dropped: {
+      ...dropped,
+      missingBoth: windowSteps - count - dropped.missingObserved - dropped.missingSimulated,
+    },
+    windowSteps,
+  });
+}
+
+/** Samples moved to the start of the simulated step that holds them. */
+function onStepsOf(simulated: Series, samples: Series): Series {
+  const { step } = simulated;
+  const origin = simulated.timeSeconds[0] ?? 0;
+  const timeSeconds = samples.timeSeconds.map((time) => startOnGrid(time, origin, step));
+  return withoutRepeats({ ...samples, step, timeSeconds });
+}
+
+function startOnGrid(time: number, origin: number, step: Step): number {
+  if (step.kind === 'irregular') return time;
+  return afterSteps(origin, Math.floor(stepsBetween(origin, startOfStep(time, step), step)), step);
+}
