@@ -33,6 +33,8 @@ while [ ! -e '${folder}/go' ]; do sleep 0.02; done
   const acting = action().finally(() => {
     ended = true;
   });
+  // Its failure is thrown below, once the hook's folder is no longer needed.
+  acting.catch(() => {});
   try {
     const environment = await appeared(join(folder, 'environment'), () => ended);
     const pairs = environment

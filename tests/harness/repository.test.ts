@@ -21,6 +21,10 @@ describe('temporary repository', () => {
     );
   });
 
+  it('rejects a failure without words, too', async () => {
+    await expect(repository.git('config', '--get', 'no.such')).rejects.toThrow();
+  });
+
   it('runs hooks', async () => {
     await repository.hook('pre-commit', 'echo held back >&2; exit 1');
     await expect(repository.git('commit', '--allow-empty', '-m', 'no')).rejects.toThrow(/held back/);

@@ -9,7 +9,7 @@ export interface TemporaryRepository {
   readonly folder: string;
   /** For children of a test (our own git questions, the command line): no `GIT_*` of the surroundings. */
   readonly environment: NodeJS.ProcessEnv;
-  /** Runs git in the folder and answers its standard output; rejects where git says why it failed. */
+  /** Runs git in the folder and answers its standard output; rejects with git's words when its status is not 0 (a merge conflict, too). */
   git(...args: string[]): Promise<string>;
   /** Writes a file below the folder, with its folders. */
   write(path: string, content: string | Uint8Array): Promise<void>;
@@ -45,6 +45,9 @@ export function gitIn(folder: string, more: NodeJS.ProcessEnv = {}): (...args: s
   const environment = cleanEnvironment(more);
   const git = simpleGit({
     baseDir: folder,
+    // simple-git takes a failure without words on standard error, such as a merge conflict, for success.
+    errors: (error, { exitCode, stdOut, stdErr }) =>
+      error ?? (exitCode === 0 ? undefined : Buffer.concat([...stdOut, ...stdErr])),
     allowEnvironment: Object.keys(environment).filter((name) => name.startsWith('GIT_')),
     unsafe: {
       allowUnsafeConfigPaths: true,
@@ -55,7 +58,7 @@ export function gitIn(folder: string, more: NodeJS.ProcessEnv = {}): (...args: s
       allowUnsafeFsMonitor: true,
     },
   }).env(environment);
-  return (...args) => git.raw(args);
+  return async (...args) => git.raw(args);
 }
 
 /**
