@@ -1,7 +1,7 @@
 import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
 import type { Series } from './series.ts';
 import { afterSteps } from './step.ts';
-import { scaling, unlike } from './units/convert.ts';
+import { scaling, unlike } from './units/conversion.ts';
 import { parseUnit } from './units/parse-unit.ts';
 import type { Unit } from './units/unit.ts';
 
@@ -23,12 +23,13 @@ export function convertSeries(series: Series, to: string, over: Over = {}): Stat
   if (!isDefined(target)) return target;
   const plan = bridge(from.value, target.value, series, over);
   if (!isDefined(plan)) return plan;
-  const { factor, secondsPower } = plan.value;
-  const scaled = scaling(from.value, target.value);
+  const { secondsPower } = plan.value;
+  const { factor, offset } = scaling(from.value, target.value);
+  const scale = factor * plan.value.factor;
   const values = series.values.map((value, row) => {
-    if (secondsPower === 0) return scaled(value) * factor;
+    if (secondsPower === 0) return value * scale + offset;
     const time = series.timeSeconds[row] as number;
-    return scaled(value) * factor * (afterSteps(time, 1, series.step) - time) ** secondsPower;
+    return value * scale * (afterSteps(time, 1, series.step) - time) ** secondsPower;
   });
   return defined({ ...series, unit: to, values });
 }

@@ -17,7 +17,7 @@ export function parseUnit(text: string): Statistic<Unit> {
   const parser = new Parser(plain);
   const unit = parser.product();
   if (!isDefined(unit)) return unit;
-  if (!parser.atEnd) return undefinedBecause(`"${text}" can't be read as a unit from "${parser.rest}" on`);
+  if (!parser.atEnd) return undefinedBecause(`"${text}" ${parser.stuck()}`);
   return defined({ ...unit.value, text });
 }
 
@@ -44,30 +44,25 @@ class Parser {
     this.text = text;
   }
 
-  get rest(): string {
-    return this.text.slice(this.at);
-  }
-
   get atEnd(): boolean {
     return this.at === this.text.length;
+  }
+
+  /** Where the text stops being a unit. */
+  stuck(): string {
+    if (this.atEnd) return 'ends where a unit should follow';
+    return `can't be read as a unit from "${this.text.slice(this.at).trim()}" on`;
   }
 
   product(): Statistic<Unit> {
     let unit = this.factor();
     while (isDefined(unit) && !this.atEnd) {
-      const sign = this.take(/\s*(\/|\*(?!\*)|\.|-(?=[A-Za-z])|per\b)\s*|\s+(?![/*.)]|per\b)/iy);
+      const sign = this.take(/\s*(\/|\*(?!\*)|\.|-(?=[A-Za-z])|per\b)\s*|\s+(?![\d/*.)]|per\b)/iy);
       if (sign === null) break;
       const next = this.factor();
       if (!isDefined(next)) return next;
       const divides = sign[1] === '/' || sign[1]?.toLowerCase() === 'per';
-      const { value } = unit;
-      const scales = !divides && next.value.offset !== 0 && sameDimension(value.dimension, dimensionless);
-      // Tenths of a degree: 0.1 degC still counts from the freezing point.
-      unit = defined(
-        scales
-          ? { ...next.value, factor: value.factor * next.value.factor }
-          : times(value, next.value, divides ? -1 : 1),
-      );
+      unit = defined(divides ? times(unit.value, next.value, -1) : multiplied(unit.value, next.value));
     }
     return unit;
   }
@@ -83,7 +78,7 @@ class Parser {
       base = this.product();
       if (isDefined(base) && this.take(/\s*\)/y) === null)
         return undefinedBecause(`"${this.text}" opens a bracket that it does not close`);
-    } else return undefinedBecause(`"${this.text}" can't be read as a unit from "${this.rest}" on`);
+    } else return undefinedBecause(`"${this.text}" ${this.stuck()}`);
     if (!isDefined(base)) return base;
     const power = this.take(number === null ? /(?:\^|\*\*)?([+-]?\d+)/y : /(?:\^|\*\*)([+-]?\d+)/y);
     if (power === null) return base;
@@ -98,6 +93,13 @@ class Parser {
     if (found !== null) this.at = pattern.lastIndex;
     return found;
   }
+}
+
+/** Tenths of a degree (`0.1 degC`) still count from the freezing point; in other products an offset has no meaning. */
+function multiplied(one: Unit, other: Unit): Unit {
+  if (other.offset !== 0 && sameDimension(one.dimension, dimensionless))
+    return { ...other, factor: one.factor * other.factor };
+  return times(one, other, 1);
 }
 
 function unitNamed(word: string): Statistic<Unit> {

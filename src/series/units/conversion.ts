@@ -2,21 +2,25 @@ import { defined, isDefined, type Statistic, undefinedBecause } from '../../hydr
 import { parseUnit } from './parse-unit.ts';
 import { sameDimension, type Unit } from './unit.ts';
 
-/** A value in another unit; undefined where either is no unit or the two measure different things. */
-export function convert(value: number, units: { readonly from: string; readonly to: string }): Statistic {
+/** A value v becomes `v x factor + offset`. */
+export interface Conversion {
+  readonly factor: number;
+  readonly offset: number;
+}
+
+/** How values go from one unit to another; undefined where either is no unit or the two measure different things. */
+export function conversion(units: { readonly from: string; readonly to: string }): Statistic<Conversion> {
   const from = parseUnit(units.from);
   if (!isDefined(from)) return from;
   const to = parseUnit(units.to);
   if (!isDefined(to)) return to;
   if (!sameDimension(from.value.dimension, to.value.dimension)) return unlike(from.value, to.value);
-  return defined(scaling(from.value, to.value)(value));
+  return defined(scaling(from.value, to.value));
 }
 
-/** How a value in one unit becomes one in another of the same dimension. */
-export function scaling(from: Unit, to: Unit): (value: number) => number {
-  const scale = from.factor / to.factor;
-  const offset = (from.offset - to.offset) / to.factor;
-  return (value) => value * scale + offset;
+/** The same between units of one dimension, or whose dimensions something else bridges. */
+export function scaling(from: Unit, to: Unit): Conversion {
+  return { factor: from.factor / to.factor, offset: (from.offset - to.offset) / to.factor };
 }
 
 /** Why values in one unit can't be given in the other. */
