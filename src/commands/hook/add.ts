@@ -17,6 +17,7 @@ export async function addHooks(
   { hooks = hookNames }: { readonly hooks?: readonly HookName[] } = {},
 ): Promise<HookReport> {
   const home = await hookHome(repository);
+  if (home.refusal !== null) throw home.refusal;
   let foldersMade = await makeFolders(home.folder);
   const done = new Map<string, Done>();
   for (const hook of hooks) {

@@ -1,6 +1,6 @@
 import { existsSync, statSync } from 'node:fs';
 import { readFile } from 'node:fs/promises';
-import { basename, dirname, isAbsolute, join, relative } from 'node:path';
+import { basename, dirname, isAbsolute, join, relative, resolve } from 'node:path';
 import { Failure } from '../../failure.ts';
 import { ask, type Question } from '../../repository/git.ts';
 import type { Repository } from '../../repository/repository.ts';
@@ -12,6 +12,8 @@ export interface HookHome {
   readonly starter: 'git' | 'husky';
   /** Whether git comes here now: `core.hooksPath` may have led elsewhere since, or husky is not set up. */
   readonly inForce: boolean;
+  /** Why no hook of ours may be written here; null where one may. */
+  readonly refusal: Failure | null;
   /** What people should know about hooks in this folder; whole sentences. */
   readonly notes: readonly string[];
 }
@@ -36,24 +38,20 @@ const tracksAnythingIn = (folder: string): Question<boolean> => ({
   parse: (output) => output.length > 0,
 });
 
-/**
- * The folder where this repository's hooks belong. Throws Failure 'usage', with the reason, where no hook of ours
- * would run or where it would run in other repositories too.
- */
+/** Where git looks for this repository's hooks now. Throws Failure 'usage', with the reason, where there is no work tree. */
 export async function hookHome(repository: Repository): Promise<HookHome> {
   const top = workTree(repository);
-  const { hooksFolder } = repository;
+  const folder = resolve(repository.hooksFolder);
   const setting = await ask(repository, hooksPath);
-  const within = setting !== null && isInside(hooksFolder, top);
-  if (within && basename(hooksFolder) === '_') {
-    return huskyHome(dirname(hooksFolder), existsSync(join(hooksFolder, 'h')), top);
+  const within = setting !== null && isInside(folder, top);
+  if (within && basename(folder) === '_') {
+    return huskyHome(dirname(folder), existsSync(join(folder, 'h')), top);
   }
   if (setting === null && (await huskyIsPlanned(top))) return huskyHome(join(top, '.husky'), false, top);
-  if (setting !== null) refuseElsewhere(repository, setting, within);
 
   const notes: string[] = [];
-  if (within && (await ask(repository, tracksAnythingIn(hooksFolder)))) {
-    notes.push(`git tracks ${relative(top, hooksFolder)}: what changes there reaches others with a commit.`);
+  if (within && (await ask(repository, tracksAnythingIn(folder)))) {
+    notes.push(`git tracks ${relative(top, folder)}: what changes there reaches others with a commit.`);
   } else if (within && !isAbsolute(setting.value)) {
     notes.push(
       `core.hooksPath is ${setting.value}, taken from the top of each work tree, and git does not track that folder: ` +
@@ -62,12 +60,13 @@ export async function hookHome(repository: Repository): Promise<HookHome> {
   } else if (repository.gitDirectory !== repository.commonDirectory) {
     notes.push('These hooks serve every work tree of this repository.');
   }
-  return { folder: hooksFolder, starter: 'git', inForce: true, notes };
+  const refusal = setting === null || within ? null : refusalOf(repository, setting);
+  return { folder, starter: 'git', inForce: true, refusal, notes };
 }
 
 /** Other folders where hooks of ours may lie since before `core.hooksPath` was set or husky came or went. */
 export function formerHomes(repository: Repository, now: HookHome): readonly HookHome[] {
-  const former = { inForce: false, notes: [] };
+  const former = { inForce: false, refusal: null, notes: [] };
   const homes: HookHome[] = [
     { ...former, folder: join(repository.commonDirectory, 'hooks'), starter: 'git' },
     { ...former, folder: join(workTree(repository), '.husky'), starter: 'husky' },
@@ -83,7 +82,7 @@ function huskyHome(folder: string, inForce: boolean, top: string): HookHome {
       `husky is not set up in this work tree, so git runs no hook here and does not say so. Set it up with \`npm install\` (its \`prepare\` script does it) or \`npx husky\` in ${top}.`,
     );
   }
-  return { folder, starter: 'husky', inForce, notes };
+  return { folder, starter: 'husky', inForce, refusal: null, notes };
 }
 
 /** A fresh clone of a project with husky: its scripts are there, and `npm install` will set `core.hooksPath`. */
@@ -108,23 +107,25 @@ function workTree({ top, bare, cwd }: Repository): string {
       );
 }
 
-function refuseElsewhere(repository: Repository, { scope, value }: HooksPath, within: boolean): void {
+/** Why hooks can't be written to a folder outside the work tree: hooks are switched off, or it serves others too. */
+function refusalOf(repository: Repository, { scope, value }: HooksPath): Failure | null {
   const { hooksFolder, commonDirectory } = repository;
-  const ownFolder = join(commonDirectory, 'hooks');
+  const own = `git config core.hooksPath '${join(commonDirectory, 'hooks')}'`;
   if (existsSync(hooksFolder) && !statSync(hooksFolder).isDirectory()) {
-    throw new Failure(
+    return new Failure(
       'usage',
       `core.hooksPath is ${value}, which is no folder, so git runs no hooks here.`,
-      `Give this repository hooks again: git config core.hooksPath '${ownFolder}'`,
+      `Give this repository hooks again: ${own}`,
     );
   }
-  if ((scope === 'global' || scope === 'system') && !within && !isInside(hooksFolder, commonDirectory)) {
-    throw new Failure(
+  if ((scope === 'global' || scope === 'system') && !isInside(hooksFolder, commonDirectory)) {
+    return new Failure(
       'usage',
       `core.hooksPath is ${value} in your ${scope} git settings: all your repositories share that folder, and a hook there would hold back commits in each of them.`,
-      `Give this repository hooks of its own, which then run instead of the shared ones: git config core.hooksPath '${ownFolder}'`,
+      `Give this repository hooks of its own, which then run instead of the shared ones: ${own}`,
     );
   }
+  return null;
 }
 
 function isInside(path: string, folder: string): boolean {

@@ -28,6 +28,7 @@ export function describeHooks({ home, hooks, tool }: HookReport, top: string): s
   const ours = hooks.some((hook) => hook.home === home && hook.found === 'ours');
   const notes = [
     ...home.notes,
+    ...(home.refusal === null ? [] : [home.refusal.message, home.refusal.next]),
     ...(ours ? toolNotes(tool, show) : []),
     ...(hooks.some((hook) => hook.done === 'written') ? [limits] : []),
   ];
