@@ -1,6 +1,5 @@
 // The 95 % band of daily flow: 200 parameter sets nearly as good as the best, each with rain that could have
 // fallen instead and a gauge that errs. Writes the sets and the band.
-
 import { round, writeTable } from '../model/table.mjs';
 import { readParameters, readSetup } from '../model/two-store.mjs';
 import { makeSet, rater, readObserved, searched, simulatedFlow, windows } from './calibrate.mjs';
