@@ -24,10 +24,30 @@ export interface FragmentOf {
 
 export type Area = keyof FragmentOf;
 
+/** Every area, in the order of the manifest's sections. */
+export const areas = [
+  'study',
+  'catchment',
+  'model',
+  'inputs',
+  'periods',
+  'setup',
+  'parameters',
+  'runs',
+  'evaluation',
+  'balance',
+  'interventions',
+  'uncertainty',
+  'scenarios',
+] as const satisfies readonly Area[];
+
 /** Areas whose key in the manifest holds one record for each name. */
 export const namedAreas = ['inputs', 'runs', 'evaluation', 'balance', 'scenarios'] as const;
 
-/** A file that a record names. */
+/** Stands for the record where something belongs to the manifest as a whole. */
+export const asWhole = 'manifest';
+
+/** A file that a record depends on. */
 export interface Claim {
   /** From the top of the repository. */
   readonly path: string;

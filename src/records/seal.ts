@@ -17,10 +17,17 @@ export interface Seal {
   readonly scheme: number;
   readonly substance: string;
   readonly wording: string;
+  /** SHA-256 of each acceptance that the record had. */
   readonly accepts: readonly string[];
+  /** Path from the manifest's folder -> the file. */
   readonly files: Readonly<Record<string, SealedFile>>;
+  /** Record id or field address -> its digest. */
   readonly rests_on: Readonly<Record<string, string>>;
   readonly digest: string;
+  /** SHA-256 of what the record itself brings forth: a run's outputs, the values of parameters; null for all others. */
+  readonly outcome: string | null;
+  /** Record ids, field addresses and paths below that had changed since the seal before while the outcome had not. */
+  readonly unmoved: readonly string[];
   /** Figures as they were computed when sealed, with the version of each computation. */
   readonly facts: Readonly<Record<string, { readonly value: number | string; readonly computed_by: number }>>;
   /** `Name <email>` as git knows them. */
@@ -28,7 +35,7 @@ export interface Seal {
   /** ISO 8601 date. */
   readonly sealed_on: string;
   readonly grade: Exclude<Grade, 'stated'>;
-  /** Why it was sealed though something that should have changed did not; null in the ordinary case. */
+  /** Why it was sealed though its outcome had not moved; null in the ordinary case. */
   readonly because: string | null;
   /** SHA-256 over the canonical JSON of all the fields above. */
   readonly checksum: string;

@@ -1,0 +1,129 @@
+import type { StatedFile, Table } from '../manifest/data.generated.ts';
+import type { FieldPath } from '../manifest/manifest.ts';
+import { fileOfTable } from './each-table.ts';
+import { isRecordName, runOfTarget } from './names.ts';
+import type { Stated, Statement } from './statements.ts';
+
+/** A path or pattern that the manifest writes, or a file that it says is kept elsewhere. */
+export interface NamedFile {
+  readonly pattern: string;
+  readonly field: FieldPath;
+  /**
+   * `own`: the record is its home. `read`: the record depends on its content. `given`: the record reads what a run
+   * gives, so where the run owns the file, the run's digest speaks for it. `seen`: the file is looked at anew in every
+   * check (a reading, a list of entries), so no digest needs it. `elsewhere`: not in git.
+   */
+  readonly use: 'own' | 'read' | 'given' | 'seen' | 'elsewhere';
+  /** For `given`: the record id of the run, where one is named. */
+  readonly run?: string;
+  /** For `elsewhere`: all that is stated of it. */
+  readonly stated?: Exclude<StatedFile, string>;
+}
+
+/** All that a record says of files. */
+export function filesNamedBy(statement: Statement, stated: Stated): readonly NamedFile[] {
+  const { data } = stated.manifest;
+  const at = (...path: (string | number)[]): FieldPath => [...statement.field, ...path];
+  switch (statement.area) {
+    case 'study':
+    case 'catchment':
+    case 'periods':
+    case 'setup':
+      return listed(statement.fragment.files, at('files'), 'read');
+    case 'model':
+      return [
+        ...listed(statement.fragment.executable, at('executable'), 'own'),
+        ...listed(statement.fragment.environment?.files, at('environment', 'files'), 'read'),
+      ];
+    case 'inputs': {
+      const { files, stored, preparation = [] } = statement.fragment;
+      return [
+        ...listed(files, at('files'), stored === 'elsewhere' ? stored : 'own'),
+        ...preparation.flatMap(({ script }, index) =>
+          listed(script, at('preparation', index, 'script'), 'read'),
+        ),
+      ];
+    }
+    case 'parameters': {
+      const { table, sensitivity, calibrated_by, files } = statement.fragment;
+      return [
+        ...tabled(table, at('table')),
+        ...listed(sensitivity?.file, at('sensitivity', 'file'), 'own'),
+        ...listed(calibrated_by?.files, at('calibrated_by', 'files'), 'read'),
+        ...listed(files, at('files'), 'read'),
+      ];
+    }
+    case 'runs': {
+      const { takes = [], gives, stored, stores, environment } = statement.fragment;
+      return [
+        ...listed(takes, at('takes'), 'read').filter(({ pattern }) => !isRecordName(pattern)),
+        ...listed(gives, at('gives'), stored === 'elsewhere' ? stored : 'own'),
+        ...given({ ...stores, run: statement.name ?? '' }, at('stores')),
+        ...listed(environment?.files, at('environment', 'files'), 'read'),
+      ];
+    }
+    case 'evaluation': {
+      const { simulated, scores } = statement.fragment;
+      return [...given(simulated, at('simulated')), ...tabled(scores?.table, at('scores', 'table'))];
+    }
+    case 'balance':
+      return given(statement.fragment, at());
+    case 'interventions': {
+      const list = Array.isArray(statement.fragment) ? statement.fragment : [];
+      return [
+        ...list.flatMap(({ settings }, index) => listed(settings, at(index, 'settings'), 'own')),
+        ...(data.seasons ?? []).flatMap(({ simulated }, index) =>
+          given(simulated, ['seasons', index, 'simulated']),
+        ),
+      ];
+    }
+    case 'uncertainty': {
+      const { sources = {}, bands = {}, files } = statement.fragment;
+      return [
+        ...Object.entries(sources).flatMap(([name, source]) =>
+          listed(source.files, at('sources', name, 'files'), 'read'),
+        ),
+        ...Object.entries(bands).flatMap(([target, band]) =>
+          given({ run: runOfTarget(target, stated), ...band }, at('bands', target)),
+        ),
+        ...listed(files, at('files'), 'read'),
+      ];
+    }
+    case 'scenarios': {
+      const conditions = Object.entries(data.scenarios?.conditions ?? {});
+      const drivers = Object.entries(statement.fragment.drivers ?? {});
+      return [
+        ...conditions.flatMap(([name, condition]) => given(condition, ['scenarios', 'conditions', name])),
+        ...drivers.flatMap(([name, driver]) => given(driver, at('drivers', name))),
+      ];
+    }
+  }
+}
+
+function listed(
+  value: string | readonly StatedFile[] | undefined,
+  field: FieldPath,
+  use: NamedFile['use'],
+): readonly NamedFile[] {
+  if (typeof value === 'string') return [{ pattern: value, field, use }];
+  return (value ?? []).map((file, index) => {
+    const stated = typeof file === 'string' ? { path: file } : file;
+    const place = { pattern: stated.path, field: [...field, index] };
+    return stated === file || use === 'elsewhere'
+      ? { ...place, use: 'elsewhere', stated }
+      : { ...place, use };
+  });
+}
+
+function tabled(table: Table | undefined, field: FieldPath): readonly NamedFile[] {
+  return table === undefined ? [] : [{ ...fileOfTable(table, field), use: 'own' }];
+}
+
+function given(
+  source: { readonly run?: string | undefined; readonly file?: string } | undefined,
+  field: FieldPath,
+): readonly NamedFile[] {
+  if (source?.file === undefined) return [];
+  const place = { pattern: source.file, field: [...field, 'file'], use: 'given' } as const;
+  return [source.run === undefined ? place : { ...place, run: `runs.${source.run}` }];
+}

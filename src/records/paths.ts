@@ -1,0 +1,11 @@
+import { posix } from 'node:path';
+
+/** A path from the top of the repository as the manifest's folder sees it. */
+export function fromFolder(folder: string, path: string): string {
+  return posix.relative(`/${folder}`, `/${path}`);
+}
+
+/** A path from the manifest's folder as the top of the repository sees it. */
+export function fromTop(folder: string, path: string): string {
+  return posix.join(folder, path);
+}
