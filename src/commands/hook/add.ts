@@ -25,7 +25,7 @@ export async function addHooks(
     done.set(there.file, await addHook(there, foldersMade));
     foldersMade = 0; // The first hook remembers them for all.
   }
-  return reportHooks(repository, done);
+  return reportHooks(repository, home, done);
 }
 
 async function addHook(there: HookContent, foldersMade: number): Promise<Done> {

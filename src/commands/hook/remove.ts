@@ -27,7 +27,7 @@ export async function removeHooks(repository: Repository): Promise<HookReport> {
     }
     await removeFolders(one.folder, foldersMade);
   }
-  return reportHooks(repository, done);
+  return reportHooks(repository, home, done);
 }
 
 async function removeHook(there: HookContent, { was, rest }: Block): Promise<Done> {
@@ -48,13 +48,11 @@ async function removeHook(there: HookContent, { was, rest }: Block): Promise<Don
 async function removeFolders(innermost: string, count: number): Promise<void> {
   let folder = innermost;
   for (let left = count; left > 0; left -= 1) {
-    if (
-      !(await rmdir(folder).then(
-        () => true,
-        () => false,
-      ))
-    )
-      return;
+    const gone = await rmdir(folder).then(
+      () => true,
+      () => false,
+    );
+    if (!gone) return;
     folder = dirname(folder);
   }
 }

@@ -17,12 +17,12 @@ export interface HookReport {
   readonly tool: Tool;
 }
 
-/** What is there now, and what was done to it, by file. Failures: 'usage' (see `hookHome`), 'unreadable-file'. */
+/** What is there now, and what was done to it, by file. Throws Failure 'unreadable-file'. */
 export async function reportHooks(
   repository: Repository,
-  done: ReadonlyMap<string, Done> = new Map(),
+  home: HookHome,
+  done: ReadonlyMap<string, Done>,
 ): Promise<HookReport> {
-  const home = await hookHome(repository);
   const hooks: (HookState & { done: Done })[] = [];
   for (const one of [home, ...formerHomes(repository, home)]) {
     for (const hook of hookNames) {
@@ -34,7 +34,7 @@ export async function reportHooks(
   return { home, hooks, tool: await findTool(repository) };
 }
 
-/** `stoplog hook list`, as data. */
-export function listHooks(repository: Repository): Promise<HookReport> {
-  return reportHooks(repository);
+/** What is there. Failures: 'usage' (see `hookHome`), 'unreadable-file'. */
+export async function listHooks(repository: Repository): Promise<HookReport> {
+  return reportHooks(repository, await hookHome(repository), new Map());
 }
