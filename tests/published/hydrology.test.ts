@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
+import { boundAnswers } from './answers-bounds.ts';
 import { fitAnswers } from './answers-fit.ts';
 import { recordAnswers } from './answers-records.ts';
 
@@ -15,7 +16,7 @@ const { cases } = JSON.parse(readFileSync('tests/published/hydrology-cases.json'
 };
 
 type Answer = (input: never) => unknown;
-const answers = new Map<string, Answer>(Object.entries({ ...fitAnswers, ...recordAnswers }));
+const answers = new Map<string, Answer>(Object.entries({ ...fitAnswers, ...recordAnswers, ...boundAnswers }));
 
 /** Keys with a wider tolerance than relative 1e-9, each with the reason that its case gives. */
 const wider: Readonly<Record<string, number>> = {
@@ -41,6 +42,7 @@ describe('published and library values', () => {
       expect.arrayContaining([
         ...['gof', 'fdc', 'peaks', 'ratings', 'published', 'quantile', 'trend', 'pettitt', 'ks'],
         ...['window', 'warmup', 'forcing', 'seasonality'],
+        ...['band', 'balance', 'budyko', 'domain', 'parameters', 'parsimony'],
       ]),
     );
     expect(cases.length).toBe(71);
