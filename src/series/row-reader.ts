@@ -17,7 +17,7 @@ export class RowReader {
   private readonly values: Float64Array;
   private readonly hasHeader: boolean;
   private linesToSkip: number;
-  private names: readonly string[];
+  private names: readonly string[] = [];
   private places: readonly number[] = [];
   private timePlaces: readonly number[] = [];
   /** Null until the columns are known. */
@@ -34,7 +34,6 @@ export class RowReader {
     this.values = new Float64Array(plan.values.length);
     this.hasHeader = layout.header ?? true;
     this.linesToSkip = layout.skip_lines ?? 0;
-    this.names = plan.values.map(String);
   }
 
   /** Reads the rows that are whole by now; false when nothing more can be read from this file. */
@@ -151,17 +150,13 @@ export class RowReader {
   private refuseValue(column: number, text: string): void {
     const { decimalMark } = this.plan;
     const otherMark = decimalMark === comma ? point : comma;
-    const code = numberOf(text, decimalMark);
-    let advice = `if it marks a missing value, say missing: [${Number.isNaN(code) ? quoted(text) : code}]`;
-    if (Number.isNaN(code) && !Number.isNaN(numberOf(text, otherMark)))
+    const number = numberOf(text, decimalMark);
+    const what = Number.isNaN(number) ? 'a number' : 'a plausible number';
+    let advice = `if it marks a missing value, say missing: [${Number.isNaN(number) ? `"${shortened(text)}"` : number}]`;
+    if (!Number.isNaN(numberOf(text, otherMark)) && Number.isNaN(number))
       advice = `if that is its decimal mark, say decimal: ${otherMark === comma ? 'comma' : 'point'}`;
-    const what = Number.isNaN(code) ? 'a number' : 'a plausible number';
-    this.refuse(
-      this.unit === '' ? what : `${what} in ${this.unit}`,
-      text === '' ? 'nothing' : quoted(text),
-      advice,
-      this.names[column] ?? null,
-    );
+    const expected = this.unit === '' ? what : `${what} in ${this.unit}`;
+    this.refuse(expected, quoted(text), advice, this.names[column] ?? null);
   }
 
   private neverEnds(): false {

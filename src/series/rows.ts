@@ -64,16 +64,14 @@ export class Rows {
 
   /** Moves to the next row that holds anything; false when its end is not here yet. */
   next(): boolean {
-    if (!this.begin(3)) return false;
-    const whole = this.nextRow();
+    const whole = this.begin(3) && this.nextRow();
     if (!whole) this.keepRest();
     return whole;
   }
 
   /** Moves past one line, whatever is in it; false when its end is not here yet. */
   skip(): boolean {
-    if (!this.begin(3)) return false;
-    const whole = this.skipLine();
+    const whole = this.begin(3) && this.skipLine();
     if (!whole) this.keepRest();
     return whole;
   }

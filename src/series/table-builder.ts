@@ -54,11 +54,11 @@ export class TableBuilder {
     const order = risingOrder(this.timeSeconds.subarray(0, rows));
     const timeSeconds = copied(this.timeSeconds, new Float64Array(rows), order);
     const lines = copied(this.lines, new Uint32Array(rows), order);
-    const columns = this.values.map((from, column) => {
-      const values = copied(from, new Float64Array(rows), order);
+    const columns = names.map((name, column) => {
+      const values = copied(this.values[column] as Float64Array, new Float64Array(rows), order);
       let missing = 0;
       for (let row = 0; row < rows; row++) if (Number.isNaN(values[row])) missing++;
-      return { name: names[column] ?? '', values, missing };
+      return { name, values, missing };
     });
     for (const array of [this.timeSeconds, this.lines, ...this.values])
       if (spare.length < spareAtMost && array.length === firstLength) spare.push(array);

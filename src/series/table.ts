@@ -53,7 +53,7 @@ export interface SeriesTable {
   readonly file: string;
   /** As stated in the layout; empty where it is silent. */
   readonly unit: string;
-  /** Null where the layout states none: then nothing is said on order, repeats and absent steps but the first two. */
+  /** Null where the layout states none: then no step is off the grid or absent. */
   readonly step: Step | null;
   /**
    * Start of each step as the file labels it, in seconds since 1970-01-01T00:00 on the station's clock. Daily and longer steps
@@ -62,13 +62,14 @@ export interface SeriesTable {
   readonly timeSeconds: Float64Array;
   /** Line of each row, from 1. */
   readonly lines: Uint32Array;
+  /** Those asked for, in that order; none where the layout can't be used or the file lacks one. */
   readonly columns: readonly SeriesColumn[];
   readonly problems: Listed<SeriesProblem>;
   /** Rows whose time is before that of an earlier row. */
   readonly outOfOrder: Listed<TimeAt>;
   /** Rows whose time another row had already. */
   readonly repeated: Listed<TimeAt>;
-  /** Rows that are not a whole number of steps after the first. */
+  /** Rows that leave the grid of steps which the first row begins. */
   readonly offStep: Listed<TimeAt>;
   /** Steps between the first and the last row that no row holds; `total` counts steps, `first` lists runs of them. */
   readonly absent: Listed<Gap>;
