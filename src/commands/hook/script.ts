@@ -38,11 +38,10 @@ tell_pushed() { if [ -n "$pushed" ]; then printf '%s\\n' "$pushed"; fi; }
 `;
 
 /** Of `LOCAL-REFERENCE LOCAL-ID REMOTE-REFERENCE REMOTE-ID` only the first may hold blanks: it is read from its end. */
-const findCommits = `# The commits that are pushed, each once, tags followed to theirs. An id of zeros is a deletion.
+const findCommits = `# The commits that are pushed, each once, tags followed to theirs; the zeros of a deletion name none.
 commits=$(tell_pushed | while IFS= read -r line; do
   line=\${line% * *}
-  id=\${line##* }
-  case $id in (*[!0]*) git rev-parse --verify --quiet "$id^{commit}" || : ;; esac
+  git rev-parse --verify --quiet "\${line##* }^{commit}" || :
 done | sort -u) || exit
 if [ -z "$commits" ]; then exit 0; fi
 `;
