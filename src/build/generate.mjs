@@ -8,6 +8,7 @@ import { Ajv2020 } from 'ajv/dist/2020.js';
 import standalone from 'ajv/dist/standalone/index.js';
 import { build } from 'esbuild';
 import { compile } from 'json-schema-to-typescript';
+import { writeReadme } from './readme-table.mjs';
 
 const top = fileURLToPath(new URL('../../', import.meta.url));
 const manifestFolder = join(top, 'src/manifest');
@@ -192,4 +193,7 @@ function mapValues(object, change) {
   return Object.fromEntries(Object.entries(object).map(([key, value]) => [key, change(value)]));
 }
 
-if (process.argv[1] === fileURLToPath(import.meta.url)) await writeGenerated();
+if (process.argv[1] === fileURLToPath(import.meta.url)) {
+  await writeGenerated();
+  await writeReadme();
+}

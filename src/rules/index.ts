@@ -6,9 +6,12 @@ import { evaluationUnseen } from './evaluation/unseen.ts';
 import { inputsDayUnstated } from './inputs/day-unstated.ts';
 import { inputsGapUntreated } from './inputs/gap-untreated.ts';
 import { inputsLicenceMissing } from './inputs/licence-missing.ts';
+import { inputsPublishedDigestDiffers } from './inputs/published-digest-differs.ts';
 import { inputsRetrievedMissing } from './inputs/retrieved-missing.ts';
 import { inputsSourceMissing } from './inputs/source-missing.ts';
 import { inputsUnitMissing } from './inputs/unit-missing.ts';
+import { inputsUnitUnknown } from './inputs/unit-unknown.ts';
+import { inputsUnverified } from './inputs/unverified.ts';
 import { interventionsDefaultUnstated } from './interventions/default-unstated.ts';
 import { interventionsUndeclared } from './interventions/undeclared.ts';
 import { interventionsUnrepresented } from './interventions/unrepresented.ts';
@@ -46,6 +49,13 @@ import type { Rule } from './rule.ts';
 import { thresholdName } from './run.ts';
 import { runsMissing } from './runs/missing.ts';
 import { scenariosConditionsMissing } from './scenarios/conditions-missing.ts';
+import { sealMissing } from './seal/missing.ts';
+import { sealOldScheme } from './seal/old-scheme.ts';
+import { sealOrphan } from './seal/orphan.ts';
+import { sealReworded } from './seal/reworded.ts';
+import { sealStale } from './seal/stale.ts';
+import { sealUnmoved } from './seal/unmoved.ts';
+import { sealUnreadable } from './seal/unreadable.ts';
 import { setupChoiceMissing } from './setup/choice-missing.ts';
 import { setupChoiceUnjustified } from './setup/choice-unjustified.ts';
 import { studyContactMissing } from './study/contact-missing.ts';
@@ -71,6 +81,13 @@ export const rules: readonly Rule[] = [
   manifestUnknownRecord,
   manifestClaimedTwice,
   manifestLoosened,
+  sealMissing,
+  sealStale,
+  sealReworded,
+  sealOldScheme,
+  sealUnmoved,
+  sealOrphan,
+  sealUnreadable,
   waiverExpired,
   waiverUnused,
   waiverUnsigned,
@@ -92,8 +109,11 @@ export const rules: readonly Rule[] = [
   inputsRetrievedMissing,
   inputsLicenceMissing,
   inputsUnitMissing,
+  inputsUnitUnknown,
   inputsDayUnstated,
   inputsGapUntreated,
+  inputsUnverified,
+  inputsPublishedDigestDiffers,
   periodsWarmUpMissing,
   periodsWarmUpShort,
   periodsOverlap,

@@ -10,26 +10,14 @@ export const manifestOutsideRepository = rule({
   source: { basis: 'definition', citation: 'A record is about files that the repository holds.' },
   clear:
     'Bring the file into the repository, or describe it with `stored: elsewhere` by its SHA-256, size and place.',
-  check: (_, { records }) => [
-    ...records.unmatched
+  check: (_, { records }) =>
+    records.unmatched
       .filter(({ why }) => why === 'outside-repository')
       .map(({ record, pattern, field }) => ({
         record,
         field,
         subject: pattern,
         stated: pattern,
-        message: `\`${pattern}\` leads out of the repository.`,
+        message: `\`${pattern}\` leads out of the repository, by itself or over a symbolic link.`,
       })),
-    ...[...records.nodes.values()].flatMap(({ id, claims }) =>
-      [...claims.values()]
-        .filter(({ identity }) => identity.kind === 'unavailable' && identity.why === 'link-outside')
-        .map(({ path, field }) => ({
-          record: id,
-          field,
-          subject: path,
-          stated: path,
-          message: `${path} is a symbolic link that leads out of the repository.`,
-        })),
-    ),
-  ],
 });

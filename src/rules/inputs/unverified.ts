@@ -1,0 +1,55 @@
+import type { Unavailable } from '../../repository/snapshot.ts';
+import { rule } from '../rule.ts';
+
+const why: Readonly<Record<Unavailable, string>> = {
+  'not-fetched': 'is not in this clone (partial or shallow, or an object is missing)',
+  submodule: 'belongs to a submodule, whose content is another repository’s',
+  'link-outside': 'is a symbolic link that leads out of the repository',
+  'link-dangling': 'is a symbolic link that leads nowhere',
+  unmerged: 'is in the middle of a merge',
+  'intent-to-add': 'was announced to git (add --intent-to-add), but its content was not added',
+  absent: 'is not there',
+};
+
+export const inputsUnverified = rule({
+  id: 'inputs.unverified',
+  scope: 'manifest',
+  from: 'archive',
+  before: 'warn',
+  means: null,
+  statement:
+    'A file’s content is not here (kept elsewhere, Git LFS or partial clone not fetched), so its digest could not be checked.',
+  why: 'What was not looked at is no evidence: the data on that drive or server may have been replaced since the model ran.',
+  source: { basis: 'definition', citation: 'A digest is checked by reading the content.' },
+  clear:
+    'Fetch the content (git lfs pull, git fetch --refetch) or put the file at its path, and check again.',
+  check: (_, { records }) =>
+    [...records.nodes.values()].flatMap(({ id, claims, elsewhere }) => [
+      ...[...claims.values()].flatMap(({ path, field, identity }) => {
+        const says =
+          identity.kind === 'unavailable'
+            ? why[identity.why]
+            : identity.kind === 'pointer' && !identity.present
+              ? 'is a Git LFS pointer whose content is not fetched'
+              : null;
+        return says === null
+          ? []
+          : {
+              record: id,
+              field,
+              subject: path,
+              message: `${path} ${says}, so its content could not be checked.`,
+            };
+      }),
+      ...elsewhere.map(({ path, field, sha256, location }) => ({
+        record: id,
+        field,
+        subject: path,
+        message: `${path} is kept outside git${location === undefined ? '' : ` (${location})`}; ${
+          sha256 === undefined
+            ? 'no SHA-256 is stated, so nothing identifies it'
+            : 'its SHA-256 could not be checked'
+        }.`,
+      })),
+    ]),
+});

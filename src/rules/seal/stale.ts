@@ -1,0 +1,84 @@
+import type { Facts } from '../../facts/facts.ts';
+import type { RecordNode } from '../../records/record.ts';
+import type { Change, Seal, Standing } from '../../records/seal.ts';
+import { few } from '../figures.ts';
+import { type Draft, rule } from '../rule.ts';
+import { fileChange } from './file-change.ts';
+import { fromPhase } from './required.ts';
+
+export const sealStale = rule({
+  id: 'seal.stale',
+  scope: 'manifest',
+  from: 'calibration',
+  means: 'stale',
+  statement: 'What a record states, its files or what it rests on changed since it was sealed.',
+  why: 'A score, a balance or a scenario is true of the data and the parameters that it was computed from. When one of these changes, what was reviewed is no longer what is there.',
+  source: { basis: 'definition', citation: 'A seal is the fingerprint of what was reviewed.' },
+  clear: 'Check what changed, repeat what rests on it, then: stoplog seal RECORD',
+  check: (_, facts) =>
+    [...facts.records.nodes.values()].flatMap((record) => {
+      const standing = facts.standings.get(record.id);
+      return standing?.state === 'stale' && standing.seal !== null
+        ? stale(record, standing, standing.seal, facts)
+        : [];
+    }),
+});
+
+function stale(record: RecordNode, { changes, trails }: Standing, seal: Seal, facts: Facts): Draft {
+  const own = changes.filter(({ kind }) => kind !== 'rests-on');
+  const files = own.filter((change) => change.kind === 'file');
+  const [first, ...others] = trails.map(({ steps, path }) => (path === null ? steps : [...steps, path]));
+  return {
+    record: record.id,
+    ...fromPhase(record.area),
+    message: own.length > 0 ? ownChange(own, seal) : inherited(changes, seal),
+    ...(first === undefined ? {} : { trail: first }),
+    detail: [
+      ...files.slice(0, shownAtMost).flatMap((change) => fileChange(change, files.length > 1, record, facts)),
+      ...others
+        .filter((trail) => trail.length > 2)
+        .slice(0, shownAtMost)
+        .map((trail) => `also rests on ${trail.slice(1).join(' <- ')}`),
+    ],
+    clear: nextStep(record, own.length > 0),
+  };
+}
+
+const shownAtMost = 5;
+
+function ownChange(own: readonly Change[], { sealed_on }: Seal): string {
+  const files = own.filter((change) => change.kind === 'file');
+  const named = (chosen: typeof files) => few(chosen.map(({ path }) => path));
+  const gone = files.filter(({ now }) => now === null);
+  const added = files.filter(({ was, now }) => was === null && now !== null);
+  const other = files.filter(({ was, now }) => was !== null && now !== null);
+  const are = (chosen: typeof files, one: string, several: string) => (chosen.length === 1 ? one : several);
+  return [
+    own.some(({ kind }) => kind === 'substance')
+      ? `What this record states was changed since it was sealed on ${sealed_on}.`
+      : '',
+    other.length > 0
+      ? `${named(other)} ${are(other, 'is not the file', 'are not the files')} that ${are(other, 'was', 'were')} sealed on ${sealed_on}.`
+      : '',
+    gone.length > 0
+      ? `${named(gone)}, sealed on ${sealed_on}, ${are(gone, 'is', 'are')} no longer there.`
+      : '',
+    added.length > 0
+      ? `${named(added)} ${are(added, 'was', 'were')} not there when this was sealed on ${sealed_on}.`
+      : '',
+  ]
+    .filter((sentence) => sentence !== '')
+    .join(' ');
+}
+
+function inherited(changes: readonly Change[], { sealed_on }: Seal): string {
+  const ids = changes.flatMap((change) => (change.kind === 'rests-on' ? change.id : []));
+  return `This was sealed on ${sealed_on}; since then ${few(ids)} changed, on which it rests.`;
+}
+
+function nextStep({ id, area }: RecordNode, own: boolean): string {
+  if (own) return `Check what changed, then: stoplog seal ${id}`;
+  if (area === 'runs') return `Run the model again on what is there now, then: stoplog seal ${id}`;
+  if (area === 'parameters') return `Calibrate again on what is there now, then: stoplog seal ${id}`;
+  return `Clear what it rests on first, look at this again, then: stoplog seal --figures ${id}`;
+}

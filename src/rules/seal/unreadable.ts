@@ -1,0 +1,25 @@
+import { rule } from '../rule.ts';
+
+export const sealUnreadable = rule({
+  id: 'seal.unreadable',
+  scope: 'manifest',
+  from: 'setup',
+  means: null,
+  statement:
+    'The seals file is broken, holds conflict markers, was edited by hand, or was written by a newer Stoplog.',
+  why: 'Seals say who reviewed what. One that can’t be read, or that was changed by hand, proves nothing.',
+  source: { basis: 'definition', citation: 'A seal counts only as Stoplog wrote it.' },
+  clear:
+    'After a merge: stoplog seal --all heals the file. Otherwise take it back from git, or seal the record anew.',
+  check: (_, { sealsFile }) =>
+    sealsFile.faults.map(({ kind, record, line, message }) => ({
+      record: record ?? 'manifest',
+      file: sealsFile.path,
+      line,
+      subject: kind,
+      message,
+      ...(kind === 'newer-scheme'
+        ? { clear: 'Install the version of Stoplog that wrote it, or a newer one.' }
+        : {}),
+    })),
+});
