@@ -229,7 +229,7 @@ describe('every figure that the example states', () => {
     expectFigures(drivers.annual_rainfall.stated, dryRain, 1);
     const dryPet = drivers.summer_evapotranspiration;
     expectFigures(dryPet.stated, yearly(dryPet.file, dryPet.values, '2043-10-01/2055-09-30', pet.months), 1);
-    // Accepted in the manifest as 18 % drier; Vaze et al. 2010 trust a calibration within about 15 %.
+    // The manifest says 18 % drier, and who answers for it; Vaze et al. 2010 trust a calibration within about 15 %.
     expect((100 * (1 - dryRain.mean / calibratedRain.mean)).toFixed(0)).toBe('18');
   });
 
