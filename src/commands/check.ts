@@ -9,7 +9,7 @@ import type { Phase } from '../rules/rule.ts';
 import type { Verdict } from '../verdict/finding.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { examine } from './examine.ts';
-import { manifestName, sealsName } from './studies.ts';
+import { stoplogFiles } from './studies.ts';
 import { writeFileSafely } from './write-file.ts';
 
 export interface CheckOptions {
@@ -36,7 +36,7 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
   const reports = (options.report.length > 0 ? options.report : ['text']).map(readReport);
   const repository = await openRepository(context.cwd, context.environment);
   const snapshot = await openSnapshot(repository, readAt(options.at), {
-    alsoUntracked: [manifestName, sealsName],
+    alsoUntracked: stoplogFiles,
     remember: options.cache,
   });
   try {

@@ -1,16 +1,17 @@
 import { Failure } from '../failure.ts';
-import { discoverManifests } from '../manifest/discover.ts';
+import { discoverManifests, manifestName } from '../manifest/discover.ts';
 import type { Manifest, Problem } from '../manifest/manifest.ts';
 import { readManifest } from '../manifest/read.ts';
 import { buildRecords } from '../records/build.ts';
 import type { Records } from '../records/record.ts';
 import type { SealsFile, Standing } from '../records/seal.ts';
 import { readSealsFile } from '../records/seals-file.ts';
+import { sealsName, sealsPathOf } from '../records/seals-path.ts';
 import { judgeStandings } from '../records/standing.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 
-export const manifestName = 'stoplog.yaml';
-export const sealsName = 'stoplog.seals.json';
+/** Files that belong to a work tree's state even before their first `git add`. */
+export const stoplogFiles: readonly string[] = [manifestName, sealsName];
 
 /** One manifest with everything that stands beside it in a snapshot. */
 export interface Study {
@@ -52,11 +53,6 @@ async function readStudy(snapshot: Snapshot, path: string): Promise<Study | Unre
     snapshot.entries.has(sealsPath) ? await readText(snapshot, sealsPath) : null,
   );
   return { manifest, records, sealsFile, standings: judgeStandings(records, sealsFile) };
-}
-
-/** Where the seals of a manifest are kept: beside it. */
-export function sealsPathOf(manifest: Manifest): string {
-  return manifest.folder === '' ? sealsName : `${manifest.folder}/${sealsName}`;
 }
 
 async function readText(snapshot: Snapshot, path: string): Promise<string | null> {

@@ -16,6 +16,8 @@ export async function writeFileSafely(path: string, content: string | Uint8Array
     );
     const file = await open(temporary, 'wx', mode);
     try {
+      // The mask of new files does not apply to one that was there.
+      if (mode !== 0o666) await file.chmod(mode);
       await file.writeFile(content);
       await file.sync();
     } finally {

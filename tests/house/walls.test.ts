@@ -13,7 +13,7 @@ const upstream: Readonly<Record<string, readonly string[]>> = {
   facts: ['records', 'manifest', 'repository', 'series', 'hydrology'],
   rules: ['facts', 'records', 'manifest', 'repository', 'series', 'hydrology'],
   verdict: ['rules', 'facts', 'records', 'manifest'],
-  reports: ['verdict', 'rules'],
+  reports: ['verdict', 'rules', 'records'],
   commands: [
     'reports',
     'verdict',

@@ -1,0 +1,122 @@
+import { join } from 'node:path';
+import { evidenceFor } from '../facts/evidence.ts';
+import { Failure } from '../failure.ts';
+import { makeSeals } from '../records/make-seals.ts';
+import { writeSealsFile } from '../records/seals-file.ts';
+import { sealReport } from '../reports/seal.ts';
+import { openSnapshot } from '../repository/open-snapshot.ts';
+import { openRepository, type Repository } from '../repository/repository.ts';
+import type { Snapshot } from '../repository/snapshot.ts';
+import { readAt } from './check.ts';
+import type { Context, ExitStatus } from './command.ts';
+import { healed } from './healed.ts';
+import { choose, pathOf } from './only.ts';
+import { readStudies, type Study, stoplogFiles } from './studies.ts';
+import { writeFileSafely } from './write-file.ts';
+
+export interface SealOptions {
+  readonly all?: boolean;
+  readonly figures?: boolean;
+  readonly because?: string;
+  readonly moved?: boolean;
+  readonly at: string;
+  readonly only?: string;
+}
+
+/** `stoplog seal`: 0 when all that was asked for is sealed, 1 when something was refused. Writes the seals file only, and with `--figures` the manifest. */
+export async function sealCommand(
+  context: Context,
+  names: readonly string[],
+  options: SealOptions,
+): Promise<ExitStatus> {
+  const repository = await openRepository(context.cwd, context.environment);
+  const top = topOf(repository);
+  const person = await repository.identity();
+  const snapshot = await openSnapshot(repository, sealable(options.at), { alsoUntracked: stoplogFiles });
+  try {
+    const read = await readOne(snapshot, names, options.only);
+    const { study, records: healedRecords } = await healed(read, repository, snapshot);
+    if (healedRecords.length === 0 && names.length === 0 && !options.all && !options.moved)
+      throw nothingAsked();
+    const plan = makeSeals({
+      ...study,
+      wanted: options.all ? 'all' : names,
+      because: options.because ?? null,
+      person,
+      today: context.today,
+      evidence: evidenceFor(study.records, study.standings),
+    });
+    const written: string[] = [];
+    if (healedRecords.length + plan.sealed.length + plan.dropped.length > 0) {
+      await writeFileSafely(join(top, study.sealsFile.path), writeSealsFile(plan.seals));
+      written.push(study.sealsFile.path);
+    }
+    const { today } = context;
+    context.write(sealReport({ plan, healed: healedRecords, figures: [], written, person, today }));
+    return plan.refused.length > 0 ? 1 : 0;
+  } finally {
+    await snapshot.close();
+  }
+}
+
+function sealable(at: string) {
+  const chosen = readAt(at);
+  if (chosen.kind !== 'revision') return chosen;
+  throw new Failure(
+    'usage',
+    `\`--at ${at}\` names a commit, and what is committed can’t be sealed any more.`,
+    'Seal the work tree (the default) or `--at index`, and commit the seals.',
+  );
+}
+
+function topOf({ top, gitDirectory }: Repository): string {
+  if (top !== null) return top;
+  throw new Failure(
+    'usage',
+    `${gitDirectory} has no work tree, so there is nowhere to write the seals.`,
+    'Seal in a clone with a work tree.',
+  );
+}
+
+/** The one manifest that is meant. Several need `--only`, unless the names fit one of them alone. */
+async function readOne(
+  snapshot: Snapshot,
+  names: readonly string[],
+  only: string | undefined,
+): Promise<Study> {
+  const all = await readStudies(snapshot);
+  const { studies } = choose(all, only);
+  const fitting = studies.filter(
+    (study) =>
+      'problems' in study ||
+      names.length === 0 ||
+      names.some((name) =>
+        [...study.records.nodes.keys()].some((id) => id === name || id.startsWith(`${name}.`)),
+      ),
+  );
+  const [study] = fitting.length === 1 ? fitting : studies;
+  if (study === undefined || (fitting.length !== 1 && studies.length > 1)) {
+    throw new Failure(
+      'usage',
+      'this repository holds several manifests, and it is not plain whose records are meant.',
+      `Add --only with the folder of one of them: ${studies.map(pathOf).join(', ')}.`,
+    );
+  }
+  if ('problems' in study) {
+    const [first] = study.problems;
+    throw new Failure(
+      'cannot-seal',
+      `${study.path} line ${first?.line}: ${first?.message} So its records can’t be read, and nothing can be sealed.`,
+      '`stoplog check` lists every fault of the manifest.',
+    );
+  }
+  return study;
+}
+
+function nothingAsked(): Failure {
+  return new Failure(
+    'usage',
+    'no record was named to seal.',
+    'Name what you have reviewed, such as `stoplog seal inputs.rainfall`, or `stoplog seal --all`.',
+  );
+}

@@ -1,0 +1,78 @@
+import type { HealedRecord } from '../records/heal.ts';
+import type { Sealed, SealPlan } from '../records/make-seals.ts';
+import { plain } from './escape.ts';
+import { count } from './text.ts';
+import { wrap } from './wrap.ts';
+
+export interface WrittenFigure {
+  readonly field: string;
+  readonly before: string;
+  readonly after: string;
+}
+
+export interface SealOutcome {
+  readonly plan: SealPlan;
+  readonly healed: readonly HealedRecord[];
+  readonly figures: readonly WrittenFigure[];
+  /** Paths that were written, from the top of the repository. */
+  readonly written: readonly string[];
+  readonly person: string;
+  readonly today: string;
+}
+
+const width = 100;
+const indent = ' '.repeat(5);
+
+/** What a `seal` did, what it refused and why, and what to stage. */
+export function sealReport(outcome: SealOutcome): string {
+  const { plan, healed, figures, written, person, today } = outcome;
+  const lines = [
+    ...titled('HEALED after a merge', healed.map(healedLine)),
+    ...titled(
+      'FIGURES written into the manifest',
+      figures.map(({ field, before, after }) => `${field}   ${before} -> ${after}`),
+    ),
+    ...titled(`SEALED by ${person} on ${today}`, plan.sealed.flatMap(sealedLines)),
+    ...titled(
+      'DROPPED, since their records are gone',
+      plan.dropped.map((record) => record),
+    ),
+    ...titled(
+      'NOT SEALED',
+      plan.refused.flatMap(({ record, message, next }) => [
+        record,
+        ...wrap(message, width - indent.length).map((line) => `   ${line}`),
+        ...wrap(next, width - indent.length).map((line) => `   ${line}`),
+      ]),
+    ),
+  ];
+  if (lines.length === 0) return 'Every record that was asked for is sealed already, and unchanged.\n';
+  if (written.length > 0) lines.push('', `To stage   git add ${written.map(quoted).join(' ')}`);
+  return `${lines.slice(lines[0] === '' ? 1 : 0).join('\n')}\n`;
+}
+
+function titled(title: string, items: readonly string[]): readonly string[] {
+  return items.length === 0 ? [] : ['', plain(title), ...items.map((item) => `  ${plain(item)}`)];
+}
+
+function sealedLines({ record, seal, before, along, unverified }: Sealed): readonly string[] {
+  const how = before === null ? 'first seal' : before.digest === seal.digest ? 'sealed again' : 'was stale';
+  return [
+    `${record}   ${how}${along ? ', since what was asked for rests on it' : ''}`,
+    ...(seal.because === null ? [] : [`   though it did not change: ${seal.because}`]),
+    ...(unverified.length === 0
+      ? []
+      : [`   ${count(unverified.length, 'file')} could not be verified: ${unverified.join(', ')}`]),
+  ];
+}
+
+function healedLine({ record, kept, fits, rerunDropped }: HealedRecord): string {
+  const side = { ours: 'this branch’s', theirs: 'the other branch’s', base: 'the older', both: 'the' }[kept];
+  const state = fits ? 'fits what is merged' : 'does not fit what is merged, so the record is stale';
+  return `${record}   ${side} seal is kept: it ${state}${rerunDropped ? '; it no longer proves a rerun' : ''}`;
+}
+
+/** A path as a shell takes it. */
+function quoted(path: string): string {
+  return /^[\w./-]+$/.test(path) ? path : `'${path.replaceAll("'", "'\\''")}'`;
+}
