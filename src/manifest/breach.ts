@@ -24,15 +24,14 @@ export function faultOf(breach: Breach, locate: Locate): Fault {
 }
 
 function missingKey({ field, error }: Breach, locate: Locate): Fault {
-  const expected = error.parentSchema?.['x-expects'] ?? `\`${error.params.missingProperty}\``;
+  const { parentSchema = {}, params } = error;
+  const key = String(params.missingProperty);
+  const lacking: string = parentSchema['x-expects'] ?? `\`${key}\``;
+  const wanted: string | undefined = parentSchema.properties?.[key]?.['x-expects'];
+  const expected = wanted === undefined ? lacking : `${lacking}: ${wanted}`;
   const where = field.length === 0 ? 'The manifest' : `\`${fieldName(field)}\``;
-  return {
-    offset: keyOffset(field, locate),
-    field,
-    message: `${where} lacks ${expected}.`,
-    expected,
-    found: 'nothing',
-  };
+  const message = `${where} lacks ${lacking}${wanted === undefined ? '' : `; expected ${wanted}`}.`;
+  return { offset: keyOffset(field, locate), field, message, expected, found: 'nothing' };
 }
 
 function illNamed({ field, error }: Breach, locate: Locate): Fault {

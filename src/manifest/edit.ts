@@ -33,27 +33,27 @@ export function replaceScalars(manifest: Manifest, edits: readonly ScalarEdit[])
   // Aliases are not followed: what changed behind one would change elsewhere too.
   const locate = locator(root, new Map());
   const splices: Splice[] = [];
-  const missing = new Map<YAMLMap | Scalar, Missing>();
+  const missing = new Map<YAMLMap, Missing>();
 
   for (const { field, value } of edits) {
-    const { key, value: node, depth } = locate(field);
+    const { value: node, depth } = locate(field);
     const below = field.slice(depth).map(String);
-    const empty = isScalar(node) && node.value === null;
-    if (below.length === 0 && isScalar(node)) splices.push(replaced(text, node, scalarText(value, node)));
-    else if (below.length === 0 && node === null && key !== null)
-      splices.push(afterKey(key, scalarText(value)));
-    else if (below.length > 0 && (isMap(node) || empty)) add(missing, node, below, value);
+    if (below.length === 0 && isScalar(node)) splices.push(replaced(text, node, value));
+    else if (below.length > 0 && isMap(node)) add(missing, node, below, value);
     else throw cannotWrite(manifest, field);
   }
-  for (const [node, keys] of missing) {
-    splices.push(isMap(node) ? inserted(text, node, keys) : replaced(text, node, flowMap(keys)));
-  }
+  for (const [map, keys] of missing) splices.push(inserted(text, map, keys));
   return spliced(text, splices);
 }
 
-function add<N>(missing: Map<N, Missing>, node: N, below: readonly string[], value: ScalarValue): void {
-  let keys = missing.get(node) ?? new Map();
-  missing.set(node, keys);
+function add(
+  missing: Map<YAMLMap, Missing>,
+  map: YAMLMap,
+  below: readonly string[],
+  value: ScalarValue,
+): void {
+  let keys = missing.get(map) ?? new Map();
+  missing.set(map, keys);
   for (const key of below.slice(0, -1)) {
     const deeper: Missing = keys.get(key) ?? new Map();
     keys.set(key, deeper);
@@ -62,18 +62,11 @@ function add<N>(missing: Map<N, Missing>, node: N, below: readonly string[], val
   keys.set(below.at(-1) ?? '', value);
 }
 
-function replaced(text: string, node: Scalar, written: string): Splice {
-  const [start = 0, end = 0] = node.range ?? [];
-  const before = start === end && text[start - 1] === ':' ? ' ' : '';
+function replaced(text: string, scalar: Scalar, value: ScalarValue): Splice {
+  const [start = 0, end = 0] = scalar.range ?? [];
   // A block text (`|`) ends with its line end, which the next key needs.
   const after = /\r?\n$/.exec(text.slice(start, end))?.[0] ?? '';
-  return { start, end, text: before + written + after };
-}
-
-/** For a key of a flow map that has neither colon nor value. */
-function afterKey(key: Node, written: string): Splice {
-  const end = key.range?.[1] ?? 0;
-  return { start: end, end, text: `: ${written}` };
+  return { start, end, text: scalarText(value, scalar) + after };
 }
 
 /** Keys put after the last one of a map, in the way the map is written. */

@@ -28,6 +28,11 @@ export function shown(value: unknown): string {
 }
 
 export function quoted(text: string): string {
+  return `"${shortened(text)}"`;
+}
+
+/** A text on one line, cut where it is long. */
+export function shortened(text: string): string {
   const line = text.replace(/\s+/g, ' ');
-  return `"${line.length > 60 ? `${line.slice(0, 57)}...` : line}"`;
+  return line.length > 60 ? `${line.slice(0, 57)}...` : line;
 }

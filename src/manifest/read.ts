@@ -1,7 +1,7 @@
 import { isScalar } from 'yaml';
 import type { ManifestData } from './data.generated.ts';
 import { folderOf } from './discover.ts';
-import { toProblem } from './fault.ts';
+import { type Fault, toProblem } from './fault.ts';
 import { locator } from './locate.ts';
 import type { Manifest, Problem, ReadManifest } from './manifest.ts';
 import { schemaFaults } from './schema-faults.ts';
@@ -17,14 +17,14 @@ export function readManifest(path: string, text: string): ReadManifest {
   if (root === null)
     return { manifest: null, problems: sorted(faults.map((fault) => toProblem(fault, lines))) };
 
-  const { data, faults: dataFaults, targets } = toData(root);
+  const { data, faults: dataFaults, targets } = toData(root, lines);
   const locate = locator(root, targets);
-  const grounds = [...faults, ...dataFaults].map((fault) => toProblem(fault, lines));
-  // A line that YAML misread says nothing about the schema.
-  const misread = new Set(grounds.map(({ line }) => line));
-  const against = schemaFaults(data, locate)
-    .map((fault) => toProblem(fault, lines))
-    .filter(({ line }) => !misread.has(line));
+  const located = (some: readonly Fault[]) => some.map((fault) => toProblem(fault, lines));
+  const syntax = located(faults);
+  const grounds = [...syntax, ...located(dataFaults)];
+  // What YAML misread, and what it cut off on the line before, says nothing about the schema.
+  const misread = new Set([...grounds.map(({ line }) => line), ...syntax.map(({ line }) => line - 1)]);
+  const against = located(schemaFaults(data, locate)).filter(({ line }) => !misread.has(line));
   const problems = [...grounds, ...against];
   if (problems.length > 0) return { manifest: null, problems: sorted(problems) };
 

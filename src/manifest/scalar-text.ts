@@ -1,4 +1,4 @@
-import { parseDocument, type Scalar } from 'yaml';
+import { isScalar, isSeq, parseDocument, type Scalar } from 'yaml';
 
 export type ScalarValue = string | number | boolean;
 
@@ -25,6 +25,9 @@ function numberText(value: number, before = ''): string {
 
 /** Whether a text means itself without quotes, inside brackets too. */
 function isPlain(text: string): boolean {
-  const document = parseDocument(`[${text}]`, { schema: 'core' });
-  return document.errors.length === 0 && JSON.stringify(document.toJS()) === JSON.stringify([text]);
+  const { errors, contents } = parseDocument(`[${text}]`, { schema: 'core' });
+  const [item, ...more] = isSeq(contents) ? contents.items : [];
+  return (
+    errors.length === 0 && more.length === 0 && isScalar(item) && item.type === 'PLAIN' && item.value === text
+  );
 }

@@ -1,4 +1,14 @@
-import { type Alias, isAlias, isMap, isScalar, type Node, type Pair, type YAMLMap, type YAMLSeq } from 'yaml';
+import {
+  type Alias,
+  isAlias,
+  isMap,
+  isScalar,
+  type LineCounter,
+  type Node,
+  type Pair,
+  type YAMLMap,
+  type YAMLSeq,
+} from 'yaml';
 import { type Fault, quoted } from './fault.ts';
 import type { FieldPath } from './manifest.ts';
 
@@ -16,7 +26,7 @@ export interface Data {
 export type AliasTargets = ReadonlyMap<Alias, Node>;
 
 /** The plain data of a tree. Of keys that stand twice the first counts; what can't be followed is null. */
-export function toData(root: YAMLMap): Data {
+export function toData(root: YAMLMap, lines: LineCounter): Data {
   const faults: Fault[] = [];
   const anchors = new Map<string, Node>();
   const targets = new Map<Alias, Node>();
@@ -55,7 +65,7 @@ export function toData(root: YAMLMap): Data {
         fault(
           keyNode,
           field,
-          'A key is empty, or is itself a list or a map.',
+          'A key is empty, or is itself a list or a map; a key is a plain text.',
           'a key that is a plain text',
           'none',
         );
@@ -67,7 +77,8 @@ export function toData(root: YAMLMap): Data {
         first.set(key, keyNode);
         data[key] = convert(value, here, inAlias);
       } else if (!inAlias) {
-        const message = `\`${key}\` stands twice in one map; merge the two, or rename one.`;
+        const { line } = lines.linePos(before.range?.[0] ?? 0);
+        const message = `\`${key}\` stands twice in one map, first in line ${line}; merge the two, or rename one.`;
         fault(keyNode, here, message, 'each key once', `a second \`${key}\``);
       }
     }
@@ -91,7 +102,7 @@ export function toData(root: YAMLMap): Data {
       );
     }
     if (open.has(target)) {
-      const message = `\`*${alias.source}\` repeats the very part that it stands in.`;
+      const message = `\`*${alias.source}\` repeats the very part that it stands in; write that value out.`;
       return fault(alias, field, message, 'an alias outside what it repeats', `*${alias.source}`);
     }
     targets.set(alias, target);

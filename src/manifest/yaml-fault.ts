@@ -1,8 +1,13 @@
-import type { YAMLError } from 'yaml';
-import { type Fault, quoted } from './fault.ts';
+import { type Document, visit, type YAMLError } from 'yaml';
+import { type Fault, shortened } from './fault.ts';
+
+interface Words {
+  readonly message: string;
+  readonly expected: string;
+}
 
 /** What a fault of YAML's syntax usually comes from, in plain words; for the rest the parser's own words serve. */
-const words: Partial<Record<YAMLError['code'], { message: string; expected: string }>> = {
+const words: Partial<Record<YAMLError['code'], Words>> = {
   BAD_INDENT: {
     message:
       'This line is not indented like the keys that it belongs to, or a bracket above it is not closed',
@@ -28,10 +33,21 @@ const words: Partial<Record<YAMLError['code'], { message: string; expected: stri
   },
 };
 
-export function yamlFault(error: YAMLError, text: string): Fault {
-  const [offset] = error.pos;
-  const known = words[error.code];
-  const found = quoted(text.slice(offset).split(/\r?\n/, 1)[0] ?? '');
+const openQuote: Words = { message: 'This quote is not closed', expected: 'a quote at the end of the text' };
+
+/** The faults of a document's syntax. Those at the very end of the text only follow from one before, if there is one. */
+export function yamlFaults(document: Document.Parsed, text: string): Fault[] {
+  const faults = document.errors.map((error) => yamlFault(error, document, text));
+  const end = text.trimEnd().length;
+  const before = faults.filter(({ offset }) => offset < end);
+  return before.length > 0 ? before : faults;
+}
+
+function yamlFault(error: YAMLError, document: Document.Parsed, text: string): Fault {
+  const unclosed = error.message.includes('closing') ? quoteEndingAt(error.pos[0], document) : undefined;
+  const offset = unclosed ?? error.pos[0];
+  const known = unclosed === undefined ? words[error.code] : openQuote;
+  const found = `\`${shortened(text.slice(offset).split(/\r?\n/, 1)[0]?.trim() ?? '')}\``;
   return {
     offset,
     field: [],
@@ -39,4 +55,15 @@ export function yamlFault(error: YAMLError, text: string): Fault {
     expected: known?.expected ?? 'text that follows the rules of YAML 1.2',
     found,
   };
+}
+
+/** Where the quoted text begins that runs on to a place. */
+function quoteEndingAt(end: number, document: Document.Parsed): number | undefined {
+  let start: number | undefined;
+  visit(document, {
+    Scalar(_, { range, type }) {
+      if (range?.[1] === end && type?.startsWith('QUOTE')) start = range[0];
+    },
+  });
+  return start;
 }

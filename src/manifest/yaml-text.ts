@@ -1,6 +1,6 @@
 import { Composer, type CST, type Document, isMap, Lexer, LineCounter, Parser, type YAMLMap } from 'yaml';
 import type { Fault } from './fault.ts';
-import { yamlFault } from './yaml-fault.ts';
+import { yamlFaults } from './yaml-fault.ts';
 
 // Far above what people write, and far below what does harm.
 const longestText = 4 * 1024 * 1024;
@@ -27,7 +27,7 @@ export function parseYaml(text: string): YamlText {
   // Duplicate keys are found where the tree is turned into data: both places are known there.
   const composer = new Composer({ schema: 'core', uniqueKeys: false, prettyErrors: false });
   const [document, second] = [...composer.compose(tokens, true, text.length)];
-  const faults = (document?.errors ?? []).map((error) => yamlFault(error, text));
+  const faults = document === undefined ? [] : yamlFaults(document, text);
   if (second !== undefined) faults.push(secondDocument(second));
   const root = isMap(document?.contents) ? document.contents : null;
   if (root === null) faults.push(noMap(document));
