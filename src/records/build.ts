@@ -1,5 +1,4 @@
 import type { Manifest } from '../manifest/manifest.ts';
-import { splitFragment } from '../manifest/substance.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { sha256OfJson } from './canonical.ts';
 import { claimFiles } from './claims.ts';
@@ -9,10 +8,11 @@ import { linkRecords, type Unlinked } from './link.ts';
 import { seenFiles, unknownMentions } from './mentioned.ts';
 import { filesNamedBy } from './named-files.ts';
 import { nearestKnown } from './names.ts';
+import { partsOf } from './parts.ts';
 import type { RecordNode, Records, UnknownName } from './record.ts';
 import { schemes as known, newest, type Schemes } from './schemes.ts';
 import { isStoplogFile } from './seals-path.ts';
-import { type Statement, statementsOf } from './statements.ts';
+import { statementsOf } from './statements.ts';
 
 /** All records of a manifest, met with the files of a snapshot and digested by the newest scheme. */
 export async function buildRecords(
@@ -72,12 +72,4 @@ export async function buildRecords(
     }),
     unaccounted: covered.paths.filter((path) => !claimed.named.has(path)),
   };
-}
-
-/** What a record states, with what stands beside its fragment in the manifest and belongs to it. */
-function partsOf({ area, field, fragment }: Statement, { data }: Manifest) {
-  const parts = splitFragment(field, fragment);
-  const beside =
-    area === 'scenarios' ? data.scenarios?.conditions : area === 'interventions' ? data.seasons : undefined;
-  return beside === undefined ? parts : { ...parts, substance: [parts.substance, beside] };
 }

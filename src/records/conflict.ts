@@ -1,8 +1,8 @@
-/** The versions of a text that conflict markers hold. `base` is null where they do not show it. */
+/** The versions of a text that meet in a merge; null where there is none, or where markers do not show it. */
 export interface Versions {
   readonly base: string | null;
-  readonly ours: string;
-  readonly theirs: string;
+  readonly ours: string | null;
+  readonly theirs: string | null;
 }
 
 /** The line of the first conflict marker, from 1; null where there is none. */

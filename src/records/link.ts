@@ -6,7 +6,7 @@ import { digestOf } from './digest.ts';
 import { holderOf, keysBelow, representedSettings, settingsAddress, valueAt } from './field.ts';
 import { type Reference, resolveName } from './names.ts';
 import { fromFolder } from './paths.ts';
-import type { Claim, RecordNode } from './record.ts';
+import { type Claim, type RecordNode, sha256Of } from './record.ts';
 import type { Scheme } from './schemes.ts';
 import type { Statement } from './statements.ts';
 
@@ -15,6 +15,8 @@ export type Unlinked = Omit<RecordNode, 'restsOn' | 'digest'>;
 
 /** What rests on what, and every digest, as one scheme has it. */
 export interface Linked {
+  /** The scheme's number. */
+  readonly scheme: number;
   /** Record ids; what others rest on comes first. */
   readonly order: readonly string[];
   readonly circle: readonly string[] | null;
@@ -58,7 +60,7 @@ export function linkRecords(
     const files = sha256ByPath(record.claims, manifest.folder);
     digests.set(id, digestOf({ scheme: scheme.number, substance: record.substance, files, rests_on }));
   }
-  return { order, circle, restsOn, digests, unresolved };
+  return { scheme: scheme.number, order, circle, restsOn, digests, unresolved };
 }
 
 /** Path from the manifest's folder -> SHA-256, null where the content could not be verified. */
@@ -67,10 +69,7 @@ export function sha256ByPath(
   folder: string,
 ): Record<string, string | null> {
   return Object.fromEntries(
-    [...claims.values()].map(({ path, identity }) => [
-      fromFolder(folder, path),
-      identity.kind === 'unavailable' ? null : identity.sha256,
-    ]),
+    [...claims.values()].map(({ path, identity }) => [fromFolder(folder, path), sha256Of(identity)]),
   );
 }
 
@@ -83,9 +82,7 @@ function digestOfField(address: string, records: ReadonlyMap<string, Unlinked>):
     const claims = [...holder.claims.values()].filter(
       ({ field: [, place, key] }) => key === 'settings' && typeof place === 'number' && places.has(place),
     );
-    return sha256OfJson(
-      claims.map(({ identity }) => (identity.kind === 'unavailable' ? null : identity.sha256)),
-    );
+    return sha256OfJson(claims.map(({ identity }) => sha256Of(identity)));
   }
   const { substance } = splitFragment(holder.field, holder.fragment);
   return sha256OfJson(valueAt(substance, keysBelow(holder.id, address)) ?? null);

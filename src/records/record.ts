@@ -57,6 +57,11 @@ export interface Claim {
   readonly identity: FileIdentity;
 }
 
+/** The digest of a file's content; null where it could not be verified. */
+export function sha256Of(identity: FileIdentity): string | null {
+  return identity.kind === 'unavailable' ? null : identity.sha256;
+}
+
 /** A file kept outside git, with what the manifest says of it. */
 export interface Elsewhere {
   readonly path: string;

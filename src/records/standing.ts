@@ -1,6 +1,6 @@
 import { type Linked, linkRecords } from './link.ts';
 import { fromFolder, fromTop } from './paths.ts';
-import type { RecordNode, Records } from './record.ts';
+import { type RecordNode, type Records, sha256Of } from './record.ts';
 import { schemes as known, newest, type Schemes } from './schemes.ts';
 import type { Change, Seal, SealsFile, Standing } from './seal.ts';
 import { findTrails } from './trails.ts';
@@ -64,8 +64,7 @@ function changesSince(seal: Seal, record: RecordNode, linked: Linked, folder: st
   for (const path of [...new Set([...sealedPaths, ...record.claims.keys()])].sort()) {
     const was = seal.files[fromFolder(folder, path)] ?? null;
     const now = record.claims.get(path)?.identity ?? null;
-    const sha256Now = now === null || now.kind === 'unavailable' ? null : now.sha256;
-    if (was === null || now === null || was.sha256 !== sha256Now)
+    if (was === null || now === null || was.sha256 !== sha256Of(now))
       changes.push({ kind: 'file', path, was, now });
   }
   const below = linked.restsOn.get(record.id) ?? [];

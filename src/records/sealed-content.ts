@@ -1,0 +1,40 @@
+import type { FileIdentity } from '../repository/snapshot.ts';
+import { digestOf } from './digest.ts';
+import { type Linked, sha256ByPath } from './link.ts';
+import { outcomeOf } from './outcome.ts';
+import { fromFolder } from './paths.ts';
+import type { RecordNode } from './record.ts';
+import type { Seal, SealedFile } from './seal.ts';
+
+/** What a seal keeps of a record's content: all but who looked at it, when, and how far it was proven. */
+export type SealedContent = Pick<
+  Seal,
+  'scheme' | 'substance' | 'wording' | 'accepts' | 'files' | 'rests_on' | 'digest' | 'outcome'
+>;
+
+/** The content of a record now, as a seal keeps it; `linked` is by the scheme of the seal. */
+export function sealedContent(record: RecordNode, linked: Linked, folder: string): SealedContent {
+  const { substance, wording, accepts, claims } = record;
+  const { scheme } = linked;
+  const below = linked.restsOn.get(record.id) ?? [];
+  const rests_on = Object.fromEntries(below.map((id) => [id, linked.digests.get(id) ?? '']));
+  const files = [...claims.values()].map(
+    ({ path, identity }) => [fromFolder(folder, path), sealedFile(identity)] as const,
+  );
+  return {
+    scheme,
+    substance,
+    wording,
+    accepts,
+    files: Object.fromEntries(files),
+    rests_on,
+    digest: digestOf({ scheme, substance, files: sha256ByPath(claims, folder), rests_on }),
+    outcome: outcomeOf(record),
+  };
+}
+
+function sealedFile(identity: FileIdentity): SealedFile {
+  return identity.kind === 'unavailable'
+    ? { sha256: null, bytes: null, blob: identity.blob }
+    : { sha256: identity.sha256, bytes: identity.bytes, blob: identity.blob };
+}
