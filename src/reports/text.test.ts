@@ -63,7 +63,6 @@ BLOCKED   1 record
   inputs.rainfall   stale                                                            stoplog.yaml:41
      data/rain/upper.csv is not the file that was sealed on 2026-03-02.
      14 of 5 113 values differ; total 11 402 -> 11 655 mm (+2.2 %)
-     rests on data/rain/upper.csv
      to clear   Check the new data, then: stoplog seal inputs.rainfall
                 (seal.stale)
 

@@ -61,8 +61,11 @@ describe('the walls between rooms', () => {
     );
   });
 
-  it.each(sources.filter((path) => room(path) !== 'build'))('%s imports with the flow', (path) => {
-    expect(againstTheFlow(path, importsOf(path))).toEqual([]);
+  it('lets no file import against the flow', () => {
+    const offending = sources
+      .filter((path) => room(path) !== 'build')
+      .flatMap((path) => againstTheFlow(path, importsOf(path)).map((target) => `${path} imports ${target}`));
+    expect(offending).toEqual([]);
   });
 
   it('would notice an import against the flow', () => {
@@ -76,7 +79,9 @@ describe('the walls between rooms', () => {
       (path) =>
         room(path) !== 'build' &&
         path !== 'src/main.ts' &&
-        /\bprocess\.(?!platform|arch)|\bDate\.now\(|new Date\(\)/.test(readFileSync(path, 'utf8')),
+        /\bprocess\.(?:env|argv|cwd|exit|exitCode|std\w+|on)\b|\bDate\.now\(|new Date\(\)/.test(
+          readFileSync(path, 'utf8'),
+        ),
     );
     expect(touching).toEqual([]);
   });
