@@ -9,7 +9,7 @@ import { openRepository, type Repository } from '../repository/repository.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { readAt } from './check.ts';
 import type { Context, ExitStatus } from './command.ts';
-import { healed } from './healed.ts';
+import { mended } from './mended.ts';
 import { choose, pathOf } from './only.ts';
 import { readStudies, type Study, stoplogFiles } from './studies.ts';
 import { writeFileSafely } from './write-file.ts';
@@ -35,9 +35,8 @@ export async function sealCommand(
   const snapshot = await openSnapshot(repository, sealable(options.at), { alsoUntracked: stoplogFiles });
   try {
     const read = await readOne(snapshot, names, options.only);
-    const { study, records: healedRecords } = await healed(read, repository, snapshot);
-    if (healedRecords.length === 0 && names.length === 0 && !options.all && !options.moved)
-      throw nothingAsked();
+    const { study, healed, moved } = await mended(read, options.moved ?? false, repository, snapshot);
+    if (healed.length === 0 && names.length === 0 && !options.all && !options.moved) throw nothingAsked();
     const plan = makeSeals({
       ...study,
       wanted: options.all ? 'all' : names,
@@ -46,17 +45,23 @@ export async function sealCommand(
       today: context.today,
       evidence: evidenceFor(study.records, study.standings),
     });
+    const text = writeSealsFile(plan.seals);
     const written: string[] = [];
-    if (healedRecords.length + plan.sealed.length + plan.dropped.length > 0) {
-      await writeFileSafely(join(top, study.sealsFile.path), writeSealsFile(plan.seals));
+    if (text !== (await textOf(snapshot, study.sealsFile.path))) {
+      await writeFileSafely(join(top, study.sealsFile.path), text);
       written.push(study.sealsFile.path);
     }
     const { today } = context;
-    context.write(sealReport({ plan, healed: healedRecords, figures: [], written, person, today }));
+    context.write(sealReport({ plan, healed, moved, figures: [], written, person, today }));
     return plan.refused.length > 0 ? 1 : 0;
   } finally {
     await snapshot.close();
   }
+}
+
+async function textOf(snapshot: Snapshot, path: string): Promise<string> {
+  const bytes = snapshot.entries.has(path) ? await snapshot.read(path) : null;
+  return bytes === null ? '' : new TextDecoder().decode(bytes);
 }
 
 function sealable(at: string) {

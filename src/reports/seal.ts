@@ -1,3 +1,4 @@
+import type { FollowedMoves } from '../records/follow-moves.ts';
 import type { HealedRecord } from '../records/heal.ts';
 import type { Sealed, SealPlan } from '../records/make-seals.ts';
 import { plain } from './escape.ts';
@@ -13,6 +14,7 @@ export interface WrittenFigure {
 export interface SealOutcome {
   readonly plan: SealPlan;
   readonly healed: readonly HealedRecord[];
+  readonly moved: FollowedMoves;
   readonly figures: readonly WrittenFigure[];
   /** Paths that were written, from the top of the repository. */
   readonly written: readonly string[];
@@ -25,9 +27,17 @@ const indent = ' '.repeat(5);
 
 /** What a `seal` did, what it refused and why, and what to stage. */
 export function sealReport(outcome: SealOutcome): string {
-  const { plan, healed, figures, written, person, today } = outcome;
+  const { plan, healed, moved, figures, written, person, today } = outcome;
   const lines = [
     ...titled('HEALED after a merge', healed.map(healedLine)),
+    ...titled('MOVED, with who sealed it and when', [
+      ...moved.records.map(({ from, to }) => `${from} is now ${to}`),
+      ...moved.files.map(({ record, from, to }) => `${record}   ${from} -> ${to}`),
+    ]),
+    ...titled(
+      'NOT MOVED, since nobody can tell which is which',
+      moved.ambiguous.map(({ record, from, to }) => `${record}   ${from.join(', ')} -> ${to.join(', ')}`),
+    ),
     ...titled(
       'FIGURES written into the manifest',
       figures.map(({ field, before, after }) => `${field}   ${before} -> ${after}`),
@@ -46,7 +56,7 @@ export function sealReport(outcome: SealOutcome): string {
       ]),
     ),
   ];
-  if (lines.length === 0) return 'Every record that was asked for is sealed already, and unchanged.\n';
+  if (lines.length === 0) return 'Nothing to do: what was asked for is sealed, and unchanged since.\n';
   if (written.length > 0) lines.push('', `To stage   git add ${written.map(quoted).join(' ')}`);
   return `${lines.slice(lines[0] === '' ? 1 : 0).join('\n')}\n`;
 }
