@@ -1,31 +1,12 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { isDefined, type Paired } from '../../src/hydrology/paired.ts';
-import { parseDate, parseWindow, type Window } from '../../src/series/calendar.ts';
+import { parseDate } from '../../src/series/calendar.ts';
 import { type Pairing, pairByDate } from '../../src/series/pair.ts';
-import { columnOf, type Series } from '../../src/series/series.ts';
-import { daily, irregular, monthly, parseStep, type Step, yearly } from '../../src/series/step.ts';
+import { columnOf } from '../../src/series/series.ts';
+import { daily, irregular, monthly, parseStep, yearly } from '../../src/series/step.ts';
+import { seriesOf, windowOf } from './made.ts';
 import { read } from './told.ts';
-
-const window = (text: string): Window => {
-  const parsed = parseWindow(text);
-  if (parsed === null) throw new Error(text);
-  return parsed;
-};
-
-/** A series of values at ISO dates, or dates and hours; null where missing. */
-function series(step: Step, values: Readonly<Record<string, number | null>>): Series {
-  const times = Object.keys(values).map((text) => {
-    const [date = '', hour = '0'] = text.split('T');
-    return (parseDate(date) ?? Number.NaN) * 86_400 + Number.parseInt(hour, 10) * 3600;
-  });
-  return {
-    unit: 'mm',
-    step,
-    timeSeconds: Float64Array.from(times),
-    values: Float64Array.from(Object.values(values), (value) => value ?? Number.NaN),
-  };
-}
 
 function paired(pairing: Pairing): Paired {
   const result = pairByDate(pairing);
@@ -44,7 +25,7 @@ const firstDay = parseDate('2010-01-01') ?? 0;
 
 describe('pairing', () => {
   it('takes both ends of the window, drops gaps and counts them', () => {
-    const observed = series(daily, {
+    const observed = seriesOf(daily, {
       '2009-12-31': 9,
       '2010-01-01': 1,
       '2010-01-02': null,
@@ -52,14 +33,14 @@ describe('pairing', () => {
       '2010-01-04': null,
       '2010-01-06': 6,
     });
-    const simulated = series(daily, {
+    const simulated = seriesOf(daily, {
       '2010-01-01': 10,
       '2010-01-02': 20,
       '2010-01-04': 40,
       '2010-01-06': 60,
       '2010-01-07': 70,
     });
-    const result = paired({ observed, simulated, windows: [window('2010-01-01/2010-01-06')] });
+    const result = paired({ observed, simulated, windows: [windowOf('2010-01-01/2010-01-06')] });
     expect(plainly(result)).toEqual({
       observed: [1, 6],
       simulated: [10, 60],
@@ -71,8 +52,8 @@ describe('pairing', () => {
   });
 
   it('counts the steps of a window that the files do not reach', () => {
-    const observed = series(daily, { '2010-01-01': 1 });
-    const result = paired({ observed, simulated: observed, windows: [window('2009-10-01/2010-09-30')] });
+    const observed = seriesOf(daily, { '2010-01-01': 1 });
+    const result = paired({ observed, simulated: observed, windows: [windowOf('2009-10-01/2010-09-30')] });
     expect(result.windowSteps).toBe(365);
     expect(result.dropped.missingBoth).toBe(364);
   });
@@ -81,12 +62,12 @@ describe('pairing', () => {
     const days = Object.fromEntries(
       ['01', '02', '03', '04', '05', '06'].map((day) => [`2010-01-${day}`, Number(day)]),
     );
-    const both = series(daily, days);
+    const both = seriesOf(daily, days);
     const result = paired({
       observed: both,
       simulated: both,
-      windows: [window('2010-01-05/2010-01-06'), window('2010-01-01/2010-01-05')],
-      leftOut: [window('2009-01-01/2010-01-02'), window('2010-01-04/2010-01-04')],
+      windows: [windowOf('2010-01-05/2010-01-06'), windowOf('2010-01-01/2010-01-05')],
+      leftOut: [windowOf('2009-01-01/2010-01-02'), windowOf('2010-01-04/2010-01-04')],
     });
     expect(plainly(result)).toMatchObject({
       observed: [3, 5, 6],
@@ -109,7 +90,7 @@ describe('pairing', () => {
     const result = paired({
       observed: columnOf(observed),
       simulated: columnOf(simulated),
-      windows: [window('2010-01-01/2010-01-02')],
+      windows: [windowOf('2010-01-01/2010-01-02')],
     });
     expect(plainly(result)).toMatchObject({ observed: [1, 2], simulated: [10, 20] });
   });
@@ -121,17 +102,21 @@ describe('pairing', () => {
     const result = paired({
       observed: columnOf(twice),
       simulated: columnOf(once),
-      windows: [window('2010-01-01/2010-01-02')],
+      windows: [windowOf('2010-01-01/2010-01-02')],
     });
     expect(plainly(result)).toMatchObject({ observed: [1], dropped: { missingObserved: 1 }, windowSteps: 2 });
   });
 
   it('counts hours by their time, the last hour of the last day included', () => {
-    const hours = series(
+    const hours = seriesOf(
       { kind: 'seconds', length: 3600 },
       { '2010-01-01T22': 22, '2010-01-01T23': 23, '2010-01-02T0': 0 },
     );
-    const result = paired({ observed: hours, simulated: hours, windows: [window('2010-01-01/2010-01-01')] });
+    const result = paired({
+      observed: hours,
+      simulated: hours,
+      windows: [windowOf('2010-01-01/2010-01-01')],
+    });
     expect(plainly(result)).toMatchObject({
       observed: [22, 23],
       times: [firstDay + 22 / 24, firstDay + 23 / 24],
@@ -141,11 +126,11 @@ describe('pairing', () => {
   });
 
   it('takes months that lie wholly in the window', () => {
-    const months = series(monthly, { '2010-01-01': 1, '2010-02-01': 2, '2010-03-01': 3 });
+    const months = seriesOf(monthly, { '2010-01-01': 1, '2010-02-01': 2, '2010-03-01': 3 });
     const result = paired({
       observed: months,
       simulated: months,
-      windows: [window('2010-01-02/2010-03-31')],
+      windows: [windowOf('2010-01-02/2010-03-31')],
     });
     expect(plainly(result)).toMatchObject({
       observed: [2, 3],
@@ -155,9 +140,9 @@ describe('pairing', () => {
   });
 
   it('takes years as they begin', () => {
-    const years = series(yearly, { '2012-01-01': 12, '2013-01-01': 13, '2014-01-01': 14 });
+    const years = seriesOf(yearly, { '2012-01-01': 12, '2013-01-01': 13, '2014-01-01': 14 });
     const both = { observed: years, simulated: years };
-    const windows = [window('2012-10-01/2014-09-30')];
+    const windows = [windowOf('2012-10-01/2014-09-30')];
     const yearBegins = { month: 10, day: 1 };
     expect(plainly(paired({ ...both, windows, yearBegins }))).toMatchObject({
       observed: [13, 14],
@@ -167,7 +152,7 @@ describe('pairing', () => {
   });
 
   it('pairs samples with the day that holds them', () => {
-    const samples = series(irregular, {
+    const samples = seriesOf(irregular, {
       '2010-01-02T10': 2,
       '2010-01-03T08': 3,
       '2010-01-03T16': 4,
@@ -179,8 +164,8 @@ describe('pairing', () => {
     );
     const result = paired({
       observed: samples,
-      simulated: series(daily, days),
-      windows: [window('2010-01-01/2010-01-10')],
+      simulated: seriesOf(daily, days),
+      windows: [windowOf('2010-01-01/2010-01-10')],
     });
     expect(plainly(result)).toEqual({
       observed: [2],
@@ -193,15 +178,15 @@ describe('pairing', () => {
   });
 
   it('says why different steps are not paired', () => {
-    const windows = [window('2010-01-01/2010-01-10')];
+    const windows = [windowOf('2010-01-01/2010-01-10')];
     const hourly = parseStep('PT1H') ?? irregular;
-    expect(pairByDate({ observed: series(daily, {}), simulated: series(hourly, {}), windows })).toEqual({
+    expect(pairByDate({ observed: seriesOf(daily, {}), simulated: seriesOf(hourly, {}), windows })).toEqual({
       undefined: 'the observed series has the step P1D, the simulated one PT1H; bring them to one step first',
     });
   });
 
   it('says nothing of an empty window', () => {
-    const none = series(daily, {});
+    const none = seriesOf(daily, {});
     expect(paired({ observed: none, simulated: none, windows: [] })).toMatchObject({ windowSteps: 0 });
   });
 });
@@ -213,7 +198,7 @@ const days = fc
     Object.fromEntries(values.map((value, day) => [`2010-01-${String(day + 1).padStart(2, '0')}`, value])),
   );
 
-const whole = window('2009-12-30/2010-01-25');
+const whole = windowOf('2009-12-30/2010-01-25');
 
 describe('laws of pairing', () => {
   it('does not care about the order of rows', async () => {
@@ -226,10 +211,10 @@ describe('laws of pairing', () => {
           .map((entry) => ({ entry, key: keys.next().value }))
           .sort((one, other) => one.key - other.key)
           .map(({ entry }) => entry);
-        const simulated = series(daily, others);
+        const simulated = seriesOf(daily, others);
         const observed = columnOf(await read(text(shuffled), layout));
         expect(paired({ observed, simulated, windows: [whole] })).toEqual(
-          paired({ observed: series(daily, some), simulated, windows: [whole] }),
+          paired({ observed: seriesOf(daily, some), simulated, windows: [whole] }),
         );
       }),
       { numRuns: 50 },
@@ -242,13 +227,13 @@ describe('laws of pairing', () => {
         const present = (values: Readonly<Record<string, number | null>>) =>
           Object.fromEntries(Object.entries(values).filter(([, value]) => value !== null));
         const marked = paired({
-          observed: series(daily, some),
-          simulated: series(daily, others),
+          observed: seriesOf(daily, some),
+          simulated: seriesOf(daily, others),
           windows: [whole],
         });
         const absent = paired({
-          observed: series(daily, present(some)),
-          simulated: series(daily, present(others)),
+          observed: seriesOf(daily, present(some)),
+          simulated: seriesOf(daily, present(others)),
           windows: [whole],
         });
         expect(absent).toEqual(marked);
@@ -260,8 +245,8 @@ describe('laws of pairing', () => {
     fc.assert(
       fc.property(days, days, (some, others) => {
         const { observed, dropped, windowSteps } = paired({
-          observed: series(daily, some),
-          simulated: series(daily, others),
+          observed: seriesOf(daily, some),
+          simulated: seriesOf(daily, others),
           windows: [whole],
         });
         expect(windowSteps).toBe(27);
@@ -274,7 +259,7 @@ describe('laws of pairing', () => {
   it('adds up over windows that follow one another', () => {
     fc.assert(
       fc.property(days, days, fc.integer({ min: 1, max: 19 }), (some, others, cut) => {
-        const sides = { observed: series(daily, some), simulated: series(daily, others) };
+        const sides = { observed: seriesOf(daily, some), simulated: seriesOf(daily, others) };
         const last = firstDay + 19;
         const first = paired({ ...sides, windows: [{ firstDay, lastDay: firstDay + cut - 1 }] });
         const second = paired({ ...sides, windows: [{ firstDay: firstDay + cut, lastDay: last }] });
