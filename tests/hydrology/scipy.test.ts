@@ -144,7 +144,7 @@ describe.skipIf(!witness.available)(`against SciPy and scikit-learn ${witness.re
   it('quantiles', () => {
     const given = seeds.flatMap((seed) =>
       [0, 0.013, 0.3, 1 / 3, 0.5, 0.98, 1].map((probability) => ({
-        values: inventedPair(seed, seed - 9).observed,
+        values: inventedPair(seed, seed - 10).observed,
         probability,
       })),
     );
@@ -152,7 +152,6 @@ describe.skipIf(!witness.available)(`against SciPy and scikit-learn ${witness.re
       const question = given[index] ?? { values: [], probability: 0 };
       near(value(quantile({ ...question, type: 6 })), answer.type6, 'type 6');
       near(value(quantile({ ...question, type: 7 })), answer.type7, 'type 7');
-      near(value(quantile({ ...question, type: 7 })), answer.type7_again, 'type 7');
     });
   });
 

@@ -73,9 +73,8 @@ def tails(z, t, degrees, x):
 
 def quantiles(values, probability):
     return {
-        "type6": np.quantile(values, probability, method="weibull"),
+        "type6": stats.mstats.mquantiles(values, [probability], alphap=0, betap=0)[0],
         "type7": np.quantile(values, probability),
-        "type7_again": stats.mstats.mquantiles(values, [probability], alphap=1, betap=1)[0],
     }
 
 

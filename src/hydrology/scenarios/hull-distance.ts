@@ -48,7 +48,8 @@ function nearestToOrigin(points: readonly (readonly number[])[]): number {
       }
       const steps = wanted.map((weight, index) => {
         const now = weights[index] ?? 0;
-        return weight > 1e-14 ? 1 : now / (now - weight);
+        if (weight > 1e-14) return Number.POSITIVE_INFINITY;
+        return now === 0 ? 0 : now / (now - weight);
       });
       const step = Math.min(...steps);
       const moved = weights.map((weight, index) => weight + step * ((wanted[index] ?? 0) - weight));
