@@ -1,6 +1,5 @@
-import { createHash, randomUUID } from 'node:crypto';
-import { mkdir, readFile, rename, rm, writeFile } from 'node:fs/promises';
-import { dirname, join } from 'node:path';
+import { join } from 'node:path';
+import { keptText, linesOfKept, loadLines, saveLines } from './kept-lines.ts';
 
 /** What a blob turned out to be. For a Git LFS pointer: digest and size of the content it names. */
 export interface BlobDigest {
@@ -24,7 +23,7 @@ const mostEntries = 200_000;
 /** The memory of a repository, in `stoplog/digests` below its common git directory. */
 export async function openDigestMemory(commonDirectory: string): Promise<DigestMemory> {
   const file = join(commonDirectory, 'stoplog', 'digests');
-  const known = await load(file);
+  const known = fromLines(await loadLines(file, firstLine));
   const fresh = new Map<string, BlobDigest>();
   return {
     get: (blob) => fresh.get(blob) ?? known.get(blob),
@@ -32,15 +31,8 @@ export async function openDigestMemory(commonDirectory: string): Promise<DigestM
     async save() {
       if (fresh.size === 0) return;
       // Another run may have saved meanwhile; what it found is as true as ours.
-      const all = new Map([...(await load(file)), ...fresh]);
-      const temporary = `${file}.${randomUUID()}`;
-      try {
-        await mkdir(dirname(file), { recursive: true });
-        await writeFile(temporary, digestsToText(all));
-        await rename(temporary, file);
-      } catch {
-        await rm(temporary, { force: true }).catch(() => {});
-      }
+      const all = new Map([...fromLines(await loadLines(file, firstLine)), ...fresh]);
+      await saveLines(file, firstLine, toLines(all));
     },
   };
 }
@@ -55,31 +47,27 @@ export function forgetfulMemory(): DigestMemory {
   };
 }
 
-async function load(file: string): Promise<Map<string, BlobDigest>> {
-  const text = await readFile(file, 'latin1').catch(() => '');
-  return digestsFromText(text);
-}
-
-/** One line each, oldest first, and last the digest of all lines before, so that a torn or altered file shows. */
+/** One line each, oldest first. */
 export function digestsToText(digests: ReadonlyMap<string, BlobDigest>): string {
-  const lines = [...digests]
-    .slice(-mostEntries)
-    .map(([blob, { kind, sha256, bytes }]) => `${blob} ${kind} ${sha256} ${bytes}\n`);
-  const body = `${firstLine}\n${lines.join('')}`;
-  return `${body}${digestOf(body)}\n`;
+  return keptText(firstLine, toLines(digests));
 }
 
 /** Empty for a file that is not exactly as `digestsToText` wrote it. */
 export function digestsFromText(text: string): Map<string, BlobDigest> {
-  const digests = new Map<string, BlobDigest>();
-  const end = text.lastIndexOf('\n', text.length - 2) + 1;
-  const body = text.slice(0, end);
-  if (!body.startsWith(`${firstLine}\n`) || text.slice(end) !== `${digestOf(body)}\n`) return digests;
-  for (const line of body.split('\n').slice(1, -1)) {
-    const [blob, kind, sha256, bytes] = line.split(' ') as [string, BlobDigest['kind'], string, string];
-    digests.set(blob, { kind, sha256, bytes: Number(bytes) });
-  }
-  return digests;
+  return fromLines(linesOfKept(firstLine, text));
 }
 
-const digestOf = (text: string) => createHash('sha256').update(text, 'latin1').digest('hex');
+function toLines(digests: ReadonlyMap<string, BlobDigest>): string[] {
+  return [...digests]
+    .slice(-mostEntries)
+    .map(([blob, { kind, sha256, bytes }]) => `${blob} ${kind} ${sha256} ${bytes}`);
+}
+
+function fromLines(lines: readonly string[]): Map<string, BlobDigest> {
+  return new Map(
+    lines.map((line) => {
+      const [blob, kind, sha256, bytes] = line.split(' ') as [string, BlobDigest['kind'], string, string];
+      return [blob, { kind, sha256, bytes: Number(bytes) }];
+    }),
+  );
+}

@@ -4,6 +4,7 @@ import { forgetfulMemory } from './digest-memory.ts';
 import { byPath, type Listing } from './listing.ts';
 import { objectId } from './object-id.ts';
 import type { Entry, Snapshot } from './snapshot.ts';
+import { forgetfulValues } from './value-memory.ts';
 
 /** A file's content, as text (UTF-8) or bytes, or where a symbolic link leads. */
 export type FileInMemory = string | Uint8Array | { readonly link: string };
@@ -34,6 +35,7 @@ export function snapshotFromMemory(files: FilesInMemory, before: FilesInMemory =
     untracked: [],
     ...contentOf(listing, blobsOf(contents), async () => null, forgetfulMemory()),
     readBefore: async (path: string) => snapshotFromMemory(before).read(path),
+    remember: forgetfulValues().remember,
     close: async () => {},
   });
 }

@@ -9,12 +9,13 @@ import { type Listing, listCommit, listIndex, untrackedFiles } from './listing.t
 import { namesFromOutput } from './names.ts';
 import { commitOf, type Repository } from './repository.ts';
 import type { At, Snapshot } from './snapshot.ts';
+import { forgetfulValues, openValueMemory } from './value-memory.ts';
 import { storeWorkTree } from './work-tree.ts';
 
 export interface SnapshotOptions {
   /** Names (without folder) of files that belong to a work-tree snapshot even before their first `git add`; ignored ones do not. */
   readonly alsoUntracked?: readonly string[];
-  /** False to hash everything anew and keep nothing under the git directory. */
+  /** False to hash and compute everything anew and keep nothing under the git directory. */
   readonly remember?: boolean;
 }
 
@@ -26,7 +27,7 @@ interface State extends Pick<Snapshot, 'label' | 'commit' | 'untracked'> {
 
 /**
  * Opens one state of a repository; the caller closes it. Nothing is written into the repository but the
- * disposable memory of digests.
+ * disposable memories of digests and of what was computed.
  * Failures: 'usage' (work tree or index of a bare repository), 'unknown-revision', 'unreadable-file', 'git-failed'.
  */
 export async function openSnapshot(
@@ -39,7 +40,9 @@ export async function openSnapshot(
     const { listing, objects, ...state } = await stateOf(repository, at, aside, options.alsoUntracked ?? []);
     const { objectFormat, commonDirectory } = repository;
     const blobs = gitBlobs(await objectsOnly(aside, { ...objects, objectFormat }), objectFormat);
-    const memory = options.remember === false ? forgetfulMemory() : await openDigestMemory(commonDirectory);
+    const keeps = options.remember !== false;
+    const memory = keeps ? await openDigestMemory(commonDirectory) : forgetfulMemory();
+    const values = keeps ? openValueMemory(commonDirectory) : forgetfulValues();
     const contentIn = (listed: Listing) => contentOf(listed, blobs, largeFilesIn(commonDirectory), memory);
     return Object.freeze({
       at,
@@ -51,9 +54,10 @@ export async function openSnapshot(
         const before = at.kind === 'revision' ? await ask(repository, commitOf(`${commit}^1`)) : commit;
         return before === null ? null : contentIn(await listCommit(repository, before, [path])).read(path);
       },
+      remember: values.remember,
       async close() {
         await blobs.close();
-        await Promise.all([memory.save(), aside.remove()]);
+        await Promise.all([memory.save(), values.save(), aside.remove()]);
       },
     });
   } catch (cause) {

@@ -63,6 +63,12 @@ export interface Snapshot {
   readBlob(blob: string, limit?: number): Promise<Uint8Array | null>;
   /** Content of a path in the commit that this state follows (HEAD for work tree and index, the first parent for a revision); null where there is none. */
   readBefore(path: string): Promise<Uint8Array | null>;
+  /**
+   * What `compute` gives, computed once in a run and kept between runs. The key must tell everything that the value depends
+   * on: what is computed, the version of the computation, digests of the content (hex SHA-256 of all that together). Values are
+   * what JSON can say (NaN becomes null, undefined is left out, at the first time too) and must not be changed.
+   */
+  remember<T>(key: string, compute: () => Promise<T>): Promise<T>;
   /** Ends git children and removes temporary files. */
   close(): Promise<void>;
 }
