@@ -16,7 +16,7 @@ export interface CheckOptions {
   readonly at: string;
   readonly only?: string;
   readonly phase?: Phase;
-  readonly report: readonly string[];
+  readonly report?: readonly string[];
   readonly cache: boolean;
   readonly quiet?: boolean;
   readonly color?: boolean;
@@ -33,7 +33,7 @@ interface Report {
 
 /** `stoplog check`: 0 when nothing blocks, 1 when something does. */
 export async function checkCommand(context: Context, options: CheckOptions): Promise<ExitStatus> {
-  const reports = (options.report.length > 0 ? options.report : ['text']).map(readReport);
+  const reports = (options.report ?? ['text']).map(readReport);
   const repository = await openRepository(context.cwd, context.environment);
   const snapshot = await openSnapshot(repository, readAt(options.at), {
     alsoUntracked: stoplogFiles,

@@ -1,6 +1,7 @@
 import { Command, CommanderError, Option } from 'commander';
 import { Failure } from '../failure.ts';
 import { caution } from '../reports/caution.ts';
+import { wrap } from '../reports/wrap.ts';
 import { phases } from '../rules/rule.ts';
 import { checkCommand } from './check.ts';
 import type { Context, ExitStatus } from './command.ts';
@@ -44,7 +45,10 @@ function describe(run: Run): Command {
     .version(version, '--version')
     .helpOption('--help', 'say how to use this')
     .helpCommand(false)
-    .addHelpText('after', `\nExit status: 0 pass, 1 blocked, 2 could not check.\n\n${caution}`);
+    .addHelpText(
+      'after',
+      `\nExit status: 0 pass, 1 blocked, 2 could not check.\n\n${wrap(caution, 100).join('\n')}`,
+    );
   const at = new Option('--at <content>', '`worktree`, `index` (what is staged), or a revision').default(
     'worktree',
   );
@@ -55,7 +59,7 @@ function describe(run: Run): Command {
     .addOption(at)
     .option('--only <what>', 'one record, one area (such as `inputs`), or one manifest’s folder')
     .addOption(new Option('--phase <phase>', 'judge as if the study had come this far').choices(phases))
-    .option('--report <kind=path>', '`text` or `json`, to a file or to `-`; may be repeated', collect, [])
+    .option('--report <kind=path>', '`text` or `json`, to a file or to `-`; may be repeated', collect)
     .option('--no-cache', 'read every file anew instead of remembering digests')
     .option('--quiet', 'print only what blocks')
     .option('--color', 'colour the text report also where the output is no terminal')
@@ -95,7 +99,7 @@ function describe(run: Run): Command {
   return program;
 }
 
-function collect(value: string, before: readonly string[]): readonly string[] {
+function collect(value: string, before: readonly string[] = []): readonly string[] {
   return [...before, value];
 }
 
