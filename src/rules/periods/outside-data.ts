@@ -1,6 +1,6 @@
+import { windowSets } from '../../facts/windows.ts';
 import { dayNumber, type Period, parsePeriod } from '../../manifest/period.ts';
 import { type Draft, rule } from '../rule.ts';
-import { windowSets } from './windows.ts';
 
 export const periodsOutsideData = rule({
   id: 'periods.outside-data',
@@ -14,12 +14,12 @@ export const periodsOutsideData = rule({
     citation: 'Follows from the words: a window is covered by the data it uses.',
   },
   clear: 'Correct the window, or the input’s period if it is the one that is wrong.',
-  check: (_, { manifest }) => {
-    const { data } = manifest;
+  check: (_, { records }) => {
+    const { data } = records.manifest;
     const recordOf = (input: string | undefined): Period | null =>
       parsePeriod(data.inputs?.[input ?? '']?.period ?? '');
     const drafts: Draft[] = [];
-    const sets = windowSets(manifest);
+    const sets = windowSets(records);
     for (const [name, target] of Object.entries(data.evaluation ?? {})) {
       const observed = recordOf(target.observed?.input);
       const set = sets.find(({ record }) => record === `evaluation.${name}`) ?? sets[0];

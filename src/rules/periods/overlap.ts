@@ -1,7 +1,7 @@
+import { windowSets } from '../../facts/windows.ts';
 import { dateOfDay, dayNumber, type Period } from '../../manifest/period.ts';
 import { rule } from '../rule.ts';
 import { klemes } from '../sources.ts';
-import { windowSets } from './windows.ts';
 
 export const periodsOverlap = rule({
   id: 'periods.overlap',
@@ -12,8 +12,8 @@ export const periodsOverlap = rule({
   why: 'A day that parameters were fitted to can’t test them, and a warm-up day still shows the guessed first content of the stores.',
   source: klemes,
   clear: 'Move the windows apart; the first and last day of each belong to it.',
-  check: (_, { manifest }) =>
-    windowSets(manifest).flatMap(({ record, windows }) =>
+  check: (_, { records }) =>
+    windowSets(records).flatMap(({ record, windows }) =>
       windows.flatMap((one, index) =>
         windows.slice(index + 1).flatMap((other) => {
           const shared = sharedDays(one.period, other.period);

@@ -1,6 +1,6 @@
+import { windowSets } from '../../facts/windows.ts';
 import { dayNumber, type Period } from '../../manifest/period.ts';
 import { rule } from '../rule.ts';
-import { windowSets } from './windows.ts';
 
 export const periodsShort = rule({
   id: 'periods.short',
@@ -23,10 +23,10 @@ export const periodsShort = rule({
       looser: 'lower',
     },
   },
-  check: (_, { manifest }, limits) => {
-    const begins = manifest.data.periods?.year_begins ?? '01-01';
+  check: (_, { records }, limits) => {
+    const begins = records.manifest.data.periods?.year_begins ?? '01-01';
     const needed = limits.calibration_years ?? 0;
-    return windowSets(manifest).flatMap(({ record, windows }) => {
+    return windowSets(records).flatMap(({ record, windows }) => {
       const calibration = windows.filter(({ kind }) => kind === 'calibration');
       const [first] = calibration;
       const years = calibration.reduce((sum, { period }) => sum + completeYears(period, begins), 0);
