@@ -66,6 +66,7 @@ export function median(values: ArrayLike<number>): number {
  * Example: sumsToZero([0.1, 0.2, -0.3]) -> true
  */
 export function sumsToZero(values: ArrayLike<number>): boolean {
-  const magnitude = total(Float64Array.from(values, Math.abs));
+  let magnitude = 0;
+  for (let index = 0; index < values.length; index++) magnitude += Math.abs(values[index] ?? 0);
   return Math.abs(total(values)) <= values.length * Number.EPSILON * magnitude;
 }

@@ -1,5 +1,5 @@
 import { ascending } from '../arithmetic.ts';
-import { computed, type Statistic, undefinedBecause } from '../paired.ts';
+import { computed, defined, type Statistic, undefinedBecause } from '../paired.ts';
 
 export interface KolmogorovSmirnov {
   readonly distance: number;
@@ -32,13 +32,11 @@ export function kolmogorovSmirnov(of: {
   const gap = largestGap(ascending(of.sample), ascending(of.other));
   const distance = gap / (n * m);
   const tied = new Set([...Array.from(of.sample), ...Array.from(of.other)]).size < n + m;
-  return {
-    value: {
-      distance,
-      pLimit: limitTail(distance * Math.sqrt((n * m) / (n + m))),
-      pExact: exact({ n, m, gap, tied }),
-    },
-  };
+  return defined({
+    distance,
+    pLimit: limitTail(distance * Math.sqrt((n * m) / (n + m))),
+    pExact: exact({ n, m, gap, tied }),
+  });
 }
 
 function exact(of: { n: number; m: number; gap: number; tied: boolean }): Statistic {

@@ -1,3 +1,4 @@
+import { isConstant } from '../arithmetic.ts';
 import { quantile } from '../distribution/quantile.ts';
 import { defined, isDefined, type Statistic, undefinedBecause } from '../paired.ts';
 
@@ -28,13 +29,12 @@ export function wetnessClasses(record: {
 }): Statistic<WetnessClasses> {
   const { years, totals } = record;
   if (totals.length < 3) return undefinedBecause('three classes need at least three years');
+  if (isConstant(totals)) return undefinedBecause('the years are all equal, so none is wet or dry');
   const lower = quantile({ values: totals, probability: 1 / 3, type: 7 });
   const upper = quantile({ values: totals, probability: 2 / 3, type: 7 });
   if (!isDefined(lower)) return lower;
   if (!isDefined(upper)) return upper;
   const [lowerTercile, upperTercile] = [lower.value, upper.value];
-  if (Math.min(...Array.from(totals)) === Math.max(...Array.from(totals)))
-    return undefinedBecause('the years are all equal, so none is wet or dry');
   const classed = Array.from(totals, (total, index) => {
     const wetness: Wetness = total < lowerTercile ? 'dry' : total > upperTercile ? 'wet' : 'average';
     return { year: years[index] ?? Number.NaN, total, wetness };
