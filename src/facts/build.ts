@@ -1,25 +1,38 @@
+import type { SealsFile } from '../records/seal.ts';
+import { readSealsFile } from '../records/seals-file.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { differencesOf } from './differences.ts';
 import type { Facts } from './facts.ts';
 import { takeReadings } from './readings.ts';
 
 /** What the rooms before this one, and the caller, give. */
-export interface Given extends Omit<Facts, 'readings' | 'differences' | 'found' | 'record'> {
+export interface Given extends Omit<Facts, 'sealsBefore' | 'readings' | 'differences' | 'found' | 'record'> {
   readonly snapshot: Snapshot;
 }
 
 /** Computes all that rules may ask about a manifest; reads only files that a rule needs. */
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
-  const { records, standings } = given;
-  const [readings, differences] = await Promise.all([
+  const { records, standings, sealsFile } = given;
+  const [sealsBefore, readings, differences] = await Promise.all([
+    sealsOfBefore(sealsFile, snapshot),
     takeReadings(records, snapshot),
     differencesOf(records, standings, snapshot),
   ]);
   return Object.freeze({
     ...given,
+    sealsBefore,
     readings,
     differences,
     found: [],
     record: (id: string) => records.nodes.get(id),
   });
+}
+
+/** Nearly always the seals are those of the commit before; then they are not read again. */
+async function sealsOfBefore(now: SealsFile, snapshot: Snapshot): Promise<Facts['sealsBefore']> {
+  const before = await snapshot.readBefore(now.path);
+  if (before === null) return new Map();
+  const same =
+    now.exists && Buffer.compare(before, (await snapshot.read(now.path)) ?? new Uint8Array()) === 0;
+  return same ? now.seals : readSealsFile(now.path, new TextDecoder().decode(before)).seals;
 }

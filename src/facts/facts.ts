@@ -1,6 +1,6 @@
 import type { Manifest } from '../manifest/manifest.ts';
 import type { RecordNode, Records } from '../records/record.ts';
-import type { SealsFile, Standing } from '../records/seal.ts';
+import type { Seal, SealsFile, Standing } from '../records/seal.ts';
 import type { SeriesDifference } from '../series/difference.ts';
 import type { Reading } from './readings.ts';
 
@@ -8,6 +8,7 @@ import type { Reading } from './readings.ts';
 export interface Found {
   readonly rule: string;
   readonly record: string;
+  readonly subject?: string;
 }
 
 /** What departures, waivers and acceptances may name. Handed in by the caller: rules come after facts. */
@@ -23,6 +24,8 @@ export interface Facts {
   readonly manifest: Manifest;
   readonly records: Records;
   readonly sealsFile: SealsFile;
+  /** By record id: the seals of the commit that this state is compared with; empty if there were none. */
+  readonly sealsBefore: ReadonlyMap<string, Seal>;
   /** By record id; one for each present record. */
   readonly standings: ReadonlyMap<string, Standing>;
   /** The date of the verdict, ISO 8601. */

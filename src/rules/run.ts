@@ -25,7 +25,13 @@ export function runRules(rules: readonly Rule[], facts: Facts): readonly Raised[
     readable.filter((rule) => !rule.second),
     facts,
   );
-  const found: Found[] = first.map(({ rule, draft }) => ({ rule: rule.id, record: draft.record }));
+  const found = first.map(
+    ({ rule, draft: { record, subject } }): Found => ({
+      rule: rule.id,
+      record,
+      ...(subject === undefined ? {} : { subject }),
+    }),
+  );
   return [
     ...first,
     ...run(

@@ -1,5 +1,6 @@
 import type { Facts } from '../facts/facts.ts';
 import type { Draft, Rule } from '../rules/rule.ts';
+import { isMeantFor } from '../rules/waived.ts';
 
 /** Faults that leave nothing to judge by; no waiver reaches them. */
 const neverWaived: ReadonlySet<string> = new Set(['manifest.unreadable', 'seal.unreadable']);
@@ -9,8 +10,7 @@ export function waiverFor(rule: Rule, draft: Draft, facts: Facts): string | null
   if (neverWaived.has(rule.id)) return null;
   const waiver = (facts.manifest.data.waivers ?? []).find(
     (one) =>
-      one.rule === rule.id &&
-      one.record === draft.record &&
+      isMeantFor(one, { ...draft, rule: rule.id }) &&
       one.because !== undefined &&
       one.by !== undefined &&
       one.until !== undefined &&

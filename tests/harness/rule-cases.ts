@@ -38,7 +38,7 @@ export function ruleCases(rule: Rule, { fires, silent }: RuleCases): void {
   if (fires.length === 0 || silent.length === 0) throw new Error(`${rule.id} needs cases of both kinds`);
   describe(rule.id, () => {
     it.each([...fires])('fires: $name', async ({ finds, name: _, ...edits }) => {
-      const found = (await findingsOf(rule, edits)).map(({ draft, level }) => comparable(draft, level));
+      const found = (await findingsOf(rule, edits)).map(({ draft, level }) => comparable(rule, draft, level));
       const wanted = (Array.isArray(finds) ? finds : [finds]) as readonly Expected[];
       expect(found, 'number of findings').toHaveLength(wanted.length);
       for (const [index, expected] of wanted.entries())
@@ -63,8 +63,8 @@ async function findingsOf(rule: Rule, edits: StudyEdits): Promise<readonly { dra
     .map(({ draft }) => ({ draft, level: levelOf(rule, draft, facts.phase as never, undefined) }));
 }
 
-function comparable({ field, ...draft }: Draft, level: Level) {
-  return { ...draft, level, ...(field === undefined ? {} : { field: fieldName(field) }) };
+function comparable({ clear }: Rule, { field, ...draft }: Draft, level: Level) {
+  return { clear, ...draft, level, ...(field === undefined ? {} : { field: fieldName(field) }) };
 }
 
 function matchers({ message, clear, ...exact }: Expected) {

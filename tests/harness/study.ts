@@ -1,18 +1,19 @@
 import { readFileSync } from 'node:fs';
 import { parseDocument } from 'yaml';
 import { buildFacts } from '../../src/facts/build.ts';
+import { evidenceFor } from '../../src/facts/evidence.ts';
 import type { Facts } from '../../src/facts/facts.ts';
 import type { Manifest } from '../../src/manifest/manifest.ts';
 import { readManifest } from '../../src/manifest/read.ts';
 import { buildRecords } from '../../src/records/build.ts';
-import { fromFolder } from '../../src/records/paths.ts';
-import type { RecordNode, Records } from '../../src/records/record.ts';
-import { newest, schemes } from '../../src/records/schemes.ts';
+import { makeSeals } from '../../src/records/make-seals.ts';
+import type { Records } from '../../src/records/record.ts';
+import { newest, type Schemes, schemes } from '../../src/records/schemes.ts';
 import type { Seal } from '../../src/records/seal.ts';
 import { withChecksum } from '../../src/records/seal-entry.ts';
 import { readSealsFile, writeSealsFile } from '../../src/records/seals-file.ts';
 import { judgeStandings } from '../../src/records/standing.ts';
-import { snapshotFromMemory } from '../../src/repository/memory.ts';
+import { type FilesInMemory, snapshotFromMemory } from '../../src/repository/memory.ts';
 import type { Snapshot } from '../../src/repository/snapshot.ts';
 import { knownRules } from '../../src/rules/index.ts';
 import type { Phase } from '../../src/rules/rule.ts';
@@ -22,8 +23,10 @@ import { soundFiles } from './sound-files.ts';
 export interface Edits {
   readonly set?: Readonly<Record<string, unknown>>;
   readonly remove?: readonly string[];
-  /** New content of a file, or how it comes from the old; null takes the file away. */
-  readonly files?: Readonly<Record<string, string | null | ((old: string) => string)>>;
+  /** New content of a file, how it comes from the old, or where a symbolic link leads; null takes the file away. */
+  readonly files?: Readonly<
+    Record<string, string | { readonly link: string } | null | ((old: string) => string)>
+  >;
 }
 
 /** A study made from the sound one, and the circumstances under which it is checked. */
@@ -34,10 +37,14 @@ export interface StudyEdits extends Edits {
   readonly seals?: 'now' | 'sound' | 'none';
   /** Fields of single seals, by record; the checksum is made to fit. */
   readonly sealed?: Readonly<Record<string, Partial<Seal>>>;
+  /** Judge the seals as a later Stoplog, which has one more scheme. */
+  readonly upgraded?: true;
   /** What is done to the text of the seals file by hand. */
   readonly byHand?: (seals: string) => string;
   /** The manifest of the commit before, made from the sound one; null (unless said): there was none. */
   readonly before?: Edits | null;
+  /** Fields of single seals as they were in the commit before, where all else was sealed as it is now. */
+  readonly sealedBefore?: NonNullable<StudyEdits['sealed']>;
   /** Unless said: 2021-03-01, a month after all was sealed. */
   readonly today?: string;
   /** Unless said, the manifest's. */
@@ -68,8 +75,14 @@ export async function studyFacts(edits: StudyEdits = {}): Promise<Facts> {
     manifest,
     records,
     sealsFile,
-    standings: judgeStandings(records, sealsFile),
-    snapshot: snapshotOf(written === null ? files : { ...files, [sealsPath]: written }, edits),
+    standings: judgeStandings(records, sealsFile, edits.upgraded ? laterSchemes : schemes),
+    snapshot: {
+      ...snapshotOf(written === null ? files : { ...files, [sealsPath]: written }, edits),
+      readBefore: async (asked) =>
+        edits.sealedBefore === undefined || asked !== sealsPath
+          ? null
+          : new TextEncoder().encode(writeSealsFile(sealsOf(sealedState, edits.sealedBefore))),
+    },
     today: edits.today ?? '2021-03-01',
     phase: edits.phase ?? manifest.data.study?.phase ?? 'setup',
     known: knownRules(),
@@ -96,22 +109,24 @@ function readable(text: string): Manifest {
   return manifest;
 }
 
-function editedFiles({ files = {} }: Edits): Record<string, string> {
-  const edited = new Map(Object.entries(filesOfSound));
+function editedFiles({ files = {} }: Edits): FilesInMemory {
+  const edited = new Map<string, string | { readonly link: string }>(Object.entries(filesOfSound));
   for (const [name, change] of Object.entries(files)) {
     if (change === null) edited.delete(name);
-    else edited.set(name, typeof change === 'string' ? change : change(edited.get(name) ?? ''));
+    else edited.set(name, typeof change === 'function' ? change(filesOfSound[name] ?? '') : change);
   }
   return Object.fromEntries(edited);
 }
 
 /** Files in memory; the blobs of the sound study can be read too, as git keeps them. */
-function snapshotOf(files: Readonly<Record<string, string>>, { untracked = [] }: StudyEdits): Snapshot {
+function snapshotOf(files: FilesInMemory, { untracked = [] }: StudyEdits): Snapshot {
   const snapshot = snapshotFromMemory(files);
   const readBlob: Snapshot['readBlob'] = async (id, limit) =>
     (await snapshot.readBlob(id, limit)) ?? (await soundSnapshot().readBlob(id, limit));
   return { ...snapshot, untracked, readBlob };
 }
+
+const laterSchemes: Schemes = [...schemes, { ...newest(schemes), number: newest(schemes).number + 1 }];
 
 const soundSnapshot = once(() => snapshotFromMemory({ ...filesOfSound, [path]: soundText }));
 const soundRecords = once(() => buildRecords(readable(soundText), soundSnapshot()));
@@ -124,36 +139,19 @@ function once<Result>(make: () => Result): () => Result {
   };
 }
 
-/** A seal of every record as it stands, by an invented reviewer. */
+/** A seal of every record that can be sealed as it stands, by an invented reviewer. */
 function sealsOf(records: Records, changed: NonNullable<StudyEdits['sealed']>): ReadonlyMap<string, Seal> {
-  return new Map(
-    [...records.nodes.values()].map((record) => [
-      record.id,
-      withChecksum({ ...sealOf(record, records), ...changed[record.id] }),
-    ]),
-  );
-}
-
-function sealOf(record: RecordNode, { digests, manifest }: Records): Omit<Seal, 'checksum'> {
-  const { substance, wording, accepts, digest, claims, restsOn } = record;
-  const files = [...claims.values()].map(({ path: file, identity }) => {
-    const { sha256, bytes } = identity.kind === 'unavailable' ? { sha256: null, bytes: null } : identity;
-    return [fromFolder(manifest.folder, file), { sha256, bytes, blob: identity.blob }] as const;
-  });
-  return {
-    scheme: newest(schemes).number,
-    substance,
-    wording,
-    accepts,
-    files: Object.fromEntries(files),
-    rests_on: Object.fromEntries(restsOn.map((id) => [id, digests.get(id) ?? ''])),
-    digest,
-    outcome: null,
-    unmoved: [],
-    facts: {},
-    sealed_by: 'Test Reviewer <reviewer@eastmoor.example>',
-    sealed_on: '2021-02-01',
-    grade: 'sealed',
+  const sealsFile = readSealsFile(sealsPath, null);
+  const standings = judgeStandings(records, sealsFile);
+  const { seals } = makeSeals({
+    records,
+    sealsFile,
+    standings,
+    wanted: 'all',
     because: null,
-  };
+    person: 'Test Reviewer <reviewer@eastmoor.example>',
+    today: '2021-02-01',
+    evidence: evidenceFor(records, standings),
+  });
+  return new Map([...seals].map(([id, seal]) => [id, withChecksum({ ...seal, ...changed[id] })]));
 }

@@ -11,7 +11,7 @@ export const manifestNoMatch = rule({
   clear: 'Correct the path, or add the file to git; for data kept outside git write `stored: elsewhere`.',
   check: (_, { records }) =>
     records.unmatched
-      .filter(({ why }) => why === 'no-match')
+      .filter(({ why, field }) => why === 'no-match' && field[0] !== 'readings')
       .map(({ record, pattern, field, untracked }) => ({
         record,
         field,

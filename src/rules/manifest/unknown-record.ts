@@ -2,7 +2,6 @@ import type { Facts } from '../../facts/facts.ts';
 import type { FieldPath } from '../../manifest/manifest.ts';
 import { nearestName } from '../../manifest/nearest.ts';
 import { acceptancesIn } from '../accepted.ts';
-import { departedLevels } from '../departure.ts';
 import { type Draft, rule } from '../rule.ts';
 
 export const manifestUnknownRecord = rule({
@@ -30,7 +29,17 @@ export const manifestUnknownRecord = rule({
             nearestName(name, facts.known.rules.keys()),
           ),
     ),
-    ...thresholds(facts),
+    ...(facts.manifest.data.departures ?? []).flatMap(({ threshold }, place) =>
+      threshold === undefined || facts.known.limits.has(threshold)
+        ? []
+        : unknown(
+            'manifest',
+            ['departures', place, 'threshold'],
+            threshold,
+            `\`${threshold}\` is no threshold`,
+            nearestName(threshold, facts.known.limits.keys()),
+          ),
+    ),
   ],
 });
 
@@ -52,45 +61,4 @@ function namedRules({ manifest: { data } }: Facts): readonly (readonly [string, 
     ...(data.waivers ?? []).map(({ rule: named }, place) => [named, ['waivers', place, 'rule']] as const),
     ...acceptancesIn(data).map(({ field, acceptance }) => [acceptance.rule, [...field, 'rule']] as const),
   ];
-}
-
-/** Departures that name no threshold that there is, or set a level to a number or a threshold to a word. */
-function thresholds({ manifest, known }: Facts): readonly Draft[] {
-  return (manifest.data.departures ?? []).flatMap(
-    ({ rule: named, threshold, now }, place): readonly Draft[] => {
-      const field = ['departures', place];
-      if (named !== undefined) {
-        const levels = Object.keys(departedLevels).join('`, `');
-        return typeof now === 'string'
-          ? []
-          : [
-              unknown(
-                'manifest',
-                [...field, 'now'],
-                named,
-                `\`now: ${now}\` is no level; levels are \`${levels}\``,
-              ),
-            ];
-      }
-      if (threshold === undefined) {
-        return [unknown('manifest', field, '', 'This departure names neither a `rule` nor a `threshold`')];
-      }
-      if (!known.limits.has(threshold)) {
-        const near = nearestName(threshold, known.limits.keys());
-        return [
-          unknown('manifest', [...field, 'threshold'], threshold, `\`${threshold}\` is no threshold`, near),
-        ];
-      }
-      return typeof now === 'number'
-        ? []
-        : [
-            unknown(
-              'manifest',
-              [...field, 'now'],
-              threshold,
-              `\`now: ${now}\` is no number, which a threshold needs`,
-            ),
-          ];
-    },
-  );
 }

@@ -16,7 +16,7 @@ export const modelExecutableUnidentified = rule({
     const identified =
       files.some(({ identity }) => identity.kind !== 'unavailable') ||
       elsewhere.some(({ field, sha256 }) => field[1] === 'executable' && sha256 !== undefined) ||
-      /^sha256:[0-9a-f]{64}$/.test(container?.digest ?? '') ||
+      container?.digest !== undefined ||
       /^[0-9a-f]{7,64}$/.test(source?.commit ?? '');
     if (identified) return [];
     return [

@@ -1,3 +1,4 @@
+import { isUnmoved, unmovedBelow } from '../../records/unmoved.ts';
 import { few } from '../figures.ts';
 import { rule } from '../rule.ts';
 
@@ -12,16 +13,19 @@ export const sealUnmoved = rule({
   source: { basis: 'house', citation: 'Our own choice: a result that should have moved needs its reason.' },
   clear:
     'Run the model (or calibrate) again and seal, or say why nothing moved: stoplog seal RECORD --because "..."',
-  check: (_, { records, sealsFile }) =>
-    [...sealsFile.seals].flatMap(([id, { unmoved, because, grade, sealed_on }]) =>
-      !records.nodes.has(id) || unmoved.length === 0 || because !== null || grade === 'rerun'
-        ? []
-        : {
-            record: id,
-            message: `When this was sealed on ${sealed_on}, ${few(unmoved)} had changed, but ${
-              id === 'parameters' ? 'the calibrated values' : 'the outputs'
-            } had not.`,
-            clear: `${id === 'parameters' ? 'Calibrate again' : 'Run the model again'} and seal, or say why nothing moved: stoplog seal ${id} --because "..."`,
-          },
-    ),
+  check: (_, { records, sealsFile, sealsBefore }) =>
+    [...records.nodes.values()].flatMap(({ id, area }) => {
+      const [seal, before] = [sealsFile.seals.get(id), sealsBefore.get(id)];
+      if (seal === undefined || !isUnmoved(seal, before)) return [];
+      const below = new Set([...seal.unmoved, ...(before === undefined ? [] : unmovedBelow(before, seal))]);
+      const [outcome, again] =
+        area === 'parameters'
+          ? ['the calibrated values', 'Calibrate again']
+          : ['the outputs', 'Run the model again'];
+      return {
+        record: id,
+        message: `When this was sealed on ${seal.sealed_on}, ${few([...below])} had changed, but ${outcome} had not.`,
+        clear: `${again} and seal, or say why nothing moved: stoplog seal ${id} --because "..."`,
+      };
+    }),
 });

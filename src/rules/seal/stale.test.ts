@@ -1,0 +1,116 @@
+import { expect } from 'vitest';
+import { ruleCases } from '../../../tests/harness/rule-cases.ts';
+import { soundFiles } from '../../../tests/harness/sound-files.ts';
+import { figure } from '../figures.ts';
+import { sealStale } from './stale.ts';
+
+/** The sum of the rain, counted from the text of the file. */
+const rainMm = (soundFiles()['data/rain.csv'] ?? '')
+  .split('\n')
+  .slice(1)
+  .reduce((sum, line) => sum + Number(line.split(',')[1] ?? 0), 0);
+
+ruleCases(sealStale, {
+  fires: [
+    {
+      name: 'one value of the data, and all that rests on it',
+      seals: 'sound',
+      files: {
+        'data/rain.csv': (old) =>
+          old
+            .replace('2007-01-04,0.0000', '2007-01-04,9.0000')
+            .replace('2007-01-16,0.0000', '2007-01-16,2.5000'),
+      },
+      phase: 'calibration',
+      finds: [
+        {
+          record: 'inputs.rainfall',
+          level: 'block',
+          message: 'data/rain.csv is not the file that was sealed on 2021-02-01.',
+          trail: ['inputs.rainfall', 'data/rain.csv'],
+          detail: [
+            `2 of 3 287 values differ; total ${figure(rainMm)} -> ${figure(rainMm + 11.5)} mm (+${(1150 / rainMm).toFixed(2)} %), 2007-01-04 to 2007-01-16`,
+          ],
+          clear: 'Check what changed, then: stoplog seal inputs.rainfall',
+        },
+        {
+          record: 'parameters',
+          level: 'warn',
+          trail: ['parameters', 'inputs.rainfall', 'data/rain.csv'],
+          clear: 'Calibrate again',
+        },
+        { record: 'runs.calibrated', level: 'warn', clear: 'Run the model again' },
+        { record: 'runs.dry', trail: ['runs.dry', 'parameters', 'inputs.rainfall', 'data/rain.csv'] },
+        {
+          record: 'evaluation.outlet-flow',
+          message: 'since then',
+          clear: '--figures evaluation.outlet-flow',
+        },
+        { record: 'balance.catchment' },
+        { record: 'interventions' },
+        { record: 'uncertainty' },
+        { record: 'scenarios.dry' },
+      ],
+    },
+    {
+      name: 'other line ends only',
+      seals: 'sound',
+      files: { 'data/leaf-area.csv': (old) => old.replaceAll('\n', '\r\n') },
+      finds: [
+        {
+          record: 'inputs.vegetation',
+          level: 'block',
+          detail: ['no value differs; only how the file is written (line ends, names, order)'],
+        },
+        { record: 'interventions' },
+      ],
+    },
+    {
+      name: 'a sum that tells no amount',
+      seals: 'sound',
+      files: { 'data/temperature.csv': (old) => old.replace('2001-10-01,11.1688', '2001-10-01,21.1688') },
+      phase: 'setup',
+      finds: [
+        {
+          record: 'inputs.temperature',
+          level: 'note',
+          detail: [
+            expect.stringMatching(
+              /^1 of 3 287 values differ; sum of values .* degC \(\+.* %\), on 2001-10-01$/,
+            ),
+          ],
+        },
+        {},
+        {},
+        {},
+        {},
+        {},
+        {},
+        {},
+        {},
+      ],
+    },
+    {
+      name: 'a statement',
+      seals: 'sound',
+      set: { 'catchment.area.value': 51 },
+      finds: { record: 'catchment', message: 'What this record states was changed', trail: ['catchment'] },
+    },
+    {
+      name: 'a file gone, one new',
+      seals: 'sound',
+      set: { 'study.files': ['model/model.mjs'] },
+      finds: { record: 'study', message: 'model/model.mjs was not there when this was sealed' },
+    },
+    {
+      name: 'a script that is no series',
+      seals: 'sound',
+      files: { 'data/prepare.mjs': '// Invented: by 1.05 instead.\n' },
+      finds: [{ record: 'inputs.rainfall', detail: ['50 -> 30 bytes'] }, {}, {}, {}, {}, {}, {}, {}, {}],
+    },
+  ],
+  silent: [
+    { name: 'reworded only', seals: 'sound', set: { 'study.title': 'Dry-weather flow' } },
+    { name: 'never sealed', seals: 'none' },
+  ],
+});
