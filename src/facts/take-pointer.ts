@@ -23,7 +23,7 @@ export function takePointer(text: string, pointer: string, file: string): Taken 
   if (typeof found === 'string') return `${file} can’t be read as ${format.toUpperCase()}: ${found}`;
   if (found === undefined) return nowhere;
   const { value, line } = found;
-  if (typeof value === 'bigint' || value instanceof Date) return { value: String(value), line };
+  if (value instanceof Date) return { value: value.toISOString(), line };
   if (typeof value === 'string' || typeof value === 'number' || typeof value === 'boolean')
     return { value, line };
   return `${nowhere} that is one value`;

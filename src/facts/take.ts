@@ -33,8 +33,8 @@ function takeKey(lines: readonly string[], key: string, file: string): Taken | s
 }
 
 function withoutComment(rest: string): string {
-  const bare = ` ${rest}`.replace(/\s(?:[#!;]|\/\/).*$/, '').trim();
-  return /^(?:"[^"]*"|'[^']*')$/.test(bare) ? bare.slice(1, -1) : bare;
+  const quoted = /^\s*(["'])(.*?)\1/.exec(rest);
+  return quoted?.[2] ?? ` ${rest}`.replace(/\s(?:[#!;]|\/\/).*$/, '').trim();
 }
 
 function takeWord(
