@@ -4,25 +4,29 @@ import type { Snapshot } from '../repository/snapshot.ts';
 import { differencesOf } from './differences.ts';
 import type { Facts } from './facts.ts';
 import { takeReadings } from './readings.ts';
+import { scoresOf } from './scores.ts';
 
 /** What the rooms before this one, and the caller, give. */
-export interface Given extends Omit<Facts, 'sealsBefore' | 'readings' | 'differences' | 'found' | 'record'> {
+export interface Given
+  extends Omit<Facts, 'sealsBefore' | 'readings' | 'differences' | 'scores' | 'found' | 'record'> {
   readonly snapshot: Snapshot;
 }
 
 /** Computes all that rules may ask about a manifest; reads only files that a rule needs. */
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
   const { records, standings, sealsFile } = given;
-  const [sealsBefore, readings, differences] = await Promise.all([
+  const [sealsBefore, readings, differences, scores] = await Promise.all([
     sealsOfBefore(sealsFile, snapshot),
     takeReadings(records, snapshot),
     differencesOf(records, standings, snapshot),
+    scoresOf(records, snapshot),
   ]);
   return Object.freeze({
     ...given,
     sealsBefore,
     readings,
     differences,
+    scores,
     found: [],
     record: (id: string) => records.nodes.get(id),
   });

@@ -3,6 +3,7 @@ import type { RecordNode, Records } from '../records/record.ts';
 import type { Seal, SealsFile, Standing } from '../records/seal.ts';
 import type { SeriesDifference } from '../series/difference.ts';
 import type { Reading } from './readings.ts';
+import type { TargetFigures } from './scores.ts';
 
 /** What one rule found, as far as rules of the second pass need it. */
 export interface Found {
@@ -38,6 +39,8 @@ export interface Facts {
   readonly readings: readonly Reading[];
   /** For each changed file of a stale record that reads as a series: what changed, in the data's own terms. */
   readonly differences: ReadonlyMap<string, SeriesDifference>;
+  /** By the name of the evaluation target: what its files give, and what is stated. */
+  readonly scores: ReadonlyMap<string, TargetFigures>;
   /** Findings of the first pass; empty during it. */
   readonly found: readonly Found[];
   readonly known: KnownRules;

@@ -107,7 +107,7 @@ export async function seriesOfInput(
 }
 
 /** The input of that name, or all that `each` makes of it. */
-function inputsNamed(input: string, { nodes }: Records): readonly InputRecord[] {
+export function inputsNamed(input: string, { nodes }: Records): readonly InputRecord[] {
   const named = [...nodes.values()].filter(
     ({ id, area }) => area === 'inputs' && (id === `inputs.${input}` || id.startsWith(`inputs.${input}.`)),
   );

@@ -1,0 +1,48 @@
+import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
+import type { InputReference } from '../manifest/data.generated.ts';
+import { type Records, sha256Of } from '../records/record.ts';
+import type { FileIdentity, Snapshot } from '../repository/snapshot.ts';
+import type { Series } from '../series/series.ts';
+import { inputsNamed, layoutOf, seriesFilesOf, seriesOfInput } from './series-of.ts';
+import { withStep } from './step-found.ts';
+
+/** The series of an input that something refers to, and all that it depends on. */
+export interface InputSeries {
+  readonly reference: InputReference;
+  /** Layouts, files and their digests; JSON. */
+  readonly from: unknown;
+  /** Whether the input says its step. */
+  readonly hasStep: boolean;
+}
+
+/** Undefined where there is no such input, or the content of a file is not here. */
+export function findInput(reference: InputReference, records: Records): Statistic<InputSeries> {
+  const holders = inputsNamed(reference.input, records);
+  if (holders.length === 0) return undefinedBecause(`there is no input ${reference.input}`);
+  const from = holders.map((holder) => ({
+    id: holder.id,
+    layout: layoutOf(holder.fragment.series ?? {}),
+    combine: holder.fragment.combine,
+    files: seriesFilesOf(holder).map(({ path, identity }) => [path, sha256Of(identity)]),
+  }));
+  const files = holders.flatMap(seriesFilesOf);
+  const away = files.find(({ identity }) => !isContentHere(identity));
+  if (away !== undefined) return undefinedBecause(`the content of ${away.path} is not here`);
+  const hasStep = holders.every(({ fragment }) => fragment.series?.step !== undefined);
+  return defined({ reference, from: { from, ...reference }, hasStep });
+}
+
+/** Whether a file's content can be read; a Git LFS pointer alone can't. */
+export function isContentHere(identity: FileIdentity): boolean {
+  return identity.kind === 'file' || (identity.kind === 'pointer' && identity.present);
+}
+
+/** The series, in the step that is stated, or else the one that its times have. */
+export async function readInputSeries(
+  { reference, hasStep }: InputSeries,
+  records: Records,
+  snapshot: Snapshot,
+): Promise<Statistic<Series>> {
+  const series = await seriesOfInput(reference, records, snapshot);
+  return isDefined(series) && !hasStep ? defined(withStep(series.value)) : series;
+}

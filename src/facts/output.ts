@@ -1,0 +1,74 @@
+import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
+import { resolvePattern } from '../records/find-paths.ts';
+import { type Records, sha256Of } from '../records/record.ts';
+import type { Snapshot } from '../repository/snapshot.ts';
+import type { SeriesLayout } from '../series/layout.ts';
+import { columnOf, type Series } from '../series/series.ts';
+import { isContentHere } from './input.ts';
+import { layoutOf, seriesOfFile } from './series-of.ts';
+import { withStep } from './step-found.ts';
+
+/** A file of a run, as a fragment of the manifest names it and says how it is laid out. */
+export interface Output extends SeriesLayout {
+  /** From the manifest's folder. */
+  readonly file?: string | undefined;
+}
+
+/** An output, found in the snapshot. */
+export interface OutputFile {
+  /** From the top of the repository. */
+  readonly path: string;
+  readonly sha256: string;
+  readonly layout: SeriesLayout;
+}
+
+/** Where an output lies and what it is; undefined where nothing is named, or its content is not here. */
+export async function findOutput(
+  output: Output,
+  { manifest }: Pick<Records, 'manifest'>,
+  snapshot: Snapshot,
+): Promise<Statistic<OutputFile>> {
+  if (output.file === undefined) return undefinedBecause('no file is named');
+  const place = resolvePattern(manifest.folder, output.file);
+  if (place === null) return undefinedBecause(`${output.file} lies outside the repository`);
+  const path = place.root + place.rest;
+  const identity = (await snapshot.identify([path])).get(path);
+  const sha256 = identity === undefined || !isContentHere(identity) ? null : sha256Of(identity);
+  if (sha256 === null) return undefinedBecause(`the content of ${path} is not here`);
+  return defined({ path, sha256, layout: layoutOf(output) });
+}
+
+/** The columns of an output, by name; in the step that is stated, or else the one that the times have. */
+export async function readOutput(
+  { path, layout }: OutputFile,
+  snapshot: Snapshot,
+): Promise<Statistic<ReadonlyMap<string, Series>>> {
+  const table = await seriesOfFile(path, layout, snapshot);
+  if (table === null) return undefinedBecause(`the content of ${path} is not here`);
+  if (table.columns.length === 0) {
+    const [problem] = table.problems.first;
+    return undefinedBecause(
+      problem === undefined
+        ? `${path} can't be read as a series`
+        : `${path}: expected ${problem.expected}, found ${problem.found}`,
+    );
+  }
+  return defined(
+    new Map(
+      table.columns.map(({ name }, place) => {
+        const series = columnOf(table, place + 1);
+        return [name, layout.step === undefined ? withStep(series) : series];
+      }),
+    ),
+  );
+}
+
+/** The one series of an output; undefined where it names several columns. */
+export async function readOutputSeries(file: OutputFile, snapshot: Snapshot): Promise<Statistic<Series>> {
+  const columns = await readOutput(file, snapshot);
+  if (!isDefined(columns)) return columns;
+  const [series, ...more] = columns.value.values();
+  return series === undefined || more.length > 0
+    ? undefinedBecause(`${file.path} has several columns there, where one series is compared`)
+    : defined(series);
+}
