@@ -126,7 +126,7 @@ export function contentOf(
     },
     async read(path, limit) {
       const blob = await openPath(path);
-      return typeof blob === 'string' ? null : wholeWithin(blob, limit, path);
+      return typeof blob === 'string' ? null : wholeWithin(blob, path, limit);
     },
     async *stream(path) {
       const blob = await openPath(path);
@@ -139,7 +139,7 @@ export function contentOf(
     },
     async readBlob(id, limit) {
       const blob = await open(id);
-      return blob && wholeWithin(blob, limit, `object ${id}`);
+      return blob && wholeWithin(blob, `object ${id}`, limit);
     },
   };
 }
@@ -162,7 +162,7 @@ async function digestOf(blob: FoundBlob): Promise<BlobDigest> {
   };
 }
 
-function wholeWithin(blob: FoundBlob, limit = defaultLimitBytes, name: string): Promise<Uint8Array> {
+function wholeWithin(blob: FoundBlob, name: string, limit = defaultLimitBytes): Promise<Uint8Array> {
   if (blob.bytes <= limit) return blob.whole();
   throw new Failure(
     'unreadable-file',

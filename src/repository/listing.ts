@@ -1,8 +1,10 @@
 import { Failure } from '../failure.ts';
 import { ask, type Place, type Question } from './git.ts';
-import { namesFromOutput } from './names.ts';
+import { namesFromOutput, splitAtNul } from './names.ts';
 import { type ObjectFormat, objectId } from './object-id.ts';
 import type { Entry, Mode } from './snapshot.ts';
+
+const slash = 0x2f;
 
 /** What a tree or an index holds. */
 export interface Listing {
@@ -53,10 +55,10 @@ export function committablePaths(format: ObjectFormat): Question<Set<string>> {
   };
 }
 
-/** Files on disk that git neither tracks nor ignores. */
-export const untrackedFiles: Question<Buffer> = {
+/** Names of files on disk that git neither tracks nor ignores. A repository inside comes as a folder, and is left out. */
+export const untrackedFiles: Question<Buffer[]> = {
   args: ['ls-files', '--others', '--exclude-standard', '-z'],
-  parse: (output) => output,
+  parse: (output) => splitAtNul(output).filter((name) => name.at(-1) !== slash),
 };
 
 /** Lists the index that the place's environment names. */
@@ -77,12 +79,8 @@ export async function listIndex(place: Place, format: ObjectFormat): Promise<Lis
 }
 
 /** Lists the tree of a commit. */
-export async function listCommit(
-  place: Place,
-  commit: string,
-  paths: readonly string[] = [],
-): Promise<Listing> {
-  return { entries: byPath(await ask(place, treeEntries(commit, paths))), unmerged: [], intentToAdd: [] };
+export async function listCommit(place: Place, commit: string): Promise<Listing> {
+  return { entries: byPath(await ask(place, treeEntries(commit))), unmerged: [], intentToAdd: [] };
 }
 
 /** Entries by path, in code-unit order, which is not git's order for characters beyond the basic plane. */

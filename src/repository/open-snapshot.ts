@@ -5,8 +5,8 @@ import { forgetfulMemory, openDigestMemory } from './digest-memory.ts';
 import { ask, type Place } from './git.ts';
 import { gitBlobs } from './git-blobs.ts';
 import { largeFilesIn } from './large-files.ts';
-import { type Listing, listCommit, listIndex, untrackedFiles } from './listing.ts';
-import { namesFromOutput } from './names.ts';
+import { byPath, type Listing, listCommit, listIndex, treeEntries, untrackedFiles } from './listing.ts';
+import { nameFromBytes } from './names.ts';
 import { commitOf, type Repository } from './repository.ts';
 import type { At, Snapshot } from './snapshot.ts';
 import { forgetfulValues, openValueMemory } from './value-memory.ts';
@@ -52,7 +52,10 @@ export async function openSnapshot(
       async readBefore(path: string) {
         const { commit } = state;
         const before = at.kind === 'revision' ? await ask(repository, commitOf(`${commit}^1`)) : commit;
-        return before === null ? null : contentIn(await listCommit(repository, before, [path])).read(path);
+        if (before === null) return null;
+        // A clone may lack the trees of older commits; then nothing is known of before.
+        const found = await ask(repository, { ...treeEntries(before, [path]), statuses: [128] });
+        return contentIn({ entries: byPath(found), unmerged: [], intentToAdd: [] }).read(path);
       },
       remember: values.remember,
       async close() {
@@ -93,7 +96,7 @@ async function stateOf(
     stored,
     stored.then((place) => listIndex(place, repository.objectFormat)),
     ask(repository, commitOf('HEAD')),
-    onDisk.then(namesFromOutput),
+    onDisk.then((names) => names.map(nameFromBytes)),
   ]);
   return {
     label: at.kind === 'index' ? 'staged for commit' : 'work tree',

@@ -2,7 +2,6 @@ import { copyFile, stat, utimes } from 'node:fs/promises';
 import { basename, join } from 'node:path';
 import { type Aside, writingAside } from './aside.ts';
 import { ask, type Place, type Question } from './git.ts';
-import { splitAtNul } from './names.ts';
 import type { Repository } from './repository.ts';
 
 // The user's post-index-change hook is not ours to run, a split index would be written beside the user's,
@@ -25,13 +24,14 @@ function addPaths(paths: readonly Buffer[]): Question<void> {
 
 /**
  * Does what `git add` would do with the work tree, filters included, into an index and an object folder of
- * ours, and answers where git sees that index. Nothing of the user's is touched. `untracked` is git's
- * NUL-separated list; of it, files with one of the `alsoUntracked` names are added.
+ * ours, and answers where git sees that index. Nothing of the user's is touched, but a filter of the user's
+ * may write: Git LFS keeps the content of an edited file as it would for `git add`. Of the `untracked`
+ * files those with one of the `alsoUntracked` names are added.
  */
 export async function storeWorkTree(
   repository: Repository,
   folder: Aside,
-  untracked: Promise<Buffer>,
+  untracked: Promise<readonly Buffer[]>,
   alsoUntracked: readonly string[],
 ): Promise<Place & { readonly objectsFolder: string }> {
   const indexFile = join(folder.folder, 'index');
@@ -39,9 +39,7 @@ export async function storeWorkTree(
   const writing = await writingAside(folder, repository);
   const place = { ...writing, environment: { ...writing.environment, GIT_INDEX_FILE: indexFile } };
   await ask(place, addTracked);
-  const added = splitAtNul(await untracked).filter((path) =>
-    alsoUntracked.includes(basename(path.toString('latin1'))),
-  );
+  const added = (await untracked).filter((path) => alsoUntracked.includes(basename(path.toString('latin1'))));
   if (added.length > 0) await ask(place, addPaths(added));
   return place;
 }

@@ -80,6 +80,29 @@ describe('a partial clone', () => {
   );
 });
 
+describe('a clone without older trees', () => {
+  it('knows nothing of before', async () => {
+    source = await temporaryRepository({ 'a.csv': 'a1\n' });
+    await source.write('a.csv', 'a2\n');
+    await source.git('commit', '--quiet', '-a', '-m', 'second');
+    await source.git('config', 'uploadpack.allowFilter', 'true');
+    await gitIn(folder)(
+      'clone',
+      '--quiet',
+      '--no-local',
+      '--filter=tree:0',
+      `file://${source.folder}`,
+      'clone',
+    );
+    expect(
+      await inSnapshot(surroundings(), head, async (snapshot) => [
+        await textOf(snapshot, 'a.csv'),
+        await snapshot.readBefore('a.csv'),
+      ]),
+    ).toEqual(['a2\n', null]);
+  });
+});
+
 describe('a shallow clone', () => {
   it('has the newest state and says that older ones are not there', async () => {
     source = await temporaryRepository({ 'a.csv': 'a1\n' });

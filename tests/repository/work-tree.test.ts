@@ -155,6 +155,8 @@ describe('untracked files', () => {
     await repository.write('stoplog.yaml', 'stoplog: 1\n');
     await repository.write('models/odd name/stoplog.yaml', 'stoplog: 1\n');
     await repository.write('models/my-stoplog.yaml', 'stoplog: 1\n');
+    await repository.git('init', '--quiet', 'inside/stoplog.yaml');
+    await repository.write('inside/stoplog.yaml/x.csv', '1\n');
     const state = await open(async (snapshot) => ({
       untracked: snapshot.untracked,
       added: [...snapshot.entries.keys()].filter((path) => path.endsWith('stoplog.yaml')),
