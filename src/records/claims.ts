@@ -40,15 +40,19 @@ export async function claimFiles(
   for (const { record, file } of named) {
     const place = resolvePattern(folder, file.pattern);
     const matches = find(file.pattern);
-    if (place === null || matches === null) miss(record, file, 'outside-repository');
-    else if (file.stated !== undefined) {
-      const { sha256, bytes, location } = file.stated;
-      const path = place.root + place.rest;
+    if (place === null || matches === null) {
+      miss(record, file, 'outside-repository');
+      continue;
+    }
+    const path = place.root + place.rest;
+    if (file.use === 'elsewhere' && (file.stated !== undefined || matches.length === 0)) {
+      const { sha256, bytes, location } = file.stated ?? {};
       const all = elsewhere.get(record) ?? [];
       elsewhere.set(record, [...all, { path, sha256, bytes, location, field: file.field }]);
+      continue;
     }
     // A path that is no entry may still lead somewhere through a link to a folder.
-    else found.push({ record, file, paths: matches.length > 0 ? matches : [place.root + place.rest] });
+    found.push({ record, file, paths: matches.length > 0 ? matches : [path] });
   }
 
   const identities = await snapshot.identify(new Set(found.flatMap((one) => one.paths)));
@@ -64,12 +68,12 @@ export async function claimFiles(
     const isKnownElsewhere = file.use !== 'read' && some.every((path) => awayPaths.has(path));
     if (inside.length < some.length) miss(record, file, 'outside-repository');
     else if (here.length === 0 && !isKnownElsewhere) miss(record, file, 'no-match');
-    if (file.use === 'own') for (const path of here) owned.add(`${record}\0${path}`);
+    if (isHome(file)) for (const path of here) owned.add(`${record}\0${path}`);
     return { record, file, paths: here };
   });
   for (const { record, file, paths: some } of kept) {
     if (file.use === 'seen') continue;
-    const own = file.use === 'own';
+    const own = isHome(file);
     const byPath = claims.get(record) ?? new Map<string, Claim>();
     claims.set(record, byPath);
     for (const path of some) {
@@ -85,6 +89,11 @@ export async function claimFiles(
     unmatched,
     named: new Set([...kept.flatMap((one) => one.paths), ...awayPaths]),
   };
+}
+
+/** A record is the home of its own files, also where most of them are kept elsewhere and this one is in git. */
+function isHome({ use }: NamedFile): boolean {
+  return use === 'own' || use === 'elsewhere';
 }
 
 function sorted(claims: ReadonlyMap<string, Claim>): ReadonlyMap<string, Claim> {

@@ -1,4 +1,5 @@
 import { holderOf } from './field.ts';
+import { linkRecords } from './link.ts';
 import type { RecordNode, Records } from './record.ts';
 import {
   fallenAcceptance,
@@ -12,8 +13,7 @@ import {
 import { schemes as known, newest, type Schemes } from './schemes.ts';
 import { grades, type Seal, type SealsFile, type Standing } from './seal.ts';
 import { withChecksum } from './seal-entry.ts';
-import { sealedContent } from './sealed-content.ts';
-import { linkerOf } from './standing.ts';
+import { type SealedContent, sealedContent } from './sealed-content.ts';
 import { unmovedBelow } from './unmoved.ts';
 
 /** What was computed about a record, and how far that proves it. */
@@ -65,11 +65,10 @@ export interface SealPlan {
  */
 export function makeSeals(request: SealRequest, schemes: Schemes = known): SealPlan {
   const { records, sealsFile, standings, wanted } = request;
-  const { folder } = records.manifest;
   const unreadable = unreadableSeals(sealsFile);
   if (unreadable !== null) return { seals: sealsFile.seals, sealed: [], refused: [unreadable], dropped: [] };
 
-  const linkedBy = linkerOf(records, schemes);
+  const linked = linkRecords(newest(schemes), records.manifest, records.nodes);
   const { asked, refused } = askedRecords(wanted, records);
   const needed = withAllBelow(asked, records);
   const seals = new Map(sealsFile.seals);
@@ -82,9 +81,12 @@ export function makeSeals(request: SealRequest, schemes: Schemes = known): SealP
     const fits = standing.state === 'sealed';
     if (fits && (along || isUpToDate(record, standing, evidence))) continue;
 
-    const content = sealedContent(record, linkedBy(newest(schemes).number), folder);
+    const content = sealedContent(record, linked, records);
     const before = standing.seal;
-    const proof = fits && before !== null ? keptProof(before, evidence) : newProof(record, before, evidence);
+    const proof =
+      fits && before !== null
+        ? keptProof(before, evidence)
+        : newProof(content, before, evidence, request.because);
     const below = refused.size > 0 ? record.restsOn.find((one) => refused.has(one)) : undefined;
     const refusal =
       faultOf(record, records) ??
@@ -108,23 +110,20 @@ export function makeSeals(request: SealRequest, schemes: Schemes = known): SealP
     record === null || seals.has(record) ? [] : [record],
   );
   return { seals, sealed, refused: [...refused.values()], dropped: [...orphans, ...lost] };
-
-  function newProof(record: RecordNode, before: Seal | null, evidence: Evidence | undefined): Proof {
-    const { facts = {}, grade = 'sealed' } = evidence ?? {};
-    const unmoved =
-      before === null
-        ? []
-        : unmovedBelow(record.area, before, sealedContent(record, linkedBy(before.scheme), folder));
-    return {
-      facts,
-      grade,
-      unmoved,
-      because: unmoved.length > 0 && grade !== 'rerun' ? request.because : null,
-    };
-  }
 }
 
 type Proof = Pick<Seal, 'facts' | 'grade' | 'unmoved' | 'because'>;
+
+/** The content is new: what was known of it before counts no more. */
+function newProof(
+  content: SealedContent,
+  before: Seal | null,
+  { facts, grade }: Evidence = { facts: {}, grade: 'sealed' },
+  because: string | null,
+): Proof {
+  const unmoved = before === null ? [] : unmovedBelow(before, content);
+  return { facts, grade, unmoved, because: unmoved.length > 0 && grade !== 'rerun' ? because : null };
+}
 
 /** The content is what it was: what was known of it still holds, and may have grown. */
 function keptProof(before: Seal, evidence: Evidence | undefined): Proof {

@@ -11,12 +11,12 @@ export interface NamedFile {
   /**
    * `own`: the record is its home. `read`: the record depends on its content. `given`: the record reads what a run
    * gives, so where the run owns the file, the run's digest speaks for it. `seen`: the file is looked at anew in every
-   * check (a reading, a list of entries), so no digest needs it. `elsewhere`: not in git.
+   * check (a reading, a list of entries), so no digest needs it. `elsewhere`: its own, but not in git.
    */
   readonly use: 'own' | 'read' | 'given' | 'seen' | 'elsewhere';
   /** For `given`: the record id of the run, where one is named. */
   readonly run?: string;
-  /** For `elsewhere`: all that is stated of it. */
+  /** For `elsewhere`: what is stated of it, where more than a path. */
   readonly stated?: Exclude<StatedFile, string>;
 }
 
@@ -107,11 +107,10 @@ function listed(
 ): readonly NamedFile[] {
   if (typeof value === 'string') return [{ pattern: value, field, use }];
   return (value ?? []).map((file, index) => {
-    const stated = typeof file === 'string' ? { path: file } : file;
-    const place = { pattern: stated.path, field: [...field, index] };
-    return stated === file || use === 'elsewhere'
-      ? { ...place, use: 'elsewhere', stated }
-      : { ...place, use };
+    const place = [...field, index];
+    return typeof file === 'string'
+      ? { pattern: file, field: place, use }
+      : { pattern: file.path, field: place, use: 'elsewhere', stated: file };
   });
 }
 

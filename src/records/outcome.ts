@@ -1,24 +1,62 @@
 import { sha256OfJson } from './canonical.ts';
-import { type RecordNode, sha256Of } from './record.ts';
+import type { Linked } from './link.ts';
+import { fromFolder } from './paths.ts';
+import { type RecordNode, type Records, sha256Of } from './record.ts';
+import type { Seal } from './seal.ts';
+
+/** What a run or parameters bring forth, and what that came from. */
+export type Outcome = Pick<Seal, 'outcome' | 'driven_by'>;
 
 /**
- * Digest of what a record itself brings forth: the outputs of a run, the values of parameters. Null for other
- * records, and where nothing is brought forth yet. When what lies below changes, this should move; when files are only
- * called otherwise, it should not.
+ * The outcome of a record and what drives it, as a seal keeps them: of a run all that it rests on and the files that
+ * it takes, of parameters the data and the window of the calibration. None for other records.
  */
-export function outcomeOf(record: RecordNode): string | null {
-  if (record.area !== 'runs' && record.area !== 'parameters') return null;
-  const isOutcome = ({ field }: { readonly field: RecordNode['field'] }): boolean =>
-    field[record.field.length] === (record.area === 'runs' ? 'gives' : 'table');
-  const claimed = [...record.claims.values()].filter(isOutcome).map(({ identity }) => sha256Of(identity));
-  const elsewhere = record.elsewhere.filter(isOutcome).map(({ sha256 = null }) => sha256);
-  const files = [...claimed, ...elsewhere].map(String).sort();
-  const values = valuesOf(record);
-  return values.length + files.length === 0 ? null : sha256OfJson({ files, values });
+export function outcomeOf(record: RecordNode, { nodes, manifest }: Records, linked: Linked): Outcome {
+  if (record.area !== 'runs' && record.area !== 'parameters') return { outcome: null, driven_by: {} };
+  const below = linked.restsOn.get(record.id) ?? [];
+  const drives =
+    record.area === 'runs' ? below : below.filter((id) => /^inputs\.|periods\.calibration$/.test(id));
+  const taken = [...record.claims.values()].filter(({ own }) => record.area === 'runs' && !own);
+  return {
+    outcome: productOf(record),
+    driven_by: Object.fromEntries([
+      ...drives.map((id) => {
+        const node = nodes.get(id);
+        return [id, node === undefined ? (linked.digests.get(id) ?? null) : effectOf(node)];
+      }),
+      ...taken.map(({ path, identity }) => [fromFolder(manifest.folder, path), sha256Of(identity)]),
+    ]),
+  };
 }
 
-function valuesOf({ area, fragment }: RecordNode): readonly unknown[] {
-  if (area !== 'parameters') return [];
-  const { values = [] } = fragment as RecordNode<'parameters'>['fragment'];
+/** What of a record can move an outcome: what it brings forth, else all that it states. */
+function effectOf(record: RecordNode): string {
+  const files = [...record.claims.values()].map(({ identity }) => sha256Of(identity));
+  return productOf(record) ?? sha256OfJson({ substance: record.substance, files });
+}
+
+/** Where the product of a record is named. An input's statement may change and its data not; then nothing need move. */
+const productKeys: Readonly<Record<string, string>> = {
+  inputs: 'files',
+  model: 'executable',
+  parameters: 'table',
+  runs: 'gives',
+};
+
+/** Digest of the files, by content, and the values that a record brings forth; null where there are none. */
+function productOf({ area, field, fragment, claims, elsewhere }: RecordNode): string | null {
+  const isProduct = (named: { readonly field: RecordNode['field'] }): boolean =>
+    named.field[field.length] === productKeys[area];
+  const files = [
+    ...[...claims.values()].filter(isProduct).map(({ identity }) => sha256Of(identity)),
+    ...elsewhere.filter(isProduct).map(({ sha256 = null }) => sha256),
+  ];
+  const values = area === 'parameters' ? valuesOf(fragment as RecordNode<'parameters'>['fragment']) : [];
+  return files.length + values.length === 0
+    ? null
+    : sha256OfJson({ files: files.map(String).sort(), values });
+}
+
+function valuesOf({ values = [] }: RecordNode<'parameters'>['fragment']): readonly unknown[] {
   return values.map(({ name, value, by }) => ({ name, value, by }));
 }

@@ -48,6 +48,7 @@ const fields: Readonly<Record<keyof Seal, Check>> = {
   rests_on: mapOf(isDigest),
   digest: isDigest,
   outcome: orNull(isDigest),
+  driven_by: mapOf(orNull(isDigest)),
   unmoved: listOf(isText),
   facts: mapOf(
     having({ value: (value) => isText(value) || Number.isFinite(value), computed_by: Number.isFinite }),

@@ -26,7 +26,12 @@ export interface Seal {
   readonly digest: string;
   /** SHA-256 of what the record itself brings forth: a run's outputs, the values of parameters; null for all others. */
   readonly outcome: string | null;
-  /** Record ids, field addresses and paths below that had changed since the seal before while the outcome had not. */
+  /**
+   * What the outcome came from: record id, field address or path -> SHA-256 of what of it can move the outcome (an input's
+   * data, a model's executables, the values of parameters, else all that is stated); null where it could not be verified.
+   */
+  readonly driven_by: Readonly<Record<string, string | null>>;
+  /** What of these had changed since the seal before while the outcome had not. */
   readonly unmoved: readonly string[];
   /** Figures as they were computed when sealed, with the version of each computation. */
   readonly facts: Readonly<Record<string, { readonly value: number | string; readonly computed_by: number }>>;

@@ -3,17 +3,18 @@ import { digestOf } from './digest.ts';
 import { type Linked, sha256ByPath } from './link.ts';
 import { outcomeOf } from './outcome.ts';
 import { fromFolder } from './paths.ts';
-import type { RecordNode } from './record.ts';
+import type { RecordNode, Records } from './record.ts';
 import type { Seal, SealedFile } from './seal.ts';
 
 /** What a seal keeps of a record's content: all but who looked at it, when, and how far it was proven. */
 export type SealedContent = Pick<
   Seal,
-  'scheme' | 'substance' | 'wording' | 'accepts' | 'files' | 'rests_on' | 'digest' | 'outcome'
+  'scheme' | 'substance' | 'wording' | 'accepts' | 'files' | 'rests_on' | 'digest' | 'outcome' | 'driven_by'
 >;
 
 /** The content of a record now, as a seal keeps it; `linked` is by the scheme of the seal. */
-export function sealedContent(record: RecordNode, linked: Linked, folder: string): SealedContent {
+export function sealedContent(record: RecordNode, linked: Linked, records: Records): SealedContent {
+  const { folder } = records.manifest;
   const { substance, wording, accepts, claims } = record;
   const { scheme } = linked;
   const below = linked.restsOn.get(record.id) ?? [];
@@ -29,7 +30,7 @@ export function sealedContent(record: RecordNode, linked: Linked, folder: string
     files: Object.fromEntries(files),
     rests_on,
     digest: digestOf({ scheme, substance, files: sha256ByPath(claims, folder), rests_on }),
-    outcome: outcomeOf(record),
+    ...outcomeOf(record, records, linked),
   };
 }
 

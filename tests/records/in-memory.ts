@@ -1,3 +1,5 @@
+import type { ManifestData } from '../../src/manifest/data.generated.ts';
+import type { Manifest } from '../../src/manifest/manifest.ts';
 import { readManifest } from '../../src/manifest/read.ts';
 import { buildRecords } from '../../src/records/build.ts';
 import { makeSeals, type SealRequest } from '../../src/records/make-seals.ts';
@@ -16,6 +18,17 @@ export async function recordsOf(
   const { manifest, problems } = readManifest(path, text);
   if (manifest === null) throw new Error(JSON.stringify(problems, null, 2));
   return buildRecords(manifest, snapshotFromMemory({ [path]: text, ...files }), schemes);
+}
+
+/** The same for a manifest given as data: quicker, for tests with many manifests. */
+export function recordsFromData(
+  data: ManifestData,
+  files: FilesInMemory,
+  schemes: Schemes = known,
+): Promise<Records> {
+  const nowhere = { position: () => ({ line: 1, column: 1 }), source: () => null };
+  const manifest: Manifest = { path: 'stoplog.yaml', folder: '', text: '', data, ...nowhere };
+  return buildRecords(manifest, snapshotFromMemory(files), schemes);
 }
 
 export function sealsFileOf(seals: ReadonlyMap<string, Seal>): SealsFile {
