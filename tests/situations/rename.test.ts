@@ -1,0 +1,29 @@
+import { mkdir } from 'node:fs/promises';
+import { join } from 'node:path';
+import { afterEach, describe, expect, it } from 'vitest';
+import type { Seal } from '../../src/records/seal.ts';
+import { check, stoplog } from '../harness/command.ts';
+import { type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
+
+let project: SoundRepository;
+afterEach(() => project.remove());
+
+describe('a file is renamed, its bytes are the same', () => {
+  it('is followed by `seal --moved`, with the person and the date of the seal', async () => {
+    project = await soundRepository();
+    await mkdir(join(project.folder, 'data/gauges'));
+    await project.git('mv', 'data/rain.csv', 'data/gauges/rain.csv');
+    await project.edit('stoplog.yaml', (text) => text.replaceAll('data/rain.csv', 'data/gauges/rain.csv'));
+    expect((await check(project.folder)).state('inputs.rainfall')).toBe('stale');
+
+    const moved = await stoplog(project.folder, ['seal', '--moved'], '2021-04-01');
+    expect(moved.text).toContain('data/rain.csv -> data/gauges/rain.csv');
+    const { records } = JSON.parse(await project.read('stoplog.seals.json')) as {
+      records: Record<string, Seal>;
+    };
+    expect(records['inputs.rainfall']?.sealed_on).toBe('2021-02-01');
+    expect(Object.keys(records['inputs.rainfall']?.files ?? {})).toContain('data/gauges/rain.csv');
+    expect(records['runs.calibrated']?.sealed_on).toBe('2021-02-01');
+    expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+  });
+});
