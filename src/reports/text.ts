@@ -104,8 +104,8 @@ function findingLines(finding: Finding, placeOfRecord: string, paint: ChalkInsta
 }
 
 function comparison({ stated, found, unit }: Finding): readonly string[] {
-  if (stated === null && found === null) return [];
-  const shown = (value: string | number | null) => (value === null ? 'nothing' : plain(String(value)));
+  if (stated === null || found === null) return [];
+  const shown = (value: string | number) => plain(String(value));
   return [`${indent}stated ${shown(stated)}, found ${shown(found)}${unit === null ? '' : ` ${plain(unit)}`}`];
 }
 

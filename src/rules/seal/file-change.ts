@@ -4,7 +4,7 @@ import type { Change } from '../../records/seal.ts';
 import type { SeriesDifference } from '../../series/difference.ts';
 import { figure } from '../figures.ts';
 
-type FileChange = Extract<Change, { kind: 'file' }>;
+export type FileChange = Extract<Change, { kind: 'file' }>;
 
 /** What changed in a file in the data's own terms, as one line; none where nothing can be said. */
 export function fileChange(

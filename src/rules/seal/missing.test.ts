@@ -38,6 +38,11 @@ ruleCases(sealMissing, {
   ],
   silent: [
     {
+      name: 'a seal that can’t be read, of which seal.unreadable tells',
+      byHand: (seals) => seals.replace('Test Reviewer', 'Somebody Else'),
+    },
+    { name: 'no seal can be read', byHand: (seals) => seals.slice(0, 400) },
+    {
       name: 'stale, of which seal.stale tells',
       seals: 'sound',
       set: { 'catchment.name': 'Harrow Brook at Low Bridge' },

@@ -14,15 +14,16 @@ export const sealMissing = rule({
     citation: 'Our own choice: a record counts once a named person has reviewed it.',
   },
   clear: 'Look at the record and its files, then: stoplog seal RECORD',
-  check: (_, { records, standings }) =>
-    [...records.nodes.values()].flatMap(({ id, area }) =>
-      standings.get(id)?.state !== 'unsealed'
-        ? []
-        : {
-            record: id,
-            ...fromPhase(area),
-            message: 'Nobody has sealed this record yet: no named person has looked at it and its files.',
-            clear: `Look at the record and its files, then: stoplog seal ${id}`,
-          },
-    ),
+  check(_, { records, standings, sealsFile }) {
+    const unreadable = new Set(sealsFile.faults.map(({ record }) => record));
+    if (unreadable.has(null)) return [];
+    return [...records.nodes.values()]
+      .filter(({ id }) => standings.get(id)?.state === 'unsealed' && !unreadable.has(id))
+      .map(({ id, area }) => ({
+        record: id,
+        ...fromPhase(area),
+        message: 'Nobody has sealed this record yet: no named person has looked at it and its files.',
+        clear: `Look at the record and its files, then: stoplog seal ${id}`,
+      }));
+  },
 });

@@ -43,7 +43,7 @@ ruleCases(sealStale, {
         { record: 'runs.dry', trail: ['runs.dry', 'parameters', 'inputs.rainfall', 'data/rain.csv'] },
         {
           record: 'evaluation.outlet-flow',
-          message: 'since then',
+          message: 'What this rests on has changed since it was sealed on 2021-02-01.',
           clear: '--figures evaluation.outlet-flow',
         },
         { record: 'balance.catchment' },
@@ -97,10 +97,32 @@ ruleCases(sealStale, {
       finds: { record: 'catchment', message: 'What this record states was changed', trail: ['catchment'] },
     },
     {
-      name: 'a file gone, one new',
+      name: 'a file gone, one changed, one new',
       seals: 'sound',
-      set: { 'study.files': ['model/model.mjs'] },
-      finds: { record: 'study', message: 'model/model.mjs was not there when this was sealed' },
+      files: { 'calibration/sensitivity.csv': null, 'model/new.txt': 'x' },
+      set: { 'parameters.files': ['model/new.txt'] },
+      finds: [
+        {
+          record: 'parameters',
+          message:
+            'What this record states was changed since it was sealed on 2021-02-01. calibration/sensitivity.csv is gone since this was sealed on 2021-02-01. model/new.txt was not there when this was sealed on 2021-02-01.',
+        },
+        ...Array(7).fill({}),
+      ],
+    },
+    {
+      name: 'content that is not here',
+      seals: 'sound',
+      files: { 'model/pond.txt': { link: 'gone.txt' } },
+      finds: [
+        { record: 'runs.calibrated', level: 'block' },
+        { record: 'runs.dry' },
+        {},
+        {},
+        { record: 'interventions', message: 'model/pond.txt can’t be read here' },
+        {},
+        {},
+      ],
     },
     {
       name: 'a script that is no series',

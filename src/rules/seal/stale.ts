@@ -3,7 +3,7 @@ import type { RecordNode } from '../../records/record.ts';
 import type { Change, Seal, Standing } from '../../records/seal.ts';
 import { few } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
-import { fileChange } from './file-change.ts';
+import { type FileChange, fileChange } from './file-change.ts';
 import { fromPhase } from './required.ts';
 
 export const sealStale = rule({
@@ -31,7 +31,10 @@ function stale(record: RecordNode, { changes, trails }: Standing, seal: Seal, fa
   return {
     record: record.id,
     ...fromPhase(record.area),
-    message: own.length > 0 ? ownChange(own, seal) : inherited(changes, seal),
+    message:
+      own.length > 0
+        ? ownChange(own, seal)
+        : `What this rests on has changed since it was sealed on ${seal.sealed_on}.`,
     ...(first === undefined ? {} : { trail: first }),
     detail: [
       ...files.slice(0, shownAtMost).flatMap((change) => fileChange(change, files.length > 1, record, facts)),
@@ -47,33 +50,31 @@ function stale(record: RecordNode, { changes, trails }: Standing, seal: Seal, fa
 const shownAtMost = 5;
 
 function ownChange(own: readonly Change[], { sealed_on }: Seal): string {
-  const files = own.filter((change) => change.kind === 'file');
-  const named = (chosen: typeof files) => few(chosen.map(({ path }) => path));
-  const gone = files.filter(({ now }) => now === null);
-  const added = files.filter(({ was, now }) => was === null && now !== null);
-  const other = files.filter(({ was, now }) => was !== null && now !== null);
-  const are = (chosen: typeof files, one: string, several: string) => (chosen.length === 1 ? one : several);
+  const on = `sealed on ${sealed_on}`;
+  const say = (kind: ReturnType<typeof kindOf>, one: string, several: string): readonly string[] => {
+    const paths = own.flatMap((change) =>
+      change.kind === 'file' && kindOf(change) === kind ? change.path : [],
+    );
+    return paths.length === 0 ? [] : [`${few(paths)} ${paths.length === 1 ? one : several} ${on}.`];
+  };
+  const restated = own.some(({ kind }) => kind === 'substance');
   return [
-    own.some(({ kind }) => kind === 'substance')
-      ? `What this record states was changed since it was sealed on ${sealed_on}.`
-      : '',
-    other.length > 0
-      ? `${named(other)} ${are(other, 'is not the file', 'are not the files')} that ${are(other, 'was', 'were')} sealed on ${sealed_on}.`
-      : '',
-    gone.length > 0
-      ? `${named(gone)}, sealed on ${sealed_on}, ${are(gone, 'is', 'are')} no longer there.`
-      : '',
-    added.length > 0
-      ? `${named(added)} ${are(added, 'was', 'were')} not there when this was sealed on ${sealed_on}.`
-      : '',
-  ]
-    .filter((sentence) => sentence !== '')
-    .join(' ');
+    ...(restated ? [`What this record states was changed since it was ${on}.`] : []),
+    ...say('changed', 'is not the file that was', 'are not the files that were'),
+    ...say('gone', 'is gone since this was', 'are gone since this was'),
+    ...say('added', 'was not there when this was', 'were not there when this was'),
+    ...say(
+      'unread',
+      'can’t be read here to compare it with what was',
+      'can’t be read here to compare them with what was',
+    ),
+  ].join(' ');
 }
 
-function inherited(changes: readonly Change[], { sealed_on }: Seal): string {
-  const ids = changes.flatMap((change) => (change.kind === 'rests-on' ? change.id : []));
-  return `This was sealed on ${sealed_on}; since then ${few(ids)} changed, on which it rests.`;
+function kindOf({ was, now }: FileChange): 'changed' | 'gone' | 'added' | 'unread' {
+  if (now === null) return 'gone';
+  if (was === null) return 'added';
+  return now.kind === 'unavailable' ? 'unread' : 'changed';
 }
 
 function nextStep({ id, area }: RecordNode, own: boolean): string {

@@ -20,6 +20,8 @@ export const sealUnreadable = rule({
       message,
       ...(kind === 'newer-scheme'
         ? { clear: 'Install the version of Stoplog that wrote it, or a newer one.' }
-        : {}),
+        : record === null
+          ? {}
+          : { clear: `Take the entry back from git, or look at the record and: stoplog seal ${record}` }),
     })),
 });
