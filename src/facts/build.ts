@@ -3,22 +3,27 @@ import { readSealsFile } from '../records/seals-file.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { differencesOf } from './differences.ts';
 import type { Facts } from './facts.ts';
+import { profilesOf } from './profiles.ts';
 import { takeReadings } from './readings.ts';
 import { scoresOf } from './scores.ts';
 
 /** What the rooms before this one, and the caller, give. */
 export interface Given
-  extends Omit<Facts, 'sealsBefore' | 'readings' | 'differences' | 'scores' | 'found' | 'record'> {
+  extends Omit<
+    Facts,
+    'sealsBefore' | 'readings' | 'differences' | 'profiles' | 'scores' | 'found' | 'record'
+  > {
   readonly snapshot: Snapshot;
 }
 
 /** Computes all that rules may ask about a manifest; reads only files that a rule needs. */
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
   const { records, standings, sealsFile } = given;
-  const [sealsBefore, readings, differences, scores] = await Promise.all([
+  const [sealsBefore, readings, differences, profiles, scores] = await Promise.all([
     sealsOfBefore(sealsFile, snapshot),
     takeReadings(records, snapshot),
     differencesOf(records, standings, snapshot),
+    profilesOf(records, snapshot),
     scoresOf(records, snapshot),
   ]);
   return Object.freeze({
@@ -26,6 +31,7 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
     sealsBefore,
     readings,
     differences,
+    profiles,
     scores,
     found: [],
     record: (id: string) => records.nodes.get(id),

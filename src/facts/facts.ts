@@ -2,6 +2,7 @@ import type { Manifest } from '../manifest/manifest.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Seal, SealsFile, Standing } from '../records/seal.ts';
 import type { SeriesDifference } from '../series/difference.ts';
+import type { InputProfile } from './profiles.ts';
 import type { Reading } from './readings.ts';
 import type { TargetFigures } from './scores.ts';
 
@@ -39,6 +40,8 @@ export interface Facts {
   readonly readings: readonly Reading[];
   /** For each changed file of a stale record that reads as a series: what changed, in the data's own terms. */
   readonly differences: ReadonlyMap<string, SeriesDifference>;
+  /** By the name of the input: what its series' files hold. */
+  readonly profiles: ReadonlyMap<string, InputProfile>;
   /** By the name of the evaluation target: what its files give, and what is stated. */
   readonly scores: ReadonlyMap<string, TargetFigures>;
   /** Findings of the first pass; empty during it. */
