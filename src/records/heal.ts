@@ -4,7 +4,7 @@ import { schemes as known, newest, type Schemes } from './schemes.ts';
 import { grades, type Seal, type SealsFault } from './seal.ts';
 import { withChecksum } from './seal-entry.ts';
 import { readSealsFile } from './seals-file.ts';
-import { linkerOf } from './standing.ts';
+import { linksOf } from './standing.ts';
 
 type Side = keyof Versions;
 
@@ -39,11 +39,11 @@ export function healSeals(versions: Versions, records: Records, schemes: Schemes
     return file.seals;
   };
   const [base, ours, theirs] = [read('base'), read('ours'), read('theirs')];
-  const linkedBy = linkerOf(records, schemes);
+  const linksBy = linksOf(records, schemes);
   const seals = new Map<string, Seal>();
   const healed: HealedRecord[] = [];
   for (const record of [...new Set([...ours.keys(), ...theirs.keys()])].sort()) {
-    const fits = (seal: Seal): boolean => linkedBy(seal.scheme).digests.get(record) === seal.digest;
+    const fits = (seal: Seal): boolean => linksBy(seal.scheme).digests.get(record) === seal.digest;
     const chosen = choose(base.get(record), ours.get(record), theirs.get(record), fits);
     if (chosen === null) continue;
     const { kept, seal } = chosen;

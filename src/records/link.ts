@@ -14,15 +14,18 @@ import type { Statement } from './statements.ts';
 export type Unlinked = Omit<RecordNode, 'restsOn' | 'digest'>;
 
 /** What rests on what, and every digest, as one scheme has it. */
-export interface Linked {
+export interface Links {
   /** The scheme's number. */
   readonly scheme: number;
-  /** Record ids; what others rest on comes first. */
-  readonly order: readonly string[];
-  readonly circle: readonly string[] | null;
   readonly restsOn: ReadonlyMap<string, readonly string[]>;
   /** By record id and field address. Records in or above a circle have none. */
   readonly digests: ReadonlyMap<string, string>;
+}
+
+export interface Linked extends Links {
+  /** Record ids; what others rest on comes first. */
+  readonly order: readonly string[];
+  readonly circle: readonly string[] | null;
   /** References to nothing, with the record that makes them. */
   readonly unresolved: readonly { readonly record: string; readonly reference: Reference }[];
 }

@@ -1,5 +1,4 @@
 import { holderOf } from './field.ts';
-import { linkRecords } from './link.ts';
 import type { RecordNode, Records } from './record.ts';
 import {
   fallenAcceptance,
@@ -14,6 +13,7 @@ import { schemes as known, newest, type Schemes } from './schemes.ts';
 import { grades, type Seal, type SealsFile, type Standing } from './seal.ts';
 import { withChecksum } from './seal-entry.ts';
 import { type SealedContent, sealedContent } from './sealed-content.ts';
+import { linksOf } from './standing.ts';
 import { unmovedBelow } from './unmoved.ts';
 
 /** What was computed about a record, and how far that proves it. */
@@ -68,7 +68,7 @@ export function makeSeals(request: SealRequest, schemes: Schemes = known): SealP
   const unreadable = unreadableSeals(sealsFile);
   if (unreadable !== null) return { seals: sealsFile.seals, sealed: [], refused: [unreadable], dropped: [] };
 
-  const linked = linkRecords(newest(schemes), records.manifest, records.nodes);
+  const links = linksOf(records, schemes)(newest(schemes).number);
   const { asked, refused } = askedRecords(wanted, records);
   const needed = withAllBelow(asked, records);
   const seals = new Map(sealsFile.seals);
@@ -81,7 +81,7 @@ export function makeSeals(request: SealRequest, schemes: Schemes = known): SealP
     const fits = standing.state === 'sealed';
     if (fits && (along || isUpToDate(record, standing, evidence))) continue;
 
-    const content = sealedContent(record, linked, records);
+    const content = sealedContent(record, links, records);
     const before = standing.seal;
     const proof =
       fits && before !== null

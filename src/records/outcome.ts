@@ -1,5 +1,5 @@
 import { sha256OfJson } from './canonical.ts';
-import type { Linked } from './link.ts';
+import type { Links } from './link.ts';
 import { fromFolder } from './paths.ts';
 import { type RecordNode, type Records, sha256Of } from './record.ts';
 import type { Seal } from './seal.ts';
@@ -11,9 +11,9 @@ export type Outcome = Pick<Seal, 'outcome' | 'driven_by'>;
  * The outcome of a record and what drives it, as a seal keeps them: of a run all that it rests on and the files that
  * it takes, of parameters the data and the window of the calibration. None for other records.
  */
-export function outcomeOf(record: RecordNode, { nodes, manifest }: Records, linked: Linked): Outcome {
+export function outcomeOf(record: RecordNode, { nodes, manifest }: Records, links: Links): Outcome {
   if (record.area !== 'runs' && record.area !== 'parameters') return { outcome: null, driven_by: {} };
-  const below = linked.restsOn.get(record.id) ?? [];
+  const below = links.restsOn.get(record.id) ?? [];
   const drives =
     record.area === 'runs' ? below : below.filter((id) => /^inputs\.|periods\.calibration$/.test(id));
   const taken = [...record.claims.values()].filter(({ own }) => record.area === 'runs' && !own);
@@ -22,7 +22,7 @@ export function outcomeOf(record: RecordNode, { nodes, manifest }: Records, link
     driven_by: Object.fromEntries([
       ...drives.map((id) => {
         const node = nodes.get(id);
-        return [id, node === undefined ? (linked.digests.get(id) ?? null) : effectOf(node)];
+        return [id, node === undefined ? (links.digests.get(id) ?? null) : effectOf(node)];
       }),
       ...taken.map(({ path, identity }) => [fromFolder(manifest.folder, path), sha256Of(identity)]),
     ]),

@@ -1,6 +1,5 @@
 import type { FileIdentity } from '../repository/snapshot.ts';
-import { digestOf } from './digest.ts';
-import { type Linked, sha256ByPath } from './link.ts';
+import type { Links } from './link.ts';
 import { outcomeOf } from './outcome.ts';
 import { fromFolder } from './paths.ts';
 import type { RecordNode, Records } from './record.ts';
@@ -12,13 +11,13 @@ export type SealedContent = Pick<
   'scheme' | 'substance' | 'wording' | 'accepts' | 'files' | 'rests_on' | 'digest' | 'outcome' | 'driven_by'
 >;
 
-/** The content of a record now, as a seal keeps it; `linked` is by the scheme of the seal. */
-export function sealedContent(record: RecordNode, linked: Linked, records: Records): SealedContent {
+/** The content of a record now, as a seal keeps it; `links` is by the scheme of the seal. */
+export function sealedContent(record: RecordNode, links: Links, records: Records): SealedContent {
   const { folder } = records.manifest;
   const { substance, wording, accepts, claims } = record;
-  const { scheme } = linked;
-  const below = linked.restsOn.get(record.id) ?? [];
-  const rests_on = Object.fromEntries(below.map((id) => [id, linked.digests.get(id) ?? '']));
+  const { scheme } = links;
+  const below = links.restsOn.get(record.id) ?? [];
+  const rests_on = Object.fromEntries(below.map((id) => [id, links.digests.get(id) ?? '']));
   const files = [...claims.values()].map(
     ({ path, identity }) => [fromFolder(folder, path), sealedFile(identity)] as const,
   );
@@ -29,8 +28,8 @@ export function sealedContent(record: RecordNode, linked: Linked, records: Recor
     accepts,
     files: Object.fromEntries(files),
     rests_on,
-    digest: digestOf({ scheme, substance, files: sha256ByPath(claims, folder), rests_on }),
-    ...outcomeOf(record, records, linked),
+    digest: links.digests.get(record.id) ?? '',
+    ...outcomeOf(record, records, links),
   };
 }
 
