@@ -25,7 +25,7 @@ export async function writeFileSafely(path: string, content: string | Uint8Array
     }
     await rename(temporary, target);
   } catch (error) {
-    await rm(temporary, { force: true });
+    await rm(temporary, { force: true }).catch(() => {});
     const reason = error instanceof Error ? error.message : String(error);
     throw new Failure(
       'unwritable-file',

@@ -13,12 +13,17 @@ export interface Ran {
 /** The invented day on which the tests play. */
 export const someDay = '2021-03-01';
 
-/** Runs a command line in this process, in a folder, as a person would on that day. */
-export async function stoplog(folder: string, words: readonly string[], today = someDay): Promise<Ran> {
+/** Runs a command line in this process, in a folder, as a person would on that day; `more` are further variables. */
+export async function stoplog(
+  folder: string,
+  words: readonly string[],
+  today = someDay,
+  more: NodeJS.ProcessEnv = {},
+): Promise<Ran> {
   let text = '';
   const context = {
     cwd: folder,
-    environment: cleanEnvironment(),
+    environment: cleanEnvironment(more),
     today,
     color: false,
     write: (more: string) => {
