@@ -1,3 +1,4 @@
+import type { Records } from '../records/record.ts';
 import type { SealsFile } from '../records/seal.ts';
 import { readSealsFile } from '../records/seals-file.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
@@ -11,7 +12,7 @@ import { scoresOf } from './scores.ts';
 export interface Given
   extends Omit<
     Facts,
-    'sealsBefore' | 'readings' | 'differences' | 'profiles' | 'scores' | 'found' | 'record'
+    'sealsBefore' | 'beside' | 'readings' | 'differences' | 'profiles' | 'scores' | 'found' | 'record'
   > {
   readonly snapshot: Snapshot;
 }
@@ -19,8 +20,9 @@ export interface Given
 /** Computes all that rules may ask about a manifest; reads only files that a rule needs. */
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
   const { records, standings, sealsFile } = given;
-  const [sealsBefore, readings, differences, profiles, scores] = await Promise.all([
+  const [sealsBefore, beside, readings, differences, profiles, scores] = await Promise.all([
     sealsOfBefore(sealsFile, snapshot),
+    filesBeside(records, snapshot),
     takeReadings(records, snapshot),
     differencesOf(records, standings, snapshot),
     profilesOf(records, snapshot),
@@ -29,6 +31,7 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
   return Object.freeze({
     ...given,
     sealsBefore,
+    beside,
     readings,
     differences,
     profiles,
@@ -45,4 +48,12 @@ async function sealsOfBefore(now: SealsFile, snapshot: Snapshot): Promise<Facts[
   const same =
     now.exists && Buffer.compare(before, (await snapshot.read(now.path)) ?? new Uint8Array()) === 0;
   return same ? now.seals : readSealsFile(now.path, new TextDecoder().decode(before)).seals;
+}
+
+async function filesBeside({ nodes }: Records, snapshot: Snapshot): Promise<Facts['beside']> {
+  const stated = [...nodes.values()].flatMap(({ elsewhere }) => elsewhere);
+  const paths = stated.flatMap(({ path, sha256 }) => (sha256 === undefined ? [] : path));
+  return new Map(
+    await Promise.all(paths.map(async (path) => [path, await snapshot.fileBeside(path)] as const)),
+  );
 }

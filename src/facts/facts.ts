@@ -1,6 +1,7 @@
 import type { Manifest } from '../manifest/manifest.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Seal, SealsFile, Standing } from '../records/seal.ts';
+import type { DiskFile } from '../repository/snapshot.ts';
 import type { SeriesDifference } from '../series/difference.ts';
 import type { InputProfile } from './profiles.ts';
 import type { Reading } from './readings.ts';
@@ -44,6 +45,8 @@ export interface Facts {
   readonly profiles: ReadonlyMap<string, InputProfile>;
   /** By the name of the evaluation target: what its files give, and what is stated. */
   readonly scores: ReadonlyMap<string, TargetFigures>;
+  /** By path: what lies on disk where a record says that a file is kept outside git with a digest; null where nothing does. */
+  readonly beside: ReadonlyMap<string, DiskFile | null>;
   /** Findings of the first pass; empty during it. */
   readonly found: readonly Found[];
   readonly known: KnownRules;

@@ -35,6 +35,7 @@ export function snapshotFromMemory(files: FilesInMemory, before: FilesInMemory =
     untracked: [],
     ...contentOf(listing, blobsOf(contents), async () => null, forgetfulMemory()),
     readBefore: async (path: string) => snapshotFromMemory(before).read(path),
+    fileBeside: async () => null,
     remember: forgetfulValues().remember,
     close: async () => {},
   });

@@ -1,5 +1,6 @@
 import { Failure } from '../failure.ts';
 import { type Aside, objectsOnly, openAside } from './aside.ts';
+import { fileBeside } from './beside.ts';
 import { contentOf } from './content.ts';
 import { forgetfulMemory, openDigestMemory } from './digest-memory.ts';
 import { ask, type Place } from './git.ts';
@@ -57,6 +58,8 @@ export async function openSnapshot(
         const found = await ask(repository, { ...treeEntries(before, [path]), statuses: [128] });
         return contentIn({ entries: byPath(found), unmerged: [], intentToAdd: [] }).read(path);
       },
+      fileBeside: async (path: string) =>
+        repository.top === null ? null : fileBeside(repository.top, path, values.remember),
       remember: values.remember,
       async close() {
         await blobs.close();

@@ -26,6 +26,12 @@ export type FileIdentity =
   /** No digest: content not fetched, a submodule, a link that leaves the repository or leads nowhere. */
   | { readonly kind: 'unavailable'; readonly why: Unavailable; readonly blob: string | null };
 
+/** A file on disk that need not be in git. */
+export interface DiskFile {
+  readonly sha256: string;
+  readonly bytes: number;
+}
+
 export type Unavailable =
   | 'not-fetched'
   | 'submodule'
@@ -63,6 +69,8 @@ export interface Snapshot {
   readBlob(blob: string, limit?: number): Promise<Uint8Array | null>;
   /** Content of a path in the commit that this state follows (HEAD for work tree and index, the first parent for a revision); null where there is none. */
   readBefore(path: string): Promise<Uint8Array | null>;
+  /** A file on disk at a path, for content that is kept outside git; null where it is not there, outside the repository, or where there is no work tree. */
+  fileBeside(path: string): Promise<DiskFile | null>;
   /**
    * What `compute` gives, computed once in a run and kept between runs. The key must tell everything that the value depends
    * on: what is computed, the version of the computation, digests of the content (hex SHA-256 of all that together). Values are

@@ -1,5 +1,6 @@
 import type { Facts } from '../facts/facts.ts';
 import type { Draft, Rule } from '../rules/rule.ts';
+import { isStated } from '../rules/stand-in.ts';
 import { isMeantFor } from '../rules/waived.ts';
 
 /** Faults that leave nothing to judge by; no waiver reaches them. */
@@ -11,8 +12,8 @@ export function waiverFor(rule: Rule, draft: Draft, facts: Facts): string | null
   const waiver = (facts.manifest.data.waivers ?? []).find(
     (one) =>
       isMeantFor(one, { ...draft, rule: rule.id }) &&
-      one.because !== undefined &&
-      one.by !== undefined &&
+      isStated(one.because) &&
+      isStated(one.by) &&
       one.until !== undefined &&
       one.until >= facts.today,
   );
@@ -28,8 +29,8 @@ export function acceptanceFor(rule: Rule, draft: Draft, facts: Facts): string | 
     (one, place) =>
       one.rule === rule.id &&
       (one.driver === undefined || one.driver === draft.subject) &&
-      one.because !== undefined &&
-      one.by !== undefined &&
+      isStated(one.because) &&
+      isStated(one.by) &&
       one.on !== undefined &&
       !fallen.includes(place),
   );

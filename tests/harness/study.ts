@@ -14,7 +14,7 @@ import { withChecksum } from '../../src/records/seal-entry.ts';
 import { readSealsFile, writeSealsFile } from '../../src/records/seals-file.ts';
 import { judgeStandings } from '../../src/records/standing.ts';
 import { type FilesInMemory, snapshotFromMemory } from '../../src/repository/memory.ts';
-import type { Snapshot } from '../../src/repository/snapshot.ts';
+import type { DiskFile, Snapshot } from '../../src/repository/snapshot.ts';
 import { knownRules } from '../../src/rules/index.ts';
 import type { Phase } from '../../src/rules/rule.ts';
 import { soundFiles } from './sound-files.ts';
@@ -51,6 +51,8 @@ export interface StudyEdits extends Edits {
   readonly phase?: Phase;
   /** Files on disk that git does not track. */
   readonly untracked?: readonly string[];
+  /** Files on disk that are kept outside git. */
+  readonly beside?: Readonly<Record<string, DiskFile>>;
   /** Files that other manifests of the repository have as their own. */
   readonly claimedElsewhere?: Readonly<Record<string, { manifest: string; record: string }>>;
 }
@@ -119,11 +121,11 @@ function editedFiles({ files = {} }: Edits): FilesInMemory {
 }
 
 /** Files in memory; the blobs of the sound study can be read too, as git keeps them. */
-function snapshotOf(files: FilesInMemory, { untracked = [] }: StudyEdits): Snapshot {
+function snapshotOf(files: FilesInMemory, { untracked = [], beside = {} }: StudyEdits): Snapshot {
   const snapshot = snapshotFromMemory(files);
   const readBlob: Snapshot['readBlob'] = async (id, limit) =>
     (await snapshot.readBlob(id, limit)) ?? (await soundSnapshot().readBlob(id, limit));
-  return { ...snapshot, untracked, readBlob };
+  return { ...snapshot, untracked, readBlob, fileBeside: async (file) => beside[file] ?? null };
 }
 
 const laterSchemes: Schemes = [...schemes, { ...newest(schemes), number: newest(schemes).number + 1 }];

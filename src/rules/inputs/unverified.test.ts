@@ -31,7 +31,12 @@ ruleCases(inputsUnverified, {
     {
       name: 'kept elsewhere',
       set: { 'inputs.terrain.files': [{ path: 'dem.tif', sha256: 'a'.repeat(64), location: 'shelf 3' }] },
-      finds: { record: 'inputs.terrain', subject: 'dem.tif', message: /shelf 3.*could not be checked/ },
+      finds: {
+        record: 'inputs.terrain',
+        subject: 'dem.tif',
+        message: /shelf 3.*could not be checked/,
+        level: 'warn',
+      },
     },
     {
       name: 'kept elsewhere without a digest',
@@ -43,8 +48,21 @@ ruleCases(inputsUnverified, {
       files: { 'data/dem.asc': { link: 'gone.asc' } },
       finds: { record: 'inputs.terrain', message: 'leads nowhere' },
     },
+    {
+      name: 'kept elsewhere, and another file at its path',
+      set: { 'inputs.terrain.files': [{ path: 'dem.tif', sha256: 'a'.repeat(64) }] },
+      beside: { 'dem.tif': { sha256: 'b'.repeat(64), bytes: 3 } },
+      phase: 'setup',
+      finds: { stated: 'a'.repeat(64), found: 'b'.repeat(64), level: 'block' },
+    },
   ],
   silent: [
+    {
+      name: 'kept elsewhere, and the same file at its path',
+      set: { 'inputs.terrain.files': [{ path: 'dem.tif', sha256: 'a'.repeat(64) }] },
+      beside: { 'dem.tif': { sha256: 'a'.repeat(64), bytes: 3 } },
+    },
+
     { name: 'a link inside the repository', files: { 'data/dem.asc': { link: '../model/pond.txt' } } },
   ],
 });

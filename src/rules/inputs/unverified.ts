@@ -1,5 +1,7 @@
+import type { Facts } from '../../facts/facts.ts';
+import type { Elsewhere } from '../../records/record.ts';
 import type { Unavailable } from '../../repository/snapshot.ts';
-import { rule } from '../rule.ts';
+import { type Draft, rule } from '../rule.ts';
 
 const why: Readonly<Record<Unavailable, string>> = {
   'not-fetched': 'is not in this clone (partial or shallow, or an object is missing)',
@@ -18,12 +20,12 @@ export const inputsUnverified = rule({
   before: 'warn',
   means: null,
   statement:
-    'A file’s content is not here (kept elsewhere, Git LFS or partial clone not fetched), so its digest could not be checked.',
+    'A file’s content is not here (kept elsewhere, Git LFS or partial clone not fetched), so its digest could not be checked; or what lies there is another file.',
   why: 'What was not looked at is no evidence: the data on that drive or server may have been replaced since the model ran.',
   source: { basis: 'definition', citation: 'A digest is checked by reading the content.' },
   clear:
     'Fetch the content (git lfs pull, git fetch --refetch) or put the file at its path, and check again.',
-  check: (_, { records }) =>
+  check: (_, { records, beside }) =>
     [...records.nodes.values()].flatMap(({ id, claims, elsewhere }) => [
       ...[...claims.values()].flatMap(({ path, field, identity }) => {
         const says =
@@ -41,15 +43,32 @@ export const inputsUnverified = rule({
               message: `${path} ${says}, so its content could not be checked.`,
             };
       }),
-      ...elsewhere.map(({ path, field, sha256, location }) => ({
-        record: id,
-        field,
-        subject: path,
-        message: `${path} is kept outside git${location === undefined ? '' : ` (${location})`}; ${
-          sha256 === undefined
-            ? 'no SHA-256 is stated, so nothing identifies it'
-            : 'its SHA-256 could not be checked'
-        }.`,
-      })),
+      ...elsewhere.flatMap((file) => keptElsewhere(id, file, beside)),
     ]),
 });
+
+/** A file that the manifest says is kept outside git: looked at where it lies at its path none the less. */
+function keptElsewhere(
+  record: string,
+  { path, field, sha256, location }: Elsewhere,
+  beside: Facts['beside'],
+): readonly Draft[] {
+  const draft = { record, field, subject: path };
+  const kept = `${path} is kept outside git${location === undefined ? '' : ` (${location})`}`;
+  if (sha256 === undefined) {
+    return [{ ...draft, message: `${kept}, and no SHA-256 is stated, so nothing identifies it.` }];
+  }
+  const here = beside.get(path);
+  if (!here)
+    return [{ ...draft, message: `${kept} and not at its path here, so its content could not be checked.` }];
+  if (here.sha256 === sha256) return [];
+  return [
+    {
+      ...draft,
+      from: 'setup',
+      stated: sha256,
+      found: here.sha256,
+      message: `The file that lies at ${path} is not the one that is stated: the SHA-256 differ.`,
+    },
+  ];
+}
