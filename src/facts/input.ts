@@ -1,4 +1,4 @@
-import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
+import { defined, isDefined, type Statistic } from '../hydrology/paired.ts';
 import type { InputReference } from '../manifest/data.generated.ts';
 import { type Records, sha256Of } from '../records/record.ts';
 import type { FileIdentity, Snapshot } from '../repository/snapshot.ts';
@@ -15,10 +15,23 @@ export interface InputSeries {
   readonly hasStep: boolean;
 }
 
-/** Undefined where there is no such input, or the content of a file is not here. */
-export function findInput(reference: InputReference, records: Records): Statistic<InputSeries> {
+/** Why a series can't be read; `isAway` where the content of a file is not here, so that nobody is to blame. */
+export interface Unusable {
+  readonly undefined: string;
+  readonly isAway: boolean;
+}
+
+export function contentAway(path: string): Unusable {
+  return { undefined: `the content of ${path} is not here`, isAway: true };
+}
+
+/** Finds an input with all its files. */
+export function findInput(
+  reference: InputReference,
+  records: Records,
+): { readonly value: InputSeries } | Unusable {
   const holders = inputsNamed(reference.input, records);
-  if (holders.length === 0) return undefinedBecause(`there is no input ${reference.input}`);
+  if (holders.length === 0) return { undefined: `there is no input ${reference.input}`, isAway: false };
   const from = holders.map((holder) => ({
     id: holder.id,
     layout: layoutOf(holder.fragment.series ?? {}),
@@ -27,7 +40,7 @@ export function findInput(reference: InputReference, records: Records): Statisti
   }));
   const files = holders.flatMap(seriesFilesOf);
   const away = files.find(({ identity }) => !isContentHere(identity));
-  if (away !== undefined) return undefinedBecause(`the content of ${away.path} is not here`);
+  if (away !== undefined) return contentAway(away.path);
   const hasStep = holders.every(({ fragment }) => fragment.series?.step !== undefined);
   return defined({ reference, from: { from, ...reference }, hasStep });
 }

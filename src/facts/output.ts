@@ -4,7 +4,7 @@ import { type Records, sha256Of } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import type { SeriesLayout } from '../series/layout.ts';
 import { columnOf, type Series } from '../series/series.ts';
-import { isContentHere } from './input.ts';
+import { contentAway, isContentHere, type Unusable } from './input.ts';
 import { layoutOf, seriesOfFile } from './series-of.ts';
 import { withStep } from './step-found.ts';
 
@@ -22,19 +22,19 @@ export interface OutputFile {
   readonly layout: SeriesLayout;
 }
 
-/** Where an output lies and what it is; undefined where nothing is named, or its content is not here. */
+/** Where an output lies and what it is. */
 export async function findOutput(
   output: Output,
   { manifest }: Pick<Records, 'manifest'>,
   snapshot: Snapshot,
-): Promise<Statistic<OutputFile>> {
-  if (output.file === undefined) return undefinedBecause('no file is named');
+): Promise<{ readonly value: OutputFile } | Unusable> {
+  if (output.file === undefined) return { undefined: 'no file is named', isAway: false };
   const place = resolvePattern(manifest.folder, output.file);
-  if (place === null) return undefinedBecause(`${output.file} lies outside the repository`);
+  if (place === null) return { undefined: `${output.file} lies outside the repository`, isAway: false };
   const path = place.root + place.rest;
   const identity = (await snapshot.identify([path])).get(path);
   const sha256 = identity === undefined || !isContentHere(identity) ? null : sha256Of(identity);
-  if (sha256 === null) return undefinedBecause(`the content of ${path} is not here`);
+  if (sha256 === null) return contentAway(path);
   return defined({ path, sha256, layout: layoutOf(output) });
 }
 

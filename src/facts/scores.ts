@@ -2,15 +2,8 @@ import { isDefined, type Statistic, undefinedBecause } from '../hydrology/paired
 import { scores as known } from '../hydrology/scores.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
-import { calendarYears, parseYearBegins } from '../series/hydrological-year.ts';
-import { parseStep } from '../series/step.ts';
-import { conversion } from '../series/units/conversion.ts';
-import { findInput, readInputSeries } from './input.ts';
-import { findOutput, readOutputSeries } from './output.ts';
-import { type Basis, remembered } from './remembered.ts';
+import { remembered } from './remembered.ts';
 import { type Cause, fits, likelyCauses } from './scores/causes.ts';
-import type { Comparison } from './scores/comparable.ts';
-import type { Pairable } from './scores/pairings.ts';
 import { type RecomputedFigures, recompute } from './scores/recompute.ts';
 import {
   type StatedScore,
@@ -19,8 +12,9 @@ import {
   scoresInTable,
   type UnreadRow,
 } from './scores/stated.ts';
+import { subjectOf } from './scores/subject.ts';
 import type { PeakSettings } from './scores/window-figures.ts';
-import { targetsIn, windowsOfTarget } from './windows.ts';
+import { targetsIn } from './windows.ts';
 
 /** How well one target fits: what its files give, and what is stated. */
 export interface TargetFigures {
@@ -42,9 +36,6 @@ export interface ComparedScore extends StatedScore {
   readonly causes: readonly Cause[];
 }
 
-/** Raised whenever the same files may give another figure. */
-export const scoresVersion = 1;
-
 const names: ReadonlySet<string> = new Set([...Object.keys(known), 'peaks_hit']);
 
 /** By the name of the target: its figures. Those of unchanged files and windows are remembered; only files of others are read. */
@@ -60,18 +51,20 @@ export async function scoresOf(
   return figures;
 }
 
-type Target = RecordNode<'evaluation'>;
-
-async function figuresOf(target: Target, records: Records, snapshot: Snapshot): Promise<TargetFigures> {
+async function figuresOf(
+  target: RecordNode<'evaluation'>,
+  records: Records,
+  snapshot: Snapshot,
+): Promise<TargetFigures> {
   const { manifest } = records;
   const inTable = await scoresInTable(target, names, manifest, snapshot);
   const stated = [...scoresInManifest(target, manifest), ...inTable.stated];
   const subject = await subjectOf(target, records, snapshot);
   const { unread } = inTable;
   const of = { record: target.id, unread };
-  if (!isDefined(subject)) {
+  if ('undefined' in subject) {
     const failed = stated.map((score) => ({ ...score, recomputed: subject, agrees: false, causes: [] }));
-    return { ...of, recomputed: subject, isHere: false, stated: failed };
+    return { ...of, recomputed: subject, isHere: !subject.isAway, stated: failed };
   }
   const { basis, pairable, peaks } = subject.value;
   const recomputed = await remembered(snapshot, basis, async () => {
@@ -118,59 +111,4 @@ function figureOf(
   if (peaks?.above === undefined)
     return undefinedBecause('nothing says what counts as a peak (`peaks.above`)');
   return isDefined(figures.value.peaks) ? figures.value.peaks.value.share : figures.value.peaks;
-}
-
-/** What a target's figures are computed from, and all that they depend on. */
-interface Subject {
-  readonly basis: Basis;
-  readonly peaks: PeakSettings | undefined;
-  /** Reads both series. */
-  pairable(): Promise<Statistic<Pairable>>;
-}
-
-/** Undefined where a file is not named, or its content is not here. */
-async function subjectOf(target: Target, records: Records, snapshot: Snapshot): Promise<Statistic<Subject>> {
-  const { fragment } = target;
-  const { observed, simulated, peaks } = fragment;
-  if (observed === undefined) return undefinedBecause('no observed input is named');
-  const input = findInput(observed, records);
-  if (!isDefined(input)) return input;
-  const output = await findOutput(simulated ?? {}, records, snapshot);
-  if (!isDefined(output)) return output;
-  const windows = windowsOfTarget(target, records);
-  const comparison = comparisonOf(target, records);
-  const from = {
-    input: input.value.from,
-    output: output.value,
-    windows: windows.map(({ kind, period }) => ({ kind, period })),
-    comparison,
-    peaks,
-  };
-  return {
-    value: {
-      basis: { what: 'scores', version: scoresVersion, from },
-      peaks,
-      async pairable() {
-        const seen = await readInputSeries(input.value, records, snapshot);
-        if (!isDefined(seen)) return seen;
-        const made = await readOutputSeries(output.value, snapshot);
-        if (!isDefined(made)) return made;
-        return { value: { sides: { observed: seen.value, simulated: made.value }, comparison, windows } };
-      },
-    },
-  };
-}
-
-/** How a target's two series are compared: its step, over the catchment's area and in its years. */
-function comparisonOf({ fragment }: Target, { manifest: { data } }: Records): Comparison {
-  const { area } = data.catchment ?? {};
-  const toKm2 = area === undefined ? null : conversion({ from: area.unit, to: 'km2' });
-  const areaKm2 =
-    area !== undefined && toKm2 !== null && isDefined(toKm2) ? area.value * toKm2.value.factor : null;
-  return {
-    ...(areaKm2 === null ? {} : { areaKm2 }),
-    variable: fragment.variable ?? 'other',
-    step: fragment.step === undefined ? null : parseStep(fragment.step),
-    yearBegins: parseYearBegins(data.periods?.year_begins ?? '') ?? calendarYears,
-  };
 }

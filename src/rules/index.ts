@@ -1,8 +1,16 @@
 import type { KnownRules } from '../facts/facts.ts';
 import { balanceMissing } from './balance/missing.ts';
+import { evaluationDrop } from './evaluation/drop.ts';
+import { evaluationFewPairs } from './evaluation/few-pairs.ts';
+import { evaluationIdentityBroken } from './evaluation/identity-broken.ts';
 import { evaluationMissing } from './evaluation/missing.ts';
+import { evaluationNeedUnscored } from './evaluation/need-unscored.ts';
+import { evaluationPeaksMissed } from './evaluation/peaks-missed.ts';
+import { evaluationScoreDiffers } from './evaluation/score-differs.ts';
+import { evaluationScoreLow } from './evaluation/score-low.ts';
 import { evaluationSingleScore } from './evaluation/single-score.ts';
 import { evaluationUnseen } from './evaluation/unseen.ts';
+import { evaluationWorseThanMean } from './evaluation/worse-than-mean.ts';
 import { inputsDayUnstated } from './inputs/day-unstated.ts';
 import { inputsGapUntreated } from './inputs/gap-untreated.ts';
 import { inputsLicenceMissing } from './inputs/licence-missing.ts';
@@ -130,8 +138,16 @@ export const rules: readonly Rule[] = [
   parametersAtBound,
   parametersChangeDiffers,
   evaluationMissing,
+  evaluationScoreDiffers,
+  evaluationIdentityBroken,
+  evaluationScoreLow,
+  evaluationWorseThanMean,
+  evaluationNeedUnscored,
   evaluationSingleScore,
+  evaluationPeaksMissed,
+  evaluationDrop,
   evaluationUnseen,
+  evaluationFewPairs,
   balanceMissing,
   interventionsUndeclared,
   interventionsUnrepresented,

@@ -1,5 +1,9 @@
-import type { EvaluationTarget } from '../../manifest/data.generated.ts';
+import type { Facts } from '../../facts/facts.ts';
+import { scoredWindows } from '../../facts/scores/stated.ts';
+import { targetsIn } from '../../facts/windows.ts';
+import type { RecordNode } from '../../records/record.ts';
 import { type Draft, rule } from '../rule.ts';
+import { isStated } from '../stand-in.ts';
 
 export const evaluationMissing = rule({
   id: 'evaluation.missing',
@@ -15,13 +19,12 @@ export const evaluationMissing = rule({
   },
   clear:
     'Add a target under evaluation with its observed input, its simulated column and its scores; or say under `none_because` why a variable can’t be evaluated.',
-  check: (_, { manifest }) => {
-    const targets = Object.entries(manifest.data.evaluation ?? {});
-    const evaluated = new Set(targets.map(([, { variable }]) => variable));
+  check: (_, facts) => {
+    const targets = targetsIn(facts.records.nodes);
+    const evaluated = new Set(targets.map(({ fragment }) => fragment.variable));
     const needed = new Set(
-      (manifest.data.study?.needs ?? []).map(({ variable }) => variable ?? 'streamflow'),
+      (facts.manifest.data.study?.needs ?? []).map(({ variable }) => variable ?? 'streamflow'),
     );
-    const unevaluated = [...needed].filter((variable) => !evaluated.has(variable));
     if (targets.length === 0 && needed.size === 0) {
       return [
         {
@@ -32,24 +35,30 @@ export const evaluationMissing = rule({
       ];
     }
     return [
-      ...unevaluated.map((variable) => ({
-        record: 'evaluation',
-        field: ['evaluation'],
-        subject: variable,
-        message: `The purpose needs ${variable.replaceAll('_', ' ')}, but no target compares it with observations.`,
-      })),
-      ...targets.flatMap(([name, target]) => withoutScores(name, target)),
+      ...[...needed]
+        .filter((variable) => !evaluated.has(variable))
+        .map((variable) => ({
+          record: 'evaluation',
+          field: ['evaluation'],
+          subject: variable,
+          message: `The purpose needs ${variable.replaceAll('_', ' ')}, but no target compares it with observations.`,
+        })),
+      ...targets.flatMap((target) => withoutScores(target, facts)),
     ];
   },
 });
 
-function withoutScores(name: string, { scores, none_because }: EvaluationTarget): readonly Draft[] {
-  if (none_because !== undefined || scores?.table !== undefined) return [];
-  return (['calibration', 'validation'] as const)
-    .filter((window) => Object.keys(scores?.[window] ?? {}).length === 0)
+function withoutScores(
+  { id, name, field, fragment }: RecordNode<'evaluation'>,
+  { scores }: Facts,
+): readonly Draft[] {
+  if (isStated(fragment.none_because)) return [];
+  const stated = scores.get(name ?? '')?.stated ?? [];
+  return scoredWindows
+    .filter((window) => stated.every((score) => score.window !== window))
     .map((window) => ({
-      record: `evaluation.${name}`,
-      field: ['evaluation', name, 'scores'],
+      record: id,
+      field: [...field, 'scores'],
       subject: window,
       from: window,
       message: `No ${window} scores are stated for ${name}.`,
