@@ -111,6 +111,24 @@ ruleCases(sealStale, {
       ],
     },
     {
+      name: 'the simulated series of a run, as its evaluation lays it out',
+      seals: 'sound',
+      files: {
+        'runs/calibrated/daily.csv': (old) => old.replace(/^(2009-07-04(?:,[^,]+){4}),[^,]+/m, '$1,9.0000'),
+      },
+      finds: [
+        {
+          record: 'runs.calibrated',
+          detail: [
+            expect.stringMatching(
+              /^1 of 3 287 values differ; sum of values .* m3\/s \(.* %\), on 2009-07-04$/,
+            ),
+          ],
+        },
+        ...Array(5).fill({}),
+      ],
+    },
+    {
       name: 'content that is not here',
       seals: 'sound',
       files: { 'model/pond.txt': { link: 'gone.txt' } },
