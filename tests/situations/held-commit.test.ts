@@ -71,6 +71,8 @@ describe('the hook holds back what a commit would store', () => {
       committed: false,
       words: expect.stringMatching(held),
     });
+
+    await project.git('checkout', '--quiet', 'HEAD', '--', 'data/rain.csv');
     await stageFault(project);
     await project.edit('model/model.mjs', (text) => `${text}\n`);
     const { committed, words } = await commit(project.folder, '--all');
