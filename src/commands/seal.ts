@@ -1,5 +1,7 @@
 import { join } from 'node:path';
 import { evidenceFor } from '../facts/evidence.ts';
+import { profilesOf } from '../facts/profiles.ts';
+import { scoresOf } from '../facts/scores.ts';
 import { Failure } from '../failure.ts';
 import { makeSeals } from '../records/make-seals.ts';
 import { writeSealsFile } from '../records/seals-file.ts';
@@ -43,7 +45,11 @@ export async function sealCommand(
       because: options.because ?? null,
       person,
       today: context.today,
-      evidence: evidenceFor(study.records, study.standings),
+      evidence: evidenceFor({
+        ...study,
+        scores: await scoresOf(study.records, snapshot),
+        profiles: await profilesOf(study.records, snapshot),
+      }),
     });
     const text = writeSealsFile(plan.seals);
     const written: string[] = [];

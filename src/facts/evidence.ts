@@ -1,33 +1,91 @@
-import type { EvaluationTarget } from '../manifest/data.generated.ts';
+import { isDefined } from '../hydrology/paired.ts';
+import { parsePeriod } from '../manifest/period.ts';
 import type { Evidence } from '../records/make-seals.ts';
-import type { Records } from '../records/record.ts';
+import type { RecordNode } from '../records/record.ts';
 import type { Standing } from '../records/seal.ts';
-import { reviewDigest, seenSeriesDigest } from './seen-series.ts';
+import { parseDate } from '../series/calendar.ts';
+import type { Facts } from './facts.ts';
+import { missingShares } from './missing-shares.ts';
+import { fileProfileVersion } from './profiles/file-profile.ts';
+import type { InputProfile } from './profiles.ts';
+import { scoredWindows } from './scores/stated.ts';
+import { scoresVersion } from './scores/subject.ts';
+import type { TargetFigures } from './scores.ts';
+import { graphVersion, reviewDigest } from './seen-series.ts';
 
-/** By record: what a seal made now should keep of what was computed. */
-export function evidenceFor(
-  records: Records,
-  standings: ReadonlyMap<string, Standing>,
-): ReadonlyMap<string, Evidence> {
+/** What a seal's evidence is made of. */
+export type Computed = Pick<Facts, 'records' | 'standings' | 'manifest' | 'scores' | 'profiles'>;
+
+/**
+ * By record: what a seal made now should keep of what was computed. A record is `recomputed` where it states figures, and each
+ * of them is what its files give.
+ */
+export function evidenceFor(computed: Computed): ReadonlyMap<string, Evidence> {
+  const { records, standings, scores, profiles, manifest } = computed;
   const evidence = new Map<string, Evidence>();
-  for (const [id, { area, fragment }] of records.nodes) {
-    if (area !== 'evaluation') continue;
-    const seen = seenOnGraph(fragment as EvaluationTarget, standings.get(id), records);
-    evidence.set(id, { facts: seen, grade: 'sealed' });
+  for (const [id, record] of records.nodes) {
+    if (record.area === 'evaluation')
+      evidence.set(
+        id,
+        ofTarget(record as RecordNode<'evaluation'>, scores.get(record.name ?? ''), standings.get(id)),
+      );
+    const profile = record.area === 'inputs' ? profiles.get(record.name ?? '') : undefined;
+    if (profile !== undefined) evidence.set(id, ofInput(record as RecordNode<'inputs'>, profile, manifest));
   }
   return evidence;
 }
 
-/** Which series the review of a target is about: those of now for a new review, else those that it was first sealed with. */
-function seenOnGraph(
-  target: EvaluationTarget,
+function ofTarget(
+  { fragment: { review } }: RecordNode<'evaluation'>,
+  figures: TargetFigures | undefined,
   standing: Standing | undefined,
-  records: Records,
-): Evidence['facts'] {
-  if (target.review === undefined) return {};
-  const review = { value: reviewDigest(target.review), computed_by: 1 };
+): Evidence {
+  if (figures === undefined) return { facts: {}, grade: 'sealed' };
+  const { recomputed, stated, unread } = figures;
+  const isProven = stated.length > 0 && unread.length === 0 && stated.every(({ agrees }) => agrees);
+  const facts: Record<string, Evidence['facts'][string]> = {};
+  if (isDefined(recomputed))
+    for (const window of scoredWindows) {
+      const over = recomputed.value.windows[window];
+      if (over !== undefined && isDefined(over))
+        facts[`${window}.pairs`] = { value: over.value.pairs, computed_by: scoresVersion };
+    }
+  for (const { window, score, recomputed: figure } of stated)
+    if (isDefined(figure)) facts[`${window}.${score}`] = { value: figure.value, computed_by: scoresVersion };
   const sealed = standing?.seal?.facts;
-  const sameReview = sealed?.review?.value === review.value;
-  const now = { value: seenSeriesDigest(target, records), computed_by: 1 };
-  return { review, series_seen: (sameReview ? sealed?.series_seen : undefined) ?? now };
+  if (review !== undefined) {
+    const digest = reviewDigest(review);
+    // A review is about the series that it was first sealed with.
+    const before = sealed?.review?.value === digest ? sealed.series_seen : undefined;
+    const now = isDefined(recomputed)
+      ? { value: recomputed.value.graph, computed_by: graphVersion }
+      : undefined;
+    const seen = before?.computed_by === graphVersion ? before : now;
+    facts.review = { value: digest, computed_by: 1 };
+    if (seen !== undefined) facts.series_seen = seen;
+  }
+  return { facts, grade: isProven ? 'recomputed' : 'sealed' };
+}
+
+function ofInput(record: RecordNode<'inputs'>, profile: InputProfile, manifest: Facts['manifest']): Evidence {
+  const { period, missing_share } = record.fragment;
+  const shares = missingShares(record, profile, manifest).filter(({ stated }) => stated !== null);
+  const facts: Record<string, Evidence['facts'][string]> = {};
+  for (const { file, found } of shares)
+    facts[file === null ? 'missing_share' : `missing_share ${file}`] = {
+      value: found,
+      computed_by: fileProfileVersion,
+    };
+  const sharesHold =
+    missing_share === undefined || (shares.length > 0 && shares.every(({ agrees }) => agrees));
+  const says = period !== undefined || missing_share !== undefined;
+  return { facts, grade: says && sharesHold && holdsPeriod(period, profile) ? 'recomputed' : 'sealed' };
+}
+
+function holdsPeriod(period: string | undefined, { days }: InputProfile): boolean {
+  if (period === undefined) return true;
+  const stated = parsePeriod(period);
+  return (
+    stated !== null && parseDate(stated.first) === days?.firstDay && parseDate(stated.last) === days.lastDay
+  );
 }

@@ -3,6 +3,8 @@ import { parseDocument } from 'yaml';
 import { buildFacts } from '../../src/facts/build.ts';
 import { evidenceFor } from '../../src/facts/evidence.ts';
 import type { Facts } from '../../src/facts/facts.ts';
+import { profilesOf } from '../../src/facts/profiles.ts';
+import { scoresOf } from '../../src/facts/scores.ts';
 import type { Manifest } from '../../src/manifest/manifest.ts';
 import { readManifest } from '../../src/manifest/read.ts';
 import { buildRecords } from '../../src/records/build.ts';
@@ -15,6 +17,7 @@ import { readSealsFile, writeSealsFile } from '../../src/records/seals-file.ts';
 import { judgeStandings } from '../../src/records/standing.ts';
 import { type FilesInMemory, snapshotFromMemory } from '../../src/repository/memory.ts';
 import type { DiskFile, Snapshot } from '../../src/repository/snapshot.ts';
+import { forgetfulValues } from '../../src/repository/value-memory.ts';
 import { knownRules } from '../../src/rules/index.ts';
 import type { Phase } from '../../src/rules/rule.ts';
 import { soundFiles } from './sound-files.ts';
@@ -68,9 +71,14 @@ export async function studyFacts(edits: StudyEdits = {}): Promise<Facts> {
   const text = edits.text ?? (edits.set || edits.remove ? manifestText(edits) : soundText);
   const manifest = readable(text);
   const files = { ...editedFiles(edits), [path]: text };
-  const records = await buildRecords(manifest, snapshotOf(files, edits));
-  const sealedState = edits.seals === 'sound' ? await soundRecords() : records;
-  const seals = edits.seals === 'none' ? new Map() : sealsOf(sealedState, edits.sealed ?? {});
+  const snapshot = snapshotOf(files, edits);
+  const records = await buildRecords(manifest, snapshot);
+  const isSound = edits.seals === 'sound';
+  const [sealedState, sealedSnapshot] = isSound
+    ? [await soundRecords(), soundSnapshot()]
+    : [records, snapshot];
+  const sealedAs = (changed: StudyEdits['sealed']) => sealsOf(sealedState, sealedSnapshot, changed ?? {});
+  const seals = edits.seals === 'none' ? new Map() : await sealedAs(edits.sealed);
   const written = seals.size === 0 ? null : (edits.byHand ?? String)(writeSealsFile(seals));
   const sealsFile = readSealsFile(sealsPath, written);
   return buildFacts({
@@ -83,7 +91,7 @@ export async function studyFacts(edits: StudyEdits = {}): Promise<Facts> {
       readBefore: async (asked) =>
         edits.sealedBefore === undefined || asked !== sealsPath
           ? null
-          : new TextEncoder().encode(writeSealsFile(sealsOf(sealedState, edits.sealedBefore))),
+          : new TextEncoder().encode(writeSealsFile(await sealedAs(edits.sealedBefore))),
     },
     today: edits.today ?? '2021-03-01',
     phase: edits.phase ?? manifest.data.study?.phase ?? 'setup',
@@ -120,17 +128,23 @@ function editedFiles({ files = {} }: Edits): FilesInMemory {
   return Object.fromEntries(edited);
 }
 
+/** What is computed from the same content is the same in every study. */
+const { remember } = forgetfulValues();
+
 /** Files in memory; the blobs of the sound study can be read too, as git keeps them. */
 function snapshotOf(files: FilesInMemory, { untracked = [], beside = {} }: StudyEdits): Snapshot {
   const snapshot = snapshotFromMemory(files);
   const readBlob: Snapshot['readBlob'] = async (id, limit) =>
     (await snapshot.readBlob(id, limit)) ?? (await soundSnapshot().readBlob(id, limit));
-  return { ...snapshot, untracked, readBlob, fileBeside: async (file) => beside[file] ?? null };
+  return { ...snapshot, untracked, readBlob, remember, fileBeside: async (file) => beside[file] ?? null };
 }
 
 const laterSchemes: Schemes = [...schemes, { ...newest(schemes), number: newest(schemes).number + 1 }];
 
-const soundSnapshot = once(() => snapshotFromMemory({ ...filesOfSound, [path]: soundText }));
+const soundSnapshot = once(() => ({
+  ...snapshotFromMemory({ ...filesOfSound, [path]: soundText }),
+  remember,
+}));
 const soundRecords = once(() => buildRecords(readable(soundText), soundSnapshot()));
 
 function once<Result>(make: () => Result): () => Result {
@@ -142,7 +156,11 @@ function once<Result>(make: () => Result): () => Result {
 }
 
 /** A seal of every record that can be sealed as it stands, by an invented reviewer. */
-function sealsOf(records: Records, changed: NonNullable<StudyEdits['sealed']>): ReadonlyMap<string, Seal> {
+async function sealsOf(
+  records: Records,
+  snapshot: Snapshot,
+  changed: NonNullable<StudyEdits['sealed']>,
+): Promise<ReadonlyMap<string, Seal>> {
   const sealsFile = readSealsFile(sealsPath, null);
   const standings = judgeStandings(records, sealsFile);
   const { seals } = makeSeals({
@@ -153,7 +171,13 @@ function sealsOf(records: Records, changed: NonNullable<StudyEdits['sealed']>): 
     because: null,
     person: 'Test Reviewer <reviewer@eastmoor.example>',
     today: '2021-02-01',
-    evidence: evidenceFor(records, standings),
+    evidence: evidenceFor({
+      records,
+      standings,
+      manifest: records.manifest,
+      scores: await scoresOf(records, snapshot),
+      profiles: await profilesOf(records, snapshot),
+    }),
   });
   return new Map([...seals].map(([id, seal]) => [id, withChecksum({ ...seal, ...changed[id] })]));
 }

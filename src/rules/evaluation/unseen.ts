@@ -1,4 +1,5 @@
-import { reviewDigest, seenSeriesDigest } from '../../facts/seen-series.ts';
+import { graphVersion, reviewDigest } from '../../facts/seen-series.ts';
+import { isDefined } from '../../hydrology/paired.ts';
 import { rule } from '../rule.ts';
 import { isStated } from '../stand-in.ts';
 
@@ -12,31 +13,22 @@ export const evaluationUnseen = rule({
   source: { basis: 'practice', citation: 'Common practice: graphical comparison goes with statistics.' },
   clear:
     'Look at observed and simulated on one graph, write what you saw into `review` (by, on, says), then seal the record.',
-  check: ({ id, name, fragment }, { standings, records }) => {
+  check: ({ id, name, field, fragment }, { standings, scores }) => {
     const { review, none_because } = fragment;
-    const field = ['evaluation', name ?? '', 'review'];
-    if (none_because !== undefined) return [];
-    if (!isStated(review?.by) || review?.on === undefined || !isStated(review.says)) {
+    if (isStated(none_because)) return [];
+    const about = { record: id, field: [...field, 'review'] };
+    if (!isStated(review?.by) || review?.on === undefined || !isStated(review.says))
       return [
-        {
-          record: id,
-          field,
-          message: `Nobody says, with name and date, to have looked at the graph of ${name}.`,
-        },
+        { ...about, message: `Nobody says, with name and date, to have looked at the graph of ${name}.` },
       ];
-    }
     const sealed = standings.get(id)?.seal?.facts;
-    const unchanged = sealed?.review?.value === reviewDigest(review);
-    if (
-      !unchanged ||
-      sealed.series_seen === undefined ||
-      sealed.series_seen.value === seenSeriesDigest(fragment, records)
-    )
-      return [];
+    const seen = sealed?.review?.value === reviewDigest(review) ? sealed.series_seen : undefined;
+    const recomputed = scores.get(name ?? '')?.recomputed;
+    if (seen?.computed_by !== graphVersion || recomputed === undefined || !isDefined(recomputed)) return [];
+    if (seen.value === recomputed.value.graph) return [];
     return [
       {
-        record: id,
-        field,
+        ...about,
         stated: review.on,
         message: `The observed or simulated series of ${name} changed after the review of ${review.on}, so nobody has seen the hydrograph that the scores are about.`,
       },
