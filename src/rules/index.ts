@@ -11,14 +11,25 @@ import { evaluationScoreLow } from './evaluation/score-low.ts';
 import { evaluationSingleScore } from './evaluation/single-score.ts';
 import { evaluationUnseen } from './evaluation/unseen.ts';
 import { evaluationWorseThanMean } from './evaluation/worse-than-mean.ts';
+import { inputsBeyondRecord } from './inputs/beyond-record.ts';
+import { inputsBiasedUntreated } from './inputs/biased-untreated.ts';
+import { inputsDayShifted } from './inputs/day-shifted.ts';
 import { inputsDayUnstated } from './inputs/day-unstated.ts';
 import { inputsGapUntreated } from './inputs/gap-untreated.ts';
+import { inputsIncompleteTotal } from './inputs/incomplete-total.ts';
 import { inputsLicenceMissing } from './inputs/licence-missing.ts';
+import { inputsMissingDiffers } from './inputs/missing-differs.ts';
+import { inputsNegativeAmount } from './inputs/negative-amount.ts';
+import { inputsPeriodDiffers } from './inputs/period-differs.ts';
 import { inputsPublishedDigestDiffers } from './inputs/published-digest-differs.ts';
 import { inputsRetrievedMissing } from './inputs/retrieved-missing.ts';
 import { inputsSourceMissing } from './inputs/source-missing.ts';
+import { inputsStepDiffers } from './inputs/step-differs.ts';
+import { inputsStuckValue } from './inputs/stuck-value.ts';
+import { inputsUnitDoubtful } from './inputs/unit-doubtful.ts';
 import { inputsUnitMissing } from './inputs/unit-missing.ts';
 import { inputsUnitUnknown } from './inputs/unit-unknown.ts';
+import { inputsUnreadableRow } from './inputs/unreadable-row.ts';
 import { inputsUnverified } from './inputs/unverified.ts';
 import { interventionsDefaultUnstated } from './interventions/default-unstated.ts';
 import { interventionsUndeclared } from './interventions/undeclared.ts';
@@ -118,8 +129,19 @@ export const rules: readonly Rule[] = [
   inputsLicenceMissing,
   inputsUnitMissing,
   inputsUnitUnknown,
+  inputsUnreadableRow,
+  inputsPeriodDiffers,
+  inputsStepDiffers,
   inputsDayUnstated,
+  inputsDayShifted,
+  inputsUnitDoubtful,
+  inputsMissingDiffers,
   inputsGapUntreated,
+  inputsNegativeAmount,
+  inputsBeyondRecord,
+  inputsStuckValue,
+  inputsIncompleteTotal,
+  inputsBiasedUntreated,
   inputsUnverified,
   inputsPublishedDigestDiffers,
   periodsWarmUpMissing,

@@ -1,3 +1,4 @@
+import { missingShares } from '../../facts/missing-shares.ts';
 import { rule } from '../rule.ts';
 
 export const inputsGapUntreated = rule({
@@ -5,19 +6,28 @@ export const inputsGapUntreated = rule({
   scope: 'inputs',
   from: 'calibration',
   means: 'incomplete',
-  statement: 'Values are missing and nothing says how the gaps were treated.',
+  statement:
+    'Values are missing, as stated or as counted in the files, and nothing says how the gaps were treated.',
   why: 'Gaps filled with zero, with a neighbour’s rain or left out of the comparison give different water balances and scores; nobody can repeat the run without knowing which.',
   source: { basis: 'practice', citation: 'Common practice: the treatment of gaps is told with the data.' },
   clear: 'Say in `gaps_treated` how gaps were filled, or that they were left and the pairs dropped.',
-  check: ({ id, field, fragment: { missing_share: share, gaps_treated } }) => {
-    const stated = typeof share === 'object' ? Math.max(0, ...Object.values(share.per_file)) : (share ?? 0);
-    if (stated <= 0 || gaps_treated !== undefined) return [];
+  check: (record, { profiles, manifest }) => {
+    const { id, name, field, fragment } = record;
+    const { missing_share: share, gaps_treated } = fragment;
+    if (gaps_treated !== undefined) return [];
+    const perFile = typeof share === 'object' ? Math.max(0, ...Object.values(share.per_file)) : null;
+    const stated = perFile ?? (typeof share === 'number' ? share : 0);
+    const profile = profiles.get(name ?? '');
+    const counted = profile === undefined ? [] : missingShares(record, profile, manifest);
+    const found = Math.max(0, ...counted.map((one) => one.found));
+    if (stated <= 0 && found <= 0) return [];
+    const most = Number((stated > 0 ? stated : found).toPrecision(3));
     return [
       {
         record: id,
         field: [...field, 'missing_share'],
-        stated,
-        message: `${typeof share === 'object' ? 'In one of the files a' : 'A'} share of ${stated} of the values is missing, and nothing says how the gaps were treated.`,
+        ...(stated > 0 ? { stated } : { found: most }),
+        message: `${perFile === null ? 'A' : 'In one of the files a'} share of ${most} of the values is missing, and nothing says how the gaps were treated.`,
       },
     ];
   },

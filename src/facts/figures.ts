@@ -1,0 +1,18 @@
+import type { FieldPath } from '../manifest/manifest.ts';
+import type { Facts } from './facts.ts';
+import { missingShareFigures } from './missing-shares.ts';
+
+/** A figure that the files give otherwise than the manifest states it. */
+export interface Figure {
+  readonly record: string;
+  readonly field: FieldPath;
+  /** Null where nothing is stated. */
+  readonly stated: number | null;
+  /** Rounded to the decimals that are stated, at least to those that are usual. */
+  readonly found: number;
+}
+
+/** What `seal --figures` writes into the manifest, record after record. */
+export function figuresToWrite(facts: Facts): readonly Figure[] {
+  return [...missingShareFigures(facts)];
+}

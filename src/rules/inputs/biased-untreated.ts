@@ -1,0 +1,159 @@
+import type { Comparison } from '../../facts/profiles/comparison.ts';
+import { isDefined } from '../../hydrology/paired.ts';
+import type { Preparation } from '../../manifest/data.generated.ts';
+import { figure } from '../figures.ts';
+import { type Draft, type Limits, rule } from '../rule.ts';
+import { factorTolerance, unitDoubt } from './unit-doubt.ts';
+
+export const inputsBiasedUntreated = rule({
+  id: 'inputs.biased-untreated',
+  scope: 'inputs',
+  from: 'warn',
+  means: null,
+  statement:
+    'Against its reference the series is biased, has lost the wet and dry years while the season agrees, or breaks in the double-mass curve, and no step of `preparation` speaks of a correction.',
+  why: 'A model calibrated on rain that is 20 % short makes up for it with wrong evapotranspiration; a product with the right season and the wrong years passes every look at monthly means.',
+  source: {
+    basis: 'published',
+    citation:
+      'Searcy, J. K. & Hardison, C. H. (1960) Double-mass curves. US Geological Survey Water-Supply Paper 1541-B; the limits are our choice',
+  },
+  clear:
+    'Correct the series and say how in `preparation` (step, because, script), or say there why no correction is needed.',
+  limits: {
+    annual_bias_percent: {
+      default: 10,
+      unit: '%',
+      states: 'Largest difference of the totals over the years that both have.',
+      looser: 'higher',
+    },
+    annual_correlation: {
+      default: 0.5,
+      unit: '1',
+      states:
+        'Least correlation of annual totals (five years or more), and of monthly totals without their season.',
+      looser: 'lower',
+    },
+    season_correlation: {
+      default: 0.8,
+      unit: '1',
+      states: 'From here on the season counts as agreeing.',
+      looser: 'higher',
+    },
+    double_mass_percent: {
+      default: 10,
+      unit: '%',
+      states: 'Least change of slope that counts as a break.',
+      looser: 'higher',
+    },
+    double_mass_probability: {
+      default: 0.01,
+      unit: '1',
+      states: 'Largest probability (Pettitt) that the break is chance.',
+      looser: 'lower',
+    },
+  },
+  check: ({ id, name, field, fragment }, { profiles }, limits) => {
+    if ((fragment.preparation ?? []).some(answers)) return [];
+    return (profiles.get(name ?? '')?.comparisons ?? []).flatMap(
+      ({ file, reference, outcome }): readonly Draft[] => {
+        const about = { record: id, field: [...field, 'compare_with'] };
+        const subject = (fault: string) => (file === null ? fault : `${file} ${fault}`);
+        if (!isDefined(outcome))
+          return [
+            {
+              ...about,
+              subject: subject('comparison'),
+              message: `${file ?? 'The series'} can’t be compared with ${reference}: ${outcome.undefined}.`,
+              clear: 'Name a reference that has values of the same kind over the same time.',
+            },
+          ];
+        return faultsOf(outcome.value, limits).map(({ fault, says, found, unit }) => ({
+          ...about,
+          subject: subject(fault),
+          found,
+          unit,
+          message: `${file ?? 'The series'} ${says(reference)}, and no step of preparation speaks of a correction.`,
+        }));
+      },
+    );
+  },
+});
+
+/** Words of a step that treats a bias or a break. */
+const treats =
+  /bias|correct|adjust|scal|homogen|merg|undercatch|calibrat|quantile|double.mass|multipl|factor/i;
+
+function answers({ step = '', because = '' }: Preparation): boolean {
+  return treats.test(`${step} ${because}`);
+}
+
+interface Fault {
+  readonly fault: string;
+  says(reference: string): string;
+  readonly found: number;
+  readonly unit: string;
+}
+
+/** Fewer years tell neither a lost correlation nor a break from chance (Searcy & Hardison; from memory). */
+const fewestYears = 5;
+
+function faultsOf(comparison: Comparison, limits: Limits): readonly Fault[] {
+  // Another unit is no bias.
+  const faults = unitDoubt(comparison, factorTolerance) === null ? [bias(comparison, limits)] : [];
+  return [...faults, wrongYears(comparison, limits), massBreak(comparison, limits)].filter(
+    (fault) => fault !== null,
+  );
+}
+
+function bias({ biasPercent, years }: Comparison, { annual_bias_percent: most = 0 }: Limits): Fault | null {
+  if (!isDefined(biasPercent) || Math.abs(biasPercent.value) <= most) return null;
+  const { value } = biasPercent;
+  return {
+    fault: 'bias',
+    found: Number(value.toPrecision(3)),
+    unit: '%',
+    says: (reference) =>
+      `has ${figure(Math.abs(value))} % ${value < 0 ? 'less' : 'more'} than ${reference} over the days that both have in ${years.length === 1 ? years[0] : `${years.length} years`} (a difference of ${most} % is let pass)`,
+  };
+}
+
+function wrongYears(
+  { annualCorrelation: annual, anomalyCorrelation: anomaly, seasonCorrelation: season, years }: Comparison,
+  { annual_correlation: least = 0, season_correlation: agreeing = 0 }: Limits,
+): Fault | null {
+  if (!isDefined(season) || season.value < agreeing) return null;
+  const lost = [
+    ...(isDefined(annual) && years.length >= fewestYears && annual.value < least
+      ? [`annual totals correlate at ${figure(annual.value)}`]
+      : []),
+    ...(isDefined(anomaly) && anomaly.value < least
+      ? [`monthly ones, once the season is taken out, at ${figure(anomaly.value)}`]
+      : []),
+  ];
+  if (lost.length === 0) return null;
+  const [found] = [anomaly, annual].filter(isDefined);
+  return {
+    fault: 'years',
+    found: Number((found?.value ?? 0).toPrecision(3)),
+    unit: '1',
+    says: (reference) =>
+      `has the season of ${reference} (correlation ${figure(season.value)}) but not its wet and dry times: ${lost.join('; ')}`,
+  };
+}
+
+function massBreak({ doubleMass, years }: Comparison, limits: Limits): Fault | null {
+  if (!isDefined(doubleMass)) return null;
+  const { adjustment, change } = doubleMass.value;
+  const { double_mass_percent: most = 0, double_mass_probability: chance = 0 } = limits;
+  const percent = 100 * (adjustment - 1);
+  const isLong = change.before >= fewestYears && years.length - change.before >= fewestYears;
+  if (!isLong || change.p > chance || Math.abs(percent) < most) return null;
+  return {
+    fault: 'break',
+    found: Number(percent.toPrecision(3)),
+    unit: '%',
+    says: (reference) =>
+      `breaks against ${reference}: from ${change.firstAfter} on it has ${figure(Math.abs(percent))} % ${percent < 0 ? 'less' : 'more'} for the same amount than until ${change.lastBefore} (Pettitt p ${change.p.toPrecision(2)})`,
+  };
+}
