@@ -6,6 +6,8 @@ import { remembered } from './remembered.ts';
 import { type Cause, fits, likelyCauses } from './scores/causes.ts';
 import { type RecomputedFigures, recompute } from './scores/recompute.ts';
 import {
+  type ScoredWindow,
+  type StatedName,
   type StatedScore,
   scoredWindows,
   scoresInManifest,
@@ -13,7 +15,6 @@ import {
   type UnreadRow,
 } from './scores/stated.ts';
 import { subjectOf } from './scores/subject.ts';
-import type { PeakSettings } from './scores/window-figures.ts';
 import { targetsIn } from './windows.ts';
 
 /** How well one target fits: what its files give, and what is stated. */
@@ -72,7 +73,7 @@ async function figuresOf(
     return isDefined(read) ? recompute(read.value, peaks) : read;
   });
   const compared = stated.map((score) => {
-    const figure = figureOf(score, recomputed, peaks);
+    const figure = recomputedScore(recomputed, score.window, score.score);
     return { score, figure, agrees: fits(score, figure) };
   });
   const causes = new Map<StatedScore, readonly Cause[]>();
@@ -98,17 +99,18 @@ async function figuresOf(
   };
 }
 
-/** The recomputed figure of a stated score, or why there is none. */
-function figureOf(
-  { window, score }: StatedScore,
+/** The recomputed figure of a score over a window, or why there is none. */
+export function recomputedScore(
   recomputed: Statistic<RecomputedFigures>,
-  peaks: PeakSettings | undefined,
+  window: ScoredWindow,
+  score: StatedName,
 ): Statistic {
   if (!isDefined(recomputed)) return recomputed;
   const figures = recomputed.value.windows[window] ?? undefinedBecause(`no ${window} window is stated`);
   if (!isDefined(figures)) return figures;
   if (score !== 'peaks_hit') return figures.value.scores[score];
-  if (peaks?.above === undefined)
-    return undefinedBecause('nothing says what counts as a peak (`peaks.above`)');
-  return isDefined(figures.value.peaks) ? figures.value.peaks.value.share : figures.value.peaks;
+  const { peaks } = figures.value;
+  if (!isDefined(peaks)) return peaks;
+  if (!peaks.value.stated) return undefinedBecause('nothing says what counts as a peak (`peaks.above`)');
+  return peaks.value.share;
 }
