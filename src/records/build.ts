@@ -62,6 +62,7 @@ export async function buildRecords(
   const covered = coveredFiles(manifest, find, snapshot.entries.keys());
   return {
     manifest,
+    scheme: linked.scheme,
     nodes,
     digests: linked.digests,
     circle: linked.circle,

@@ -118,6 +118,8 @@ export interface RecordNode<A extends Area = Area> {
 /** All records of one manifest in one snapshot. */
 export interface Records {
   readonly manifest: Manifest;
+  /** Number of the scheme by which all this is linked and digested. */
+  readonly scheme: number;
   /** Present records; what others rest on comes first, else in the manifest's order. */
   readonly nodes: ReadonlyMap<string, RecordNode>;
   /** Digest now of each record and field address that something rests on. */

@@ -46,10 +46,10 @@ export function judgeStandings(
   return standings;
 }
 
-/** Links and digests of the records by any scheme, worked out once; an unknown scheme is taken for the newest, which the records follow. */
+/** Links and digests of the records by any scheme, worked out once; an unknown scheme is taken for the records' own. */
 export function linksOf(records: Records, schemes: Schemes): (scheme: number) => Links {
   const restsOn = new Map([...records.nodes.values()].map((node) => [node.id, node.restsOn]));
-  const current: Links = { scheme: newest(schemes).number, restsOn, digests: records.digests };
+  const current: Links = { scheme: records.scheme, restsOn, digests: records.digests };
   const worked = new Map<number, Links>([[current.scheme, current]]);
   return (number) => {
     const scheme = schemes.find((one) => one.number === number);
