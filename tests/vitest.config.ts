@@ -6,6 +6,8 @@ export default defineConfig({
     include: ['src/**/*.test.ts', 'tests/**/*.test.ts'],
     testTimeout: 60_000,
     hookTimeout: 60_000,
+    // Loading all rooms anew for every file costs more than most of the tests.
+    isolate: false,
     reporters: ['default', './tests/closing-line.ts'],
   },
 });
