@@ -5,29 +5,44 @@ import type { Snapshot } from '../repository/snapshot.ts';
 import { differencesOf } from './differences.ts';
 import type { Facts } from './facts.ts';
 import { profilesOf } from './profiles.ts';
+import { rainYearsOf } from './rain-years.ts';
 import { takeReadings } from './readings.ts';
 import { scoresOf } from './scores.ts';
+import { seasonsOf } from './seasons.ts';
+import { storesOf } from './store-drift.ts';
+
+type GivenFacts =
+  | 'manifest'
+  | 'records'
+  | 'sealsFile'
+  | 'standings'
+  | 'today'
+  | 'before'
+  | 'claimedElsewhere'
+  | 'known'
+  | 'phase';
 
 /** What the rooms before this one, and the caller, give. */
-export interface Given
-  extends Omit<
-    Facts,
-    'sealsBefore' | 'beside' | 'readings' | 'differences' | 'profiles' | 'scores' | 'found' | 'record'
-  > {
+export interface Given extends Pick<Facts, GivenFacts> {
   readonly snapshot: Snapshot;
 }
 
 /** Computes all that rules may ask about a manifest; reads only files that a rule needs. */
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
   const { records, standings, sealsFile } = given;
-  const [sealsBefore, beside, readings, differences, profiles, scores] = await Promise.all([
-    sealsOfBefore(sealsFile, snapshot),
-    filesBeside(records, snapshot),
-    takeReadings(records, snapshot),
-    differencesOf(records, standings, snapshot),
-    profilesOf(records, snapshot),
-    scoresOf(records, snapshot),
-  ]);
+  const rain = rainYearsOf(records, snapshot);
+  const [sealsBefore, beside, readings, differences, profiles, scores, rainYears, stores, seasons] =
+    await Promise.all([
+      sealsOfBefore(sealsFile, snapshot),
+      filesBeside(records, snapshot),
+      takeReadings(records, snapshot),
+      differencesOf(records, standings, snapshot),
+      profilesOf(records, snapshot),
+      scoresOf(records, snapshot),
+      rain,
+      rain.then((years) => storesOf(records, years, snapshot)),
+      seasonsOf(records, snapshot),
+    ]);
   return Object.freeze({
     ...given,
     sealsBefore,
@@ -36,6 +51,9 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
     differences,
     profiles,
     scores,
+    rainYears,
+    stores,
+    seasons,
     found: [],
     record: (id: string) => records.nodes.get(id),
   });

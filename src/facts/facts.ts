@@ -1,11 +1,15 @@
+import type { Statistic } from '../hydrology/paired.ts';
 import type { Manifest } from '../manifest/manifest.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Seal, SealsFile, Standing } from '../records/seal.ts';
 import type { DiskFile } from '../repository/snapshot.ts';
 import type { SeriesDifference } from '../series/difference.ts';
 import type { InputProfile } from './profiles.ts';
+import type { RainYears } from './rain-years.ts';
 import type { Reading } from './readings.ts';
 import type { TargetFigures } from './scores.ts';
+import type { ComparedSeason } from './seasons.ts';
+import type { RunStores } from './store-drift.ts';
 
 /** What one rule found, as far as rules of the second pass need it. */
 export interface Found {
@@ -47,6 +51,12 @@ export interface Facts {
   readonly scores: ReadonlyMap<string, TargetFigures>;
   /** By path: what lies on disk where a record says that a file is kept outside git with a digest; null where nothing does. */
   readonly beside: ReadonlyMap<string, DiskFile | null>;
+  /** By the name of the precipitation input: the rain of its complete years. */
+  readonly rainYears: ReadonlyMap<string, Statistic<RainYears>>;
+  /** By the name of the run: how its stores move after warm-up. */
+  readonly stores: ReadonlyMap<string, RunStores>;
+  /** For each stated season, in the manifest's order: how the simulated one lies to the observed. */
+  readonly seasons: readonly ComparedSeason[];
   /** Findings of the first pass; empty during it. */
   readonly found: readonly Found[];
   readonly known: KnownRules;

@@ -61,7 +61,12 @@ function length(step: Step): number {
   return step.kind === 'months' ? step.length * 30 * secondsOfDay : step.length;
 }
 
-function atStep(series: Series, step: Step, comparison: Comparison): Statistic<Series> {
+/** One series in a step that is no finer than its own. */
+export function atStep(
+  series: Series,
+  step: Step,
+  comparison: Pick<Comparison, 'variable' | 'yearBegins' | 'incomplete'>,
+): Statistic<Series> {
   if (sameStep(series.step, step) || step.kind === 'irregular') return defined(series);
   const by = periodOf(step);
   const isSampled = series.step.kind === 'irregular';

@@ -1,0 +1,64 @@
+import { defined, isDefined, type Statistic } from '../hydrology/paired.ts';
+import type { RecordNode, Records } from '../records/record.ts';
+import type { Snapshot } from '../repository/snapshot.ts';
+import { aggregate } from '../series/aggregate.ts';
+import { convertSeries } from '../series/convert-series.ts';
+import { yearBeginsOf } from './catchment.ts';
+import { findInput, readInputSeries } from './input.ts';
+import { remembered } from './remembered.ts';
+
+/** The rain of each complete hydrological year, step beside step. */
+export interface RainYears {
+  /** Named by the calendar year in which they end. */
+  readonly years: readonly number[];
+  readonly totalsMm: readonly number[];
+}
+
+const version = 1;
+
+/** By name: the yearly rain of every precipitation input; undefined where its content is not here, or has no unit of rain. */
+export async function rainYearsOf(
+  records: Records,
+  snapshot: Snapshot,
+): Promise<ReadonlyMap<string, Statistic<RainYears>>> {
+  const found = new Map<string, Statistic<RainYears>>();
+  for (const { area, name, fragment } of records.nodes.values())
+    if (
+      area === 'inputs' &&
+      name !== null &&
+      (fragment as RecordNode<'inputs'>['fragment']).role === 'precipitation'
+    )
+      found.set(name, await rainYears(name, records, snapshot));
+  return found;
+}
+
+/** The precipitation inputs that a run takes, by name. */
+export function rainOfRun(run: RecordNode<'runs'> | undefined, { nodes }: Records): readonly string[] {
+  return (run?.fragment.takes ?? []).flatMap((taken) => {
+    const input = nodes.get(taken) as RecordNode<'inputs'> | undefined;
+    return input?.area === 'inputs' && input.fragment.role === 'precipitation' ? (input.name ?? []) : [];
+  });
+}
+
+async function rainYears(input: string, records: Records, snapshot: Snapshot): Promise<Statistic<RainYears>> {
+  const found = findInput({ input }, records);
+  if ('undefined' in found) return found;
+  const yearBegins = yearBeginsOf(records.manifest.data);
+  const basis = { what: 'rain of years', version, from: { input: found.value.from, yearBegins } };
+  return remembered(snapshot, basis, async () => {
+    const series = await readInputSeries(found.value, records, snapshot);
+    if (!isDefined(series)) return series;
+    const inMm = convertSeries(series.value, 'mm');
+    if (!isDefined(inMm)) return inMm;
+    const groups = aggregate(inMm.value, {
+      by: 'year',
+      how: 'total',
+      completeness: 'every-step',
+      yearBegins,
+    });
+    const complete = groups.flatMap(({ label, value }) =>
+      isDefined(value) ? [{ year: Number(label), total: value.value }] : [],
+    );
+    return defined({ years: complete.map(({ year }) => year), totalsMm: complete.map(({ total }) => total) });
+  });
+}

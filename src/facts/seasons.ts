@@ -1,0 +1,94 @@
+import { defined, isDefined, type Statistic } from '../hydrology/paired.ts';
+import { climatology } from '../hydrology/season/climatology.ts';
+import { type SeasonLag, seasonLag } from '../hydrology/season/season-lag.ts';
+import type { Season } from '../manifest/data.generated.ts';
+import { parsePeriod } from '../manifest/period.ts';
+import type { RecordNode, Records } from '../records/record.ts';
+import type { Snapshot } from '../repository/snapshot.ts';
+import { parseDate } from '../series/calendar.ts';
+import { pairByDate } from '../series/pair.ts';
+import { monthly } from '../series/step.ts';
+import { yearBeginsOf } from './catchment.ts';
+import { findInput, readInputSeries } from './input.ts';
+import { findOutput, readOutputSeries } from './output.ts';
+import { remembered } from './remembered.ts';
+import { atStep, type Sides } from './scores/comparable.ts';
+import { simulatedDays } from './scores/pairings.ts';
+
+/** By how much a simulated season is late. */
+export interface SeasonFigures extends Omit<SeasonLag, 'correlations'> {
+  /** Months that both series have, after warm-up. */
+  readonly pairs: number;
+}
+
+export interface ComparedSeason {
+  readonly lag: Statistic<SeasonFigures>;
+  /** False where the content of a file is not here. */
+  readonly isHere: boolean;
+}
+
+const version = 1;
+
+/** Each stated season, in the manifest's order. */
+export async function seasonsOf(records: Records, snapshot: Snapshot): Promise<readonly ComparedSeason[]> {
+  const found: ComparedSeason[] = [];
+  for (const season of records.manifest.data.seasons ?? [])
+    found.push(await compare(season, records, snapshot));
+  return found;
+}
+
+async function compare(
+  { variable = 'other', observed, simulated }: Season,
+  records: Records,
+  snapshot: Snapshot,
+): Promise<ComparedSeason> {
+  if (observed === undefined) return { lag: { undefined: 'no observed input is named' }, isHere: true };
+  const input = findInput(observed, records);
+  if ('undefined' in input) return { lag: input, isHere: !input.isAway };
+  const output = await findOutput(simulated ?? {}, records, snapshot);
+  if ('undefined' in output) return { lag: output, isHere: !output.isAway };
+  const settings = {
+    variable,
+    yearBegins: yearBeginsOf(records.manifest.data),
+    warmUp: warmUpOf(simulated?.run, records),
+  };
+  const from = { input: input.value.from, output: output.value, ...settings };
+  const lag = await remembered(snapshot, { what: 'season', version, from }, async () => {
+    const seen = await readInputSeries(input.value, records, snapshot);
+    if (!isDefined(seen)) return seen;
+    const made = await readOutputSeries(output.value, snapshot);
+    return isDefined(made) ? lagOf({ observed: seen.value, simulated: made.value }, settings) : made;
+  });
+  return { lag, isHere: true };
+}
+
+interface Settings {
+  readonly variable: string;
+  readonly yearBegins: ReturnType<typeof yearBeginsOf>;
+  readonly warmUp: string | null;
+}
+
+function warmUpOf(run: string | undefined, { manifest, nodes }: Records): string | null {
+  const own = (nodes.get(`runs.${run}`) as RecordNode<'runs'> | undefined)?.fragment.warm_up;
+  const warmUp = own ?? manifest.data.periods?.warm_up;
+  return typeof warmUp === 'string' ? warmUp : null;
+}
+
+function lagOf(sides: Sides, { warmUp, ...settings }: Settings): Statistic<SeasonFigures> {
+  const observed = atStep(sides.observed, monthly, settings);
+  if (!isDefined(observed)) return observed;
+  const simulated = atStep(sides.simulated, monthly, settings);
+  if (!isDefined(simulated)) return simulated;
+  const left = parsePeriod(warmUp ?? '');
+  const leftOut =
+    left === null ? [] : [{ firstDay: parseDate(left.first) ?? 0, lastDay: parseDate(left.last) ?? 0 }];
+  const windows = simulatedDays({ observed: observed.value, simulated: simulated.value });
+  const paired = pairByDate({ observed: observed.value, simulated: simulated.value, windows, leftOut });
+  if (!isDefined(paired)) return paired;
+  const twelve = climatology(paired.value);
+  if (!isDefined(twelve)) return twelve;
+  const lag = seasonLag(twelve.value);
+  if (!isDefined(lag)) return lag;
+  const { correlations: _, ...figures } = lag.value;
+  return defined({ ...figures, pairs: paired.value.observed.length });
+}
