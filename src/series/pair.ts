@@ -3,8 +3,7 @@ import { secondsOfDay, type Window } from './calendar.ts';
 import { calendarYears, type YearBegins } from './hydrological-year.ts';
 import { type Series, withoutRepeats } from './series.ts';
 import { afterSteps, formatStep, type Step, sameStep, startOfStep, stepsBetween } from './step.ts';
-import { extentOf, holds, stepsIn } from './step-extent.ts';
-import { spansOf } from './windows.ts';
+import { countStarts, spansOf, startsIn } from './windows.ts';
 
 export interface Pairing {
   readonly observed: Series;
@@ -32,7 +31,7 @@ export function pairByDate(pairing: Pairing): Statistic<Paired> {
     );
   const observed = sampled ? onStepsOf(simulated, pairing.observed) : pairing.observed;
   const { step } = simulated;
-  const spans = spansOf(windows, leftOut);
+  const spans = spansOf(windows, leftOut).map((days) => startsIn(days, step, yearBegins));
   const most = Math.min(observed.values.length, simulated.values.length);
   const pairs = {
     observed: new Float64Array(most),
@@ -42,20 +41,19 @@ export function pairByDate(pairing: Pairing): Statistic<Paired> {
   let count = 0;
   let seen = 0;
   const dropped = { missingObserved: 0, missingSimulated: 0, outsideWindow: 0 };
-  let span = 0;
+  let spanAt = 0;
+  let { fromSeconds, untilSeconds } = spans[spanAt] ?? never;
   let o = 0;
   let s = 0;
   while (o < observed.values.length || (s < simulated.values.length && !sampled)) {
-    const observedTime = observed.timeSeconds[o] ?? Number.POSITIVE_INFINITY;
-    const simulatedTime = simulated.timeSeconds[s] ?? Number.POSITIVE_INFINITY;
+    const observedTime = o < observed.values.length ? (observed.timeSeconds[o] as number) : endOfTime;
+    const simulatedTime = s < simulated.values.length ? (simulated.timeSeconds[s] as number) : endOfTime;
     const time = Math.min(observedTime, simulatedTime);
     const observedValue = observedTime === time ? (observed.values[o++] as number) : Number.NaN;
     const simulatedValue = simulatedTime === time ? (simulated.values[s++] as number) : Number.NaN;
     if (sampled && observedTime !== time) continue;
-    const extent = extentOf(time, step, yearBegins);
-    while (span < spans.length && (spans[span]?.untilSeconds ?? 0) <= extent.fromSeconds) span++;
-    const within = spans[span];
-    if (within === undefined || !holds(within, extent)) {
+    while (time >= untilSeconds) ({ fromSeconds, untilSeconds } = spans[++spanAt] ?? never);
+    if (time < fromSeconds) {
       dropped.outsideWindow++;
       continue;
     }
@@ -71,7 +69,7 @@ export function pairByDate(pairing: Pairing): Statistic<Paired> {
     else if (hasObserved) dropped.missingSimulated++;
   }
   const origin = observed.timeSeconds[0] ?? simulated.timeSeconds[0] ?? 0;
-  const onGrid = spans.reduce((steps, each) => steps + stepsIn(each, origin, step, yearBegins), 0);
+  const onGrid = spans.reduce((steps, span) => steps + countStarts(span, origin, step), 0);
   // Rows off the grid are steps too, though the grid does not foresee them.
   const windowSteps = sampled ? seen : Math.max(onGrid, seen);
   return defined({
@@ -85,6 +83,11 @@ export function pairByDate(pairing: Pairing): Statistic<Paired> {
     windowSteps,
   });
 }
+
+const endOfTime = Number.POSITIVE_INFINITY;
+
+/** A window after the last one. */
+const never = { fromSeconds: endOfTime, untilSeconds: endOfTime };
 
 /** Samples moved to the start of the simulated step that holds them. */
 function onStepsOf(simulated: Series, samples: Series): Series {

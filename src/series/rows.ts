@@ -18,7 +18,7 @@ export const longestRow = 1 << 20;
  */
 export class Rows {
   /** The bytes that `starts` and `ends` point into. */
-  bytes: Uint8Array = new Uint8Array(0);
+  bytes: Buffer = Buffer.alloc(0);
   /** First byte of each field of the current row, and the byte after its last, without quotation marks. */
   starts = new Int32Array(64);
   ends = new Int32Array(64);
@@ -33,6 +33,8 @@ export class Rows {
 
   private position = 0;
   private nextLine = 1;
+  /** Line ends inside the quoted fields of the current row. */
+  private linesInside = 0;
   /** Whether a byte-order mark has been looked for. */
   private begun = false;
   private readonly kinds = new Uint8Array(256);
@@ -53,7 +55,9 @@ export class Rows {
 
   /** Gives the next bytes of the file; rows that they complete can then be read. Nothing of `chunk` is kept beyond the next call. */
   take(chunk: Uint8Array): void {
-    this.bytes = this.bytes.length === 0 ? chunk : Buffer.concat([this.bytes, chunk]);
+    const { buffer, byteOffset, length } = chunk;
+    this.bytes =
+      this.bytes.length === 0 ? Buffer.from(buffer, byteOffset, length) : Buffer.concat([this.bytes, chunk]);
   }
 
   /** Says that no more bytes come; a last line without a line end counts. */
@@ -101,10 +105,9 @@ export class Rows {
     for (;;) {
       const begins = this.skipBlanks(this.position);
       if (begins === this.bytes.length) return false;
-      const byte = this.bytes[begins] as number;
-      if (byte === this.comment || byte === lineFeed || byte === carriageReturn) {
-        if (!this.skipLine()) return false;
-      } else return this.split();
+      const byte = this.bytes[begins];
+      if (byte !== this.comment && byte !== lineFeed && byte !== carriageReturn) return this.split();
+      if (!this.skipLine()) return false;
     }
   }
 
@@ -127,60 +130,68 @@ export class Rows {
   }
 
   private keepRest(): void {
-    this.bytes = this.bytes.slice(this.position);
+    this.bytes = Buffer.from(this.bytes.subarray(this.position));
     this.position = 0;
   }
 
   private split(): boolean {
     const { bytes, kinds, byBlanks } = this;
     const end = bytes.length;
-    const line = this.nextLine;
-    let linesInside = 0;
-    let count = 0;
-    let torn = false;
     let { starts, ends } = this;
-    let at = this.position;
-    for (;;) {
+    let count = 0;
+    this.torn = false;
+    this.linesInside = 0;
+    for (let at = this.position; ; at++) {
       if ((bytes[at] as number) <= space) at = this.skipBlanks(at);
-      let begins = at;
-      let stops: number;
-      if (at < end && bytes[at] === quote) {
-        begins = ++at;
-        for (;;) {
-          while (at < end && bytes[at] !== quote) {
-            if (bytes[at] === lineFeed || (bytes[at] === carriageReturn && bytes[at + 1] !== lineFeed))
-              linesInside++;
-            at++;
-          }
-          if (at + 1 >= end) return false;
-          if (bytes[at + 1] !== quote) break;
-          at += 2;
-        }
-        stops = at++;
-        const after = at;
-        while (at < end && kinds[bytes[at] as number] === ordinary) at++;
-        if (this.skipBlanks(after) < at) torn = true;
-      } else {
-        while (at < end && kinds[bytes[at] as number] === ordinary) at++;
-        stops = at;
-        while (stops > begins && (bytes[stops - 1] === space || bytes[stops - 1] === tab)) stops--;
-      }
-      if (at === end) return false;
+      const begins = at;
+      if (bytes[at] === quote) at = this.closing(at);
+      while (at < end && kinds[bytes[at] as number] === ordinary) at++;
+      if (at >= end) return false;
       if (count === starts.length) ({ starts, ends } = this.widen());
       starts[count] = begins;
-      ends[count] = stops;
+      ends[count] = at;
+      if (bytes[begins] === quote || (bytes[at - 1] as number) <= space) this.trim(count);
       count++;
       if (byBlanks) at = this.skipBlanks(at);
       if (at === end) return false;
-      if (kinds[bytes[at] as number] === lineEnding) break;
-      if (!byBlanks) at++;
+      if (kinds[bytes[at] as number] === lineEnding) {
+        this.line = this.nextLine;
+        this.count = count;
+        if (!this.endLine(at)) return false;
+        this.nextLine += this.linesInside;
+        return true;
+      }
+      // After blanks the next field has begun.
+      if (byBlanks) at--;
     }
-    if (!this.endLine(at)) return false;
-    this.nextLine += linesInside;
-    this.line = line;
-    this.count = count;
-    this.torn = torn;
-    return true;
+  }
+
+  /** The place after the quotation mark that closes the field begun at `from`; the end where it is not here yet. */
+  private closing(from: number): number {
+    const { bytes } = this;
+    for (let at = from + 1; at < bytes.length; at++) {
+      if (bytes[at] !== quote) continue;
+      if (bytes[at + 1] !== quote) return at + 1;
+      at++;
+    }
+    return bytes.length;
+  }
+
+  /** Takes blanks and quotation marks off a field; text after the closing mark tears the row. */
+  private trim(field: number): void {
+    const { bytes, starts, ends } = this;
+    const begins = starts[field] as number;
+    let stops = ends[field] as number;
+    while (stops > begins && (bytes[stops - 1] === space || bytes[stops - 1] === tab)) stops--;
+    if (bytes[begins] === quote) {
+      if (this.closing(begins) !== stops) this.torn = true;
+      for (let at = begins; at < stops; at++)
+        if (bytes[at] === lineFeed || (bytes[at] === carriageReturn && bytes[at + 1] !== lineFeed))
+          this.linesInside++;
+      starts[field] = begins + 1;
+      stops--;
+    }
+    ends[field] = stops;
   }
 
   private skipBlanks(from: number): number {

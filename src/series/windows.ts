@@ -1,4 +1,6 @@
-import { secondsOfDay, type Window } from './calendar.ts';
+import { firstDayOfMonth, monthNumber, secondsOfDay, type Window } from './calendar.ts';
+import { daysOfYear, type YearBegins, yearOf } from './hydrological-year.ts';
+import { isByDate, type Step, stepsBetween } from './step.ts';
 
 /** A span from a time up to, not including, another. */
 export interface Span {
@@ -26,4 +28,40 @@ export function spansOf(windows: readonly Window[], leftOut: readonly Window[]):
     fromSeconds: firstDay * secondsOfDay,
     untilSeconds: (lastDay + 1) * secondsOfDay,
   }));
+}
+
+/**
+ * Where the steps start that belong to whole days. Daily and longer steps belong to days that hold all of them, years as they begin;
+ * shorter steps and samples go by their time alone, since files label them by their start or by their end.
+ */
+export function startsIn(days: Span, step: Step, yearBegins: YearBegins): Span {
+  const { fromSeconds, untilSeconds } = days;
+  if (step.kind === 'seconds' && isByDate(step))
+    return { fromSeconds, untilSeconds: untilSeconds - step.length + 1 };
+  if (step.kind !== 'months') return days;
+  const firstDay = fromSeconds / secondsOfDay;
+  const nextDay = untilSeconds / secondsOfDay;
+  if (step.length === 12) {
+    const year = yearOf(firstDay, yearBegins);
+    const begun = daysOfYear(year, yearBegins).firstDay < firstDay;
+    return between((begun ? year + 1 : year) * 12, yearOf(nextDay, yearBegins) * 12);
+  }
+  const month = monthNumber(firstDay);
+  const begun = firstDayOfMonth(month) < firstDay;
+  return between(begun ? month + 1 : month, monthNumber(nextDay) - step.length + 1);
+}
+
+/** How many steps of a grid through `origin` start in a span; none in irregular series. */
+export function countStarts(span: Span, origin: number, step: Step): number {
+  if (step.kind === 'irregular') return 0;
+  const { fromSeconds, untilSeconds } = span;
+  const first = Math.ceil(stepsBetween(origin, fromSeconds, step));
+  return Math.max(0, Math.ceil(stepsBetween(origin, untilSeconds, step)) - first);
+}
+
+function between(month: number, untilMonth: number): Span {
+  return {
+    fromSeconds: firstDayOfMonth(month) * secondsOfDay,
+    untilSeconds: firstDayOfMonth(untilMonth) * secondsOfDay,
+  };
 }

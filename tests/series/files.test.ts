@@ -16,7 +16,7 @@ describe('files as modellers have them', () => {
     for (const { text, layout = plain, rows = twoDays } of awkward) {
       const bytes = Buffer.from(text);
       for (const size of [1, 2, 3, 7]) {
-        const reused = new Uint8Array(size);
+        const reused = size % 2 === 0 ? new Uint8Array(size) : Buffer.alloc(size);
         const table = await readSeries(piecesOf(bytes, reused), layout, 'flow.csv');
         expect(rowsOf(table)).toEqual(rows);
         expect(problemsOf(table)).toEqual([]);
