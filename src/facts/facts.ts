@@ -8,7 +8,7 @@ import type { InputProfile } from './profiles.ts';
 import type { RainYears } from './rain-years.ts';
 import type { Reading } from './readings.ts';
 import type { TargetFigures } from './scores.ts';
-import type { ComparedSeason } from './seasons.ts';
+import type { SeasonFigures } from './seasons.ts';
 import type { RunStores } from './store-drift.ts';
 
 /** What one rule found, as far as rules of the second pass need it. */
@@ -56,7 +56,7 @@ export interface Facts {
   /** By the name of the run: how its stores move after warm-up. */
   readonly stores: ReadonlyMap<string, RunStores>;
   /** For each stated season, in the manifest's order: how the simulated one lies to the observed. */
-  readonly seasons: readonly ComparedSeason[];
+  readonly seasons: readonly Statistic<SeasonFigures>[];
   /** Findings of the first pass; empty during it. */
   readonly found: readonly Found[];
   readonly known: KnownRules;

@@ -1,4 +1,4 @@
-import { defined, isDefined, type Statistic } from '../hydrology/paired.ts';
+import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
 import { climatology } from '../hydrology/season/climatology.ts';
 import { type SeasonLag, seasonLag } from '../hydrology/season/season-lag.ts';
 import type { Season } from '../manifest/data.generated.ts';
@@ -21,17 +21,14 @@ export interface SeasonFigures extends Omit<SeasonLag, 'correlations'> {
   readonly pairs: number;
 }
 
-export interface ComparedSeason {
-  readonly lag: Statistic<SeasonFigures>;
-  /** False where the content of a file is not here. */
-  readonly isHere: boolean;
-}
-
 const version = 1;
 
 /** Each stated season, in the manifest's order. */
-export async function seasonsOf(records: Records, snapshot: Snapshot): Promise<readonly ComparedSeason[]> {
-  const found: ComparedSeason[] = [];
+export async function seasonsOf(
+  records: Records,
+  snapshot: Snapshot,
+): Promise<readonly Statistic<SeasonFigures>[]> {
+  const found: Statistic<SeasonFigures>[] = [];
   for (const season of records.manifest.data.seasons ?? [])
     found.push(await compare(season, records, snapshot));
   return found;
@@ -41,25 +38,24 @@ async function compare(
   { variable = 'other', observed, simulated }: Season,
   records: Records,
   snapshot: Snapshot,
-): Promise<ComparedSeason> {
-  if (observed === undefined) return { lag: { undefined: 'no observed input is named' }, isHere: true };
+): Promise<Statistic<SeasonFigures>> {
+  if (observed === undefined) return undefinedBecause('no observed input is named');
   const input = findInput(observed, records);
-  if ('undefined' in input) return { lag: input, isHere: !input.isAway };
+  if ('undefined' in input) return input;
   const output = await findOutput(simulated ?? {}, records, snapshot);
-  if ('undefined' in output) return { lag: output, isHere: !output.isAway };
+  if ('undefined' in output) return output;
   const settings = {
     variable,
     yearBegins: yearBeginsOf(records.manifest.data),
     warmUp: warmUpOf(simulated?.run, records),
   };
   const from = { input: input.value.from, output: output.value, ...settings };
-  const lag = await remembered(snapshot, { what: 'season', version, from }, async () => {
+  return remembered(snapshot, { what: 'season', version, from }, async () => {
     const seen = await readInputSeries(input.value, records, snapshot);
     if (!isDefined(seen)) return seen;
     const made = await readOutputSeries(output.value, snapshot);
     return isDefined(made) ? lagOf({ observed: seen.value, simulated: made.value }, settings) : made;
   });
-  return { lag, isHere: true };
 }
 
 interface Settings {

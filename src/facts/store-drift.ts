@@ -33,8 +33,6 @@ export interface Drift extends StoreDrift {
 /** The stores of one run. */
 export interface RunStores {
   readonly stores: Statistic<readonly StoreFigures[]>;
-  /** False where the content of the file is not here. */
-  readonly isHere: boolean;
   /** Whether the rain of the same years rises or falls; undefined where it is not known. */
   readonly rainTrend: Statistic<MannKendall>;
 }
@@ -73,7 +71,7 @@ async function storesOfRun(
   const rainTrend =
     years.length < 5 ? undefinedBecause('the rain of too few years is known') : mannKendall(years);
   const output = await findOutput(run.fragment.stores ?? {}, records, snapshot);
-  if ('undefined' in output) return { stores: output, isHere: !output.isAway, rainTrend };
+  if ('undefined' in output) return { stores: output, rainTrend };
   const rainMm = years.length === 0 ? 0 : mean(years);
   const from = { output: output.value, firstDay, yearBegins, rainMm };
   const stores = await remembered(snapshot, { what: 'drift of stores', version, from }, async () => {
@@ -83,7 +81,7 @@ async function storesOfRun(
       [...columns.value].map(([store, series]) => figuresOf(store, series, firstDay, yearBegins, rainMm)),
     );
   });
-  return { stores, isHere: true, rainTrend };
+  return { stores, rainTrend };
 }
 
 /** Yearly rain in mm from a year on, of the first input of rain that the run takes. */

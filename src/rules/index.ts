@@ -32,6 +32,7 @@ import { inputsUnitUnknown } from './inputs/unit-unknown.ts';
 import { inputsUnreadableRow } from './inputs/unreadable-row.ts';
 import { inputsUnverified } from './inputs/unverified.ts';
 import { interventionsDefaultUnstated } from './interventions/default-unstated.ts';
+import { interventionsSeasonShifted } from './interventions/season-shifted.ts';
 import { interventionsUndeclared } from './interventions/undeclared.ts';
 import { interventionsUnrepresented } from './interventions/unrepresented.ts';
 import { manifestCircle } from './manifest/circle.ts';
@@ -55,11 +56,13 @@ import { parametersIncomplete } from './parameters/incomplete.ts';
 import { parametersMissing } from './parameters/missing.ts';
 import { parametersOutOfRange } from './parameters/out-of-range.ts';
 import { periodsCalibrationMissing } from './periods/calibration-missing.ts';
+import { periodsOneSided } from './periods/one-sided.ts';
 import { periodsOutsideData } from './periods/outside-data.ts';
 import { periodsOutsideSimulation } from './periods/outside-simulation.ts';
 import { periodsOverlap } from './periods/overlap.ts';
 import { periodsShort } from './periods/short.ts';
 import { periodsValidationMissing } from './periods/validation-missing.ts';
+import { periodsWarmUpDrift } from './periods/warm-up-drift.ts';
 import { periodsWarmUpMissing } from './periods/warm-up-missing.ts';
 import { periodsWarmUpShort } from './periods/warm-up-short.ts';
 import { readingDiffers } from './reading/differs.ts';
@@ -146,10 +149,12 @@ export const rules: readonly Rule[] = [
   inputsPublishedDigestDiffers,
   periodsWarmUpMissing,
   periodsWarmUpShort,
+  periodsWarmUpDrift,
   periodsOverlap,
   periodsOutsideSimulation,
   periodsOutsideData,
   periodsShort,
+  periodsOneSided,
   periodsCalibrationMissing,
   periodsValidationMissing,
   setupChoiceMissing,
@@ -174,6 +179,7 @@ export const rules: readonly Rule[] = [
   interventionsUndeclared,
   interventionsUnrepresented,
   interventionsDefaultUnstated,
+  interventionsSeasonShifted,
   uncertaintySourceUnaddressed,
   uncertaintyBandMissing,
   runsMissing,
