@@ -26,7 +26,7 @@ export async function buildRecords(
   );
   const find = pathFinder(paths, folder);
   const stated = await statementsOf(manifest, async (pattern) => {
-    const [path] = find(pattern) ?? [];
+    const [path] = find(pattern)?.paths ?? [];
     const bytes = path === undefined ? null : await snapshot.read(path);
     return bytes === null ? null : new TextDecoder().decode(bytes);
   });
@@ -71,6 +71,6 @@ export async function buildRecords(
       const { written: name, field } = reference;
       return { record, name, field, nearest: nearestKnown(reference, stated) };
     }),
-    unaccounted: covered.paths.filter((path) => !claimed.named.has(path)),
+    unaccounted: covered.paths.filter((path) => !claimed.paths.has(path)),
   };
 }

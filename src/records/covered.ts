@@ -18,7 +18,7 @@ export function coveredFiles(
         if (found === null) {
           unmatched.push({ record: asWhole, pattern, field, why: 'outside-repository', untracked: [] });
         }
-        return found ?? [];
+        return found?.paths ?? [];
       }),
     );
   const covered = all('covers');

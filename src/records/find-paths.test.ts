@@ -19,6 +19,7 @@ const paths = [
 
 describe('what a path or pattern names', () => {
   const find = pathFinder(paths, '');
+  const named = (pattern: string) => find(pattern)?.paths;
 
   it.each<[string, string[]]>([
     ['data/climate.csv', ['data/climate.csv']],
@@ -39,16 +40,16 @@ describe('what a path or pattern names', () => {
     ['data/rain/{a', []],
     ['Data/climate.csv', []],
   ])('%s', (pattern, found) => {
-    expect([...(find(pattern) ?? ['outside'])].sort()).toEqual([...found].sort());
+    expect([...(find(pattern)?.paths ?? ['outside'])].sort()).toEqual([...found].sort());
   });
 
   it('takes a file whose name holds signs of a glob for itself', () => {
-    expect(find('data/rain (1).csv')).toEqual(['data/rain (1).csv']);
-    expect(find('models/upper [old]/control.txt')).toEqual(['models/upper [old]/control.txt']);
+    expect(named('data/rain (1).csv')).toEqual(['data/rain (1).csv']);
+    expect(named('models/upper [old]/control.txt')).toEqual(['models/upper [old]/control.txt']);
   });
 
   it('starts from the manifest’s folder, whatever signs its name holds, and may climb inside the repository', () => {
-    const below = pathFinder(paths, 'models/upper [old]');
+    const below = (pattern: string) => pathFinder(paths, 'models/upper [old]')(pattern)?.paths;
     expect(below('*.txt')).toEqual(['models/upper [old]/control.txt']);
     expect(below('../../data/rain/*.csv')).toEqual(['data/rain/a.csv', 'data/rain/b.csv']);
     expect(below('../upper')).toEqual(['models/upper/control.txt', 'models/upper/stoplog.yaml']);
@@ -68,8 +69,8 @@ describe('what a path or pattern names', () => {
 
   it('finds a starred name in the middle of a long path at once', () => {
     const long = `${'a'.repeat(200)}c`;
-    expect(pathFinder([long], '')(`${'*a'.repeat(30)}*b`)).toEqual([]);
-    expect(pathFinder([long], '')(`${'*a'.repeat(30)}*c`)).toEqual([long]);
+    expect(pathFinder([long], '')(`${'*a'.repeat(30)}*b`)?.paths).toEqual([]);
+    expect(pathFinder([long], '')(`${'*a'.repeat(30)}*c`)?.paths).toEqual([long]);
   });
 
   it('agrees with picomatch’s own matching', () => {
@@ -81,7 +82,7 @@ describe('what a path or pattern names', () => {
       fc.property(fc.uniqueArray(path, { maxLength: 12 }), pattern, (some, glob) => {
         fc.pre(picomatch.scan(glob).isGlob && !some.includes(glob));
         const matches = picomatch(glob, { posix: true });
-        expect(pathFinder(some, '')(glob)).toEqual([...some].sort().filter((one) => matches(one)));
+        expect(pathFinder(some, '')(glob)?.paths).toEqual([...some].sort().filter((one) => matches(one)));
       }),
     );
   });

@@ -2,8 +2,16 @@ import { posix } from 'node:path';
 import picomatch from 'picomatch';
 import { RE2JS } from 're2js';
 
-/** Finds what a path or pattern of a manifest names; null when it leads out of the repository. */
-export type FindPaths = (pattern: string) => readonly string[] | null;
+/** What a path or pattern of a manifest names; paths are from the top of the repository. */
+export interface Named {
+  /** The path or pattern itself, seen from there. */
+  readonly whole: string;
+  /** The known files that it names, sorted. */
+  readonly paths: readonly string[];
+}
+
+/** Finds what a path or pattern names; null when it leads out of the repository. */
+export type FindPaths = (pattern: string) => Named | null;
 
 /**
  * Over paths from the top of the repository, for a manifest that governs `folder`. A pattern is a file, a folder
@@ -18,11 +26,13 @@ export function pathFinder(paths: Iterable<string>, folder: string): FindPaths {
     if (place === null) return null;
     const { root, rest } = place;
     const whole = root + rest;
-    if (known.has(whole)) return [whole];
-    if (!isGlob(rest)) return startingWith(sorted, whole === '' ? '' : `${whole}/`);
-    const start = root + literalStart(rest);
+    if (known.has(whole)) return { whole, paths: [whole] };
+    if (!picomatch.scan(rest).isGlob) {
+      return { whole, paths: startingWith(sorted, whole === '' ? '' : `${whole}/`) };
+    }
     const matches = globMatcher(rest);
-    return startingWith(sorted, start).filter((path) => matches(path.slice(root.length)));
+    const near = startingWith(sorted, root + literalStart(rest));
+    return { whole, paths: near.filter((path) => matches(path.slice(root.length))) };
   };
 }
 
@@ -37,10 +47,6 @@ export function resolvePattern(folder: string, pattern: string): { root: string;
   if (climbed > folders.length) return null;
   const root = folders.slice(0, folders.length - climbed).map((part) => `${part}/`);
   return { root: root.join(''), rest: rest.join('/') };
-}
-
-function isGlob(pattern: string): boolean {
-  return picomatch.scan(pattern).isGlob;
 }
 
 /** Everything before the first sign that may have a meaning in a glob. */

@@ -1,7 +1,7 @@
 import { sha256OfJson } from './canonical.ts';
 import type { Links } from './link.ts';
 import { fromFolder } from './paths.ts';
-import { type RecordNode, type Records, sha256Of } from './record.ts';
+import { type Area, type RecordNode, type Records, sha256Of } from './record.ts';
 import type { Seal } from './seal.ts';
 
 /** What a run or parameters bring forth, and what that came from. */
@@ -36,17 +36,17 @@ function effectOf(record: RecordNode): string {
 }
 
 /** Where the product of a record is named. An input's statement may change and its data not; then nothing need move. */
-const productKeys: Readonly<Record<string, string>> = {
-  inputs: 'files',
-  model: 'executable',
-  parameters: 'table',
-  runs: 'gives',
+const productKeys: Readonly<Partial<Record<Area, readonly string[]>>> = {
+  inputs: ['files'],
+  model: ['executable', 'environment'],
+  parameters: ['table'],
+  runs: ['gives'],
 };
 
 /** Digest of the files, by content, and the values that a record brings forth; null where there are none. */
 function productOf({ area, field, fragment, claims, elsewhere }: RecordNode): string | null {
   const isProduct = (named: { readonly field: RecordNode['field'] }): boolean =>
-    named.field[field.length] === productKeys[area];
+    productKeys[area]?.includes(String(named.field[field.length])) ?? false;
   const files = [
     ...[...claims.values()].filter(isProduct).map(({ identity }) => sha256Of(identity)),
     ...elsewhere.filter(isProduct).map(({ sha256 = null }) => sha256),

@@ -1,7 +1,7 @@
 import type { Condition, Driver, Window } from '../manifest/data.generated.ts';
 import type { FieldPath } from '../manifest/manifest.ts';
-import { fieldAt, settingsAddress } from './field.ts';
-import { isRecordName, type Reference, runOfTarget } from './names.ts';
+import { settingsAddress } from './field.ts';
+import { isRecordName, type Reference, resolveName, runOfTarget } from './names.ts';
 import type { Area } from './record.ts';
 import type { Stated, Statement, StatementIn } from './statements.ts';
 
@@ -22,8 +22,7 @@ export function restsOnFirst(statement: Statement, stated: Stated): readonly Ref
   /** Records and fields that it depends on without naming them. */
   const silently = (...addresses: string[]): void => {
     for (const to of addresses) {
-      const there = stated.statements.has(to) || fieldAt(to, stated) !== undefined;
-      if (there) found.push({ to, written: to, field: statement.field });
+      if (resolveName(to, stated) !== null) found.push({ to, written: to, field: statement.field });
     }
   };
   const listed = (names: readonly string[] | undefined, field: FieldPath): void => {
