@@ -18,7 +18,7 @@ import {
   incompleteTotalsVersion,
 } from './profiles/incomplete-totals.ts';
 import { type Basis, remembered } from './remembered.ts';
-import { layoutOf, seriesFilesOf, seriesOfFile } from './series-of.ts';
+import { inputsNamed, layoutOf, seriesFilesOf, seriesOfFile } from './series-of.ts';
 
 type InputRecord = RecordNode<'inputs'>;
 
@@ -183,7 +183,7 @@ function inputIn(record: string): readonly string[] {
   return record.startsWith('inputs.') ? [record.slice('inputs.'.length)] : [];
 }
 
-/** What is computed from the series of two inputs; null where content of either is not here. */
+/** What is computed from the series of two inputs; null where either is unknown or content of it is not here. */
 async function ofTwo<T>(
   one: InputReference,
   other: InputReference,
@@ -191,10 +191,10 @@ async function ofTwo<T>(
   snapshot: Snapshot,
   { basis, compute }: { readonly basis: Basis; compute(one: Series, other: Series): Statistic<T> },
 ): Promise<Statistic<T> | null> {
-  const inputs = [findInput(one, records), findInput(other, records)] as const;
-  const [found, foundOther] = inputs;
-  if ('undefined' in found) return found.isAway ? null : found;
-  if ('undefined' in foundOther) return foundOther.isAway ? null : foundOther;
+  const found = findInput(one, records);
+  const foundOther = findInput(other, records);
+  const hasFiles = inputsNamed(other.input, records).some((input) => seriesFilesOf(input).length > 0);
+  if (!('value' in found && 'value' in foundOther && hasFiles)) return null;
   const from = { settings: basis.from, one: found.value.from, other: foundOther.value.from };
   return remembered(snapshot, { ...basis, from }, async () => {
     const series = await readInputSeries(found.value, records, snapshot);

@@ -16,8 +16,9 @@ export interface FileProfile {
   /** Labels of the first and the last row in seconds since 1970-01-01T00:00 on the station's clock; null without rows. */
   readonly firstSeconds: number | null;
   readonly lastSeconds: number | null;
-  /** The longest and the commonest time between rows in seconds; 0 with fewer than two. */
+  /** The longest time between rows in seconds; 0 with fewer than two. */
   readonly longestSeconds: number;
+  /** The time between rows in seconds that more than half of them have; 0 where there is none. */
   readonly usualSeconds: number;
   readonly columns: readonly ColumnProfile[];
   /** Rows that can't be read as the layout says, or why the file can't. */
@@ -64,6 +65,6 @@ function distances(timeSeconds: Float64Array): Pick<FileProfile, 'longestSeconds
     longestSeconds = Math.max(longestSeconds, distance);
     if (distance > 0) counts.set(distance, (counts.get(distance) ?? 0) + 1);
   }
-  const [usual] = [...counts].sort((one, other) => other[1] - one[1] || one[0] - other[0]);
+  const [usual] = [...counts].filter(([, count]) => count > (timeSeconds.length - 1) / 2);
   return { longestSeconds, usualSeconds: usual?.[0] ?? 0 };
 }

@@ -47,7 +47,7 @@ export const inputsBiasedUntreated = rule({
       looser: 'higher',
     },
     double_mass_probability: {
-      default: 0.01,
+      default: 0.05,
       unit: '1',
       states: 'Largest probability (Pettitt) that the break is chance.',
       looser: 'lower',

@@ -1,3 +1,4 @@
+import { withLines } from '../../../tests/harness/edit-lines.ts';
 import { ruleCases } from '../../../tests/harness/rule-cases.ts';
 import { inputsGapUntreated } from './gap-untreated.ts';
 
@@ -17,6 +18,16 @@ ruleCases(inputsGapUntreated, {
       name: 'a share of one file is missing',
       set: { 'inputs.rainfall.missing_share': { per_file: { 'data/rain.csv': 0.02 } } },
       finds: { record: 'inputs.rainfall', stated: 0.02, message: 'one of the files' },
+    },
+    {
+      name: 'what is missing is not stated',
+      remove: ['inputs.streamflow.gaps_treated', 'inputs.streamflow.missing_share'],
+      finds: { record: 'inputs.streamflow', found: 0.000608 },
+    },
+    {
+      name: 'none is said to be missing, and one is',
+      files: { 'data/rain.csv': withLines({ 5: '2001-10-04,' }) },
+      finds: { record: 'inputs.rainfall', found: 0.000304 },
     },
     {
       name: 'only noted before the calibration',

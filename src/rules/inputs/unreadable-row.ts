@@ -27,7 +27,7 @@ export const inputsUnreadableRow = rule({
           subject: path,
           ...(line === null ? { field: [...field, 'series'] } : { file: path, line }),
           found: first.found,
-          message: `${tellProblem(path, first)}.${more > 0 ? ` ${figure(more)} more rows of it can’t be read.` : ''}`,
+          message: `${tellProblem(path, first)}.${more > 0 ? ` ${figure(more)} more can’t be read.` : ''}`,
           detail: others.slice(0, shown - 1).map((problem) => tellProblem(path, problem)),
         },
       ];

@@ -1,0 +1,73 @@
+import { withValues } from '../../../tests/harness/edit-lines.ts';
+import { ruleCases } from '../../../tests/harness/rule-cases.ts';
+import { inputsUnitDoubtful } from './unit-doubtful.ts';
+
+ruleCases(inputsUnitDoubtful, {
+  fires: [
+    {
+      name: 'inches said to be millimetres',
+      files: { 'data/rain.csv': withValues((mm) => mm / 25.4) },
+      finds: {
+        record: 'inputs.rainfall',
+        field: 'inputs.rainfall.series.unit',
+        stated: 'mm/d',
+        message:
+          'times as small as inputs.check-gauge over the same time; 25.4 lies between inches and millimetres',
+        level: 'warn',
+      },
+    },
+    {
+      name: 'tenths said to be millimetres',
+      files: { 'data/rain.csv': withValues((mm) => mm * 10) },
+      finds: { message: '10 lies between tenths of millimetres' },
+    },
+    {
+      name: 'metres without a reference',
+      remove: ['inputs.rainfall.compare_with'],
+      files: { 'data/rain.csv': withValues((mm) => mm / 1000) },
+      finds: { message: /^In its unit the series gives 1\.\d+ mm of rain in a mean year/ },
+    },
+    {
+      name: 'litres said to be cubic metres',
+      files: { 'data/flow.csv': withValues((flow) => (Number.isNaN(flow) ? 'NA' : flow * 1000)) },
+      finds: {
+        record: 'inputs.streamflow',
+        stated: 'm3/s',
+        message: /^Over the catchment the flow makes .* beside/,
+      },
+    },
+    {
+      name: 'a river of another size than its unit says',
+      set: { 'inputs.streamflow.series.unit': 'L/s' },
+      finds: { record: 'inputs.streamflow', stated: 'L/s' },
+    },
+    {
+      name: 'kelvin',
+      files: { 'data/temperature.csv': withValues((degC) => degC + 273.15) },
+      finds: { record: 'inputs.temperature', message: 'so hot. Kelvin' },
+    },
+    {
+      name: 'degrees Fahrenheit',
+      files: { 'data/temperature.csv': withValues((degC) => degC * 1.8 + 32) },
+      finds: { record: 'inputs.temperature', stated: 'degC' },
+    },
+  ],
+  silent: [
+    { name: 'a wet gauge', files: { 'data/rain.csv': withValues((mm) => mm * 3) } },
+    {
+      name: 'kelvin that says so',
+      set: { 'inputs.temperature.series.unit': 'K' },
+      files: { 'data/temperature.csv': withValues((degC) => degC + 273.15) },
+    },
+    {
+      name: 'inches that say so',
+      set: { 'inputs.rainfall.series.unit': 'in/d' },
+      files: { 'data/rain.csv': withValues((mm) => mm / 25.4) },
+    },
+    {
+      name: 'no area to spread the flow over',
+      remove: ['catchment.area'],
+      files: { 'data/flow.csv': withValues((flow) => flow * 1000) },
+    },
+  ],
+});
