@@ -71,36 +71,26 @@ function replaced(text: string, scalar: Scalar, value: ScalarValue): Splice {
 
 /** Keys put after the last one of a map, in the way the map is written. */
 function inserted(text: string, map: YAMLMap, keys: Missing): Splice {
+  const put = (at: number, written: string): Splice => ({ start: at, end: at, text: written });
   const [start = 0] = map.range ?? [];
-  const last = map.items.at(-1) as Pair<Node, Node | null> | undefined;
-  if (last === undefined) return { start: start + 1, end: start + 1, text: entries(keys).join(', ') };
-  const end = lastOffset(last.value ?? last.key);
-  if (map.flow)
-    return {
-      start: end,
-      end,
-      text: entries(keys)
-        .map((entry) => `, ${entry}`)
-        .join(''),
-    };
+  const last = map.items.at(-1) as Pair | undefined;
+  if (last === undefined) return put(start + 1, entries(keys).join(', '));
+  const end = lastOffset(last.value as Node);
+  if (map.flow) return put(end, ['', ...entries(keys)].join(', '));
 
-  const indent = ' '.repeat(start - (text.lastIndexOf('\n', start - 1) + 1));
+  const indent = ' '.repeat(start - (text.lastIndexOf('\n', start) + 1));
   const lineEnd = text.includes('\r\n') ? '\r\n' : '\n';
-  const lines = entries(keys)
-    .map((entry) => indent + entry + lineEnd)
-    .join('');
-  if (text[end - 1] === '\n') return { start: end, end, text: lines };
-  const next = text.indexOf('\n', end) + 1;
-  if (next > 0) return { start: next, end: next, text: lines };
-  return { start: text.length, end: text.length, text: lineEnd + lines.slice(0, -lineEnd.length) };
+  const lines = entries(keys).map((entry) => indent + entry);
+  // A block text (`|`) ends with its line end; after all else a comment may follow.
+  const next = text[end - 1] === '\n' ? end : text.indexOf('\n', end) + 1;
+  if (next === 0) return put(text.length, ['', ...lines].join(lineEnd));
+  return put(next, [...lines, ''].join(lineEnd));
 }
 
 /** Where the text of a node ends; for a block map or list, where its last entry ends. */
 function lastOffset(node: Node): number {
-  if ((isMap(node) || isSeq(node)) && !node.flow) {
-    const last = node.items.at(-1) as Node | Pair<Node, Node | null>;
-    return lastOffset('value' in last && 'key' in last ? ((last.value ?? last.key) as Node) : (last as Node));
-  }
+  if (isMap(node) && !node.flow) return lastOffset(node.items.at(-1)?.value as Node);
+  if (isSeq(node) && !node.flow) return lastOffset(node.items.at(-1) as Node);
   return node.range?.[1] ?? 0;
 }
 

@@ -42,25 +42,41 @@ describe('a sound manifest', () => {
     expect(manifestOf(sound.replaceAll('\n', '\r\n')).data).toEqual(manifest.data);
     expect(manifestOf(`\uFEFF${sound}`).data).toEqual(manifest.data);
   });
+});
+
+describe('a field of a manifest', () => {
+  const manifest = manifestOf(
+    [
+      '# invented',
+      'stoplog: 1',
+      '',
+      'model:',
+      '  version: "1.4"',
+      '  executable: [model/a.mjs, model/b.mjs]',
+      'catchment:',
+      '  area: {value: 50, unit: km2}',
+      'evaluation:',
+      '  flow: {scores: {calibration: {nse: 0.80, pbias: -2.0}}}',
+    ].join('\n'),
+  );
 
   it.each([
-    [[], 3, 1],
-    [['study'], 5, 1],
-    [['study', 'phase'], 11, 3],
-    [['study', 'needs', 0], 9, 11],
-    [['study', 'needs', 0, 'regime'], 9, 34],
-    [['catchment', 'area', 'unit'], 20, 21],
-    [['catchment', 'area', 'no-such', 'key'], 20, 3],
-    [['no-such'], 3, 1],
-  ] as const)('knows where %j stands, or its nearest ancestor', (field, line, column) => {
+    [[], 2, 1],
+    [['model'], 4, 1],
+    [['model', 'version'], 5, 3],
+    [['model', 'executable', 1], 6, 29],
+    [['catchment', 'area', 'unit'], 8, 21],
+    [['catchment', 'area', 'no-such', 'key'], 8, 3],
+    [['model', 'executable', 2], 6, 3],
+    [['no-such'], 2, 1],
+  ] as const)('%j has its place, or that of its nearest ancestor', (field, line, column) => {
     expect(manifest.position(field)).toEqual({ line, column });
   });
 
-  it('tells how a figure is written', () => {
-    const score = (name: string) =>
-      manifest.source(['evaluation', 'outlet-flow', 'scores', 'calibration', name]);
+  it('keeps how its figure is written', () => {
+    const score = (name: string) => manifest.source(['evaluation', 'flow', 'scores', 'calibration', name]);
     expect([score('nse'), score('pbias'), score('rmse')]).toEqual(['0.80', '-2.0', null]);
-    expect(manifest.source(['model', 'version'])).toBe('2.1');
+    expect(manifest.source(['model', 'version'])).toBe('1.4');
     expect(manifest.source(['model'])).toBeNull();
   });
 });

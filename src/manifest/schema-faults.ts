@@ -17,23 +17,27 @@ export function schemaFaults(data: unknown, locate: Locate): readonly Fault[] {
 function breaches(validate: Validator, data: unknown, base: FieldPath): readonly Breach[] {
   if (validate(data)) return [];
   const errors = validate.errors ?? [];
-  const unions = outermostUnions(errors);
-  const found = errors
+  // By place; the last at one place is the outer one, since members are tried before their union fails.
+  const unions = new Map(
+    errors.filter(({ keyword }) => keyword === 'anyOf').map((union) => [union.instancePath, union]),
+  );
+  const plain = errors
     .filter(({ keyword }) => keyword !== 'if' && keyword !== 'propertyNames')
-    .filter(({ instancePath }) => !unions.some((union) => isWithin(instancePath, union.instancePath)))
+    .filter(({ instancePath }) => !unions.has(instancePath) && !isBelow(instancePath, unions))
     .map((error) => toBreach(error, data, base));
-  for (const union of unions) found.push(...unionBreaches(union, toBreach(union, data, base)));
-  return onePerMistake(found);
+  const inUnions = [...unions.values()]
+    .filter(({ instancePath }) => !isBelow(instancePath, unions))
+    .flatMap((union) => unionBreaches(union, toBreach(union, data, base)));
+  return onePerMistake([...plain, ...inUnions]);
 }
 
-/** Of unions that failed inside each other, the outermost; at one place the last, since members are tried before their union fails. */
-function outermostUnions(errors: readonly ErrorObject[]): readonly ErrorObject[] {
-  const unions = new Map<string, ErrorObject>();
-  for (const error of errors) if (error.keyword === 'anyOf') unions.set(error.instancePath, error);
-  const paths = [...unions.keys()];
-  return [...unions.values()].filter(
-    ({ instancePath }) => !paths.some((path) => path !== instancePath && isWithin(instancePath, path)),
-  );
+/** Whether a JSON Pointer leads below one of some places. */
+function isBelow(pointer: string, places: ReadonlyMap<string, unknown>): boolean {
+  for (let place = pointer; place !== ''; ) {
+    place = place.slice(0, place.lastIndexOf('/'));
+    if (places.has(place)) return true;
+  }
+  return false;
 }
 
 /** What is wrong with the list or map that was most probably meant; the union as a whole where neither is there. */
@@ -72,10 +76,6 @@ function onePerMistake(found: readonly Breach[]): readonly Breach[] {
     seen.add(place);
     return true;
   });
-}
-
-function isWithin(path: string, ancestor: string): boolean {
-  return path === ancestor || path.startsWith(`${ancestor}/`);
 }
 
 /** A JSON Pointer as keys and list places. */

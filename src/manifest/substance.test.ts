@@ -96,6 +96,11 @@ describe('substance and wording', () => {
     });
   });
 
+  it('of a record are told apart whatever its name', () => {
+    const parts = splitFragment(['inputs', 'constructor'], { role: 'soil', may_be_negative_because: 'a' });
+    expect(parts.wording).toEqual({ may_be_negative_because: 'a' });
+  });
+
   it('of a single field are told as well', () => {
     expect(splitFragment(['periods', 'calibration'], ['2003-10-01/2007-09-30'])).toEqual({
       substance: ['2003-10-01/2007-09-30'],

@@ -20,8 +20,9 @@ export function splitFragment(field: FieldPath, fragment: unknown): Parts {
 }
 
 function kindOf(kind: string | undefined, part: string | number): string | undefined {
-  const known = kinds[kind ?? ''];
-  return typeof part === 'number' ? known?.['[]'] : (known?.[part] ?? known?.['*']);
+  const known = (kind === undefined ? undefined : kinds[kind]) ?? {};
+  const key = typeof part === 'number' ? '[]' : part;
+  return Object.hasOwn(known, key) ? known[key] : known['*'];
 }
 
 type Halves = { readonly substance?: unknown; readonly wording?: unknown };

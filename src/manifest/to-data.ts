@@ -62,13 +62,8 @@ export function toData(root: YAMLMap, lines: LineCounter): Data {
       const { key: keyNode, value } = pair;
       const key = keyText(keyNode);
       if (key === undefined) {
-        fault(
-          keyNode,
-          field,
-          'A key is empty, or is itself a list or a map; a key is a plain text.',
-          'a key that is a plain text',
-          'none',
-        );
+        const message = 'A key is empty, or is itself a list or a map; a key is a plain text.';
+        fault(keyNode, field, message, 'a plain text', 'none');
         continue;
       }
       const here = [...field, key];
@@ -92,14 +87,9 @@ export function toData(root: YAMLMap, lines: LineCounter): Data {
   function followed(alias: Alias, field: FieldPath): unknown {
     const target = anchors.get(alias.source);
     if (target === undefined) {
-      const message = `A value that begins with \`*\` must stand in quotes: write "*${alias.source}".`;
-      return fault(
-        alias,
-        field,
-        message,
-        `quotes around "*${alias.source}"`,
-        `*${alias.source} without quotes`,
-      );
+      const inQuotes = `"*${alias.source}"`;
+      const message = `A value that begins with \`*\` must stand in quotes: write ${inQuotes}.`;
+      return fault(alias, field, message, inQuotes, `*${alias.source} without quotes`);
     }
     if (open.has(target)) {
       const message = `\`*${alias.source}\` repeats the very part that it stands in; write that value out.`;

@@ -3,7 +3,7 @@ import type { Fault } from './fault.ts';
 import { yamlFaults } from './yaml-fault.ts';
 
 // Far above what people write, and far below what does harm.
-const longestText = 4 * 1024 * 1024;
+const longestText = 2 * 1024 * 1024;
 const deepestNesting = 64;
 
 export interface YamlText {

@@ -2,6 +2,9 @@ import { readFileSync } from 'node:fs';
 import { Ajv2020 } from 'ajv/dist/2020.js';
 import { globSync } from 'glob';
 import { describe, expect, it } from 'vitest';
+import type { Seal } from '../../src/records/seal.ts';
+import { faultyField, withChecksum } from '../../src/records/seal-entry.ts';
+import { writeSealsFile } from '../../src/records/seals-file.ts';
 import type { Verdict } from '../../src/verdict/finding.ts';
 
 type Schema = { readonly [key: string]: unknown };
@@ -157,5 +160,57 @@ describe('the schema of findings', () => {
     for (const key of Object.keys(finding ?? {}))
       expect(validate(withFinding(without(finding ?? {}, key)))).toBe(false);
     expect(validate(withFinding({ ...finding, more: 1 }))).toBe(false);
+  });
+});
+
+describe('the schema of seals', () => {
+  const ajv = new Ajv2020({ allowUnionTypes: true, formats: { date: true } });
+  ajv.addVocabulary(annotations);
+  const validate = ajv.compile(read('schemas/seals.schema.json'));
+  const digest = 'ab'.repeat(32);
+  /** Every key of the type. */
+  const seal: Seal = withChecksum({
+    scheme: 1,
+    substance: digest,
+    wording: digest,
+    accepts: [digest],
+    files: {
+      'data/rain.csv': { sha256: digest, bytes: 120, blob: 'c0ffee' },
+      'radar.nc': { sha256: null, bytes: null, blob: null },
+    },
+    rests_on: { model: digest },
+    digest,
+    outcome: digest,
+    driven_by: { 'inputs.rainfall': digest, 'model/control.txt': null },
+    unmoved: ['inputs.rainfall'],
+    facts: { nse: { value: 0.78, computed_by: 1 } },
+    sealed_by: 'A <a@b.example>',
+    sealed_on: '2021-01-15',
+    grade: 'rerun',
+    because: null,
+  });
+  const fileOf = (entry: object): unknown => JSON.parse(writeSealsFile(new Map([['runs.a', entry as Seal]])));
+
+  it('takes a seals file as it is written', () => {
+    expect(faultyField({ ...seal })).toBeNull();
+    expect([validate(fileOf(seal)), validate.errors]).toEqual([true, null]);
+  });
+
+  it('refuses what the reader of seals refuses', () => {
+    const wrong = [
+      ...Object.keys(seal).map((key) =>
+        Object.fromEntries(Object.entries(seal).filter(([name]) => name !== key)),
+      ),
+      { ...seal, more: 1 },
+      { ...seal, digest: 'AB' },
+      { ...seal, grade: 'stated' },
+      { ...seal, scheme: 0 },
+      { ...seal, files: { a: { sha256: digest, bytes: -1, blob: null } } },
+      { ...seal, facts: { nse: { value: true, computed_by: 1 } } },
+    ];
+    for (const entry of wrong) {
+      expect(faultyField(entry)).not.toBeNull();
+      expect(validate(fileOf(entry))).toBe(false);
+    }
   });
 });
