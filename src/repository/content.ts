@@ -3,21 +3,12 @@ import { Failure } from '../failure.ts';
 import { type Blobs, blobOf, type FoundBlob } from './blobs.ts';
 import type { BlobDigest, DigestMemory } from './digest-memory.ts';
 import type { FindLarge } from './large-files.ts';
-import { followLinks } from './links.ts';
 import type { Listing } from './listing.ts';
-import { nameFromBytes } from './names.ts';
+import { type Located, locator } from './locate.ts';
 import { parsePointer, pointerBytesBelow } from './pointer.ts';
-import type { Entry, FileIdentity, Snapshot, Unavailable } from './snapshot.ts';
+import type { FileIdentity, Snapshot, Unavailable } from './snapshot.ts';
 
 type Content = Pick<Snapshot, 'identify' | 'read' | 'stream' | 'readBlob'>;
-type Located = Entry | { readonly why: Unavailable; readonly blob: string | null };
-
-const whyOf = {
-  outside: 'link-outside',
-  'too-many': 'link-dangling',
-  'unknown-target': 'not-fetched',
-} as const;
-
 /** What `read` takes into memory unless told otherwise; series are streamed. */
 const defaultLimitBytes = 256 * 1024 * 1024;
 
@@ -31,51 +22,7 @@ export function contentOf(
   findLarge: FindLarge,
   memory: DigestMemory,
 ): Content {
-  const unmerged = new Set(listing.unmerged);
-  const intended = new Set(listing.intentToAdd);
-  const crossings = [...listing.entries.values()].filter(
-    ({ mode }) => mode === '120000' || mode === '160000',
-  );
-  let targets: Promise<ReadonlyMap<string, string>> | undefined;
-
-  /** What all links of the snapshot say; asked for once, and only where a path could lead over one. */
-  async function linkTargets(paths: readonly string[]): Promise<ReadonlyMap<string, string>> {
-    if (crossings.length === 0 || paths.every((path) => ordinary(path) !== undefined)) return new Map();
-    targets ??= readTargets();
-    return targets;
-  }
-
-  async function readTargets(): Promise<ReadonlyMap<string, string>> {
-    const found = new Map<string, string>();
-    const ids = crossings.filter(({ mode }) => mode === '120000').map(({ blob }) => blob);
-    await blobs.visit([...new Set(ids)], async (id, blob) => {
-      if (blob !== null) found.set(id, nameFromBytes(Buffer.from(await blob.whole())));
-    });
-    return found;
-  }
-
-  function ordinary(path: string): Entry | undefined {
-    const entry = listing.entries.get(path);
-    return entry?.mode.startsWith('100') ? entry : undefined;
-  }
-
-  function locate(path: string, links: ReadonlyMap<string, string>): Located {
-    const entry = ordinary(path);
-    if (entry !== undefined) return entry;
-    const led = followLinks(path, listing.entries, links);
-    if (led.kind === 'submodule') return { why: 'submodule', blob: led.entry.blob };
-    if (led.kind !== 'path') return { why: whyOf[led.kind], blob: led.link?.blob ?? null };
-    const reached = ordinary(led.path);
-    if (reached !== undefined) return reached;
-    const why = missing(led.path);
-    return why === 'absent' && led.link !== null
-      ? { why: 'link-dangling', blob: led.link.blob }
-      : { why, blob: null };
-  }
-
-  function missing(path: string): Unavailable {
-    return unmerged.has(path) ? 'unmerged' : intended.has(path) ? 'intent-to-add' : 'absent';
-  }
+  const locate = locator(listing, blobs);
 
   async function digestAll(located: Iterable<Located>): Promise<void> {
     const unknown = new Set<string>();
@@ -111,18 +58,18 @@ export function contentOf(
   }
 
   async function openPath(path: string): Promise<FoundBlob | Unavailable> {
-    const found = locate(path, await linkTargets([path]));
+    const found = (await locate([path])).get(path);
+    if (found === undefined) return 'absent';
     return 'mode' in found ? ((await open(found.blob)) ?? 'not-fetched') : found.why;
   }
 
   return {
     async identify(paths) {
-      const asked = [...paths];
-      const links = await linkTargets(asked);
-      const located = asked.map((path) => locate(path, links));
-      await digestAll(located);
-      const identities = await Promise.all(located.map(identityOf));
-      return new Map(asked.map((path, place) => [path, identities[place] as FileIdentity]));
+      const located = await locate([...paths]);
+      await digestAll(located.values());
+      const identities = new Map<string, FileIdentity>();
+      for (const [path, found] of located) identities.set(path, await identityOf(found));
+      return identities;
     },
     async read(path, limit) {
       const blob = await openPath(path);

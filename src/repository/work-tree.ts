@@ -6,17 +6,17 @@ import type { Repository } from './repository.ts';
 
 // The user's post-index-change hook is not ours to run, a split index would be written beside the user's,
 // and what is thrown away at once need not be small or safe.
-const aside = [
+const apart = [
   ...['-c', 'core.hooksPath=/dev/null', '-c', 'core.splitIndex=false', '-c', 'core.safecrlf=false'],
   ...['-c', 'core.compression=0', '-c', 'core.fsync=none'],
 ];
 
 /** Stores tracked files of the work tree as they are now. */
-const addTracked: Question<void> = { args: [...aside, 'add', '--update', '--', '.'], parse: () => {} };
+const addTracked: Question<void> = { args: [...apart, 'add', '--update', '--', '.'], parse: () => {} };
 
 function addPaths(paths: readonly Buffer[]): Question<void> {
   return {
-    args: [...aside, 'update-index', '--add', '-z', '--stdin'],
+    args: [...apart, 'update-index', '--add', '-z', '--stdin'],
     input: Buffer.concat(paths.flatMap((path) => [path, Buffer.of(0)])),
     parse: () => {},
   };
@@ -30,13 +30,13 @@ function addPaths(paths: readonly Buffer[]): Question<void> {
  */
 export async function storeWorkTree(
   repository: Repository,
-  folder: Aside,
+  aside: Aside,
   untracked: Promise<readonly Buffer[]>,
   alsoUntracked: readonly string[],
 ): Promise<Place & { readonly objectsFolder: string }> {
-  const indexFile = join(folder.folder, 'index');
+  const indexFile = join(aside.folder, 'index');
   await copyIndex(repository.indexFile, indexFile);
-  const writing = await writingAside(folder, repository);
+  const writing = await writingAside(aside, repository);
   const place = { ...writing, environment: { ...writing.environment, GIT_INDEX_FILE: indexFile } };
   await ask(place, addTracked);
   const added = (await untracked).filter((path) => alsoUntracked.includes(basename(path.toString('latin1'))));

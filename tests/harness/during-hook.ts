@@ -25,7 +25,9 @@ export async function duringHook<Answer>(
 cat > '${folder}/input'
 pwd -P > '${folder}/cwd'
 env -0 > '${folder}/part' && mv '${folder}/part' '${folder}/environment'
-while [ ! -e '${folder}/go' ]; do sleep 0.02; done
+# Never longer than a test may take, even if the test was ended.
+waited=0
+while [ ! -e '${folder}/go' ] && [ $waited -lt 1200 ]; do sleep 0.05; waited=$((waited + 1)); done
 `;
   await writeFile(hookFile, script);
   await chmod(hookFile, 0o755);

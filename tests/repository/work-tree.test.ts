@@ -131,10 +131,20 @@ describe('the work tree as git add would store it', () => {
     expect(await repository.git('ls-files', '--unmerged')).not.toBe('');
   });
 
-  it('leaves alone what sparse checkout left out', async () => {
-    await repository.git('sparse-checkout', 'set', '--no-cone', '/*', '!/sub/');
+  it.each([
+    ['set', '--no-cone', '/*', '!/sub/'],
+    ['set', '--cone', '--sparse-index', 'elsewhere'],
+  ])('keeps what sparse checkout left out (sparse-checkout %s %s)', async (...args) => {
+    await repository.git('sparse-checkout', ...args);
     expect(await readdir(repository.folder)).not.toContain('sub');
     expect(await open((snapshot) => textOf(snapshot, 'sub/c.csv'))).toBe('c1\n');
+  });
+
+  it('passes over edits that git was told to overlook, as git add does', async () => {
+    await repository.git('update-index', '--assume-unchanged', 'a.csv');
+    await repository.write('a.csv', 'a2 is longer\n');
+    expect(await open(asTree)).toBe(await asGitAddStores());
+    expect(await open((snapshot) => textOf(snapshot, 'a.csv'))).toBe('a1\n');
   });
 
   it('reads a split index', async () => {
