@@ -129,7 +129,14 @@ describe('records that were renamed', () => {
       .replace('on: [rainfall, flow]', 'on: [rain, flow]')
       .replace('takes: [inputs.rainfall', 'takes: [inputs.rain')
       .replace('rain: {input: rainfall', 'rain: {input: rain');
-    const { records, stale, seals: now } = await follow(text, { ...smallFiles });
+    const files = renamed({ 'model/control.txt': 'model/settings.txt' });
+    const {
+      records,
+      stale,
+      seals: now,
+    } = await follow(text.replaceAll('control.txt', 'settings.txt'), files);
+    const drives = Object.keys(now.get('runs.calibrated')?.driven_by ?? {});
+    expect(drives).toEqual(expect.arrayContaining(['inputs.rain', 'model/settings.txt']));
     expect(records).toEqual([{ from: 'inputs.rainfall', to: 'inputs.rain' }]);
     expect(now.has('inputs.rainfall')).toBe(false);
     expect(stale).toEqual([]);

@@ -88,8 +88,15 @@ export function followMoves(records: Records, { seals: before }: Pick<SealsFile,
     const sha256s = Object.fromEntries(sealedFiles.map(([path, { sha256 }]) => [path, sha256]));
     const digest = digestOf({ scheme: seal.scheme, substance, files: sha256s, rests_on });
     if (digest === seal.digest) return seal;
+    const driven_by = Object.fromEntries(
+      Object.entries(seal.driven_by).map(([name, sha256]) => [
+        movedTo.get(name) ?? renames.idNow(name),
+        sha256,
+      ]),
+    );
     const { checksum: _, ...rest } = seal;
-    return withChecksum({ ...rest, substance, files: Object.fromEntries(sealedFiles), rests_on, digest });
+    const sealed = Object.fromEntries(sealedFiles);
+    return withChecksum({ ...rest, substance, files: sealed, rests_on, digest, driven_by });
   }
 
   function statesTheSame(node: RecordNode, seal: Seal, known: Renames): boolean {

@@ -140,6 +140,7 @@ describe('refusals', () => {
     ]);
     expect(plan.sealed.map(({ record }) => record)).toEqual(['inputs.future']);
     expect(plan.seals.get('runs.dry')).toBe(seals.get('runs.dry'));
+    expect(plan.refused[1]).toMatchObject({ root: 'runs.dry', next: 'Clear runs.dry first.' });
     expect(plan.refused[0]).toMatchObject({
       message: expect.stringContaining('inputs.future changed since runs.dry was sealed'),
       next: expect.stringContaining('stoplog rerun dry --seal'),
@@ -233,6 +234,11 @@ describe('refusals', () => {
       ['evaluation.outlet', 'fallen-acceptance'],
       ['uncertainty', 'rests-on-refused'],
       ['scenarios.dry', 'rests-on-refused'],
+    ]);
+    expect(plan.refused.map(({ root }) => root)).toEqual([
+      undefined,
+      'evaluation.outlet',
+      'evaluation.outlet',
     ]);
     expect(refusals(await reseal({}, {}, lower.replace('on: 2026-02-01', 'on: 2026-05-01')))).toEqual([]);
     expect(refusals(await reseal({}, {}, lower.replace(/ {4}accepts: .*\n/, '')))).toEqual([]);

@@ -87,7 +87,7 @@ export function makeSeals(request: SealRequest, schemes: Schemes = known): SealP
       fits && before !== null
         ? keptProof(before, evidence)
         : newProof(content, before, evidence, request.because);
-    const below = refused.size > 0 ? record.restsOn.find((one) => refused.has(one)) : undefined;
+    const below = record.restsOn.map((one) => refused.get(one)).find((one) => one !== undefined);
     const refusal =
       faultOf(record, records) ??
       (below === undefined ? null : restsOnRefused(id, below)) ??

@@ -20,6 +20,8 @@ export interface Refusal {
   readonly message: string;
   /** What to do. */
   readonly next: string;
+  /** For a record that rests on a refused one: the record where the trouble begins. */
+  readonly root?: string;
 }
 
 /** What makes a record impossible to seal whatever a person says; null where nothing does. */
@@ -73,12 +75,15 @@ export function unmovedRefusal(record: RecordNode, below: readonly string[]): Re
   };
 }
 
-export function restsOnRefused(record: string, below: string): Refusal {
+/** Names the record where the trouble begins, however far below. */
+export function restsOnRefused(record: string, below: Refusal): Refusal {
+  const root = below.root ?? below.record;
   return {
     record,
     reason: 'rests-on-refused',
-    message: `${record} rests on ${below}, which can't be sealed as it stands.`,
-    next: `Clear ${below} first.`,
+    message: `${record} rests on ${root}, which can't be sealed as it stands.`,
+    next: `Clear ${root} first.`,
+    root,
   };
 }
 
