@@ -23,7 +23,8 @@ export const parametersChangeDiffers = rule({
       const printed = printedNumber(manifest.source([...field, 'value']) ?? String(parameter.value));
       if (printed === null) return [];
       const { lowest, highest } = printedInterval(printed);
-      const slack = 1e-9 * Math.max(1, Math.abs(given));
+      // A product of two decimals is rarely exact in binary.
+      const slack = 1e-12 * Math.abs(given);
       if (given >= lowest - slack && given <= highest + slack) return [];
       return [
         {

@@ -1,75 +1,97 @@
-import { windowSets } from '../../facts/windows.ts';
+import type { Facts } from '../../facts/facts.ts';
+import { targetsIn, windowsOfTarget } from '../../facts/windows.ts';
 import { dayNumber, type Period, parsePeriod } from '../../manifest/period.ts';
+import type { RecordNode } from '../../records/record.ts';
+import { formatDate } from '../../series/calendar.ts';
 import { type Draft, rule } from '../rule.ts';
+
+/** What must cover every simulated day; observed flow, and a calendar of leaves or of takings, need not. */
+const forcing: ReadonlySet<string> = new Set(['precipitation', 'temperature', 'evapotranspiration']);
 
 export const periodsOutsideData = rule({
   id: 'periods.outside-data',
   scope: 'manifest',
   from: 'calibration',
   means: 'contradicted',
-  statement: 'A window reaches beyond the observed record, or the simulation beyond the forcing.',
+  statement:
+    'A window reaches beyond the observed record, or the simulation beyond the rain, temperature or evapotranspiration that drive it. The record is the stated period, or where none is stated what the files hold.',
   why: 'Days without observations can’t be scored, and days without rain data were filled by something that nobody stated.',
   source: {
     basis: 'definition',
     citation: 'Follows from the words: a window is covered by the data it uses.',
   },
   clear: 'Correct the window, or the input’s period if it is the one that is wrong.',
-  check: (_, { records }) => {
-    const { data } = records.manifest;
-    const recordOf = (input: string | undefined): Period | null =>
-      parsePeriod(data.inputs?.[input ?? '']?.period ?? '');
-    const drafts: Draft[] = [];
-    const sets = windowSets(records);
-    for (const [name, target] of Object.entries(data.evaluation ?? {})) {
-      const observed = recordOf(target.observed?.input);
-      const set = sets.find(({ record }) => record === `evaluation.${name}`) ?? sets[0];
-      for (const { kind, field, period } of set?.windows ?? []) {
-        if (observed === null) break;
-        if (kind === 'warm-up' || !beyond(period, observed)) continue;
-        drafts.push({
-          record: set?.record ?? 'periods',
-          field,
-          subject: `${name} ${kind} ${field.at(-1)}`,
-          stated: written(period),
-          found: written(observed),
-          message: `The ${kind} window of ${name} has ${outside(period, observed)} days outside the record of its observations, inputs.${target.observed?.input}.`,
-        });
-      }
-    }
-    for (const [name, run] of Object.entries(data.runs ?? {})) {
-      const simulation = parsePeriod(run.simulation ?? data.periods?.simulation ?? '');
-      const scenario = Object.values(data.scenarios?.cases ?? {}).some((one) => one.run === name);
-      if (simulation === null || (scenario && run.simulation === undefined)) continue;
-      for (const input of (run.takes ?? [])
-        .filter((one) => one.startsWith('inputs.'))
-        .map((one) => one.slice(7))) {
-        const forcing = recordOf(input);
-        if (forcing === null || data.inputs?.[input]?.series === undefined || !beyond(simulation, forcing))
-          continue;
-        drafts.push({
-          record: run.simulation === undefined ? 'periods' : `runs.${name}`,
-          field: run.simulation === undefined ? ['periods', 'simulation'] : ['runs', name, 'simulation'],
-          subject: `runs.${name} inputs.${input}`,
-          stated: written(simulation),
-          found: written(forcing),
-          message: `Run ${name} simulates ${outside(simulation, forcing)} days for which its input ${input} holds no data.`,
-        });
-      }
-    }
-    return drafts;
-  },
+  check: (_, facts) => [...windowsBeyond(facts), ...simulationsBeyond(facts)],
 });
+
+function windowsBeyond(facts: Facts): readonly Draft[] {
+  const seen = new Set<string>();
+  return targetsIn(facts.records.nodes).flatMap((target) => {
+    const { input = '' } = target.fragment.observed ?? {};
+    const observed = recordOf(input, facts);
+    return windowsOfTarget(target, facts.records).flatMap(({ kind, field, period }) => {
+      // Windows of the study are those of many targets, often of one gauge.
+      const key = [...field, input].join('\0');
+      if (kind === 'warm-up' || observed === null || !beyond(period, observed) || seen.has(key)) return [];
+      seen.add(key);
+      return {
+        record: field[0] === 'periods' ? 'periods' : target.id,
+        field,
+        subject: `${target.name} ${kind} ${field.at(-1)}`,
+        stated: written(period),
+        found: written(observed),
+        message: `The ${kind} window of ${target.name} has ${daysOutside(period, observed)} outside the record of its observations, inputs.${input}.`,
+      };
+    });
+  });
+}
+
+function simulationsBeyond(facts: Facts): readonly Draft[] {
+  const { records, manifest } = facts;
+  const runs = [...records.nodes.values()].filter((node): node is RecordNode<'runs'> => node.area === 'runs');
+  const scenarios = new Set(Object.values(manifest.data.scenarios?.cases ?? {}).map(({ run }) => run));
+  return runs.flatMap((run) => {
+    const { simulation: own, takes = [] } = run.fragment;
+    const simulation = parsePeriod(own ?? manifest.data.periods?.simulation ?? '');
+    // A scenario that does not say what it simulates hardly simulates the study's own years.
+    if (simulation === null || (own === undefined && scenarios.has(run.name ?? ''))) return [];
+    return takes.flatMap((taken) => {
+      const input = records.nodes.get(taken) as RecordNode<'inputs'> | undefined;
+      if (input?.area !== 'inputs' || !forcing.has(input.fragment.role ?? '')) return [];
+      const held = recordOf(input.name ?? '', facts);
+      if (held === null || !beyond(simulation, held)) return [];
+      return {
+        record: own === undefined ? 'periods' : run.id,
+        field: own === undefined ? ['periods', 'simulation'] : [...run.field, 'simulation'],
+        subject: `${run.id} ${taken}`,
+        stated: written(simulation),
+        found: written(held),
+        message: `Run ${run.name} simulates ${daysOutside(simulation, held)} for which its input ${input.name} holds no data.`,
+      };
+    });
+  });
+}
+
+/** What an input covers: as it states, else as its files have it. */
+function recordOf(name: string, { records, profiles }: Facts): Period | null {
+  const input = records.nodes.get(`inputs.${name}`) as RecordNode<'inputs'> | undefined;
+  const stated = input?.fragment.period;
+  if (stated !== undefined) return parsePeriod(stated);
+  const days = profiles.get(name)?.days;
+  return days == null ? null : parsePeriod(`${formatDate(days.firstDay)}/${formatDate(days.lastDay)}`);
+}
 
 function beyond(period: Period, record: Period): boolean {
   return period.first < record.first || period.last > record.last;
 }
 
-function outside(period: Period, record: Period): number {
+function daysOutside(period: Period, record: Period): string {
   const shared =
     Math.min(dayNumber(period.last), dayNumber(record.last)) -
     Math.max(dayNumber(period.first), dayNumber(record.first)) +
     1;
-  return period.days - Math.max(0, shared);
+  const days = period.days - Math.max(0, shared);
+  return days === 1 ? 'one day' : `${days} days`;
 }
 
 function written({ first, last }: Period): string {

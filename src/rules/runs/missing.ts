@@ -1,5 +1,6 @@
 import type { Facts } from '../../facts/facts.ts';
-import type { FieldPath } from '../../manifest/manifest.ts';
+import { fromTop } from '../../records/paths.ts';
+import type { Area, RecordNode } from '../../records/record.ts';
 import { type Draft, rule } from '../rule.ts';
 
 export const runsMissing = rule({
@@ -13,8 +14,8 @@ export const runsMissing = rule({
   clear:
     'State the run under runs with start (the command), takes, gives and, here or in the model, environment.',
   check: (_, facts) => {
-    const { runs, model } = facts.manifest.data;
-    const untold = Object.entries(runs ?? {}).flatMap(([name, run]): readonly Draft[] => {
+    const { model } = facts.manifest.data;
+    const untold = nodesIn(facts, 'runs').flatMap(({ id, name, field, fragment: run }): readonly Draft[] => {
       const lacking = [
         run.start === undefined ? 'command (`start`)' : null,
         run.environment === undefined && model?.environment === undefined
@@ -23,60 +24,48 @@ export const runsMissing = rule({
         run.gives === undefined ? 'outputs (`gives`)' : null,
       ].filter((one) => one !== null);
       if (lacking.length === 0) return [];
-      return [
-        {
-          record: `runs.${name}`,
-          field: ['runs', name],
-          message: `Run ${name} has no ${lacking.join(', no ')}.`,
-        },
-      ];
+      return [{ record: id, field, message: `Run ${name} has no ${lacking.join(', no ')}.` }];
     });
     return [...untold, ...outputsOfNoRun(facts)];
   },
 });
 
-interface Use {
-  readonly record: string;
-  readonly field: FieldPath;
-  readonly run: string | undefined;
-  readonly file: string | undefined;
-}
-
-function outputsOfNoRun({ manifest, records }: Facts): readonly Draft[] {
-  const { evaluation, balance } = manifest.data;
-  const uses: readonly Use[] = [
-    ...Object.entries(evaluation ?? {}).map(([name, { simulated }]) => ({
-      record: `evaluation.${name}`,
-      field: ['evaluation', name, 'simulated'],
-      run: simulated?.run,
-      file: simulated?.file,
+function outputsOfNoRun(facts: Facts): readonly Draft[] {
+  const { folder } = facts.manifest;
+  const runs = nodesIn(facts, 'runs').map(({ name, claims, elsewhere }) => ({
+    name,
+    gives: new Set([
+      ...[...claims.values()].filter(({ own }) => own).map(({ path }) => path),
+      ...elsewhere.map(({ path }) => path),
+    ]),
+  }));
+  const isGiven = (file: string, by: string | undefined) =>
+    runs.some(({ name, gives }) => (by === undefined || name === by) && gives.has(fromTop(folder, file)));
+  const uses = [
+    ...nodesIn(facts, 'evaluation').map(({ id, field, fragment }) => ({
+      record: id,
+      field: [...field, 'simulated', 'file'],
+      ...fragment.simulated,
     })),
-    ...Object.entries(balance ?? {}).map(([name, { run, file }]) => ({
-      record: `balance.${name}`,
-      field: ['balance', name],
+    ...nodesIn(facts, 'balance').map(({ id, field, fragment: { run, file } }) => ({
+      record: id,
+      field: [...field, 'file'],
       run,
       file,
     })),
   ];
-  const given = new Set(
-    [...records.nodes.values()]
-      .filter(({ area }) => area === 'runs')
-      .flatMap(({ claims, elsewhere }) => [
-        ...[...claims.values()].filter(({ own }) => own).map(({ path }) => path),
-        ...elsewhere.map(({ path }) => path),
-      ]),
-  );
-  const full = (file: string) => (manifest.folder === '' ? file : `${manifest.folder}/${file}`);
   return uses.flatMap(({ record, field, run, file }) =>
-    file === undefined || given.has(full(file)) || given.has(file)
+    file === undefined || isGiven(file, run)
       ? []
-      : [
-          {
-            record,
-            field: [...field, 'file'],
-            subject: file,
-            message: `${file} is used as a simulated result, but ${run === undefined ? 'no run says' : `run ${run} does not say`} that it gives it.`,
-          },
-        ],
+      : {
+          record,
+          field,
+          subject: file,
+          message: `${file} is used as a simulated result, but ${run === undefined ? 'no run says' : `run ${run} does not say`} that it gives it.`,
+        },
   );
+}
+
+function nodesIn<A extends Area>({ records }: Facts, area: A): readonly RecordNode<A>[] {
+  return [...records.nodes.values()].filter((node): node is RecordNode<A> => node.area === area);
 }

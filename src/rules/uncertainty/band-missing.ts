@@ -13,7 +13,9 @@ export const uncertaintyBandMissing = rule({
     const needed = new Set(
       (manifest.data.study?.needs ?? []).map(({ variable }) => variable ?? 'streamflow'),
     );
-    const targets = Object.entries(manifest.data.evaluation ?? {});
+    const targets = Object.entries(manifest.data.evaluation ?? {}).filter(
+      ([, { none_because }]) => none_because === undefined,
+    );
     const main =
       targets.find(([, { variable }]) => variable !== undefined && needed.has(variable)) ?? targets[0];
     if (main === undefined || fragment.bands?.[main[0]]?.file !== undefined) return [];
