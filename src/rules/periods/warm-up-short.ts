@@ -1,6 +1,6 @@
+import { nodesIn } from '../../facts/nodes-in.ts';
 import type { FieldPath } from '../../manifest/manifest.ts';
 import { parsePeriod } from '../../manifest/period.ts';
-import type { RecordNode } from '../../records/record.ts';
 import { type Draft, rule } from '../rule.ts';
 
 export const periodsWarmUpShort = rule({
@@ -30,9 +30,6 @@ export const periodsWarmUpShort = rule({
     const shortest = limits.warm_up_days ?? 0;
     const multiple = limits.warm_up_constants ?? 0;
     const study = warmUpAt('periods', ['periods', 'warm_up'], manifest.data.periods?.warm_up);
-    const runs = [...records.nodes.values()].filter(
-      (node): node is RecordNode<'runs'> => node.area === 'runs',
-    );
     const tooShort = (
       warmUp: WarmUp | null,
       needed: number,
@@ -55,7 +52,7 @@ export const periodsWarmUpShort = rule({
     const year = `under ${shortest}, it does not see every season once.`;
     return [
       ...tooShort(study, shortest, 'year', year),
-      ...runs.flatMap(({ id, field, name, fragment: { warm_up, stores } }) => {
+      ...nodesIn(records.nodes, 'runs').flatMap(({ id, field, name, fragment: { warm_up, stores } }) => {
         const own = warmUpAt(id, [...field, 'warm_up'], warm_up);
         const constant = stores?.slowest_days ?? 0;
         const needed = Math.ceil(multiple * constant);

@@ -1,6 +1,6 @@
 import type { Facts } from '../../facts/facts.ts';
+import { nodesIn } from '../../facts/nodes-in.ts';
 import { fromTop } from '../../records/paths.ts';
-import type { Area, RecordNode } from '../../records/record.ts';
 import { type Draft, rule } from '../rule.ts';
 
 export const runsMissing = rule({
@@ -15,24 +15,26 @@ export const runsMissing = rule({
     'State the run under runs with start (the command), takes, gives and, here or in the model, environment.',
   check: (_, facts) => {
     const { model } = facts.manifest.data;
-    const untold = nodesIn(facts, 'runs').flatMap(({ id, name, field, fragment: run }): readonly Draft[] => {
-      const lacking = [
-        run.start === undefined ? 'command (`start`)' : null,
-        run.environment === undefined && model?.environment === undefined
-          ? 'environment (runtime and version)'
-          : null,
-        run.gives === undefined ? 'outputs (`gives`)' : null,
-      ].filter((one) => one !== null);
-      if (lacking.length === 0) return [];
-      return [{ record: id, field, message: `Run ${name} has no ${lacking.join(', no ')}.` }];
-    });
+    const untold = nodesIn(facts.records.nodes, 'runs').flatMap(
+      ({ id, name, field, fragment: run }): readonly Draft[] => {
+        const lacking = [
+          run.start === undefined ? 'command (`start`)' : null,
+          run.environment === undefined && model?.environment === undefined
+            ? 'environment (runtime and version)'
+            : null,
+          run.gives === undefined ? 'outputs (`gives`)' : null,
+        ].filter((one) => one !== null);
+        if (lacking.length === 0) return [];
+        return [{ record: id, field, message: `Run ${name} has no ${lacking.join(', no ')}.` }];
+      },
+    );
     return [...untold, ...outputsOfNoRun(facts)];
   },
 });
 
 function outputsOfNoRun(facts: Facts): readonly Draft[] {
   const { folder } = facts.manifest;
-  const runs = nodesIn(facts, 'runs').map(({ name, claims, elsewhere }) => ({
+  const runs = nodesIn(facts.records.nodes, 'runs').map(({ name, claims, elsewhere }) => ({
     name,
     gives: new Set([
       ...[...claims.values()].filter(({ own }) => own).map(({ path }) => path),
@@ -42,12 +44,12 @@ function outputsOfNoRun(facts: Facts): readonly Draft[] {
   const isGiven = (file: string, by: string | undefined) =>
     runs.some(({ name, gives }) => (by === undefined || name === by) && gives.has(fromTop(folder, file)));
   const uses = [
-    ...nodesIn(facts, 'evaluation').map(({ id, field, fragment }) => ({
+    ...nodesIn(facts.records.nodes, 'evaluation').map(({ id, field, fragment }) => ({
       record: id,
       field: [...field, 'simulated', 'file'],
       ...fragment.simulated,
     })),
-    ...nodesIn(facts, 'balance').map(({ id, field, fragment: { run, file } }) => ({
+    ...nodesIn(facts.records.nodes, 'balance').map(({ id, field, fragment: { run, file } }) => ({
       record: id,
       field: [...field, 'file'],
       run,
@@ -64,8 +66,4 @@ function outputsOfNoRun(facts: Facts): readonly Draft[] {
           message: `${file} is used as a simulated result, but ${run === undefined ? 'no run says' : `run ${run} does not say`} that it gives it.`,
         },
   );
-}
-
-function nodesIn<A extends Area>({ records }: Facts, area: A): readonly RecordNode<A>[] {
-  return [...records.nodes.values()].filter((node): node is RecordNode<A> => node.area === area);
 }
