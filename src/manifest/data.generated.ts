@@ -5,7 +5,7 @@
  */
 export type Name = string
 /**
- * The name of a term, a gauge or a file: a letter or digit first.
+ * The name of a term, a gauge, a library or a file.
  */
 export type Label = string
 /**
@@ -1618,7 +1618,7 @@ export interface Scores {
    */
   nse?: number
   /**
-   * Nash-Sutcliffe efficiency of logarithms, with a hundredth of the observed mean added. Unit: 1. Source: Pushpalatha et al. 2012, J. Hydrol. 420-421:171-182.
+   * Nash-Sutcliffe efficiency of logarithms, with a hundredth of the observed mean added. Unit: 1. Source: Pushpalatha et al. 2012, J. Hydrol. 420-421:171-182 (from memory).
    */
   log_nse?: number
   /**
@@ -1674,7 +1674,7 @@ export interface Scores {
    */
   gamma?: number
   /**
-   * Index of agreement. Unit: 1. Source: Willmott 1981, Phys. Geogr. 2:184-194.
+   * Index of agreement. Unit: 1. Source: Willmott 1981, Phys. Geogr. 2:184-194 (from memory).
    */
   d?: number
   /**
@@ -1754,7 +1754,7 @@ export interface EvaluationTarget {
   rated_by?: string
   periods?: TargetPeriods
   /**
-   * Kind of split-sample test that the windows make. Source: Klemes 1986, Hydrol. Sci. J. 31(1):13-24.
+   * Kind of split-sample test that the windows make. Source: Klemes 1986, Hydrol. Sci. J. 31(1):13-24 (content from memory).
    */
   split_test?: ("split_sample" | "differential" | "proxy_basin" | "differential_proxy_basin")
   peaks?: Peaks
@@ -2073,11 +2073,11 @@ export interface UncertaintySources {
  */
 export interface StatedBand {
   /**
-   * Share of observations inside the band (P-factor). Unit: 1. Source: Abbaspour et al. 2007, J. Hydrol. 333:413-430.
+   * Share of observations inside the band (P-factor). Unit: 1. Source: Abbaspour et al. 2007, J. Hydrol. 333:413-430 (from memory).
    */
   coverage?: number
   /**
-   * Mean width over the observed standard deviation (R-factor). Unit: 1. Source: Abbaspour et al. 2007, J. Hydrol. 333:413-430.
+   * Mean width over the observed standard deviation (R-factor). Unit: 1. Source: Abbaspour et al. 2007, J. Hydrol. 333:413-430 (from memory).
    */
   relative_width?: number
 }

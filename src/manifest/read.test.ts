@@ -109,6 +109,10 @@ describe('what a manifest may state', () => {
       'several columns, decimal commas',
       'inputs: {a: {series: {values: [a, b], separator: semicolon, decimal: comma}}}',
     ],
+    [
+      'paths of every kind',
+      'inputs: {a: {missing_share: {per_file: {./a.csv: 0, _b.csv: 0, .c.csv: 0, "d e.csv": 0}}}}',
+    ],
     ['samples', 'inputs: {a: {series: {step: irregular}}}'],
     ['no warm-up', 'periods: {warm_up: {zero_because: starts from observed stores}}'],
     [
