@@ -5,6 +5,7 @@ import { aggregate } from '../series/aggregate.ts';
 import { convertSeries } from '../series/convert-series.ts';
 import { yearBeginsOf } from './catchment.ts';
 import { findInput, readInputSeries } from './input.ts';
+import { nodesIn } from './nodes-in.ts';
 import { remembered } from './remembered.ts';
 
 /** The rain of each complete hydrological year, step beside step. */
@@ -22,12 +23,8 @@ export async function rainYearsOf(
   snapshot: Snapshot,
 ): Promise<ReadonlyMap<string, Statistic<RainYears>>> {
   const found = new Map<string, Statistic<RainYears>>();
-  for (const { area, name, fragment } of records.nodes.values())
-    if (
-      area === 'inputs' &&
-      name !== null &&
-      (fragment as RecordNode<'inputs'>['fragment']).role === 'precipitation'
-    )
+  for (const { name, fragment } of nodesIn(records.nodes, 'inputs'))
+    if (name !== null && fragment.role === 'precipitation')
       found.set(name, await rainYears(name, records, snapshot));
   return found;
 }

@@ -2,6 +2,7 @@ import { isDefined, type Statistic, undefinedBecause } from '../hydrology/paired
 import { scores as known } from '../hydrology/scores.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
+import { nodesIn } from './nodes-in.ts';
 import { remembered } from './remembered.ts';
 import { type Cause, fits, likelyCauses } from './scores/causes.ts';
 import { type RecomputedFigures, recompute } from './scores/recompute.ts';
@@ -15,7 +16,6 @@ import {
   type UnreadRow,
 } from './scores/stated.ts';
 import { subjectOf } from './scores/subject.ts';
-import { targetsIn } from './windows.ts';
 
 /** How well one target fits: what its files give, and what is stated. */
 export interface TargetFigures {
@@ -46,7 +46,7 @@ export async function scoresOf(
 ): Promise<ReadonlyMap<string, TargetFigures>> {
   const figures = new Map<string, TargetFigures>();
   // One after the other: each may hold two long series.
-  for (const target of targetsIn(records.nodes))
+  for (const target of nodesIn(records.nodes, 'evaluation'))
     if (target.name !== null && target.fragment.none_because === undefined)
       figures.set(target.name, await figuresOf(target, records, snapshot));
   return figures;

@@ -11,6 +11,7 @@ import { daysOfYear, type YearBegins, yearOf } from '../series/hydrological-year
 import type { Series } from '../series/series.ts';
 import { conversion } from '../series/units/conversion.ts';
 import { yearBeginsOf } from './catchment.ts';
+import { nodesIn } from './nodes-in.ts';
 import { findOutput, readOutput } from './output.ts';
 import { type RainYears, rainOfRun } from './rain-years.ts';
 import { remembered } from './remembered.ts';
@@ -46,15 +47,13 @@ export async function storesOf(
   snapshot: Snapshot,
 ): Promise<ReadonlyMap<string, RunStores>> {
   const found = new Map<string, RunStores>();
-  for (const node of records.nodes.values()) {
-    if (node.area !== 'runs' || node.name === null) continue;
-    const run = node as RecordNode<'runs'>;
+  for (const run of nodesIn(records.nodes, 'runs')) {
     const { stores, warm_up } = run.fragment;
     const stated = warm_up ?? records.manifest.data.periods?.warm_up;
     const warmUp = typeof stated === 'string' ? parsePeriod(stated) : null;
     if (stores?.file === undefined || warmUp === null) continue;
     const after = (parseDate(warmUp.last) ?? 0) + 1;
-    found.set(node.name, await storesOfRun(run, after, records, rain, snapshot));
+    found.set(run.name ?? '', await storesOfRun(run, after, records, rain, snapshot));
   }
   return found;
 }

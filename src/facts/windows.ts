@@ -1,6 +1,7 @@
 import type { FieldPath } from '../manifest/manifest.ts';
 import { type Period, parsePeriod } from '../manifest/period.ts';
 import type { RecordNode, Records } from '../records/record.ts';
+import { nodesIn } from './nodes-in.ts';
 
 /** A window as the manifest states it. */
 export interface StatedWindow {
@@ -21,9 +22,8 @@ export interface WindowSet {
  * study's fill what they leave out.
  */
 export function windowSets({ manifest, nodes }: Records): readonly WindowSet[] {
-  const targets = targetsIn(nodes);
   const seen = new Set<string>();
-  const own = targets.filter((target) => {
+  const own = nodesIn(nodes, 'evaluation').filter((target) => {
     const fragment = target.field.join('.');
     const first = !seen.has(fragment);
     seen.add(fragment);
@@ -56,11 +56,6 @@ export function windowsOfTarget(
     const source = sources.find(({ stated }) => stated[key] !== undefined);
     return source === undefined ? [] : windowsIn({ [key]: source.stated[key] }, source.base);
   });
-}
-
-/** Every evaluation target, in the order of the records. */
-export function targetsIn(nodes: Records['nodes']): readonly RecordNode<'evaluation'>[] {
-  return [...nodes.values()].filter((node): node is RecordNode<'evaluation'> => node.area === 'evaluation');
 }
 
 /** The run that simulates a target. */

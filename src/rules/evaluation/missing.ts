@@ -1,6 +1,6 @@
 import type { Facts } from '../../facts/facts.ts';
+import { nodesIn } from '../../facts/nodes-in.ts';
 import { scoredWindows } from '../../facts/scores/stated.ts';
-import { targetsIn } from '../../facts/windows.ts';
 import type { RecordNode } from '../../records/record.ts';
 import { type Draft, rule } from '../rule.ts';
 import { isStated } from '../stand-in.ts';
@@ -20,7 +20,7 @@ export const evaluationMissing = rule({
   clear:
     'Add a target under evaluation with its observed input, its simulated column and its scores; or say under `none_because` why a variable can’t be evaluated.',
   check: (_, facts) => {
-    const targets = targetsIn(facts.records.nodes);
+    const targets = nodesIn(facts.records.nodes, 'evaluation');
     const evaluated = new Set(targets.map(({ fragment }) => fragment.variable));
     const needed = new Set(
       (facts.manifest.data.study?.needs ?? []).map(({ variable }) => variable ?? 'streamflow'),

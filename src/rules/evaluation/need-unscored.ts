@@ -1,6 +1,6 @@
 import type { Facts } from '../../facts/facts.ts';
+import { nodesIn } from '../../facts/nodes-in.ts';
 import type { StatedName } from '../../facts/scores/stated.ts';
-import { targetsIn } from '../../facts/windows.ts';
 import { rule } from '../rule.ts';
 
 /** The regimes that ask for scores of their own, and the scores that answer. */
@@ -36,7 +36,7 @@ export const evaluationNeedUnscored = rule({
         .filter(({ variable = 'streamflow' }) => variable === 'streamflow')
         .flatMap(({ regime }) => (regime === 'low' || regime === 'high' ? [regime] : [])),
     );
-    const targets = targetsIn(facts.records.nodes).filter(
+    const targets = nodesIn(facts.records.nodes, 'evaluation').filter(
       ({ fragment }) => fragment.variable === 'streamflow' && fragment.none_because === undefined,
     );
     return [...regimes].flatMap((regime) => {

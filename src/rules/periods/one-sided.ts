@@ -1,6 +1,7 @@
 import type { Facts } from '../../facts/facts.ts';
+import { nodesIn } from '../../facts/nodes-in.ts';
 import { type RainYears, rainOfRun } from '../../facts/rain-years.ts';
-import { runOf, type StatedWindow, targetsIn, type WindowSet, windowSets } from '../../facts/windows.ts';
+import { runOf, type StatedWindow, type WindowSet, windowSets } from '../../facts/windows.ts';
 import { isDefined } from '../../hydrology/paired.ts';
 import { type Wetness, wetnessClasses } from '../../hydrology/windows/wetness-classes.ts';
 import type { RecordNode } from '../../records/record.ts';
@@ -46,7 +47,9 @@ interface LongRecord extends RainYears {
 /** The rain that evaluated runs take; of several inputs the one with the most complete years. Null where none is known. */
 function longRecord({ records, rainYears }: Facts): LongRecord | null {
   const taken = new Set(
-    targetsIn(records.nodes).flatMap((target) => rainOfRun(runOf(target, records.nodes), records)),
+    nodesIn(records.nodes, 'evaluation').flatMap((target) =>
+      rainOfRun(runOf(target, records.nodes), records),
+    ),
   );
   const known = [...taken].flatMap((input) => {
     const years = rainYears.get(input);

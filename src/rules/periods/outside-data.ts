@@ -1,5 +1,6 @@
 import type { Facts } from '../../facts/facts.ts';
-import { targetsIn, windowsOfTarget } from '../../facts/windows.ts';
+import { nodesIn } from '../../facts/nodes-in.ts';
+import { windowsOfTarget } from '../../facts/windows.ts';
 import { dayNumber, type Period, parsePeriod } from '../../manifest/period.ts';
 import type { RecordNode } from '../../records/record.ts';
 import { formatDate } from '../../series/calendar.ts';
@@ -26,7 +27,7 @@ export const periodsOutsideData = rule({
 
 function windowsBeyond(facts: Facts): readonly Draft[] {
   const seen = new Set<string>();
-  return targetsIn(facts.records.nodes).flatMap((target) => {
+  return nodesIn(facts.records.nodes, 'evaluation').flatMap((target) => {
     const { input = '' } = target.fragment.observed ?? {};
     const observed = recordOf(input, facts);
     return windowsOfTarget(target, facts.records).flatMap(({ kind, field, period }) => {
@@ -48,9 +49,8 @@ function windowsBeyond(facts: Facts): readonly Draft[] {
 
 function simulationsBeyond(facts: Facts): readonly Draft[] {
   const { records, manifest } = facts;
-  const runs = [...records.nodes.values()].filter((node): node is RecordNode<'runs'> => node.area === 'runs');
   const scenarios = new Set(Object.values(manifest.data.scenarios?.cases ?? {}).map(({ run }) => run));
-  return runs.flatMap((run) => {
+  return nodesIn(records.nodes, 'runs').flatMap((run) => {
     const { simulation: own, takes = [] } = run.fragment;
     const simulation = parsePeriod(own ?? manifest.data.periods?.simulation ?? '');
     // A scenario that does not say what it simulates hardly simulates the study's own years.
