@@ -2,7 +2,7 @@ import { isMap, isScalar, isSeq, type Node, type Pair, type Scalar, type YAMLMap
 import { Failure } from '../failure.ts';
 import { locator } from './locate.ts';
 import { type FieldPath, fieldName, type Manifest } from './manifest.ts';
-import { keyText, type ScalarValue, scalarText } from './scalar-text.ts';
+import { type ScalarValue, scalarText, writtenKey } from './scalar-text.ts';
 import { parseYaml } from './yaml-text.ts';
 
 export interface ScalarEdit {
@@ -96,7 +96,7 @@ function lastOffset(node: Node): number {
 
 function entries(keys: Missing): readonly string[] {
   return [...keys].map(
-    ([key, value]) => `${keyText(key)}: ${value instanceof Map ? flowMap(value) : scalarText(value)}`,
+    ([key, value]) => `${writtenKey(key)}: ${value instanceof Map ? flowMap(value) : scalarText(value)}`,
   );
 }
 

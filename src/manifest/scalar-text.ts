@@ -12,7 +12,7 @@ export function scalarText(value: ScalarValue, old?: Scalar): string {
   return JSON.stringify(value);
 }
 
-export function keyText(key: string): string {
+export function writtenKey(key: string): string {
   return isPlain(key) ? key : JSON.stringify(key);
 }
 
