@@ -49,14 +49,10 @@ function describe(run: Run): Command {
       'after',
       `\nExit status: 0 pass, 1 blocked, 2 could not check.\n\n${wrap(caution, 100).join('\n')}`,
     );
-  const at = new Option('--at <content>', '`worktree`, `index` (what is staged), or a revision').default(
-    'worktree',
-  );
-
   program
     .command('check')
     .description('check the records against the files: the main job')
-    .addOption(at)
+    .option('--at <content>', '`worktree`, `index` (what is staged), or a revision', 'worktree')
     .option('--only <what>', 'one record, one area (such as `inputs`), or one manifest’s folder')
     .addOption(new Option('--phase <phase>', 'judge as if the study had come this far').choices(phases))
     .option('--report <kind=path>', '`text` or `json`, to a file or to `-`; may be repeated', collect)
@@ -74,7 +70,6 @@ function describe(run: Run): Command {
     .option('--figures', 'first write the recomputed figures into the manifest; old and new are shown')
     .option('--because <reason>', 'why a record is sealed though its outputs did not change with its inputs')
     .option('--moved', 'follow files and records that were renamed, keeping who sealed them and when')
-    .addOption(at)
     .option('--only <folder>', 'one manifest’s folder')
     .action(run(sealCommand));
 

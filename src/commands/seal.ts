@@ -9,8 +9,8 @@ import { sealReport } from '../reports/seal.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
 import { openRepository, type Repository } from '../repository/repository.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
-import { readAt } from './check.ts';
 import type { Context, ExitStatus } from './command.ts';
+import { withFigures } from './figures.ts';
 import { mended } from './mended.ts';
 import { choose, pathOf } from './only.ts';
 import { readStudies, type Study, stoplogFiles } from './studies.ts';
@@ -21,11 +21,10 @@ export interface SealOptions {
   readonly figures?: boolean;
   readonly because?: string;
   readonly moved?: boolean;
-  readonly at: string;
   readonly only?: string;
 }
 
-/** `stoplog seal`: 0 when all that was asked for is sealed, 1 when something was refused. Writes the seals file only, and with `--figures` the manifest. */
+/** `stoplog seal`, of the work tree as `git add` would store it: 0 when all that was asked for is sealed, 1 when something was refused. Writes the seals file only, and with `--figures` the manifest. */
 export async function sealCommand(
   context: Context,
   names: readonly string[],
@@ -34,14 +33,20 @@ export async function sealCommand(
   const repository = await openRepository(context.cwd, context.environment);
   const top = topOf(repository);
   const person = await repository.identity();
-  const snapshot = await openSnapshot(repository, sealable(options.at), { alsoUntracked: stoplogFiles });
+  const snapshot = await openSnapshot(repository, { kind: 'worktree' }, { alsoUntracked: stoplogFiles });
   try {
     const read = await readOne(snapshot, names, options.only);
-    const { study, healed, moved } = await mended(read, options.moved ?? false, repository, snapshot);
-    if (healed.length === 0 && names.length === 0 && !options.all && !options.moved) throw nothingAsked();
+    const { all = false, figures = false, moved: follow = false } = options;
+    const asked = (record: string): boolean =>
+      all || names.some((name) => record === name || record.startsWith(`${name}.`));
+    const { study: stated, written: newFigures } = figures
+      ? await withFigures(read, asked, snapshot, context.today)
+      : { study: read, written: [] };
+    const { study, healed, moved } = await mended(stated, follow, repository, snapshot);
+    if (healed.length === 0 && names.length === 0 && !all && !follow) throw nothingAsked();
     const plan = makeSeals({
       ...study,
-      wanted: options.all ? 'all' : names,
+      wanted: all ? 'all' : names,
       because: options.because ?? null,
       person,
       today: context.today,
@@ -51,14 +56,18 @@ export async function sealCommand(
         profiles: await profilesOf(study.records, snapshot),
       }),
     });
-    const text = writeSealsFile(plan.seals);
+    const files: readonly (readonly [path: string, text: string])[] = [
+      [study.manifest.path, study.manifest.text],
+      [study.sealsFile.path, writeSealsFile(plan.seals)],
+    ];
     const written: string[] = [];
-    if (text !== (await textOf(snapshot, study.sealsFile.path))) {
-      await writeFileSafely(join(top, study.sealsFile.path), text);
-      written.push(study.sealsFile.path);
+    for (const [path, text] of files) {
+      if (text === (await textOf(snapshot, path))) continue;
+      await writeFileSafely(join(top, path), text);
+      written.push(path);
     }
     const { today } = context;
-    context.write(sealReport({ plan, healed, moved, figures: [], written, person, today }));
+    context.write(sealReport({ plan, healed, moved, figures: newFigures, written, person, today }));
     return plan.refused.length > 0 ? 1 : 0;
   } finally {
     await snapshot.close();
@@ -68,16 +77,6 @@ export async function sealCommand(
 async function textOf(snapshot: Snapshot, path: string): Promise<string> {
   const bytes = snapshot.entries.has(path) ? await snapshot.read(path) : null;
   return bytes === null ? '' : new TextDecoder().decode(bytes);
-}
-
-function sealable(at: string) {
-  const chosen = readAt(at);
-  if (chosen.kind !== 'revision') return chosen;
-  throw new Failure(
-    'usage',
-    `\`--at ${at}\` names a commit, and what is committed can’t be sealed any more.`,
-    'Seal the work tree (the default) or `--at index`, and commit the seals.',
-  );
 }
 
 function topOf({ top, gitDirectory }: Repository): string {

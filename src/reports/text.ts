@@ -91,7 +91,7 @@ function findingLines(finding: Finding, placeOfRecord: string, paint: ChalkInsta
     ...wrap(plain(finding.message), width - indent.length).map((line) => indent + line),
     ...comparison(finding),
     ...finding.detail.map((line) => indent + plain(line)),
-    ...(finding.trail.length > 2
+    ...(finding.trail.length > 1 && !finding.message.includes(finding.trail.at(-1) ?? '')
       ? wrap(`rests on ${finding.trail.slice(1).map(plain).join(' <- ')}`, width - indent.length).map(
           (line) => indent + line,
         )

@@ -216,13 +216,6 @@ const failures: readonly {
   },
   { name: 'sealing nothing', words: ['seal'], code: 'usage', says: /record/, next: /--all/ },
   {
-    name: 'sealing a commit',
-    words: ['seal', '--all', '--at', 'HEAD'],
-    code: 'usage',
-    says: /HEAD/,
-    next: /work tree/,
-  },
-  {
     name: 'a report where no file can be',
     words: ['check', '--report', 'json=stoplog.yaml/x.json'],
     code: 'unwritable-file',
