@@ -68,6 +68,21 @@ describe('laws of the scores', () => {
       }),
     ));
 
+  it('equal values leave nothing to explain, though their mean may round away from them', () =>
+    fc.assert(
+      fc.property(
+        flow,
+        fc.integer({ min: 2, max: 50 }),
+        fc.array(flow, { minLength: 50, maxLength: 50 }),
+        (same, n, flows) => {
+          const simulated = flows.slice(0, n);
+          const equal = pairInOrder({ observed: simulated.map(() => same), simulated });
+          for (const name of ['nse', 'log_nse', 'rsr', 'r', 'kge', 'alpha', 'd'] as const)
+            expect(isDefined(scores[name](equal)), name).toBe(false);
+        },
+      ),
+    ));
+
   it('1 - sqrt 2 is the limit of KGE for noise about the observed mean', () => {
     // Symmetric and uncorrelated with the observations, its size going to zero.
     const noise = [1, -1, -1, 1].map((sign) => 5 + sign * 1e-9);

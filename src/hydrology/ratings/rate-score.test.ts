@@ -37,6 +37,46 @@ describe('ends of the published intervals', () => {
       });
 });
 
+/** The limits once more, typed from the articles' tables and abstracts and not from our data: very good, good, satisfactory. */
+const printedLimits: [string, string, string, 'watershed' | 'field', string, (number | null)[]][] = [
+  // Moriasi et al. 2007, Trans. ASABE 50(3):885-900, Table 4
+  ['moriasi-2007', 'RSR', 'streamflow sediment nitrogen phosphorus', 'watershed', '<=', [0.5, 0.6, 0.7]],
+  ['moriasi-2007', 'NSE', 'streamflow sediment nitrogen phosphorus', 'watershed', '>', [0.75, 0.65, 0.5]],
+  ['moriasi-2007', 'PBIAS', 'streamflow', 'watershed', '|x| <', [10, 15, 25]],
+  ['moriasi-2007', 'PBIAS', 'sediment', 'watershed', '|x| <', [15, 30, 55]],
+  ['moriasi-2007', 'PBIAS', 'nitrogen phosphorus', 'watershed', '|x| <', [25, 40, 70]],
+  // Moriasi et al. 2015, Trans. ASABE 58(6):1763-1785; sediment and nutrients above satisfactory from memory
+  ['moriasi-2015', 'R2', 'streamflow', 'watershed', '>', [0.85, 0.75, 0.6]],
+  ['moriasi-2015', 'R2', 'sediment phosphorus', 'watershed', '>', [0.8, 0.65, 0.4]],
+  ['moriasi-2015', 'R2', 'nitrogen', 'watershed', '>', [0.7, 0.6, 0.3]],
+  ['moriasi-2015', 'NSE', 'streamflow', 'watershed', '>', [0.8, 0.7, 0.5]],
+  ['moriasi-2015', 'NSE', 'sediment', 'watershed', '>', [0.8, 0.7, 0.45]],
+  ['moriasi-2015', 'NSE', 'nitrogen phosphorus', 'watershed', '>', [0.65, 0.5, 0.35]],
+  ['moriasi-2015', 'PBIAS', 'streamflow', 'watershed', '|x| <', [5, 10, 15]],
+  ['moriasi-2015', 'PBIAS', 'sediment', 'watershed', '|x| <', [10, 15, 20]],
+  ['moriasi-2015', 'PBIAS', 'nitrogen phosphorus', 'watershed', '|x| <', [15, 20, 30]],
+  ['moriasi-2015', 'R2', 'streamflow', 'field', '>', [0.85, 0.75, 0.7]],
+  ['moriasi-2015', 'd', 'streamflow', 'field', '>', [0.9, 0.85, 0.75]],
+  // Abstract of the 2025 article on fine time scales: satisfactory only
+  ['fine-scale-2025', 'NSE', 'sediment', 'watershed', '>', [null, null, 0.45]],
+  ['fine-scale-2025', 'NSE', 'total nutrient', 'watershed', '>', [null, null, 0.3]],
+  ['fine-scale-2025', 'NSE', 'dissolved nutrient', 'watershed', '>', [null, null, 0.35]],
+];
+
+it('every row of the tables is as printed', () => {
+  const ours = ratingTables.flatMap(({ id, rows }) =>
+    rows.map(({ statistic, variables, scale, reaches, limits }) => [
+      id,
+      statistic,
+      variables.join(' '),
+      scale,
+      reaches,
+      [...limits],
+    ]),
+  );
+  expect(ours).toEqual(printedLimits);
+});
+
 const flow = { table: 'moriasi-2007', variable: 'streamflow', step: 'monthly', scale: 'watershed' } as const;
 
 describe('rating a score', () => {

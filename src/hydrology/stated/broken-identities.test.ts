@@ -125,6 +125,8 @@ describe('printed numbers', () => {
   it('a half agrees with both neighbours, a hair more with one', () => {
     expect(agreesAsPrinted({ stated: printed('0.78'), recomputed: 0.785 })).toBe(true);
     expect(agreesAsPrinted({ stated: printed('0.79'), recomputed: 0.785 })).toBe(true);
+    // 1.13 + 0.005 falls a bit under 1.135 in binary.
+    expect(agreesAsPrinted({ stated: printed('1.13'), recomputed: 1.135 })).toBe(true);
     expect(agreesAsPrinted({ stated: printed('0.78'), recomputed: 0.78501 })).toBe(false);
     expect(agreesAsPrinted({ stated: printed('0.780'), recomputed: 0.7811 })).toBe(false);
     expect(agreesAsPrinted({ stated: printed('0.78'), recomputed: Number.NaN })).toBe(false);
