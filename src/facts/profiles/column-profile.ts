@@ -2,8 +2,7 @@ import { longestDrySpells } from '../../hydrology/forcing/longest-dry-spells.ts'
 import { type Run, stuckRuns } from '../../hydrology/forcing/stuck-runs.ts';
 import { isDefined } from '../../hydrology/paired.ts';
 import { isCustomaryMissingCode } from '../../series/missing-codes.ts';
-import { Listing } from '../../series/step-faults.ts';
-import type { Listed, SeriesColumn, SeriesTable } from '../../series/table.ts';
+import { type Listed, listedAtMost, type SeriesColumn, type SeriesTable } from '../../series/table.ts';
 import { type Place, placeOf, type Valued } from './places.ts';
 import { type RainExtremes, rainExtremes } from './rain-extremes.ts';
 
@@ -47,7 +46,8 @@ const runsKept = 5;
 const codesKept = 5;
 
 export function columnProfile(table: SeriesTable, column: SeriesColumn, isRain: boolean): ColumnProfile {
-  const negative = new Listing<Valued>();
+  const negative: number[] = [];
+  let negatives = 0;
   const codes = new Map<number, { row: number; count: number }>();
   let total = 0;
   let lowest = -1;
@@ -60,24 +60,23 @@ export function columnProfile(table: SeriesTable, column: SeriesColumn, isRain: 
     if (lowest < 0 || value < (values[lowest] as number)) lowest = row;
     if (highest < 0 || value > (values[highest] as number)) highest = row;
     if (value >= 0) continue;
-    negative.add({ value, ...placeOf(table, row) });
+    if (negatives++ < listedAtMost) negative.push(row);
     if (!isCustomaryMissingCode(value)) continue;
     const code = codes.get(value);
     if (code !== undefined) code.count++;
     else if (codes.size < codesKept) codes.set(value, { row, count: 1 });
   }
-  const valued = (row: number): Valued | null =>
-    row < 0 ? null : { value: values[row] as number, ...placeOf(table, row) };
+  const valued = (row: number): Valued => ({ value: values[row] as number, ...placeOf(table, row) });
   return {
     name: column.name,
     values: values.length - column.missing,
     missing: column.missing,
     absent: table.absent.total,
     total,
-    lowest: valued(lowest),
-    highest: valued(highest),
-    negative: { total: negative.total, first: negative.first },
-    suspectedCodes: [...codes].map(([value, { row, count }]) => ({ value, count, ...placeOf(table, row) })),
+    lowest: lowest < 0 ? null : valued(lowest),
+    highest: highest < 0 ? null : valued(highest),
+    negative: { total: negatives, first: negative.map(valued) },
+    suspectedCodes: Array.from(codes.values(), ({ row, count }) => ({ ...valued(row), count })),
     ...runsIn(table, values),
     rain: isRain ? rainExtremes(table, values) : null,
   };

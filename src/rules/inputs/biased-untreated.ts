@@ -21,6 +21,7 @@ export const inputsBiasedUntreated = rule({
   clear:
     'Correct the series and say how in `preparation` (step, because, script), or say there why no correction is needed.',
   limits: {
+    ...factorTolerance,
     annual_bias_percent: {
       default: 10,
       unit: '%',
@@ -81,8 +82,7 @@ export const inputsBiasedUntreated = rule({
 });
 
 /** Words of a step that treats a bias or a break. */
-const treats =
-  /bias|correct|adjust|scal|homogen|merg|undercatch|calibrat|quantile|double.mass|multipl|factor/i;
+const treats = /bias|correct|adjust|\b(?:re)?scal|homogen|undercatch|quantile|double.mass|multipl|factor/i;
 
 function answers({ step = '', because = '' }: Preparation): boolean {
   return treats.test(`${step} ${because}`);
@@ -100,7 +100,7 @@ const fewestYears = 5;
 
 function faultsOf(comparison: Comparison, limits: Limits): readonly Fault[] {
   // Another unit is no bias.
-  const faults = unitDoubt(comparison, factorTolerance) === null ? [bias(comparison, limits)] : [];
+  const faults = unitDoubt(comparison, limits) === null ? [bias(comparison, limits)] : [];
   return [...faults, wrongYears(comparison, limits), massBreak(comparison, limits)].filter(
     (fault) => fault !== null,
   );

@@ -1,14 +1,22 @@
 import type { Comparison } from '../../facts/profiles/comparison.ts';
 import { type UnitDoubt, type UnitFactor, unitFactor } from '../../hydrology/forcing/unit-factor.ts';
 import { isDefined } from '../../hydrology/paired.ts';
+import type { Limits } from '../rule.ts';
 
-/** Unless a project says otherwise: a total off by a unit's factor, this share more or less, counts as off by it. */
-export const factorTolerance = 0.2;
+/** For rules that ask for the factor, or make room for the one that does. */
+export const factorTolerance = {
+  unit_factor_tolerance: {
+    default: 0.2,
+    unit: '1',
+    states: 'A total off its reference by a unit’s factor, this share more or less, is doubted.',
+    looser: 'lower',
+  },
+} as const;
 
 /** The factor between two units by which a series is off its reference; null where it is not. */
 export function unitDoubt(
   { totals }: Comparison,
-  toleranceShare: number,
+  { unit_factor_tolerance: toleranceShare = 0 }: Limits,
 ): (UnitDoubt & { readonly near: UnitFactor }) | null {
   if (totals === null) return null;
   const doubt = unitFactor({ total: totals.checked, referenceTotal: totals.reference, toleranceShare });

@@ -55,6 +55,10 @@ ruleCases(inputsUnitDoubtful, {
   silent: [
     { name: 'a wet gauge', files: { 'data/rain.csv': withValues((mm) => mm * 3) } },
     {
+      name: 'a code for a missing value, which another rule names',
+      files: { 'data/temperature.csv': withValues(() => -99.9, 30, 30) },
+    },
+    {
       name: 'kelvin that says so',
       set: { 'inputs.temperature.series.unit': 'K' },
       files: { 'data/temperature.csv': withValues((degC) => degC + 273.15) },

@@ -25,12 +25,7 @@ export const inputsUnitDoubtful = rule({
   },
   clear: 'Look at the source’s unit and correct `series.unit`, or say in `note` why the totals are right.',
   limits: {
-    unit_factor_tolerance: {
-      default: factorTolerance,
-      unit: '1',
-      states: 'A total off its reference by a unit’s factor, this share more or less, is doubted.',
-      looser: 'lower',
-    },
+    ...factorTolerance,
     runoff_over_rain: {
       default: 3,
       unit: '1',
@@ -61,12 +56,9 @@ export const inputsUnitDoubtful = rule({
 
 type Doubt = Pick<Draft, 'message' | 'subject' | 'found'>;
 
-function againstReference(
-  { comparisons }: InputProfile,
-  { unit_factor_tolerance: tolerance = 0 }: Limits,
-): readonly Doubt[] {
+function againstReference({ comparisons }: InputProfile, limits: Limits): readonly Doubt[] {
   return comparisons.flatMap(({ file, reference, outcome }) => {
-    const doubt = isDefined(outcome) ? unitDoubt(outcome.value, tolerance) : null;
+    const doubt = isDefined(outcome) ? unitDoubt(outcome.value, limits) : null;
     if (doubt === null) return [];
     const times = figure(doubt.tooLarge ? doubt.ratio : 1 / doubt.ratio);
     return {
@@ -126,17 +118,18 @@ function beyondAir({ files }: InputProfile, unit: string): readonly Doubt[] {
   if (!isDefined(toDegC)) return [];
   const { factor, offset } = toDegC.value;
   for (const { path, columns } of files) {
-    for (const { lowest, highest } of columns) {
+    for (const { lowest, highest, suspectedCodes } of columns) {
       const beyond = [highest, lowest].find(
         (one) =>
           one !== null &&
+          !suspectedCodes.some(({ value }) => value === one.value) &&
           (one.value * factor + offset > airDegC.highest || one.value * factor + offset < airDegC.lowest),
       );
       if (!beyond) continue;
       return [
         {
           found: beyond.value,
-          message: `${path} has ${beyond.value} ${unit} on ${beyond.time} (line ${beyond.line}); no air was ever measured so ${beyond === highest ? 'hot' : 'cold'}. Kelvin or degrees Fahrenheit may be meant, or a code for a missing value.`,
+          message: `${path} has ${beyond.value} ${unit} on ${beyond.time} (line ${beyond.line}); no air was ever measured so ${beyond === highest ? 'hot' : 'cold'}. Kelvin or degrees Fahrenheit may be meant.`,
         },
       ];
     }
