@@ -117,6 +117,7 @@ inputs: {rainfall: {files: [${JSON.stringify(path)}]}}
         field: ['inputs', 'rainfall', 'files', 0],
         why: 'no-match',
         untracked: ['data/a.csv'],
+        ignored: [],
       },
     ]);
   });

@@ -1,6 +1,7 @@
 import type { FileIdentity, Snapshot } from '../repository/snapshot.ts';
 import { type FindPaths, pathFinder } from './find-paths.ts';
 import type { NamedFile } from './named-files.ts';
+import { fromTop } from './paths.ts';
 import type { Claim, Elsewhere, Unmatched } from './record.ts';
 import { isStoplogFile } from './seals-path.ts';
 
@@ -27,14 +28,14 @@ export async function claimFiles(
   named: readonly NamedBy[],
   find: FindPaths,
   folder: string,
-  snapshot: Pick<Snapshot, 'identify' | 'untracked'>,
+  snapshot: Pick<Snapshot, 'identify' | 'untracked' | 'onDisk'>,
 ): Promise<Claimed> {
   const findUntracked = pathFinder(snapshot.untracked, folder);
   const elsewhere = new Map<string, Elsewhere[]>();
   const unmatched: Unmatched[] = [];
   const miss = ({ record, file: { pattern, field } }: NamedBy, why: Unmatched['why']): void => {
     const untracked = why === 'no-match' ? (findUntracked(pattern)?.paths ?? []) : [];
-    unmatched.push({ record, pattern, field, why, untracked });
+    unmatched.push({ record, pattern, field, why, untracked, ignored: [] });
   };
 
   const candidates: Found[] = [];
@@ -66,9 +67,19 @@ export async function claimFiles(
   return {
     claims: claimsOf(found, identities),
     elsewhere,
-    unmatched,
+    unmatched: await Promise.all(unmatched.map((one) => withIgnored(one, folder, snapshot))),
     paths: new Set([...found.flatMap(({ paths }) => paths), ...away]),
   };
+}
+
+/** A file may lie on disk and be ignored by git; the person who wrote the pattern wants to hear it. */
+async function withIgnored(
+  one: Unmatched,
+  folder: string,
+  snapshot: Pick<Snapshot, 'onDisk'>,
+): Promise<Unmatched> {
+  if (one.why !== 'no-match' || one.untracked.length > 0) return one;
+  return { ...one, ignored: await snapshot.onDisk(fromTop(folder, one.pattern)) };
 }
 
 function whyUnavailable(identity: FileIdentity | undefined): string | null {

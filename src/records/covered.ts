@@ -16,7 +16,14 @@ export function coveredFiles(
         const found = find(pattern);
         const field = [key, index];
         if (found === null) {
-          unmatched.push({ record: asWhole, pattern, field, why: 'outside-repository', untracked: [] });
+          unmatched.push({
+            record: asWhole,
+            pattern,
+            field,
+            why: 'outside-repository',
+            untracked: [],
+            ignored: [],
+          });
         }
         return found?.paths ?? [];
       }),

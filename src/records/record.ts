@@ -79,6 +79,8 @@ export interface Unmatched {
   readonly why: 'no-match' | 'outside-repository';
   /** Files on disk that the pattern would name if git tracked them. */
   readonly untracked: readonly string[];
+  /** Where there are none: files on disk that the pattern would name if git did not ignore them. */
+  readonly ignored: readonly string[];
 }
 
 /** A name in the manifest that refers to no record. */

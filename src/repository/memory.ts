@@ -33,6 +33,7 @@ export function snapshotFromMemory(files: FilesInMemory, before: FilesInMemory =
     commit: null,
     ...listing,
     untracked: [],
+    onDisk: async () => [],
     ...contentOf(listing, blobsOf(contents), async () => null, forgetfulMemory()),
     readBefore: async (path: string) => snapshotFromMemory(before).read(path),
     fileBeside: async () => null,

@@ -8,6 +8,7 @@ import { gitBlobs } from './git-blobs.ts';
 import { largeFilesIn } from './large-files.ts';
 import { byPath, type Listing, listCommit, listIndex, treeEntries, untrackedFiles } from './listing.ts';
 import { nameFromBytes } from './names.ts';
+import { onDisk } from './on-disk.ts';
 import { commitOf, type Repository } from './repository.ts';
 import type { At, Snapshot } from './snapshot.ts';
 import { forgetfulValues, openValueMemory } from './value-memory.ts';
@@ -60,6 +61,8 @@ export async function openSnapshot(
       },
       fileBeside: async (path: string) =>
         repository.top === null ? null : fileBeside(repository.top, path, values.remember),
+      onDisk: async (pattern: string) =>
+        repository.top === null || at.kind === 'revision' ? [] : onDisk(repository.top, pattern),
       remember: values.remember,
       async close() {
         await blobs.close();

@@ -59,6 +59,8 @@ export interface Snapshot {
   readonly intentToAdd: readonly string[];
   /** Files on disk that git does not track: for messages only, never content of the snapshot. Empty for a revision. */
   readonly untracked: readonly string[];
+  /** Files on disk that a pattern names, ignored ones too: for messages only. None for a revision. */
+  onDisk(pattern: string): Promise<readonly string[]>;
   /** Digests, remembered by blob id; links followed inside the repository. Every asked path has an entry in the answer. */
   identify(paths: Iterable<string>): Promise<ReadonlyMap<string, FileIdentity>>;
   /** Whole content of a path (links followed, LFS content where present); null where it is unavailable. Throws Failure 'unreadable-file' above `limit` bytes. */

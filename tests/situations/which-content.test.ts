@@ -44,4 +44,13 @@ describe('which content is checked', () => {
     expect(refused.status).toBe(1);
     expect(refused.text).toContain('git add data/rain.csv');
   });
+
+  it('says of a claimed file that git is told to ignore it', async () => {
+    project = await soundRepository();
+    await project.git('rm', '--quiet', '--cached', 'runs/dry/daily.csv');
+    await project.write('.gitignore', 'runs/dry/\n');
+    const finding = (await check(project.folder)).finding('manifest.no-match', 'runs.dry');
+    expect(finding.message).toContain('runs/dry/daily.csv on disk, which git is told to ignore');
+    expect(finding.clear).toContain('.gitignore');
+  });
 });

@@ -1,4 +1,6 @@
-import { rule } from '../rule.ts';
+import type { Unmatched } from '../../records/record.ts';
+import { few } from '../figures.ts';
+import { type Draft, rule } from '../rule.ts';
 
 export const manifestNoMatch = rule({
   id: 'manifest.no-match',
@@ -12,16 +14,30 @@ export const manifestNoMatch = rule({
   check: (_, { records }) =>
     records.unmatched
       .filter(({ why, field }) => why === 'no-match' && field[0] !== 'readings')
-      .map(({ record, pattern, field, untracked }) => ({
+      .map(({ record, pattern, field, ...onDisk }) => ({
         record,
         field,
         subject: pattern,
         stated: pattern,
-        message:
-          untracked.length === 0
-            ? `\`${pattern}\` names no file that git tracks.`
-            : `\`${pattern}\` names ${untracked.slice(0, 3).join(', ')}${untracked.length > 3 ? ` and ${untracked.length - 3} more` : ''} on disk, which git does not track: a clone would not have it.`,
-        ...(untracked.length === 0 ? {} : { clear: `git add ${untracked.slice(0, 3).join(' ')}` }),
+        ...told(pattern, onDisk),
         ...(field[0] === 'runs' && field[2] === 'gives' ? { from: 'calibration' as const } : {}),
       })),
 });
+
+function told(
+  pattern: string,
+  { untracked, ignored }: Pick<Unmatched, 'untracked' | 'ignored'>,
+): Pick<Draft, 'message' | 'clear'> {
+  if (untracked.length > 0)
+    return {
+      message: `\`${pattern}\` names ${few(untracked)} on disk, which git does not track: a clone would not have it.`,
+      clear: `git add ${untracked.slice(0, 3).join(' ')}`,
+    };
+  if (ignored.length > 0)
+    return {
+      message: `\`${pattern}\` names ${few(ignored)} on disk, which git is told to ignore: a clone would not have it.`,
+      clear:
+        'Take it out of .gitignore and add it; or, for files kept outside git, write `stored: elsewhere` with SHA-256, size and location.',
+    };
+  return { message: `\`${pattern}\` names no file that git tracks.` };
+}
