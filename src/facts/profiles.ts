@@ -1,24 +1,17 @@
-import { defined, isDefined, type Statistic } from '../hydrology/paired.ts';
-import type { InputReference } from '../manifest/data.generated.ts';
 import { fromFolder } from '../records/paths.ts';
 import { type RecordNode, type Records, sha256Of } from '../records/record.ts';
 import type { FileIdentity, Snapshot } from '../repository/snapshot.ts';
 import type { Window } from '../series/calendar.ts';
-import type { Series } from '../series/series.ts';
 import { parseStep, type Step } from '../series/step.ts';
 import { areaKm2Of, yearBeginsOf } from './catchment.ts';
-import { findInput, isContentHere, readInputSeries } from './input.ts';
+import { isContentHere } from './input.ts';
 import { annualDepthMm } from './profiles/as-depth.ts';
-import { type Comparison, comparisonOf, comparisonVersion } from './profiles/comparison.ts';
+import { comparisonsOf, type Held, incompleteTotalsOf } from './profiles/beside-others.ts';
 import { coveredDays, coveredTogether } from './profiles/covered-days.ts';
 import { type FileProfile, fileProfile, fileProfileVersion } from './profiles/file-profile.ts';
-import {
-  type IncompleteTotal,
-  incompleteTotals,
-  incompleteTotalsVersion,
-} from './profiles/incomplete-totals.ts';
-import { type Basis, remembered } from './remembered.ts';
-import { inputsNamed, layoutOf, seriesFilesOf, seriesOfFile } from './series-of.ts';
+import type { IncompleteTotal } from './profiles/incomplete-totals.ts';
+import { remembered } from './remembered.ts';
+import { layoutOf, seriesFilesOf, seriesOfFile } from './series-of.ts';
 
 type InputRecord = RecordNode<'inputs'>;
 
@@ -29,15 +22,6 @@ export interface ProfiledFile extends FileProfile {
   readonly name: string;
   /** First to last day; null without rows. */
   readonly days: Window | null;
-}
-
-/** A comparison with the reference that the input names. */
-export interface Held {
-  /** The file that is compared, where each is a series of its own; null for what the files make together. */
-  readonly file: string | null;
-  /** The record id of the reference. */
-  readonly reference: string;
-  readonly outcome: Statistic<Comparison>;
 }
 
 /** What the files of one input with a series hold. */
@@ -94,7 +78,12 @@ async function profileOf(input: InputRecord, records: Records, snapshot: Snapsho
     step,
     days,
     annualMm: annualMmOf(files, input, areaKm2Of(data)),
-    comparisons: await comparisonsOf(input, files, records, snapshot),
+    comparisons: await comparisonsOf(
+      input,
+      files.map((file) => file.name),
+      records,
+      snapshot,
+    ),
     incompleteTotals: await incompleteTotalsOf(input, records, snapshot),
   };
 }
@@ -118,6 +107,7 @@ function fileProfileOf(
   });
 }
 
+/** By the mean of all values, whatever their weights. */
 function annualMmOf(
   files: readonly FileProfile[],
   { fragment: { role, combine, series } }: InputRecord,
@@ -133,73 +123,4 @@ function annualMmOf(
     { mean: together, unit: series?.unit ?? '', step: parseStep(series?.step ?? '') },
     areaKm2 === null ? {} : { areaKm2 },
   );
-}
-
-async function comparisonsOf(
-  { name, fragment }: InputRecord,
-  files: readonly ProfiledFile[],
-  records: Records,
-  snapshot: Snapshot,
-): Promise<readonly Held[]> {
-  const { role = 'other', combine, compare_with } = fragment;
-  if (compare_with === undefined) return [];
-  const { data } = records.manifest;
-  const areaKm2 = areaKm2Of(data);
-  const settings = { role, yearBegins: yearBeginsOf(data), over: areaKm2 === null ? {} : { areaKm2 } };
-  const alone = combine === 'each' && files.length > 1 ? files.map((file) => file.name) : [null];
-  const held: Held[] = [];
-  for (const file of alone) {
-    const checked: InputReference = { input: name ?? '', ...(file === null ? {} : { file }) };
-    const outcome = await ofTwo(checked, compare_with, records, snapshot, {
-      basis: { what: 'comparison', version: comparisonVersion, from: settings },
-      compute: (one, other) => comparisonOf({ ...settings, checked: one, reference: other }),
-    });
-    if (outcome !== null) held.push({ file, reference: `inputs.${compare_with.input}`, outcome });
-  }
-  return held;
-}
-
-/** Finer inputs that this one names: what it rests on, and what it is compared with. */
-async function incompleteTotalsOf(
-  { name, fragment }: InputRecord,
-  records: Records,
-  snapshot: Snapshot,
-): Promise<InputProfile['incompleteTotals']> {
-  const found = new Map<string, readonly IncompleteTotal[]>();
-  const yearBegins = yearBeginsOf(records.manifest.data);
-  const named = [fragment.compare_with?.input ?? [], ...(fragment.rests_on ?? []).flatMap(inputIn)].flat();
-  for (const input of new Set(named)) {
-    const outcome = await ofTwo({ input: name ?? '' }, { input }, records, snapshot, {
-      basis: { what: 'incomplete totals', version: incompleteTotalsVersion, from: { yearBegins } },
-      compute: (coarse, fine) => defined(incompleteTotals({ coarse, fine, yearBegins })),
-    });
-    if (outcome !== null && isDefined(outcome) && outcome.value.length > 0)
-      found.set(`inputs.${input}`, outcome.value);
-  }
-  return found;
-}
-
-function inputIn(record: string): readonly string[] {
-  return record.startsWith('inputs.') ? [record.slice('inputs.'.length)] : [];
-}
-
-/** What is computed from the series of two inputs; null where either is unknown or content of it is not here. */
-async function ofTwo<T>(
-  one: InputReference,
-  other: InputReference,
-  records: Records,
-  snapshot: Snapshot,
-  { basis, compute }: { readonly basis: Basis; compute(one: Series, other: Series): Statistic<T> },
-): Promise<Statistic<T> | null> {
-  const found = findInput(one, records);
-  const foundOther = findInput(other, records);
-  const hasFiles = inputsNamed(other.input, records).some((input) => seriesFilesOf(input).length > 0);
-  if (!('value' in found && 'value' in foundOther && hasFiles)) return null;
-  const from = { settings: basis.from, one: found.value.from, other: foundOther.value.from };
-  return remembered(snapshot, { ...basis, from }, async () => {
-    const series = await readInputSeries(found.value, records, snapshot);
-    if (!isDefined(series)) return series;
-    const reference = await readInputSeries(foundOther.value, records, snapshot);
-    return isDefined(reference) ? compute(series.value, reference.value) : reference;
-  });
 }
