@@ -20,6 +20,8 @@ import { remembered } from './remembered.ts';
 export interface StoreFigures {
   /** The column's name. */
   readonly store: string;
+  /** False where its unit is no depth, or is not stated: then its figures are in whatever unit it has, and not held against rain. */
+  readonly isDepth: boolean;
   /** On the last day of the warm-up and of each complete year after it. */
   readonly sameDate: Statistic<Drift>;
   /** Means of the complete years after warm-up. */
@@ -107,7 +109,6 @@ function figuresOf(
 ): StoreFigures {
   const toMm = conversion({ from: series.unit, to: 'mm' });
   const factor = isDefined(toMm) ? toMm.value.factor : 1;
-  // In another unit than a depth, a store can't be held against rain.
   const annualRainfallMm = isDefined(toMm) ? rainMm : 0;
   const drift = (yearly: readonly Yearly[]): Statistic<Drift> => {
     const found = storeDrift({
@@ -125,6 +126,7 @@ function figuresOf(
   };
   return {
     store,
+    isDepth: isDefined(toMm),
     sameDate: drift(onSameDate(series, firstDay, yearBegins)),
     annualMean: drift(
       aggregate(after, { by: 'year', how: 'mean', completeness: 'every-step', yearBegins }).flatMap(

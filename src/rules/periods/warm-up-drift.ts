@@ -56,7 +56,7 @@ export const periodsWarmUpDrift = rule({
 });
 
 function judge(
-  { store, sameDate, annualMean }: StoreFigures,
+  { store, isDepth, sameDate, annualMean }: StoreFigures,
   run: RunStores,
   limits: Limits,
 ): Omit<Draft, 'record'> | null {
@@ -73,19 +73,25 @@ function judge(
       ...(isDefined(change) ? [`up to ${figure(change.value)} % from a year to the next`] : []),
     ];
     const certain = isDefined(trend);
+    const size = `${figure(Math.abs(slope.slope))}${isDepth ? ' mm' : ''}`;
     const { rainTrend } = run;
     const withRain =
       isDefined(rainTrend) && rainTrend.value.p <= significance && rainTrend.value.s < 0 === falls;
     return {
       subject: store,
       found: Number(slope.slope.toPrecision(4)),
-      unit: 'mm a-1',
+      ...(isDepth ? { unit: 'mm a-1' } : {}),
       message: certain
-        ? `After warm-up ${store} still ${falls ? 'falls' : 'rises'} by ${figure(Math.abs(slope.slope))} mm a year ${what} (${sizes.join(', ')}; Mann-Kendall p = ${figure(trend.value.p)} over ${years} years).`
-        : `After warm-up ${store} ${falls ? 'falls' : 'rises'} by ${figure(Math.abs(slope.slope))} mm a year ${what} (${sizes.join(', ')}). With ${years} years a test can’t tell drift from weather.`,
-      detail: withRain
-        ? [`the rain ${falls ? 'falls' : 'rises'} too over these years, so the climate may be the cause`]
-        : [],
+        ? `After warm-up ${store} still ${falls ? 'falls' : 'rises'} by ${size} a year ${what} (${sizes.join(', ')}; Mann-Kendall p = ${figure(trend.value.p)} over ${years} yearly values).`
+        : `After warm-up ${store} ${falls ? 'falls' : 'rises'} by ${size} a year ${what} (${sizes.join(', ')}). With ${years} yearly values a test can’t tell drift from weather.`,
+      detail: [
+        ...(withRain
+          ? [`the rain ${falls ? 'falls' : 'rises'} too over these years, so the climate may be the cause`]
+          : []),
+        ...(isDepth
+          ? []
+          : ['the unit of the stores is not stated as a depth, so they are not held against the rain']),
+      ],
     };
   }
   return null;
