@@ -43,6 +43,20 @@ export type Column = (string | number)
  */
 export type ColumnList = [Column, ...(Column)[]]
 /**
+ * A column, or `{values, unit}` where its unit differs from that of the record.
+ */
+export type Term = (Column | TermColumn)
+/**
+ * Several columns.
+ * 
+ * @minItems 1
+ */
+export type TermList = [Term, ...(Term)[]]
+/**
+ * One column or a list of columns.
+ */
+export type Terms = (Column | TermColumn | TermList)
+/**
  * One column or a list of columns.
  */
 export type Columns = (Column | ColumnList)
@@ -234,6 +248,16 @@ export interface ManifestData {
    * Permissions to pass with a finding until a date.
    */
   waivers?: Waiver[]
+}
+/**
+ * A column in another unit than the rest of its file.
+ */
+export interface TermColumn {
+  values: Column
+  /**
+   * Its unit. Source: CF conventions; UDUNITS.
+   */
+  unit: string
 }
 /**
  * A file that is not in git: what it is, and where it is kept.
@@ -1265,11 +1289,11 @@ export interface Sensitivity {
  */
 export interface Handbook {
   /**
-   * The table. Source: Chow 1959, Table 5-6; TR-55, Table 2-2 and NEH 630 ch. 9; Rawls et al. 1982, Table 2.
+   * The table: `manning-n`, `curve-number`, `saturated-conductivity`, or one of `handbook_tables`. Source: Chow 1959, Table 5-6; TR-55, Table 2-2 and NEH 630 ch. 9; Rawls et al. 1982, Table 2.
    */
-  table: ("manning-n" | "curve-number" | "saturated-conductivity")
+  table: string
   /**
-   * The class in it.
+   * The class in it, as the table words it.
    */
   class?: string
   /**
@@ -1330,9 +1354,13 @@ export interface ParameterValue {
    */
   search?: ("linear" | "log")
   /**
-   * Where it applies: whole catchment, a zone, a land use.
+   * Where it applies: whole catchment, a zone, a land use. A parameter may stand once for each.
    */
   scope?: string
+  /**
+   * The layer it applies to, such as `2` or `topsoil`. A parameter may stand once for each.
+   */
+  layer?: (string | number)
   handbook?: Handbook
   /**
    * Anything a reader should know.
@@ -1348,13 +1376,76 @@ export interface Order {
    */
   states?: string
   /**
-   * Parameters from the smallest value to the greatest.
+   * Parameters from the smallest value to the greatest; with `of`, the layers or scopes of that one.
    * 
    * @minItems 2
    * 
-   * Items: The name of a parameter.
+   * Items: The name of a parameter, a layer or a scope.
    */
-  rising?: [string, string, ...(string)[]]
+  rising?: [(string | number), (string | number), ...((string | number))[]]
+  /**
+   * A parameter that stands for several layers or scopes. Without `rising`, the order that the initial values had.
+   */
+  of?: string
+  /**
+   * What `rising` lists, with `of`.
+   */
+  by?: ("layer" | "scope")
+}
+/**
+ * The model's own parameter file, a table that has a row for each parameter; held against the final values. Other layouts: `readings`.
+ */
+export interface ParameterFile {
+  /**
+   * Path from the manifest's folder.
+   */
+  file: string
+  /**
+   * What stands between columns; `blank` is any run of blanks and tabs.
+   */
+  separator?: ("comma" | "semicolon" | "tab" | "blank")
+  /**
+   * The decimal sign.
+   */
+  decimal?: ("point" | "comma")
+  /**
+   * Lines before the line of column names.
+   */
+  skip_lines?: number
+  /**
+   * A character; lines that begin with it are passed over.
+   */
+  comment?: string
+  /**
+   * Column of the names; `name` where not said.
+   */
+  name?: string
+  /**
+   * Column of the values; `value` where not said.
+   */
+  value?: string
+  /**
+   * Column of the scopes, where the file has several rows for a parameter.
+   */
+  scope?: string
+  /**
+   * Column of the layers, where the file has several rows for a parameter.
+   */
+  layer?: string
+}
+/**
+ * A table of the values that a class usually has: columns `class`, `low`, `high`, and `soil_group` where they differ by it.
+ */
+export interface HandbookTable {
+  table: Table
+  /**
+   * Unit of `low` and `high`; `1` for none. Source: CF conventions; UDUNITS.
+   */
+  unit?: string
+  /**
+   * Where the values come from.
+   */
+  source: string
 }
 /**
  * The calibrated parameters.
@@ -1367,9 +1458,16 @@ export interface Parameters {
    */
   values?: ParameterValue[]
   /**
-   * A table of the parameters, in place of `values` and with the same names for its columns; `range` stands in two columns, `range_low` and `range_high`.
+   * A table of the parameters, in place of `values` or beside them, with the same names for its columns; `range` stands in two columns, `range_low` and `range_high`, and `handbook` in `handbook_table`, `handbook_class`, `soil_group` and `impervious_share`.
    */
   table?: Table
+  model_file?: ParameterFile
+  /**
+   * Tables of your own beside the handbooks', by name.
+   */
+  handbook_tables?: {
+    [k: string]: HandbookTable
+  }
   /**
    * Orders that the values must keep.
    */
@@ -1891,25 +1989,29 @@ export interface BalanceVolume {
    */
   file?: string
   /**
-   * The window; the simulation without its warm-up where not said.
+   * The window; the simulation without its warm-up where not said. The warm-up is kept out of every window.
    */
   over?: Window
   /**
-   * Columns of what flows in, by name.
+   * Columns of what flows in, by name. Ratios know `precipitation` (`rain`, `rainfall`, `snowfall`) by its name.
    */
   inflow?: {
-    [k: string]: Column
+    [k: string]: Term
   }
   /**
-   * Columns of what flows out, by name.
+   * Columns of what flows out, by name. Ratios know `streamflow` (`runoff`, `discharge`) and `evapotranspiration` (`evaporation`, `transpiration`, `interception`) by their names.
    */
   outflow?: {
-    [k: string]: Column
+    [k: string]: Term
   }
   /**
    * Columns of what is stored at the end of each step.
    */
-  storage?: Columns
+  storage?: Terms
+  /**
+   * All that is stored before the first row; needed only where the window begins with the file. Unit: as `unit` says.
+   */
+  storage_before?: number
   /**
    * Why storage is left out.
    */
@@ -1917,11 +2019,15 @@ export interface BalanceVolume {
   /**
    * Column of potential evapotranspiration.
    */
-  potential_evapotranspiration?: Column
+  potential_evapotranspiration?: Term
   /**
    * The surface that the potential evapotranspiration is for.
    */
   potential_for?: ("grass" | "modelled_cover" | "open_water")
+  /**
+   * The volume's area in plan, where it is not the catchment's; to go between volumes and depths.
+   */
+  area?: CatchmentArea
   stated?: StatedBalance
   /**
    * Makes one record for each entry; `{each}` in the texts of this record stands for the entry.
@@ -2080,6 +2186,10 @@ export interface StatedBand {
    * Mean width over the observed standard deviation (R-factor). Unit: 1. Source: Abbaspour et al. 2007, J. Hydrol. 333:413-430 (from memory).
    */
   relative_width?: number
+  /**
+   * Mean interval score: width and misses together. Unit: as `unit` says. Source: Gneiting & Raftery 2007, eq. 43.
+   */
+  interval_score?: number
 }
 /**
  * The uncertainty band of one target.
@@ -2147,7 +2257,7 @@ export interface Band {
    */
   level?: number
   /**
-   * The window.
+   * The window; `validation` where not said. The warm-up is kept out of every window.
    */
   over?: Window
   stated?: StatedBand

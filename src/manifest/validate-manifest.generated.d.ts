@@ -25,6 +25,8 @@ export const TakeKey: Validator;
 export const TakePattern: Validator;
 export const TakePointer: Validator;
 export const TakeWord: Validator;
+export const TermColumn: Validator;
+export const TermList: Validator;
 export const TimeColumn: Validator;
 export const TimeCounter: Validator;
 export const TimeYearDay: Validator;

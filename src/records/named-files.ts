@@ -45,9 +45,20 @@ export function filesNamedBy(statement: Statement, stated: Stated): readonly Nam
       ];
     }
     case 'parameters': {
-      const { table, sensitivity, calibrated_by, files } = statement.fragment;
+      const {
+        table,
+        sensitivity,
+        calibrated_by,
+        files,
+        model_file,
+        handbook_tables = {},
+      } = statement.fragment;
       return [
         ...tabled(table, at('table')),
+        ...Object.entries(handbook_tables).flatMap(([name, handbook]) =>
+          tabled(handbook.table, at('handbook_tables', name, 'table')),
+        ),
+        ...listed(model_file?.file, at('model_file', 'file'), 'seen'),
         ...listed(sensitivity?.file, at('sensitivity', 'file'), 'own'),
         ...listed(calibrated_by?.files, at('calibrated_by', 'files'), 'read'),
         ...listed(files, at('files'), 'read'),
