@@ -2,6 +2,7 @@ import type { Records } from '../records/record.ts';
 import type { SealsFile } from '../records/seal.ts';
 import { readSealsFile } from '../records/seals-file.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
+import { scenariosOf } from './conditions.ts';
 import { differencesOf } from './differences.ts';
 import type { Facts } from './facts.ts';
 import { profilesOf } from './profiles.ts';
@@ -31,7 +32,7 @@ export interface Given extends Pick<Facts, GivenFacts> {
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
   const { records, standings, sealsFile } = given;
   const rain = rainYearsOf(records, snapshot);
-  const [sealsBefore, beside, readings, differences, profiles, scores, rainYears, stores, seasons] =
+  const [sealsBefore, beside, readings, differences, profiles, scores, rainYears, stores, seasons, scenarios] =
     await Promise.all([
       sealsOfBefore(sealsFile, snapshot),
       filesBeside(records, snapshot),
@@ -42,6 +43,7 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
       rain,
       rain.then((years) => storesOf(records, years, snapshot)),
       seasonsOf(records, snapshot),
+      scenariosOf(records, snapshot),
     ]);
   return Object.freeze({
     ...given,
@@ -54,6 +56,7 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
     rainYears,
     stores,
     seasons,
+    scenarios,
     found: [],
     record: (id: string) => records.nodes.get(id),
   });

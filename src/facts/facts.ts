@@ -4,6 +4,7 @@ import type { RecordNode, Records } from '../records/record.ts';
 import type { Seal, SealsFile, Standing } from '../records/seal.ts';
 import type { DiskFile } from '../repository/snapshot.ts';
 import type { SeriesDifference } from '../series/difference.ts';
+import type { ScenarioFigures } from './conditions.ts';
 import type { InputProfile } from './profiles.ts';
 import type { RainYears } from './rain-years.ts';
 import type { Reading } from './readings.ts';
@@ -57,6 +58,8 @@ export interface Facts {
   readonly stores: ReadonlyMap<string, RunStores>;
   /** For each stated season, in the manifest's order: how the simulated one lies to the observed. */
   readonly seasons: readonly Statistic<SeasonFigures>[];
+  /** The calibrated conditions, and how far scenarios reach beyond them. */
+  readonly scenarios: ScenarioFigures;
   /** Findings of the first pass; empty during it. */
   readonly found: readonly Found[];
   readonly known: KnownRules;

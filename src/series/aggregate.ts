@@ -1,6 +1,5 @@
 import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
 import {
-  dateOf,
   dayNumber,
   firstDayOfMonth,
   formatDate,
@@ -11,6 +10,7 @@ import {
 import { calendarYears, daysOfYear, type YearBegins, yearOf } from './hydrological-year.ts';
 import type { Series } from './series.ts';
 import { afterSteps, daily, monthly, type Step, stepsBetween, yearly } from './step.ts';
+import { isInMonths } from './within.ts';
 
 /**
  * When what is there is enough for a value:
@@ -166,9 +166,4 @@ class Count {
     if (enough[completeness]) return null;
     return `${steps - missing} of ${steps} values are there, and ${longestGap} in a row are missing`;
   }
-}
-
-function isInMonths(timeSeconds: number, [first, last]: readonly [number, number]): boolean {
-  const { month } = dateOf(Math.floor(timeSeconds / secondsOfDay));
-  return first <= last ? month >= first && month <= last : month >= first || month <= last;
 }
