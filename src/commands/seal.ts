@@ -1,7 +1,5 @@
 import { join } from 'node:path';
 import { evidenceFor } from '../facts/evidence.ts';
-import { profilesOf } from '../facts/profiles.ts';
-import { scoresOf } from '../facts/scores.ts';
 import { Failure } from '../failure.ts';
 import { makeSeals } from '../records/make-seals.ts';
 import { writeSealsFile } from '../records/seals-file.ts';
@@ -50,11 +48,7 @@ export async function sealCommand(
       because: options.because ?? null,
       person,
       today: context.today,
-      evidence: evidenceFor({
-        ...study,
-        scores: await scoresOf(study.records, snapshot),
-        profiles: await profilesOf(study.records, snapshot),
-      }),
+      evidence: await evidenceFor(study, snapshot),
     });
     const files: readonly (readonly [path: string, text: string])[] = [
       [study.manifest.path, study.manifest.text],

@@ -3,24 +3,41 @@ import { parsePeriod } from '../manifest/period.ts';
 import type { Evidence } from '../records/make-seals.ts';
 import type { RecordNode } from '../records/record.ts';
 import type { Standing } from '../records/seal.ts';
+import type { Snapshot } from '../repository/snapshot.ts';
 import { parseDate } from '../series/calendar.ts';
+import { conditionVersion } from './conditions/figures.ts';
+import { type StatedCondition, statedConditions, statedDrivers } from './conditions/stated.ts';
+import { scenariosOf } from './conditions.ts';
 import type { Facts } from './facts.ts';
 import { missingShares } from './missing-shares.ts';
 import { fileProfileVersion } from './profiles/file-profile.ts';
-import type { InputProfile } from './profiles.ts';
+import { type InputProfile, profilesOf } from './profiles.ts';
 import { scoredWindows } from './scores/stated.ts';
 import { scoresVersion } from './scores/subject.ts';
-import type { TargetFigures } from './scores.ts';
+import { scoresOf, type TargetFigures } from './scores.ts';
 import { graphVersion, reviewDigest } from './seen-series.ts';
 
 /** What a seal's evidence is made of. */
-export type Computed = Pick<Facts, 'records' | 'standings' | 'manifest' | 'scores' | 'profiles'>;
+type Computed = Pick<Facts, 'records' | 'standings' | 'manifest' | 'scores' | 'profiles' | 'scenarios'>;
 
 /**
  * By record: what a seal made now should keep of what was computed. A record is `recomputed` where it states figures, and each
  * of them is what its files give.
  */
-export function evidenceFor(computed: Computed): ReadonlyMap<string, Evidence> {
+export async function evidenceFor(
+  study: Pick<Computed, 'records' | 'standings' | 'manifest'>,
+  snapshot: Snapshot,
+): Promise<ReadonlyMap<string, Evidence>> {
+  const { records } = study;
+  return evidenceIn({
+    ...study,
+    scores: await scoresOf(records, snapshot),
+    profiles: await profilesOf(records, snapshot),
+    scenarios: await scenariosOf(records, snapshot),
+  });
+}
+
+function evidenceIn(computed: Computed): ReadonlyMap<string, Evidence> {
   const { records, standings, scores, profiles, manifest } = computed;
   const evidence = new Map<string, Evidence>();
   for (const [id, record] of records.nodes) {
@@ -29,6 +46,8 @@ export function evidenceFor(computed: Computed): ReadonlyMap<string, Evidence> {
         id,
         ofTarget(record as RecordNode<'evaluation'>, scores.get(record.name ?? ''), standings.get(id)),
       );
+    if (record.area === 'scenarios')
+      evidence.set(id, ofScenario(record as RecordNode<'scenarios'>, computed));
     const profile = record.area === 'inputs' ? profiles.get(record.name ?? '') : undefined;
     if (profile !== undefined) evidence.set(id, ofInput(record as RecordNode<'inputs'>, profile, manifest));
   }
@@ -88,4 +107,20 @@ function holdsPeriod(period: string | undefined, { days }: InputProfile): boolea
   return (
     stated !== null && parseDate(stated.first) === days?.firstDay && parseDate(stated.last) === days.lastDay
   );
+}
+
+/** Of the figures of a case's drivers, and of the conditions that they are held against. */
+function ofScenario(record: RecordNode<'scenarios'>, computed: Computed): Evidence {
+  const drivers = statedDrivers(record, computed);
+  const against = new Set(drivers.map(({ name }) => name));
+  const all: readonly StatedCondition[] = [
+    ...statedConditions(computed).filter(({ name }) => against.has(name)),
+    ...drivers,
+  ];
+  const facts: Record<string, Evidence['facts'][string]> = {};
+  for (const { of, name, key, found } of all)
+    if (found !== null) facts[`${of} ${name} ${key}`] = { value: found, computed_by: conditionVersion };
+  const stated = all.filter((one) => one.stated !== null);
+  const isProven = stated.length > 0 && stated.every(({ agrees }) => agrees);
+  return { facts, grade: isProven ? 'recomputed' : 'sealed' };
 }

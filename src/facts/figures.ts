@@ -1,6 +1,8 @@
 import type { FieldPath } from '../manifest/manifest.ts';
+import { conditionFigures } from './condition-figures.ts';
 import type { Facts } from './facts.ts';
 import { missingShareFigures } from './missing-shares.ts';
+import { scoreFigures } from './score-figures.ts';
 
 /** A figure that the files give otherwise than the manifest states it. */
 export interface Figure {
@@ -14,5 +16,5 @@ export interface Figure {
 
 /** What `seal --figures` writes into the manifest, record after record. */
 export function figuresToWrite(facts: Facts): readonly Figure[] {
-  return [...missingShareFigures(facts)];
+  return [...missingShareFigures(facts), ...scoreFigures(facts), ...conditionFigures(facts)];
 }

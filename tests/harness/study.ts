@@ -3,8 +3,6 @@ import { parseDocument } from 'yaml';
 import { buildFacts } from '../../src/facts/build.ts';
 import { evidenceFor } from '../../src/facts/evidence.ts';
 import type { Facts } from '../../src/facts/facts.ts';
-import { profilesOf } from '../../src/facts/profiles.ts';
-import { scoresOf } from '../../src/facts/scores.ts';
 import type { Manifest } from '../../src/manifest/manifest.ts';
 import { readManifest } from '../../src/manifest/read.ts';
 import { buildRecords } from '../../src/records/build.ts';
@@ -171,13 +169,7 @@ async function sealsOf(
     because: null,
     person: 'Test Reviewer <reviewer@eastmoor.example>',
     today: '2021-02-01',
-    evidence: evidenceFor({
-      records,
-      standings,
-      manifest: records.manifest,
-      scores: await scoresOf(records, snapshot),
-      profiles: await profilesOf(records, snapshot),
-    }),
+    evidence: await evidenceFor({ records, standings, manifest: records.manifest }, snapshot),
   });
   return new Map([...seals].map(([id, seal]) => [id, withChecksum({ ...seal, ...changed[id] })]));
 }

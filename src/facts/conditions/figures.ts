@@ -78,7 +78,7 @@ function groups(inside: Series, { by, total, yearBegins, months }: Making): Valu
     ...(months === undefined ? {} : { months }),
   })
     .filter(({ steps, missing }) => steps > missing)
-    .map((group) => ({ label: group.label, value: valueOf(group, total) }));
+    .map((group) => ({ label: group.label, value: groupValue(group, total) }));
   const whole = made.filter(({ value }) => value !== null);
   return {
     labels: whole.map(({ label }) => label),
@@ -87,7 +87,7 @@ function groups(inside: Series, { by, total, yearBegins, months }: Making): Valu
   };
 }
 
-function valueOf({ steps, missing, presentSum, value }: Group, total: boolean): number | null {
+function groupValue({ steps, missing, presentSum, value }: Group, total: boolean): number | null {
   if (isDefined(value)) return value.value;
   return total || missing > mostMissing * steps ? null : presentSum / (steps - missing);
 }

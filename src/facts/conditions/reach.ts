@@ -37,10 +37,7 @@ export function reachOf(calibrated: ConditionFigures, scenario: ConditionFigures
 }
 
 /** Within the range, rounding apart: the same days added up in another order are no new climate. */
-function isInside(
-  value: number,
-  { lowest, highest }: Pick<ConditionFigures, 'lowest' | 'highest'>,
-): boolean {
+function isInside(value: number, { lowest, highest }: Pick<ConditionFigures, 'lowest' | 'highest'>): boolean {
   const slack = 1e-9 * Math.max(Math.abs(lowest), Math.abs(highest));
   return value >= lowest - slack && value <= highest + slack;
 }
