@@ -15,7 +15,7 @@ type InputRecord = RecordNode<'inputs'>;
 
 /** A comparison with the reference that the input names. */
 export interface Held {
-  /** The file that is compared, where each is a series of its own; null for what the files make together. */
+  /** The file that is compared alone, of an input with several; null for what the files make together. */
   readonly file: string | null;
   /** The record id of the reference. */
   readonly reference: string;
@@ -34,9 +34,11 @@ export async function comparisonsOf(
   const { data } = records.manifest;
   const areaKm2 = areaKm2Of(data);
   const settings = { role, yearBegins: yearBeginsOf(data), over: areaKm2 === null ? {} : { areaKm2 } };
-  const alone = combine === 'each' && files.length > 1 ? files : [null];
+  // Files that follow one another are one series; gauges side by side may each have a fault of their own.
+  const alone = combine === undefined || files.length === 1 ? [] : files;
+  const together = alone.length > 0 && combine === 'each' ? [] : [null];
   const held: Held[] = [];
-  for (const file of alone) {
+  for (const file of [...together, ...alone]) {
     const checked: InputReference = { input: name ?? '', ...(file === null ? {} : { file }) };
     const outcome = await ofTwo(checked, compare_with, records, snapshot, {
       basis: { what: 'comparison', version: comparisonVersion, from: settings },

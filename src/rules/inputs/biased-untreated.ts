@@ -58,6 +58,8 @@ export const inputsBiasedUntreated = rule({
     if ((fragment.preparation ?? []).some(answers)) return [];
     return (profiles.get(name ?? '')?.comparisons ?? []).flatMap(
       ({ file, reference, outcome }): readonly Draft[] => {
+        // One gauge of a mean may differ from the reference by its place.
+        if (file !== null && fragment.combine !== 'each') return [];
         const about = { record: id, field: [...field, 'compare_with'] };
         const subject = (fault: string) => (file === null ? fault : `${file} ${fault}`);
         if (!isDefined(outcome))

@@ -1,4 +1,5 @@
 import { ruleCases } from '../../../tests/harness/rule-cases.ts';
+import { soundFiles } from '../../../tests/harness/sound-files.ts';
 import { inputsDayShifted } from './day-shifted.ts';
 
 /** Every value one row later (or earlier, with -1); the first and the last keep what they have. */
@@ -23,6 +24,19 @@ ruleCases(inputsDayShifted, {
       },
     },
     { name: 'a day early', files: { 'data/rain.csv': moved(-1) }, finds: { found: 'one day early' } },
+    {
+      name: 'one gauge of a mean that as a whole fits',
+      set: {
+        'inputs.rainfall.files': ['data/rain.csv', 'data/second.csv', 'data/third.csv'],
+        'inputs.rainfall.combine': 'mean',
+      },
+      files: {
+        'data/rain.csv': moved(1),
+        'data/second.csv': soundFiles()['data/rain.csv'] ?? '',
+        'data/third.csv': soundFiles()['data/rain.csv'] ?? '',
+      },
+      finds: { subject: 'data/rain.csv', found: 'one day late' },
+    },
     {
       name: 'one gauge of several',
       set: {

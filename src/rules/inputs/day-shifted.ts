@@ -1,6 +1,7 @@
 import { isDefined } from '../../hydrology/paired.ts';
 import { figure } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
+import { togetherOrAlone } from './together-or-alone.ts';
 
 export const inputsDayShifted = rule({
   id: 'inputs.day-shifted',
@@ -25,7 +26,8 @@ export const inputsDayShifted = rule({
     },
   },
   check: ({ id, name, field }, { profiles }, { day_shift_gain: least = 0 }) =>
-    (profiles.get(name ?? '')?.comparisons ?? []).flatMap(
+    togetherOrAlone(
+      profiles.get(name ?? '')?.comparisons ?? [],
       ({ file, reference, outcome }): readonly Draft[] => {
         if (!isDefined(outcome) || !isDefined(outcome.value.dayShift)) return [];
         const { days, gain, sameDay } = outcome.value.dayShift.value;

@@ -46,6 +46,10 @@ ruleCases(inputsStuckValue, {
     },
   ],
   silent: [
+    {
+      name: 'a code for a missing value, which another rule names',
+      files: { 'data/rain.csv': withValues(() => -9.9, 31, 60) },
+    },
     { name: 'four days', files: { 'data/rain.csv': withValues(() => 3.4, 31, 34) } },
     {
       name: 'five days around a gap',

@@ -83,7 +83,9 @@ function equalRuns(
   column: ColumnProfile,
   longest: number,
 ): readonly Draft[] {
-  const [first, ...others] = column.equalRuns.filter(({ steps }) => steps >= longest);
+  const [first, ...others] = column.equalRuns.filter(
+    ({ steps, value }) => steps >= longest && !column.suspectedCodes.some((code) => code.value === value),
+  );
   if (first === undefined) return [];
   return [
     {

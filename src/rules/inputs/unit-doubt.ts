@@ -6,7 +6,7 @@ import type { Limits } from '../rule.ts';
 /** For rules that ask for the factor, or make room for the one that does. */
 export const factorTolerance = {
   unit_factor_tolerance: {
-    default: 0.2,
+    default: 0.35,
     unit: '1',
     states: 'A total off its reference by a unit’s factor, this share more or less, is doubted.',
     looser: 'lower',

@@ -1,5 +1,6 @@
 import { withValues } from '../../../tests/harness/edit-lines.ts';
 import { ruleCases } from '../../../tests/harness/rule-cases.ts';
+import { soundFiles } from '../../../tests/harness/sound-files.ts';
 import { inputsUnitDoubtful } from './unit-doubtful.ts';
 
 ruleCases(inputsUnitDoubtful, {
@@ -28,12 +29,24 @@ ruleCases(inputsUnitDoubtful, {
       finds: { message: /^In its unit the series gives 1\.\d+ mm of rain in a mean year/ },
     },
     {
+      name: 'inches in one gauge of a mean',
+      set: {
+        'inputs.rainfall.files': ['data/rain.csv', 'data/second.csv'],
+        'inputs.rainfall.combine': 'mean',
+      },
+      files: {
+        'data/rain.csv': withValues((mm) => mm / 25.4),
+        'data/second.csv': soundFiles()['data/rain.csv'] ?? '',
+      },
+      finds: { subject: 'data/rain.csv', message: 'data/rain.csv is 24.6' },
+    },
+    {
       name: 'litres said to be cubic metres',
       files: { 'data/flow.csv': withValues((flow) => (Number.isNaN(flow) ? 'NA' : flow * 1000)) },
       finds: {
         record: 'inputs.streamflow',
         stated: 'm3/s',
-        message: /^Over the catchment the flow makes .* beside/,
+        message: /^Over the catchment the flow makes .* beside .*; it would make \d+(?:\.\d+)? mm in L\/s/,
       },
     },
     {

@@ -1,13 +1,14 @@
 import type { Facts } from '../../facts/facts.ts';
 import type { InputProfile } from '../../facts/profiles.ts';
 import { annualPlausibility } from '../../hydrology/forcing/annual-plausibility.ts';
-import { type UnitFactor, unitFactors } from '../../hydrology/forcing/unit-factor.ts';
+import type { UnitFactor } from '../../hydrology/forcing/unit-factor.ts';
 import { isDefined } from '../../hydrology/paired.ts';
 import type { Input } from '../../manifest/data.generated.ts';
 import type { RecordNode } from '../../records/record.ts';
 import { conversion } from '../../series/units/conversion.ts';
 import { figure } from '../figures.ts';
 import { type Draft, type Limits, rule } from '../rule.ts';
+import { togetherOrAlone } from './together-or-alone.ts';
 import { factorTolerance, unitDoubt } from './unit-doubt.ts';
 
 export const inputsUnitDoubtful = rule({
@@ -57,14 +58,16 @@ export const inputsUnitDoubtful = rule({
 type Doubt = Pick<Draft, 'message' | 'subject' | 'found'>;
 
 function againstReference({ comparisons }: InputProfile, limits: Limits): readonly Doubt[] {
-  return comparisons.flatMap(({ file, reference, outcome }) => {
+  return togetherOrAlone(comparisons, ({ file, reference, outcome }) => {
     const doubt = isDefined(outcome) ? unitDoubt(outcome.value, limits) : null;
     if (doubt === null) return [];
     const times = figure(doubt.tooLarge ? doubt.ratio : 1 / doubt.ratio);
-    return {
-      ...(file === null ? {} : { subject: file }),
-      message: `${file ?? 'The series'} is ${times} times as ${doubt.tooLarge ? 'large' : 'small'} as ${reference} over the same time; ${doubt.near.factor} lies between ${doubt.near.between}.`,
-    };
+    return [
+      {
+        ...(file === null ? {} : { subject: file }),
+        message: `${file ?? 'The series'} is ${times} times as ${doubt.tooLarge ? 'large' : 'small'} as ${reference} over the same time; ${doubt.near.factor} lies between ${doubt.near.between}.`,
+      },
+    ];
   });
 }
 
@@ -77,7 +80,7 @@ function alone(
   if (role === 'temperature') return beyondAir(profile, series?.unit ?? '');
   const { annualMm } = profile;
   if (annualMm === null) return [];
-  if (role === 'streamflow') return besideRain(annualMm, facts, limits);
+  if (role === 'streamflow') return besideRain(annualMm, series?.unit ?? '', facts, limits);
   if (role !== 'precipitation' && role !== 'evapotranspiration') return [];
   const outcome = annualPlausibility({ role, annualMm });
   if (!isDefined(outcome) || outcome.value.plausible) return [];
@@ -90,22 +93,37 @@ function alone(
   ];
 }
 
+/** Units in which flow is given, each other in use somewhere. */
+const flowUnits = ['m3/s', 'L/s', 'ft3/s', 'ML/d', 'm3/d'];
+
+/** Shares of the rain that ordinary catchments let run off. */
+const ordinary = { lowest: 0.02, highest: 1.2 };
+
 /** Runoff against the rain of the study: neither far above it nor a hundredth of it. */
-function besideRain(annualMm: number, { records, profiles }: Facts, limits: Limits): readonly Doubt[] {
+function besideRain(
+  annualMm: number,
+  unit: string,
+  { records, profiles }: Facts,
+  limits: Limits,
+): readonly Doubt[] {
   const rains = [...profiles].flatMap(([name, profile]) => {
     const record = records.nodes.get(`inputs.${name}`) as RecordNode<'inputs'> | undefined;
     return record?.fragment.role === 'precipitation' && profile.annualMm !== null ? [profile.annualMm] : [];
   });
   const { runoff_over_rain: most = 0, rain_over_runoff: least = 0 } = limits;
-  const isUsual = (flow: number) => rains.some((rain) => flow <= most * rain && flow * least >= rain);
-  if (rains.length === 0 || annualMm <= 0 || isUsual(annualMm)) return [];
-  const factors = unitFactors.filter(
-    ({ factor }) => isUsual(annualMm / factor) || isUsual(annualMm * factor),
-  );
+  const rainMm = Math.max(...rains);
+  const isUsual = rains.some((rain) => annualMm <= most * rain && annualMm * least >= rain);
+  if (rains.length === 0 || annualMm <= 0 || isUsual) return [];
+  const read = flowUnits.flatMap((other) => {
+    const converted = conversion({ from: other, to: unit });
+    const depth = isDefined(converted) ? annualMm * converted.value.factor : 0;
+    const fits = depth >= ordinary.lowest * rainMm && depth <= ordinary.highest * rainMm;
+    return fits ? [`${figure(depth)} mm in ${other}`] : [];
+  });
   return [
     {
       found: Number(annualMm.toPrecision(3)),
-      message: `Over the catchment the flow makes ${figure(annualMm)} mm in a mean year, beside ${figure(Math.max(...rains))} mm of rain${perhaps(factors)}.`,
+      message: `Over the catchment the flow makes ${figure(annualMm)} mm in a mean year, beside ${figure(rainMm)} mm of rain${read.length === 0 ? '' : `; it would make ${read.join(', ')}`}.`,
     },
   ];
 }
