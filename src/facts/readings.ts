@@ -12,6 +12,8 @@ export interface Reading {
   /** The record and the field that the reading is about. */
   readonly record: string;
   readonly of: FieldPath;
+  /** The field as the reading names it, such as `parameters.soil_capacity`. */
+  readonly name: string;
   /** Where the reading itself stands in the manifest. */
   readonly field: FieldPath;
   /** From the top of the repository, and the line where the value stands (from 1; null when not found). */
@@ -60,7 +62,7 @@ function takeReading(
 ): Omit<Reading, 'field'> {
   const holder = holderOf(reading.of, nodes);
   const { of, value, unit } = fieldOf(reading.of, holder);
-  const about = { record: holder?.id ?? asWhole, of, file };
+  const about = { record: holder?.id ?? asWhole, of, name: reading.of, file };
   const failed = { stated: null, found: null, agrees: false };
   const taken = typeof content === 'string' ? content : take(content, reading.take, file);
   if (typeof taken === 'string') return { ...about, ...failed, line: null, problem: taken };

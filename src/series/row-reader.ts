@@ -140,8 +140,8 @@ export class RowReader {
     this.refuse(
       count > widest ? `${widest} columns` : `at least ${this.narrowest} columns`,
       String(count),
-      count > widest && this.plan.decimalMark === comma && this.plan.separator === 'comma'
-        ? 'where the comma is the decimal mark, numbers must be quoted or another separator used'
+      count > widest && this.plan.separator === 'comma'
+        ? 'a comma within a value, such as a decimal comma, parts it: quote the value or use another separator'
         : '',
     );
     return false;
@@ -155,6 +155,7 @@ export class RowReader {
     let advice = `if it marks a missing value, say missing: [${Number.isNaN(number) ? `"${shortened(text)}"` : number}]`;
     if (!Number.isNaN(numberOf(text, otherMark)) && Number.isNaN(number))
       advice = `if that is its decimal mark, say decimal: ${otherMark === comma ? 'comma' : 'point'}`;
+    else if (grouped.test(text)) advice = 'write numbers without separators of thousands';
     const expected = this.unit === '' ? what : `${what} in ${this.unit}`;
     this.refuse(expected, quoted(text), advice, this.names[column] ?? null);
   }
@@ -180,6 +181,9 @@ export class RowReader {
     return false;
   }
 }
+
+/** `1,234.5`, `1.234,5`, `1 234`. */
+const grouped = /^[+-]?\d{1,3}(?:[.,' ]\d{3})+(?:[.,]\d*)?$/;
 
 function columnName(reference: string | number): string {
   return typeof reference === 'number' ? `column ${reference}` : reference;

@@ -45,9 +45,10 @@ const faulty: readonly {
     layout: { ...plain, separator: 'semicolon', decimal: 'comma' },
     says: [
       'flow.csv line 2, column flow: expected a number, found "1.5"; if that is its decimal mark, say decimal: point',
-      ...['1.234,5', '******', 'inf', '0x1F', '1e999'].map(
+      'flow.csv line 3, column flow: expected a number, found "1.234,5"; write numbers without separators of thousands',
+      ...['******', 'inf', '0x1F', '1e999'].map(
         (text, index) =>
-          `flow.csv line ${index + 3}, column flow: expected a number, found "${text}"; if it marks a missing value, say missing: ["${text}"]`,
+          `flow.csv line ${index + 4}, column flow: expected a number, found "${text}"; if it marks a missing value, say missing: ["${text}"]`,
       ),
     ],
   },
@@ -110,7 +111,7 @@ const faulty: readonly {
     text: 'date,flow\n2010-01-31,1,5\n2010-02-01\n2010-02-02,2\n',
     layout: { ...plain, decimal: 'comma' },
     says: [
-      'flow.csv line 2: expected 2 columns, found 3; where the comma is the decimal mark, numbers must be quoted or another separator used',
+      'flow.csv line 2: expected 2 columns, found 3; a comma within a value, such as a decimal comma, parts it: quote the value or use another separator',
       'flow.csv line 3: expected at least 2 columns, found 1',
     ],
     rows: ['2010-02-02 2'],

@@ -85,7 +85,9 @@ function faultsOf(file: ProfiledFile, step: Regular): readonly Fault[] {
       ? fault(
           'absent',
           absent,
-          `lacks rows for ${figure(absent.total)} steps of ${name}: ${listAbsent(absent)}`,
+          absent.total === 1
+            ? `lacks the row of ${listAbsent(absent)}`
+            : `lacks rows for ${figure(absent.total)} steps of ${name}: ${listAbsent(absent)}`,
         )
       : []),
   ];

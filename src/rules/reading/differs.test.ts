@@ -24,7 +24,13 @@ ruleCases(readingDiffers, {
     {
       name: 'a parameter',
       set: { 'parameters.values.0.value': 181 },
-      finds: { record: 'parameters', field: 'parameters.values[0].value', stated: 181, found: 180 },
+      finds: {
+        record: 'parameters',
+        field: 'parameters.values[0].value',
+        stated: 181,
+        found: 180,
+        message: 'line 2 says 180; `parameters.soil_capacity` says 181',
+      },
     },
     {
       name: 'a first day',

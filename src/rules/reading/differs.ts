@@ -1,4 +1,3 @@
-import { fieldName } from '../../manifest/manifest.ts';
 import { rule } from '../rule.ts';
 
 export const readingDiffers = rule({
@@ -13,16 +12,14 @@ export const readingDiffers = rule({
   check: (_, { readings }) =>
     readings
       .filter(({ problem, agrees }) => problem === null && !agrees)
-      .map(({ record, of, file, line, stated, found }) => ({
+      .map(({ record, of, name, file, line, stated, found }) => ({
         record,
         field: of,
-        subject: `${fieldName(of)} ${file}`,
+        subject: `${name} ${file}`,
         ...(stated === null ? {} : { stated }),
         ...(found === null ? {} : { found }),
         message: `${file}${line === null ? '' : ` line ${line}`} says ${found}; ${
-          stated === null
-            ? `the record says nothing on \`${fieldName(of)}\``
-            : `\`${fieldName(of)}\` says ${stated}`
+          stated === null ? `the record says nothing on \`${name}\`` : `\`${name}\` says ${stated}`
         }.`,
       })),
 });

@@ -1,4 +1,3 @@
-import { fieldName } from '../../manifest/manifest.ts';
 import { rule } from '../rule.ts';
 
 export const readingNotFound = rule({
@@ -11,14 +10,14 @@ export const readingNotFound = rule({
   source: { basis: 'definition', citation: 'A reading takes one value from one place.' },
   clear: 'Correct `file` or `take` of the reading so that it finds the one value.',
   check: (_, { readings }) =>
-    readings.flatMap(({ record, of, field, file, problem }) =>
+    readings.flatMap(({ record, name, field, file, problem }) =>
       problem === null
         ? []
         : {
             record,
             field,
-            subject: `${fieldName(of)} ${file}`,
-            message: `The reading for \`${fieldName(of)}\` could not be taken: ${problem}.`,
+            subject: `${name} ${file}`,
+            message: `The reading for \`${name}\` could not be taken: ${problem}.`,
           },
     ),
 });
