@@ -95,5 +95,5 @@ function inWords({ statistic, value, score: { row } }: Class): string {
   const asked = { '>': `above ${limit}`, '<=': `at most ${limit}`, '|x| <': `within ${limit} %` }[
     row.reaches
   ];
-  return `${statistic} is ${figure(value)}, satisfactory is ${asked}`;
+  return `${statistic} is ${figure(value)} (satisfactory is ${asked})`;
 }
