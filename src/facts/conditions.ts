@@ -1,8 +1,5 @@
 import { isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
-import {
-  type PercentileEnvelope,
-  percentileEnvelope,
-} from '../hydrology/scenarios/percentile-envelope.ts';
+import { type PercentileEnvelope, percentileEnvelope } from '../hydrology/scenarios/percentile-envelope.ts';
 import type { Condition, Driver } from '../manifest/data.generated.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
@@ -10,7 +7,12 @@ import type { Series } from '../series/series.ts';
 import { sameStep } from '../series/step.ts';
 import { within } from '../series/within.ts';
 import { areaKm2Of, yearBeginsOf } from './catchment.ts';
-import { type ConditionFigures, conditionFigures, conditionVersion, type Making } from './conditions/figures.ts';
+import {
+  type ConditionFigures,
+  conditionFigures,
+  conditionVersion,
+  type Making,
+} from './conditions/figures.ts';
 import { type CaseParameters, caseParameters } from './conditions/parameters.ts';
 import { type JointReach, jointReach, jointVersion, type Reach, reachOf } from './conditions/reach.ts';
 import { type ConditionSource, sourceOf } from './conditions/source.ts';
@@ -61,7 +63,10 @@ export async function scenariosOf(records: Records, snapshot: Snapshot): Promise
   const cases = new Map<string, CaseFigures>();
   for (const node of nodesIn(records.nodes, 'scenarios'))
     cases.set(node.id, await caseFigures(node, conditions, records, snapshot));
-  return { conditions, cases };
+  return {
+    conditions: new Map([...conditions].map(([name, { figures, isHere }]) => [name, { figures, isHere }])),
+    cases,
+  };
 }
 
 /** A quantity with the series that it was made of. */
@@ -139,7 +144,12 @@ async function caseFigures(
     if (isDefined(figures) && isDefined(calibrated.figures)) {
       const sides = { calibrated: calibrated.figures.value, scenario: figures.value };
       const reach = { value: reachOf(sides.calibrated, sides.scenario) };
-      drivers.set(name, { figures, isHere, reach, envelope: await envelopeOf(calibrated, measured, snapshot) });
+      drivers.set(name, {
+        figures,
+        isHere,
+        reach,
+        envelope: await envelopeOf(calibrated, measured, snapshot),
+      });
       if ((condition.by ?? 'year') === 'year') yearly.set(name, sides);
     } else {
       const why = isDefined(figures) ? calibrated.figures : figures;
@@ -169,7 +179,8 @@ async function envelopeOf(
     if (!isDefined(one)) return one;
     const other = await scenario.read();
     if (!isDefined(other)) return other;
-    if (!sameStep(one.value.step, other.value.step)) return undefinedBecause('the two have not one time step');
+    if (!sameStep(one.value.step, other.value.step))
+      return undefinedBecause('the two have not one time step');
     const known = ({ values }: Series) => values.filter((value) => !Number.isNaN(value));
     return percentileEnvelope({ calibration: known(one.value), scenario: known(other.value) });
   });

@@ -70,7 +70,13 @@ import { readingNotFound } from './reading/not-found.ts';
 import type { Rule } from './rule.ts';
 import { thresholdName } from './run.ts';
 import { runsMissing } from './runs/missing.ts';
+import { scenariosBeyondJointly } from './scenarios/beyond-jointly.ts';
+import { scenariosBeyondRange } from './scenarios/beyond-range.ts';
+import { scenariosConditionsDiffer } from './scenarios/conditions-differ.ts';
 import { scenariosConditionsMissing } from './scenarios/conditions-missing.ts';
+import { scenariosForcingUnsourced } from './scenarios/forcing-unsourced.ts';
+import { scenariosNoSplit } from './scenarios/no-split.ts';
+import { scenariosParametersChanged } from './scenarios/parameters-changed.ts';
 import { sealMissing } from './seal/missing.ts';
 import { sealOldScheme } from './seal/old-scheme.ts';
 import { sealOrphan } from './seal/orphan.ts';
@@ -184,6 +190,12 @@ export const rules: readonly Rule[] = [
   uncertaintyBandMissing,
   runsMissing,
   scenariosConditionsMissing,
+  scenariosBeyondRange,
+  scenariosForcingUnsourced,
+  scenariosBeyondJointly,
+  scenariosConditionsDiffer,
+  scenariosParametersChanged,
+  scenariosNoSplit,
 ];
 
 /** Ids that were rules once, with what became of each. They are never used again. */

@@ -1,13 +1,14 @@
 import { dayNumber, formatDate, parseDate } from '../../src/series/calendar.ts';
 
 /**
- * The files that sound.yaml names, by path. Every figure is invented: a shower every fourth day, a temperature that follows the
- * season, and two stores that drain. The flow "observed" is that of the model with other constants, so that it is not the model.
+ * The files that sound.yaml names, by path. Every figure is invented: a shower every fourth day (in the dry scenario somewhat
+ * less, and less from year to year), a temperature that follows the season, and two stores that drain. The flow "observed" is that
+ * of the model with other constants, so that it is not the model.
  */
 export function soundFiles(): Record<string, string> {
-  const now = simulate('2001-10-01', '2010-09-30', 1, 70);
-  const gauge = simulate('2001-10-01', '2010-09-30', 1.04, 64);
-  const dry = simulate('2041-10-01', '2050-09-30', 0.85, 70);
+  const now = simulate('2001-10-01', '2010-09-30', { factor: 1, more: 0 }, 70);
+  const gauge = simulate('2001-10-01', '2010-09-30', { factor: 1.04, more: 0 }, 64);
+  const dry = simulate('2041-10-01', '2050-09-30', { factor: 0.5, more: 5.5 }, 70);
   return {
     'data/rain.csv': table('date,rain_mm', now, ({ rain }) => [rain]),
     'data/check.csv': table('date,rain_mm', now, ({ rain }) => [rain * 0.97]),
@@ -52,14 +53,20 @@ interface Day {
   readonly groundwater: number;
 }
 
-function simulate(first: string, last: string, rainFactor: number, recessionDays: number): readonly Day[] {
+function simulate(
+  first: string,
+  last: string,
+  showers: { readonly factor: number; readonly more: number },
+  recessionDays: number,
+): readonly Day[] {
   const [begin = 0, end = 0] = [first, last].map((date) => parseDate(date) ?? 0);
   let [soil, groundwater] = [120, 60];
   return Array.from({ length: end - begin + 1 }, (_, place) => {
     const day = begin + place;
     const year = Number(formatDate(day).slice(0, 4));
     const season = Math.cos((2 * Math.PI * (day - dayNumber(year, 7, 20))) / 365.25);
-    const rain = place % 4 === 0 ? rainFactor * (5 + ((place * 7) % 11) + ((year * 5) % 4)) : 0;
+    const rain =
+      place % 4 === 0 ? showers.factor * (5 + ((place * 7) % 11) + ((year * 5) % 4)) + showers.more : 0;
     const temperature = 9 + 7 * season;
     const potential = Math.max(0.2, 1.5 + 1.4 * season);
     const evapotranspiration = Math.min(soil * 0.05, potential);

@@ -9,14 +9,12 @@ import { runOf } from '../windows.ts';
 
 /** How the parameters of a scenario's run stand to the calibrated ones. */
 export interface CaseParameters {
-  /** Parameter files that the calibrated run takes and the scenario's does not, from the top of the repository. */
-  readonly leftOut: readonly string[];
-  /** Files that only the scenario's run takes and in which a parameter, or by its name all of them, may stand. */
-  readonly instead: readonly string[];
-  /** Values in those that are not the calibrated ones. */
+  /** Values in files that only the scenario's run takes, where they are not the calibrated ones. */
   readonly differing: readonly ChangedParameter[];
-  /** Parameters of the files left out that stand in none of the others. */
-  readonly untold: readonly string[];
+  /** Parameter files of the calibrated run that the scenario's does not take, and whose values stand in no other file that it takes; from the top of the repository. */
+  readonly leftOut: readonly string[];
+  /** Files called like parameter files that only the scenario's run takes. */
+  readonly instead: readonly string[];
 }
 
 export interface ChangedParameter {
@@ -39,40 +37,39 @@ export async function caseParameters(
   records: Records,
   snapshot: Snapshot,
 ): Promise<CaseParameters> {
-  const none = { leftOut: [], instead: [], differing: [], untold: [] };
+  const none = { differing: [], leftOut: [], instead: [] };
   const run = records.nodes.get(`runs.${fragment.run}`) as RecordNode<'runs'> | undefined;
   const calibrated = calibratedRuns(records).filter(({ id }) => id !== run?.id);
   if (run === undefined || calibrated.length === 0) return none;
   const own = filesTaken(run);
   const theirs = new Set(calibrated.flatMap((one) => [...filesTaken(one)]));
   const readings = parameterReadings(records).filter(({ file }) => theirs.has(file));
-  const known = new Set([
-    ...readings.map(({ file }) => file),
-    ...[...theirs].filter((path) => named.test(basename(path))),
-  ]);
-  const leftOut = [...known].filter((path) => !own.has(path));
   const more = [...own].filter((path) => !theirs.has(path));
   const differing: ChangedParameter[] = [];
-  const untold: string[] = [];
-  const read = new Set<string>();
+  const standsIn = new Map<string, boolean>();
   for (const { name, value, reading, file } of readings) {
-    const found: boolean[] = [];
+    let isFound = false;
     for (const path of more) {
       const content = await snapshot.read(path, largestBytes);
       const taken = content === null ? '' : take(content, reading.take, path);
-      if (typeof taken === 'string') continue;
-      const compared = compare(taken.value, value, { as: reading.as, from: undefined, to: undefined });
-      if (typeof compared === 'string') continue;
-      read.add(path);
-      found.push(true);
-      const { stated } = compared;
-      if (!compared.agrees)
-        differing.push({ name, file: path, line: taken.line, stated, found: compared.found });
+      const compared =
+        typeof taken === 'string'
+          ? ''
+          : compare(taken.value, value, { as: reading.as, from: undefined, to: undefined });
+      if (typeof taken === 'string' || typeof compared === 'string') continue;
+      isFound = true;
+      const { stated, found, agrees } = compared;
+      if (!agrees) differing.push({ name, file: path, line: taken.line, stated, found });
     }
-    if (found.length === 0 && leftOut.includes(file)) untold.push(name);
+    standsIn.set(file, isFound && standsIn.get(file) !== false);
   }
-  const instead = more.filter((path) => read.has(path) || named.test(basename(path)));
-  return { leftOut, instead, differing, untold };
+  const called = (paths: Iterable<string>) => [...paths].filter((path) => named.test(basename(path)));
+  const known = new Set([...standsIn.keys(), ...called(theirs)]);
+  return {
+    differing,
+    leftOut: [...known].filter((path) => !own.has(path) && standsIn.get(path) !== true),
+    instead: called(more),
+  };
 }
 
 /** Runs that a target is evaluated by with the calibrated parameters. */

@@ -68,13 +68,18 @@ export interface JointPoint {
 
 export const jointVersion = 1;
 
-/** Drivers by name, year by year. Undefined with one driver only, and where the joint distance is. */
+/**
+ * Drivers by name, year by year. One that never varied in the calibration has no part: its range alone says whether it is left.
+ * Undefined with fewer than two others, and where the joint distance is.
+ */
 export function jointReach(
-  drivers: ReadonlyMap<
-    string,
-    { readonly calibrated: ConditionFigures; readonly scenario: ConditionFigures }
-  >,
+  all: ReadonlyMap<string, { readonly calibrated: ConditionFigures; readonly scenario: ConditionFigures }>,
 ): Statistic<JointReach> {
+  const drivers = new Map(
+    [...all].filter(
+      ([, { calibrated }]) => !isInside(calibrated.highest, { ...calibrated, highest: calibrated.lowest }),
+    ),
+  );
   if (drivers.size < 2) return undefinedBecause('fewer than two drivers are known year by year');
   const sides = [...drivers.values()];
   const calibrated = yearsOfAll(sides.map((side) => side.calibrated));
