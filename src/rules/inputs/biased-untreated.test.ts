@@ -37,6 +37,28 @@ ruleCases(inputsBiasedUntreated, {
       finds: { subject: 'break', message: 'breaks against inputs.check-gauge: from 2007 on it has 22' },
     },
     {
+      name: 'a break that a factor over all years does not mend',
+      files: {
+        'data/rain.csv': longRecord((year) => (year > 2006 ? 0.85 : 1.1)),
+        'data/check.csv': longRecord(() => 1),
+      },
+      finds: { subject: 'break' },
+    },
+    {
+      name: 'a break of one gauge of a mean',
+      set: {
+        'inputs.rainfall.files': ['data/rain.csv', 'data/second.csv', 'data/third.csv'],
+        'inputs.rainfall.combine': 'mean',
+      },
+      files: {
+        'data/rain.csv': longRecord((year) => (year > 2006 ? 0.8 : 1)),
+        'data/second.csv': longRecord(() => 1.5),
+        'data/third.csv': longRecord(() => 2),
+        'data/check.csv': longRecord(() => 1),
+      },
+      finds: { subject: 'data/rain.csv break', found: -20, message: /^data\/rain\.csv breaks/ },
+    },
+    {
       name: 'the right season in the wrong years',
       remove: untreated,
       files: {
@@ -60,6 +82,18 @@ ruleCases(inputsBiasedUntreated, {
     },
   ],
   silent: [
+    {
+      name: 'a break that a step speaks of',
+      set: {
+        'inputs.rainfall.preparation': [
+          { step: 'totals until 2006 times 0.77', because: 'the gauge was moved' },
+        ],
+      },
+      files: {
+        'data/rain.csv': longRecord((year) => (year > 2006 ? 0.85 : 1.1)),
+        'data/check.csv': longRecord(() => 1),
+      },
+    },
     { name: 'a bias that is treated', files: { 'data/rain.csv': withValues((mm) => mm * 0.8) } },
     {
       name: 'nothing is named to compare with',

@@ -1,6 +1,6 @@
+import type { Held } from '../../facts/profiles/beside-others.ts';
 import type { Comparison } from '../../facts/profiles/comparison.ts';
 import { isDefined } from '../../hydrology/paired.ts';
-import type { Preparation } from '../../manifest/data.generated.ts';
 import { figure } from '../figures.ts';
 import { type Draft, type Limits, rule } from '../rule.ts';
 import { factorTolerance, unitDoubt } from './unit-doubt.ts';
@@ -11,7 +11,7 @@ export const inputsBiasedUntreated = rule({
   from: 'warn',
   means: null,
   statement:
-    'Against its reference the series is biased, has lost the wet and dry years while the season agrees, or breaks in the double-mass curve, and no step of `preparation` speaks of a correction.',
+    'Against its reference the series is biased, has lost the wet and dry years while the season agrees, or breaks in the double-mass curve, and no step of `preparation` answers it.',
   why: 'A model calibrated on rain that is 20 % short makes up for it with wrong evapotranspiration; a product with the right season and the wrong years passes every look at monthly means.',
   source: {
     basis: 'published',
@@ -55,43 +55,49 @@ export const inputsBiasedUntreated = rule({
     },
   },
   check: ({ id, name, field, fragment }, { profiles }, limits) => {
-    if ((fragment.preparation ?? []).some(answers)) return [];
-    return (profiles.get(name ?? '')?.comparisons ?? []).flatMap(
-      ({ file, reference, outcome }): readonly Draft[] => {
-        // One gauge of a mean may differ from the reference by its place.
-        if (file !== null && fragment.combine !== 'each') return [];
-        const about = { record: id, field: [...field, 'compare_with'] };
-        const subject = (fault: string) => (file === null ? fault : `${file} ${fault}`);
-        if (!isDefined(outcome))
-          return [
-            {
-              ...about,
-              subject: subject('comparison'),
-              message: `${file ?? 'The series'} can’t be compared with ${reference}: ${outcome.undefined}.`,
-              clear: 'Name a reference that has values of the same kind over the same time.',
-            },
-          ];
-        return faultsOf(outcome.value, limits).map(({ fault, says, found, unit }) => ({
+    const { comparisons = [] } = profiles.get(name ?? '') ?? {};
+    const steps = (fragment.preparation ?? []).map(({ step = '', because = '' }) => `${step} ${because}`);
+    const isUntreated = ({ answer }: Fault) => !steps.some((step) => answer.test(step));
+    // One gauge of a mean may differ from the reference by its place; it breaks with it only by a fault of its own.
+    const isPart = ({ file }: Held) => file !== null && fragment.combine !== 'each';
+    const breaks = (held: Held) => isDefined(held.outcome) && massBreak(held.outcome.value, limits) !== null;
+    const allBreak = comparisons.filter(isPart).every(breaks);
+    return comparisons.flatMap((held): readonly Draft[] => {
+      const { file, reference, outcome } = held;
+      if (isPart(held) && (allBreak || !breaks(held))) return [];
+      const about = { record: id, field: [...field, 'compare_with'] };
+      const subject = (fault: string) => (file === null ? fault : `${file} ${fault}`);
+      if (!isDefined(outcome))
+        return [
+          {
+            ...about,
+            subject: subject('comparison'),
+            message: `${file ?? 'The series'} can’t be compared with ${reference}: ${outcome.undefined}.`,
+            clear: 'Name a reference that has values of the same kind over the same time.',
+          },
+        ];
+      const faults = faultsOf(outcome.value, limits).filter(isUntreated);
+      return faults
+        .filter(({ fault }) => fault === 'break' || !isPart(held))
+        .map(({ fault, says, found, unit }) => ({
           ...about,
           subject: subject(fault),
           found,
           unit,
-          message: `${file ?? 'The series'} ${says(reference)}, and no step of preparation speaks of a correction.`,
+          message: `${file ?? 'The series'} ${says(reference)}, and no step of preparation answers it.`,
         }));
-      },
-    );
+    });
   },
 });
 
-/** Words of a step that treats a bias or a break. */
-const treats = /bias|correct|adjust|\b(?:re)?scal|homogen|undercatch|quantile|double.mass|multipl|factor/i;
-
-function answers({ step = '', because = '' }: Preparation): boolean {
-  return treats.test(`${step} ${because}`);
-}
+/** Words of a step that treats a bias. */
+const treatsBias =
+  /bias|correct|adjust|\b(?:re)?scal|homogen|undercatch|quantile|double.mass|multipl|factor/i;
 
 interface Fault {
-  readonly fault: string;
+  readonly fault: 'bias' | 'years' | 'break';
+  /** What a step of preparation says that answers it. */
+  readonly answer: RegExp;
   says(reference: string): string;
   readonly found: number;
   readonly unit: string;
@@ -113,6 +119,7 @@ function bias({ biasPercent, years }: Comparison, { annual_bias_percent: most = 
   const { value } = biasPercent;
   return {
     fault: 'bias',
+    answer: treatsBias,
     found: Number(value.toPrecision(3)),
     unit: '%',
     says: (reference) =>
@@ -137,6 +144,7 @@ function wrongYears(
   const [found] = [anomaly, annual].filter(isDefined);
   return {
     fault: 'years',
+    answer: treatsBias,
     found: Number((found?.value ?? 0).toPrecision(3)),
     unit: '1',
     says: (reference) =>
@@ -153,6 +161,8 @@ function massBreak({ doubleMass, years }: Comparison, limits: Limits): Fault | n
   if (!isLong || change.p > chance || Math.abs(percent) < most) return null;
   return {
     fault: 'break',
+    // A factor over all years mends no break: the step speaks of it, or of the year.
+    answer: new RegExp(`homogen|double.mass|\\bbreak|${change.lastBefore}|${change.firstAfter}`, 'i'),
     found: Number(percent.toPrecision(3)),
     unit: '%',
     says: (reference) =>

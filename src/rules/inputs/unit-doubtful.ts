@@ -62,10 +62,13 @@ function againstReference({ comparisons }: InputProfile, limits: Limits): readon
     const doubt = isDefined(outcome) ? unitDoubt(outcome.value, limits) : null;
     if (doubt === null) return [];
     const times = figure(doubt.tooLarge ? doubt.ratio : 1 / doubt.ratio);
+    const says = doubt.tooLarge
+      ? `${file ?? 'The series'} holds ${times} times what ${reference} holds`
+      : `${reference} holds ${times} times what ${file ?? 'the series'} holds`;
     return [
       {
         ...(file === null ? {} : { subject: file }),
-        message: `${file ?? 'The series'} is ${times} times as ${doubt.tooLarge ? 'large' : 'small'} as ${reference} over the same time; ${doubt.near.factor} lies between ${doubt.near.between}.`,
+        message: `${says} over the same time; ${doubt.near.factor} lies between ${doubt.near.between}.`,
       },
     ];
   });
