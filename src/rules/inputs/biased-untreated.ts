@@ -11,7 +11,7 @@ export const inputsBiasedUntreated = rule({
   from: 'warn',
   means: null,
   statement:
-    'Against its reference the series is biased, has lost the wet and dry years while the season agrees, or breaks in the double-mass curve, and no step of `preparation` answers it.',
+    'Against its reference the series is biased, has lost the wet and dry years while the season agrees, or breaks in the double-mass curve, and no step of `preparation` speaks of a correction.',
   why: 'A model calibrated on rain that is 20 % short makes up for it with wrong evapotranspiration; a product with the right season and the wrong years passes every look at monthly means.',
   source: {
     basis: 'published',
@@ -57,35 +57,34 @@ export const inputsBiasedUntreated = rule({
   check: ({ id, name, field, fragment }, { profiles }, limits) => {
     const { comparisons = [] } = profiles.get(name ?? '') ?? {};
     const steps = (fragment.preparation ?? []).map(({ step = '', because = '' }) => `${step} ${because}`);
-    const isUntreated = ({ answer }: Fault) => !steps.some((step) => answer.test(step));
     // One gauge of a mean may differ from the reference by its place; it breaks with it only by a fault of its own.
     const isPart = ({ file }: Held) => file !== null && fragment.combine !== 'each';
-    const breaks = (held: Held) => isDefined(held.outcome) && massBreak(held.outcome.value, limits) !== null;
+    const breaks = ({ outcome }: Held) => isDefined(outcome) && massBreak(outcome.value, limits) !== null;
     const allBreak = comparisons.filter(isPart).every(breaks);
     return comparisons.flatMap((held): readonly Draft[] => {
       const { file, reference, outcome } = held;
-      if (isPart(held) && (allBreak || !breaks(held))) return [];
       const about = { record: id, field: [...field, 'compare_with'] };
       const subject = (fault: string) => (file === null ? fault : `${file} ${fault}`);
-      if (!isDefined(outcome))
-        return [
-          {
+      if (isDefined(outcome))
+        return faultsOf(outcome.value, limits)
+          .filter(({ fault }) => !isPart(held) || (fault === 'break' && !allBreak))
+          .filter(({ answer }) => !steps.some((step) => answer.test(step)))
+          .map(({ fault, says, found, unit }) => ({
             ...about,
-            subject: subject('comparison'),
-            message: `${file ?? 'The series'} can’t be compared with ${reference}: ${outcome.undefined}.`,
-            clear: 'Name a reference that has values of the same kind over the same time.',
-          },
-        ];
-      const faults = faultsOf(outcome.value, limits).filter(isUntreated);
-      return faults
-        .filter(({ fault }) => fault === 'break' || !isPart(held))
-        .map(({ fault, says, found, unit }) => ({
+            subject: subject(fault),
+            found,
+            unit,
+            message: `${file ?? 'The series'} ${says(reference)}, and no step of preparation answers it.`,
+          }));
+      if (isPart(held)) return [];
+      return [
+        {
           ...about,
-          subject: subject(fault),
-          found,
-          unit,
-          message: `${file ?? 'The series'} ${says(reference)}, and no step of preparation answers it.`,
-        }));
+          subject: subject('comparison'),
+          message: `${file ?? 'The series'} can’t be compared with ${reference}: ${outcome.undefined}.`,
+          clear: 'Name a reference that has values of the same kind over the same time.',
+        },
+      ];
     });
   },
 });
