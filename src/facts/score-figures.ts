@@ -33,7 +33,9 @@ function figuresOver(
   return [...stated.filter(({ agrees }) => !agrees), ...missing].flatMap(({ score, printed }) => {
     const found = recomputedScore(figures.recomputed, window, score);
     if (!isDefined(found)) return [];
-    const decimals = Math.min(100, Math.max(0, printed?.decimals ?? usualDecimals));
+    // One decimal would make an NSE of 0.97 perfect.
+    const fewest = Math.abs(found.value) < 2 ? usualDecimals : 0;
+    const decimals = Math.min(100, Math.max(fewest, printed?.decimals ?? usualDecimals));
     return {
       record: id,
       field: [...field, 'scores', window, score],
