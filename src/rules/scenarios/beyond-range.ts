@@ -62,7 +62,7 @@ function judge(
     isAnnualRain(name, record, facts);
   if (mean === null && !isRainBeyond && outside.length === 0) return [];
   const { unit: stated, by = 'year' } = facts.manifest.data.scenarios?.conditions?.[name] ?? {};
-  const unit = stated === undefined ? '' : ` ${stated}`;
+  const unit = stated === undefined || stated === '1' ? '' : ` ${stated}`;
   const what = name.replaceAll('_', ' ');
   const { lowest, highest } = calibrated.value;
   const range = `${figure(lowest)} to ${figure(highest)}${unit}`;

@@ -4,37 +4,44 @@ import { scenariosConditionsMissing } from './conditions-missing.ts';
 ruleCases(scenariosConditionsMissing, {
   fires: [
     {
-      name: 'a driver without its condition',
+      name: 'a driver without a condition',
       remove: ['scenarios.conditions.annual_rainfall'],
       finds: {
         record: 'scenarios.dry',
-        field: 'scenarios.cases.dry.drivers.annual_rainfall',
-        subject: 'annual_rainfall',
         level: 'block',
-        message: 'by annual rainfall',
+        subject: 'annual_rainfall',
+        message: 'the range of it during calibration is not stated',
       },
     },
     {
-      name: 'a condition that no file gives',
-      remove: ['scenarios.conditions.annual_rainfall.input'],
-      finds: { subject: 'annual_rainfall' },
-    },
-    {
-      name: 'no conditions at all',
-      remove: ['scenarios.conditions'],
-      finds: [{ subject: 'annual_rainfall' }, { subject: 'summer_evapotranspiration' }],
-    },
-    {
-      name: 'no drivers',
+      name: 'a scenario without drivers',
       remove: ['scenarios.cases.dry.drivers'],
-      finds: { field: 'scenarios.cases.dry.drivers', message: 'names no driver' },
+      finds: { record: 'scenarios.dry', message: 'names no driver' },
     },
     {
-      name: 'only noted at validation',
-      remove: ['scenarios.conditions.annual_rainfall'],
-      phase: 'validation',
-      finds: { level: 'note' },
+      name: 'a column that the run does not give',
+      set: { 'scenarios.conditions.summer_evapotranspiration.values': 'pet' },
+      finds: {
+        field: 'scenarios.conditions.summer_evapotranspiration',
+        subject: 'condition summer_evapotranspiration',
+        message: 'a column named "pet"',
+      },
+    },
+    {
+      name: 'a unit of something else',
+      set: { 'scenarios.conditions.annual_rainfall.unit': 'degC' },
+      finds: [{ subject: 'condition annual_rainfall' }, { subject: 'driver annual_rainfall' }],
+    },
+    {
+      name: 'a window too short for a whole year',
+      set: { 'scenarios.cases.dry.drivers.annual_rainfall.over': '2044-01-01/2044-12-31' },
+      finds: { subject: 'driver annual_rainfall', message: 'no year of the window is there as a whole' },
     },
   ],
-  silent: [{ name: 'no scenarios', remove: ['scenarios'] }],
+  silent: [
+    {
+      name: 'seasons that go over the turn of the year',
+      set: { 'scenarios.conditions.summer_evapotranspiration.months': [11, 2] },
+    },
+  ],
 });
