@@ -1,5 +1,5 @@
 import { defined, type Statistic, undefinedBecause } from '../paired.ts';
-import { type UnitFactor, unitFactors } from './unit-factor.ts';
+import { depthFactors, type UnitFactor } from './unit-factor.ts';
 
 /** Mean annual depths in mm between which places where people gauge water lie; the ends are our choice, from memory. */
 const usualMm = {
@@ -22,7 +22,7 @@ export interface AnnualPlausibility {
  * Read: 41 mm a year of evapotranspiration may be inches; without a reference series this is all that a total can tell.
  * Undefined: a depth that is no finite number, or is negative.
  * Source: our choice; wettest mean annual rainfall about 11 900 mm (Mawsynram, from memory).
- * Example: annualPlausibility({role: 'precipitation', annualMm: 1.1}) -> {value: {plausible: false, factors: [{factor: 25.4}, {factor: 35.3147}, {factor: 86.4}, {factor: 1000}, {factor: 3600}]}}
+ * Example: annualPlausibility({role: 'precipitation', annualMm: 1.1}) -> {value: {plausible: false, factors: [{factor: 25.4}, {factor: 1000}, {factor: 3600}]}}
  */
 export function annualPlausibility(of: {
   readonly role: keyof typeof usualMm;
@@ -34,5 +34,5 @@ export function annualPlausibility(of: {
   const usual = (depth: number) => depth >= lowest && depth <= highest;
   const plausible = usual(of.annualMm);
   const brings = ({ factor }: UnitFactor) => usual(of.annualMm * factor) || usual(of.annualMm / factor);
-  return defined({ plausible, factors: plausible ? [] : unitFactors.filter(brings) });
+  return defined({ plausible, factors: plausible ? [] : depthFactors.filter(brings) });
 }

@@ -7,7 +7,7 @@ import { longestDrySpells } from './longest-dry-spells.ts';
 import { monthlyAnomalyCorrelation } from './monthly-anomaly-correlation.ts';
 import { rainfallBound } from './rainfall-bound.ts';
 import { stuckRuns } from './stuck-runs.ts';
-import { unitFactor, unitFactors } from './unit-factor.ts';
+import { depthFactors, unitFactor, unitFactors } from './unit-factor.ts';
 
 /** Invented rain: storms of two to four days and dry days between. */
 const rain = Array.from({ length: 400 }, (_, day) =>
@@ -49,6 +49,15 @@ describe('units mistaken', () => {
         value: { near: null },
       });
     expect(isDefined(unitFactor({ total: 0, referenceTotal: 1000, toleranceShare: 0.2 }))).toBe(false);
+  });
+
+  it('of rain, never between volumes', () => {
+    // A gauge in inches that has a quarter more rain than its neighbour: 1.25 * 25.4 = 31.75, nearer to 35.3.
+    const totals = { total: 31_750, referenceTotal: 1000, toleranceShare: 0.35 };
+    expect(unitFactor(totals)).toMatchObject({ value: { near: { factor: 35.3147 } } });
+    expect(unitFactor({ ...totals, among: depthFactors })).toMatchObject({
+      value: { near: { factor: 25.4 } },
+    });
   });
 });
 

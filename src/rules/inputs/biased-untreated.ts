@@ -1,6 +1,7 @@
 import type { Held } from '../../facts/profiles/beside-others.ts';
 import type { Comparison } from '../../facts/profiles/comparison.ts';
 import { isDefined } from '../../hydrology/paired.ts';
+import type { Input } from '../../manifest/data.generated.ts';
 import { figure } from '../figures.ts';
 import { type Draft, type Limits, rule } from '../rule.ts';
 import { factorTolerance, unitDoubt } from './unit-doubt.ts';
@@ -66,7 +67,7 @@ export const inputsBiasedUntreated = rule({
       const about = { record: id, field: [...field, 'compare_with'] };
       const subject = (fault: string) => (file === null ? fault : `${file} ${fault}`);
       if (isDefined(outcome))
-        return faultsOf(outcome.value, limits)
+        return faultsOf(outcome.value, fragment.role, limits)
           .filter(({ fault }) => !isPart(held) || (fault === 'break' && !allBreak))
           .filter(({ answer }) => !steps.some((step) => answer.test(step)))
           .map(({ fault, says, found, unit }) => ({
@@ -105,9 +106,9 @@ interface Fault {
 /** Fewer years tell neither a lost correlation nor a break from chance (Searcy & Hardison; from memory). */
 const fewestYears = 5;
 
-function faultsOf(comparison: Comparison, limits: Limits): readonly Fault[] {
+function faultsOf(comparison: Comparison, role: Input['role'], limits: Limits): readonly Fault[] {
   // Another unit is no bias.
-  const faults = unitDoubt(comparison, limits) === null ? [bias(comparison, limits)] : [];
+  const faults = unitDoubt(comparison, role, limits) === null ? [bias(comparison, limits)] : [];
   return [...faults, wrongYears(comparison, limits), massBreak(comparison, limits)].filter(
     (fault) => fault !== null,
   );

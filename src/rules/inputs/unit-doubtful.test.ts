@@ -67,6 +67,24 @@ ruleCases(inputsUnitDoubtful, {
       files: { 'data/temperature.csv': withValues((degC) => degC * 1.8 + 32) },
       finds: { record: 'inputs.temperature', stated: 'degC' },
     },
+    {
+      name: 'degrees Celsius that are said to be kelvin',
+      set: { 'inputs.temperature.series.unit': 'K' },
+      finds: { record: 'inputs.temperature', message: 'so cold. Kelvin' },
+    },
+    {
+      name: 'inches read twice in one gauge that has a quarter more rain',
+      set: {
+        'inputs.rainfall.files': ['data/rain.csv', 'data/second.csv', 'data/third.csv'],
+        'inputs.rainfall.combine': 'mean',
+      },
+      files: {
+        'data/rain.csv': withValues((mm) => mm * 1.25 * 25.4),
+        'data/second.csv': soundFiles()['data/rain.csv'] ?? '',
+        'data/third.csv': soundFiles()['data/rain.csv'] ?? '',
+      },
+      finds: { message: 'between inches and millimetres' },
+    },
   ],
   silent: [
     { name: 'a wet gauge', files: { 'data/rain.csv': withValues((mm) => mm * 3) } },

@@ -49,7 +49,7 @@ export const inputsUnitDoubtful = rule({
       field: [...field, 'series', 'unit'],
       ...(unit === undefined ? {} : { stated: unit }),
     };
-    const offReference = againstReference(profile, limits);
+    const offReference = againstReference(profile, fragment.role, limits);
     const doubts = offReference.length > 0 ? offReference : alone(profile, fragment, facts, limits);
     return doubts.map((doubt): Draft => ({ ...about, ...doubt }));
   },
@@ -57,9 +57,13 @@ export const inputsUnitDoubtful = rule({
 
 type Doubt = Pick<Draft, 'message' | 'subject' | 'found'>;
 
-function againstReference({ comparisons }: InputProfile, limits: Limits): readonly Doubt[] {
+function againstReference(
+  { comparisons }: InputProfile,
+  role: Input['role'],
+  limits: Limits,
+): readonly Doubt[] {
   return togetherOrAlone(comparisons, ({ file, reference, outcome }) => {
-    const doubt = isDefined(outcome) ? unitDoubt(outcome.value, limits) : null;
+    const doubt = isDefined(outcome) ? unitDoubt(outcome.value, role, limits) : null;
     if (doubt === null) return [];
     const times = figure(doubt.tooLarge ? doubt.ratio : 1 / doubt.ratio);
     const says = doubt.tooLarge
@@ -150,7 +154,7 @@ function beyondAir({ files }: InputProfile, unit: string): readonly Doubt[] {
       return [
         {
           found: beyond.value,
-          message: `${path} has ${beyond.value} ${unit} on ${beyond.time} (line ${beyond.line}); no air was ever measured so ${beyond === highest ? 'hot' : 'cold'}. Kelvin or degrees Fahrenheit may be meant.`,
+          message: `${path} has ${beyond.value} ${unit} on ${beyond.time} (line ${beyond.line}); no air was ever measured so ${beyond.value * factor + offset > airDegC.highest ? 'hot' : 'cold'}. Kelvin or degrees Fahrenheit may be meant.`,
         },
       ];
     }
