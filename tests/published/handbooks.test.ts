@@ -68,7 +68,7 @@ describe('curve numbers: TR-55 (1986), Table 2-2, pp. 2-5 to 2-7 (pages from mem
   });
 
   it('every relation that is enforced holds for every two published rows', () => {
-    let relations = 0;
+    const met = new Set<string>();
     for (const low of curveNumbers)
       for (const high of curveNumbers)
         for (const soilGroup of soilGroups) {
@@ -78,13 +78,13 @@ describe('curve numbers: TR-55 (1986), Table 2-2, pp. 2-5 to 2-7 (pages from mem
             { class: high.class, soilGroup },
           );
           if (order === null) continue;
-          relations++;
+          met.add(order.states);
           const [less, more] = [low.numbers[soilGroup], high.numbers[soilGroup]];
           const about = `${low.class} ${less}, ${high.class} ${more}, group ${soilGroup}: ${order.states}`;
           if (order.orEqual) expect(less, about).toBeLessThanOrEqual(more);
           else expect(less, about).toBeLessThan(more);
         }
-    expect(relations).toBeGreaterThan(1000);
+    expect(met.size, 'relations between classes').toBe(7);
   });
 
   it.each([
