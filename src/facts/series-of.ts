@@ -63,9 +63,34 @@ function letGo(tables: Map<string, Held>): void {
 
 /** What of a manifest's fragment says how a file is read; for keys of what was computed from it. */
 export function layoutOf(fragment: SeriesLayout): SeriesLayout {
-  const { time, values, separator, decimal, skip_lines, header, comment, missing, unit, step, utc_offset } =
-    fragment;
-  return { time, values, separator, decimal, skip_lines, header, comment, missing, unit, step, utc_offset };
+  const {
+    time,
+    values,
+    separator,
+    widths,
+    decimal,
+    skip_lines,
+    header,
+    comment,
+    missing,
+    unit,
+    step,
+    utc_offset,
+  } = fragment;
+  return {
+    time,
+    values,
+    separator,
+    widths,
+    decimal,
+    skip_lines,
+    header,
+    comment,
+    missing,
+    unit,
+    step,
+    utc_offset,
+  };
 }
 
 /** The data files of an input, in order of path. */

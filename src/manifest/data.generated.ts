@@ -392,6 +392,12 @@ export interface Layout {
    */
   separator?: ("comma" | "semicolon" | "tab" | "blank")
   /**
+   * Widths of the columns in characters, from the start of each line, where a file has fixed columns and nothing between them; `separator` then does not count. Blanks around a value don't either. Unit: characters.
+   * 
+   * @minItems 1
+   */
+  widths?: [number, ...(number)[]]
+  /**
    * The decimal sign.
    */
   decimal?: ("point" | "comma")
@@ -437,6 +443,12 @@ export interface SeriesColumns {
    * What stands between columns; `blank` is any run of blanks and tabs.
    */
   separator?: ("comma" | "semicolon" | "tab" | "blank")
+  /**
+   * Widths of the columns in characters, from the start of each line, where a file has fixed columns and nothing between them; `separator` then does not count. Blanks around a value don't either. Unit: characters.
+   * 
+   * @minItems 1
+   */
+  widths?: [number, ...(number)[]]
   /**
    * The decimal sign.
    */
@@ -1520,6 +1532,12 @@ export interface Stores {
    */
   separator?: ("comma" | "semicolon" | "tab" | "blank")
   /**
+   * Widths of the columns in characters, from the start of each line, where a file has fixed columns and nothing between them; `separator` then does not count. Blanks around a value don't either. Unit: characters.
+   * 
+   * @minItems 1
+   */
+  widths?: [number, ...(number)[]]
+  /**
    * The decimal sign.
    */
   decimal?: ("point" | "comma")
@@ -1644,6 +1662,12 @@ export interface Simulated {
    * What stands between columns; `blank` is any run of blanks and tabs.
    */
   separator?: ("comma" | "semicolon" | "tab" | "blank")
+  /**
+   * Widths of the columns in characters, from the start of each line, where a file has fixed columns and nothing between them; `separator` then does not count. Blanks around a value don't either. Unit: characters.
+   * 
+   * @minItems 1
+   */
+  widths?: [number, ...(number)[]]
   /**
    * The decimal sign.
    */
@@ -1945,6 +1969,12 @@ export interface BalanceVolume {
    */
   separator?: ("comma" | "semicolon" | "tab" | "blank")
   /**
+   * Widths of the columns in characters, from the start of each line, where a file has fixed columns and nothing between them; `separator` then does not count. Blanks around a value don't either. Unit: characters.
+   * 
+   * @minItems 1
+   */
+  widths?: [number, ...(number)[]]
+  /**
    * The decimal sign.
    */
   decimal?: ("point" | "comma")
@@ -2201,6 +2231,12 @@ export interface Band {
    */
   separator?: ("comma" | "semicolon" | "tab" | "blank")
   /**
+   * Widths of the columns in characters, from the start of each line, where a file has fixed columns and nothing between them; `separator` then does not count. Blanks around a value don't either. Unit: characters.
+   * 
+   * @minItems 1
+   */
+  widths?: [number, ...(number)[]]
+  /**
    * The decimal sign.
    */
   decimal?: ("point" | "comma")
@@ -2319,6 +2355,12 @@ export interface Condition {
    */
   separator?: ("comma" | "semicolon" | "tab" | "blank")
   /**
+   * Widths of the columns in characters, from the start of each line, where a file has fixed columns and nothing between them; `separator` then does not count. Blanks around a value don't either. Unit: characters.
+   * 
+   * @minItems 1
+   */
+  widths?: [number, ...(number)[]]
+  /**
    * The decimal sign.
    */
   decimal?: ("point" | "comma")
@@ -2400,6 +2442,12 @@ export interface Driver {
    * What stands between columns; `blank` is any run of blanks and tabs.
    */
   separator?: ("comma" | "semicolon" | "tab" | "blank")
+  /**
+   * Widths of the columns in characters, from the start of each line, where a file has fixed columns and nothing between them; `separator` then does not count. Blanks around a value don't either. Unit: characters.
+   * 
+   * @minItems 1
+   */
+  widths?: [number, ...(number)[]]
   /**
    * The decimal sign.
    */

@@ -28,6 +28,8 @@ export interface SeriesLayout {
   readonly values?: ColumnReference | readonly ColumnReference[] | undefined;
   /** `comma` unless stated; `blank` stands for runs of blanks and tabs. */
   readonly separator?: 'comma' | 'semicolon' | 'tab' | 'blank' | undefined;
+  /** Of the columns, in characters from the start of each line, where they are fixed and nothing stands between them. */
+  readonly widths?: readonly number[] | undefined;
   /** `point` unless stated. */
   readonly decimal?: 'point' | 'comma' | undefined;
   /** Lines before the header (or before the first row) that are no table. */

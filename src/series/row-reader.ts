@@ -28,7 +28,7 @@ export class RowReader {
 
   constructor(plan: Plan, layout: SeriesLayout) {
     this.plan = plan;
-    this.rows = new Rows(plan.separator, layout.comment);
+    this.rows = new Rows(plan.separator, layout.comment, layout.widths);
     this.unit = layout.unit ?? '';
     this.table = new TableBuilder(plan.values.length);
     this.values = new Float64Array(plan.values.length);

@@ -13,7 +13,8 @@ export const longestRow = 1 << 20;
 
 /**
  * Splits bytes into rows and fields without making strings of them. Fields may be quoted as in RFC 4180, with separators, line
- * ends and doubled quotation marks inside; blanks around fields do not count; lines end with LF, CRLF or CR.
+ * ends and doubled quotation marks inside; blanks around fields do not count; lines end with LF, CRLF or CR. With `widths` fields
+ * are cut at fixed places instead, and what stands beyond the last is one more.
  * Blank lines, and those that begin with the comment character, are passed over but counted.
  */
 export class Rows {
@@ -42,8 +43,14 @@ export class Rows {
   /** The blank that is no separator and is trimmed; in tab-separated files a tab separates. */
   private readonly trimsTab: boolean;
   private readonly comment: number;
+  private readonly widths: readonly number[] | undefined;
 
-  constructor(separator: 'comma' | 'semicolon' | 'tab' | 'blank', comment: string | undefined) {
+  constructor(
+    separator: 'comma' | 'semicolon' | 'tab' | 'blank',
+    comment: string | undefined,
+    widths?: readonly number[],
+  ) {
+    this.widths = widths;
     this.byBlanks = separator === 'blank';
     this.trimsTab = separator !== 'tab';
     this.comment = comment === undefined ? -1 : comment.charCodeAt(0);
@@ -106,7 +113,8 @@ export class Rows {
       const begins = this.skipBlanks(this.position);
       if (begins === this.bytes.length) return false;
       const byte = this.bytes[begins];
-      if (byte !== this.comment && byte !== lineFeed && byte !== carriageReturn) return this.split();
+      if (byte !== this.comment && byte !== lineFeed && byte !== carriageReturn)
+        return this.widths === undefined ? this.split() : this.cut(this.widths);
       if (!this.skipLine()) return false;
     }
   }
@@ -164,6 +172,38 @@ export class Rows {
       // After blanks the next field has begun.
       if (byBlanks) at--;
     }
+  }
+
+  /** Cuts the line at fixed places, counted in characters; a line that ends early has empty fields. */
+  private cut(widths: readonly number[]): boolean {
+    const { bytes, kinds, position } = this;
+    let end = position;
+    while (end < bytes.length && kinds[bytes[end] as number] !== lineEnding) end++;
+    this.torn = false;
+    this.count = 0;
+    let at = position;
+    for (const width of widths) {
+      const begins = at;
+      for (let left = width; left > 0 && at < end; left--) {
+        at++;
+        // The further bytes of one character in UTF-8.
+        while (at < end && ((bytes[at] as number) & 0xc0) === 0x80) at++;
+      }
+      this.field(begins, at);
+    }
+    if (this.skipBlanks(at) < end) this.field(at, end);
+    this.line = this.nextLine;
+    return this.endLine(end);
+  }
+
+  /** Adds a field, without the blanks around it. */
+  private field(from: number, to: number): void {
+    if (this.count === this.starts.length) this.widen();
+    const begins = Math.min(this.skipBlanks(from), to);
+    let stops = to;
+    while (stops > begins && (this.bytes[stops - 1] as number) <= space) stops--;
+    this.starts[this.count] = begins;
+    this.ends[this.count++] = stops;
   }
 
   /** The place after the quotation mark that closes the field begun at `from`; the end where it is not here yet. */
