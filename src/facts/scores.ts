@@ -1,5 +1,5 @@
 import { isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
-import { scores as known } from '../hydrology/scores.ts';
+import { scores as statistics } from '../hydrology/scores.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { nodesIn } from './nodes-in.ts';
@@ -37,7 +37,7 @@ export interface ComparedScore extends StatedScore {
   readonly causes: readonly Cause[];
 }
 
-const names: ReadonlySet<string> = new Set([...Object.keys(known), 'peaks_hit']);
+const known: ReadonlySet<string> = new Set([...Object.keys(statistics), 'peaks_hit']);
 
 /** By the name of the target: its figures. Those of unchanged files and windows are remembered; only files of others are read. */
 export async function scoresOf(
@@ -58,19 +58,20 @@ async function figuresOf(
   snapshot: Snapshot,
 ): Promise<TargetFigures> {
   const { manifest } = records;
-  const inTable = await scoresInTable(target, names, manifest, snapshot);
+  const inTable = await scoresInTable(target, known, manifest, snapshot);
   const stated = [...scoresInManifest(target, manifest), ...inTable.stated];
-  const subject = await subjectOf(target, records, snapshot);
+  const names = stated.map(({ score }) => score);
+  const subject = await subjectOf(target, names, records, snapshot);
   const { unread } = inTable;
   const of = { record: target.id, unread };
   if ('undefined' in subject) {
     const failed = stated.map((score) => ({ ...score, recomputed: subject, agrees: false, causes: [] }));
     return { ...of, recomputed: subject, isHere: !subject.isAway, stated: failed };
   }
-  const { basis, pairable, peaks } = subject.value;
+  const { basis, pairable, asked } = subject.value;
   const recomputed = await remembered(snapshot, basis, async () => {
     const read = await pairable();
-    return isDefined(read) ? recompute(read.value, peaks) : read;
+    return isDefined(read) ? recompute(read.value, asked) : read;
   });
   const compared = stated.map((score) => {
     const figure = recomputedScore(recomputed, score.window, score.score);
@@ -108,7 +109,7 @@ export function recomputedScore(
   if (!isDefined(recomputed)) return recomputed;
   const figures = recomputed.value.windows[window] ?? undefinedBecause(`no ${window} window is stated`);
   if (!isDefined(figures)) return figures;
-  if (score !== 'peaks_hit') return figures.value.scores[score];
+  if (score !== 'peaks_hit') return figures.value.scores[score] ?? undefinedBecause('nobody asks for it');
   const { peaks } = figures.value;
   if (!isDefined(peaks)) return peaks;
   if (!peaks.value.stated) return undefinedBecause('nothing says what counts as a peak (`peaks.above`)');

@@ -34,9 +34,11 @@ function expectScores(figures: TargetFigures, window: ScoredWindow, pairs: reado
   const found = over(figures, window);
   expect(found.pairs).toBe(pairs.length);
   const { rsrOfSample: _, ...plain } = plainScores(pairs);
-  for (const [name, value] of Object.entries(plain)) {
-    const score = found.scores[name as keyof typeof plain];
-    expect.soft(isDefined(score) ? score.value : score, name).toBeCloseTo(value, 9);
+  const names = Object.keys(found.scores) as (keyof typeof plain)[];
+  expect(names).toEqual(expect.arrayContaining(['nse', 'log_nse', 'rsr', 'pbias', 'r2', 'kge']));
+  for (const name of names) {
+    const score = found.scores[name];
+    expect.soft(score && isDefined(score) ? score.value : score, name).toBeCloseTo(plain[name], 9);
   }
 }
 
@@ -45,6 +47,13 @@ const scoresField = 'evaluation.outlet-flow.scores';
 describe('scores from the files', () => {
   it.each(['calibration', 'validation'] as const)('over %s are those of plain formulas', async (window) => {
     expectScores(await target(), window, pairsIn(observed, simulated, [windows[window]]));
+  });
+
+  it('are those that are stated, besides the usual ones', async () => {
+    const stated = { r: 0.1, rmse: 0.1, mae: 0.1, alpha: 0.1, beta: 0.1 };
+    const figures = await target({ set: { [`${scoresField}.calibration`]: stated } });
+    expect(Object.keys(over(figures, 'calibration').scores)).toHaveLength(6 + 5);
+    expectScores(figures, 'calibration', pairsIn(observed, simulated, [windows.calibration]));
   });
 
   it('agree with what the sound study states', async () => {

@@ -5,7 +5,7 @@ import { formatStep } from '../../series/step.ts';
 import { comparable, type Sides } from './comparable.ts';
 import { daysOf, type Pairable } from './pairings.ts';
 import type { ScoredWindow } from './stated.ts';
-import { type PeakSettings, type WindowFigures, windowFigures } from './window-figures.ts';
+import { type Asked, type WindowFigures, windowFigures } from './window-figures.ts';
 
 /** What two series give. */
 export interface RecomputedFigures {
@@ -18,8 +18,8 @@ export interface RecomputedFigures {
   readonly windows: Readonly<Partial<Record<ScoredWindow, Statistic<WindowFigures>>>>;
 }
 
-/** Every figure of the windows that are stated. Undefined where the series can't be brought together. */
-export function recompute(pairable: Pairable, peaks: PeakSettings | undefined): Statistic<RecomputedFigures> {
+/** The figures that are asked for, of the windows that are stated. Undefined where the series can't be brought together. */
+export function recompute(pairable: Pairable, asked: Asked): Statistic<RecomputedFigures> {
   const { comparison, windows } = pairable;
   const brought = comparable(pairable.sides, comparison);
   if (!isDefined(brought)) return brought;
@@ -32,7 +32,7 @@ export function recompute(pairable: Pairable, peaks: PeakSettings | undefined): 
     const paired = pairByDate({ observed, simulated, windows: daysOf(windows, window), leftOut, yearBegins });
     if (!isDefined(paired)) return { [window]: paired };
     const periods = stated.map(({ period: { first, last } }) => `${first}/${last}`);
-    return { [window]: { value: windowFigures(paired.value, periods, simulated.step, peaks) } };
+    return { [window]: { value: windowFigures(paired.value, periods, simulated.step, asked) } };
   };
   return {
     value: {

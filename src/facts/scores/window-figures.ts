@@ -18,8 +18,8 @@ export interface WindowFigures {
   readonly pairs: number;
   /** Steps that the windows would hold if nothing were missing; for samples, those that there are. */
   readonly windowSteps: number;
-  readonly dropped: Dropped;
-  readonly scores: Readonly<Record<ScoreName, Statistic>>;
+  readonly dropped: Dropped /** Those that were asked for. */;
+  readonly scores: Readonly<Partial<Record<ScoreName, Statistic>>>;
   readonly peaks: Statistic<PeakFigures>;
 }
 
@@ -48,38 +48,47 @@ export interface PeakSettings {
 /** Where nothing is stated: flows that are exceeded on 2 % of the days, a week apart, hit within a day. Our own choice. */
 const usual = { exceedance: 0.02, apart: 7, within: 1 };
 
-/** Every score of a window. `peaks` is undefined where nobody says what a peak is and nobody asks. */
+/** What is computed of a window: rarer scores cost as much as all the usual ones together. */
+export interface Asked {
+  readonly scores: readonly ScoreName[];
+  /** Null where nobody asks for peaks. */
+  readonly peaks: PeakSettings | null;
+}
+
+/** The figures of a window that are asked for. */
 export function windowFigures(
   paired: Paired,
   periods: readonly string[],
   step: Step,
-  settings: PeakSettings | undefined,
+  asked: Asked,
 ): WindowFigures {
-  const entries = Object.entries(scores).map(([name, score]) => [name, score(paired)]);
   return {
     periods,
     pairs: paired.observed.length,
     windowSteps: paired.windowSteps,
     dropped: paired.dropped,
-    scores: Object.fromEntries(entries) as Record<ScoreName, Statistic>,
-    peaks: peakFigures(paired, step, settings),
+    scores: Object.fromEntries(asked.scores.map((name) => [name, scores[name](paired)])),
+    peaks:
+      asked.peaks === null
+        ? undefinedBecause('nobody asks for peaks')
+        : peakFigures(paired, step, asked.peaks),
   };
 }
 
-function peakFigures(paired: Paired, step: Step, settings: PeakSettings | undefined): Statistic<PeakFigures> {
-  const stated = settings?.above !== undefined;
+function peakFigures(paired: Paired, step: Step, settings: PeakSettings): Statistic<PeakFigures> {
+  const stated = settings.above !== undefined;
   const isDaily = step.kind === 'seconds' && step.length === secondsOfDay;
   if (step.kind !== 'seconds') return undefinedBecause('peaks are counted in steps of a day or less');
   if (!stated && !isDaily) return undefinedBecause('nothing says what counts as a peak (`peaks`)');
   const { observed } = paired;
   const usualAbove = quantile({ values: observed, probability: 1 - usual.exceedance, type: 6 });
-  const above = settings?.above ?? (isDefined(usualAbove) ? usualAbove.value : Number.NaN);
+  const above = settings.above ?? (isDefined(usualAbove) ? usualAbove.value : Number.NaN);
   const days = step.length / secondsOfDay;
   const found = peakHits({
     paired,
     threshold: above,
-    minimumDistanceDays: (settings?.apart ?? usual.apart) * days,
-    toleranceDays: (settings?.within ?? usual.within) * days,
+    minimumDistanceDays: (settings.apart ?? usual.apart) * days,
+    toleranceDays: (settings.within ?? usual.within) * days,
   });
   if (!isDefined(found)) return found;
   const { observedPeaks, hits, falseAlarms, detected: share, heightErrorPercent, delayDays } = found.value;

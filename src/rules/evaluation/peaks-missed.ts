@@ -33,13 +33,7 @@ export const evaluationPeaksMissed = rule({
     },
     peaks_nse: { default: 0.5, unit: '1', states: 'NSE above which it passes', looser: 'higher' },
   },
-  check: ({ id, name, field, fragment }, { scores, manifest }, limits) => {
-    const { variable = 'other', peaks } = fragment;
-    const needed = (manifest.data.study?.needs ?? []).some(
-      (need) =>
-        (need.variable ?? 'streamflow') === variable && (need.regime === 'high' || need.regime === 'whole'),
-    );
-    if (peaks === undefined && !(needed && variable === 'streamflow')) return [];
+  check: ({ id, name, field, fragment }, { scores }, limits) => {
     return scoredWindows.flatMap((window) => {
       const figures = scores.get(name ?? '');
       const found = recomputedOver(figures, window)?.peaks;
@@ -57,7 +51,7 @@ export const evaluationPeaksMissed = rule({
         figures !== undefined && isDefined(figures.recomputed) ? figures.recomputed.value.unit : '';
       return {
         record: id,
-        field: peaks === undefined ? field : [...field, 'peaks'],
+        field: fragment.peaks === undefined ? field : [...field, 'peaks'],
         subject: window,
         found: Number(share.value.toFixed(3)),
         message: `Over ${window} ${name} hits ${hits} of ${observed} observed peaks above ${figure(above)} ${unit}, though its NSE is ${figure(nse)}.`,
