@@ -2,9 +2,12 @@ import type { Records } from '../records/record.ts';
 import type { SealsFile } from '../records/seal.ts';
 import { readSealsFile } from '../records/seals-file.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
+import { balancesOf } from './balances.ts';
+import { bandsOf } from './bands.ts';
 import { scenariosOf } from './conditions.ts';
 import { differencesOf } from './differences.ts';
 import type { Facts } from './facts.ts';
+import { parametersOf } from './parameters.ts';
 import { profilesOf } from './profiles.ts';
 import { rainYearsOf } from './rain-years.ts';
 import { takeReadings } from './readings.ts';
@@ -32,19 +35,35 @@ export interface Given extends Pick<Facts, GivenFacts> {
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
   const { records, standings, sealsFile } = given;
   const rain = rainYearsOf(records, snapshot);
-  const [sealsBefore, beside, readings, differences, profiles, scores, rainYears, stores, seasons, scenarios] =
-    await Promise.all([
-      sealsOfBefore(sealsFile, snapshot),
-      filesBeside(records, snapshot),
-      takeReadings(records, snapshot),
-      differencesOf(records, standings, snapshot),
-      profilesOf(records, snapshot),
-      scoresOf(records, snapshot),
-      rain,
-      rain.then((years) => storesOf(records, years, snapshot)),
-      seasonsOf(records, snapshot),
-      scenariosOf(records, snapshot),
-    ]);
+  const [
+    sealsBefore,
+    beside,
+    readings,
+    differences,
+    profiles,
+    scores,
+    rainYears,
+    stores,
+    seasons,
+    balances,
+    parameters,
+    bands,
+    scenarios,
+  ] = await Promise.all([
+    sealsOfBefore(sealsFile, snapshot),
+    filesBeside(records, snapshot),
+    takeReadings(records, snapshot),
+    differencesOf(records, standings, snapshot),
+    profilesOf(records, snapshot),
+    scoresOf(records, snapshot),
+    rain,
+    rain.then((years) => storesOf(records, years, snapshot)),
+    seasonsOf(records, snapshot),
+    balancesOf(records, snapshot),
+    parametersOf(records, snapshot),
+    bandsOf(records, snapshot),
+    scenariosOf(records, snapshot),
+  ]);
   return Object.freeze({
     ...given,
     sealsBefore,
@@ -56,6 +75,9 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
     rainYears,
     stores,
     seasons,
+    balances,
+    parameters,
+    bands,
     scenarios,
     found: [],
     record: (id: string) => records.nodes.get(id),

@@ -4,7 +4,10 @@ import type { RecordNode, Records } from '../records/record.ts';
 import type { Seal, SealsFile, Standing } from '../records/seal.ts';
 import type { DiskFile } from '../repository/snapshot.ts';
 import type { SeriesDifference } from '../series/difference.ts';
+import type { VolumeFigures } from './balances.ts';
+import type { BandFigures } from './bands.ts';
 import type { ScenarioFigures } from './conditions.ts';
+import type { ParameterFacts } from './parameters.ts';
 import type { InputProfile } from './profiles.ts';
 import type { RainYears } from './rain-years.ts';
 import type { Reading } from './readings.ts';
@@ -60,6 +63,12 @@ export interface Facts {
   readonly seasons: readonly Statistic<SeasonFigures>[];
   /** The calibrated conditions, and how far scenarios reach beyond them. */
   readonly scenarios: ScenarioFigures;
+  /** By the name of the control volume: its water balance. */
+  readonly balances: ReadonlyMap<string, VolumeFigures>;
+  /** The parameters, in the record and its table. */
+  readonly parameters: ParameterFacts;
+  /** Uncertainty bands, in the manifest's order. */
+  readonly bands: readonly BandFigures[];
   /** Findings of the first pass; empty during it. */
   readonly found: readonly Found[];
   readonly known: KnownRules;

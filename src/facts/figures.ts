@@ -1,4 +1,6 @@
 import type { FieldPath } from '../manifest/manifest.ts';
+import { balanceFiguresToWrite } from './balances.ts';
+import { bandFiguresToWrite } from './bands.ts';
 import { conditionFigures } from './condition-figures.ts';
 import type { Facts } from './facts.ts';
 import { missingShareFigures } from './missing-shares.ts';
@@ -16,5 +18,11 @@ export interface Figure {
 
 /** What `seal --figures` writes into the manifest, record after record. */
 export function figuresToWrite(facts: Facts): readonly Figure[] {
-  return [...missingShareFigures(facts), ...scoreFigures(facts), ...conditionFigures(facts)];
+  return [
+    ...missingShareFigures(facts),
+    ...scoreFigures(facts),
+    ...balanceFiguresToWrite(facts),
+    ...bandFiguresToWrite(facts),
+    ...conditionFigures(facts),
+  ];
 }

@@ -1,4 +1,4 @@
-import type { FieldPath } from '../manifest/manifest.ts';
+import type { FieldPath, Manifest } from '../manifest/manifest.ts';
 import { type Period, parsePeriod } from '../manifest/period.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import { nodesIn } from './nodes-in.ts';
@@ -45,12 +45,34 @@ export function windowsOfTarget(
   target: RecordNode<'evaluation'>,
   { manifest, nodes }: Pick<Records, 'manifest' | 'nodes'>,
 ): readonly StatedWindow[] {
-  const run = runOf(target, nodes);
-  const sources: readonly { readonly stated: Stated; readonly base: FieldPath }[] = [
+  return windowsFrom([
     { stated: target.fragment.periods ?? {}, base: [...target.field, 'periods'] },
+    ...sourcesOfRun(runOf(target, nodes), manifest),
+  ]);
+}
+
+/** The windows of a run: its own warm-up, and what the study states besides. */
+export function windowsOfRun(
+  run: RecordNode<'runs'> | undefined,
+  { manifest }: Pick<Records, 'manifest'>,
+): readonly StatedWindow[] {
+  return windowsFrom(sourcesOfRun(run, manifest));
+}
+
+interface Source {
+  readonly stated: Stated;
+  readonly base: FieldPath;
+}
+
+function sourcesOfRun(run: RecordNode<'runs'> | undefined, { data }: Manifest): readonly Source[] {
+  return [
     { stated: { warm_up: run?.fragment.warm_up }, base: run?.field ?? [] },
-    { stated: manifest.data.periods ?? {}, base: ['periods'] },
+    { stated: data.periods ?? {}, base: ['periods'] },
   ];
+}
+
+/** Each kind of window as the first source states it. */
+function windowsFrom(sources: readonly Source[]): readonly StatedWindow[] {
   const keys = ['warm_up', 'calibration', 'validation'] as const;
   return keys.flatMap((key) => {
     const source = sources.find(({ stated }) => stated[key] !== undefined);
