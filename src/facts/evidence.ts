@@ -5,6 +5,8 @@ import type { RecordNode } from '../records/record.ts';
 import type { Standing } from '../records/seal.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { parseDate } from '../series/calendar.ts';
+import { balancesOf, balancesVersion, type VolumeFigures } from './balances.ts';
+import { bandsOf, bandsVersion } from './bands.ts';
 import { conditionVersion } from './conditions/figures.ts';
 import { type StatedCondition, statedConditions, statedDrivers } from './conditions/stated.ts';
 import { scenariosOf } from './conditions.ts';
@@ -16,9 +18,13 @@ import { scoredWindows } from './scores/stated.ts';
 import { scoresVersion } from './scores/subject.ts';
 import { scoresOf, type TargetFigures } from './scores.ts';
 import { graphVersion, reviewDigest } from './seen-series.ts';
+import { allAgree, type ComparedFigure } from './stated-figure.ts';
 
 /** What a seal's evidence is made of. */
-type Computed = Pick<Facts, 'records' | 'standings' | 'manifest' | 'scores' | 'profiles' | 'scenarios'>;
+type Computed = Pick<
+  Facts,
+  'records' | 'standings' | 'manifest' | 'scores' | 'profiles' | 'balances' | 'bands' | 'scenarios'
+>;
 
 /**
  * By record: what a seal made now should keep of what was computed. A record is `recomputed` where it states figures, and each
@@ -33,6 +39,8 @@ export async function evidenceFor(
     ...study,
     scores: await scoresOf(records, snapshot),
     profiles: await profilesOf(records, snapshot),
+    balances: await balancesOf(records, snapshot),
+    bands: await bandsOf(records, snapshot),
     scenarios: await scenariosOf(records, snapshot),
   });
 }
@@ -46,6 +54,8 @@ function evidenceIn(computed: Computed): ReadonlyMap<string, Evidence> {
         id,
         ofTarget(record as RecordNode<'evaluation'>, scores.get(record.name ?? ''), standings.get(id)),
       );
+    if (record.area === 'balance') evidence.set(id, ofBalance(computed.balances.get(record.name ?? '')));
+    if (record.area === 'uncertainty') evidence.set(id, ofBands(computed.bands));
     if (record.area === 'scenarios')
       evidence.set(id, ofScenario(record as RecordNode<'scenarios'>, computed));
     const profile = record.area === 'inputs' ? profiles.get(record.name ?? '') : undefined;
@@ -106,6 +116,34 @@ function holdsPeriod(period: string | undefined, { days }: InputProfile): boolea
   const stated = parsePeriod(period);
   return (
     stated !== null && parseDate(stated.first) === days?.firstDay && parseDate(stated.last) === days.lastDay
+  );
+}
+
+function ofBalance(figures: VolumeFigures | undefined): Evidence {
+  if (figures === undefined) return { facts: {}, grade: 'sealed' };
+  return {
+    facts: comparedFacts(figures.stated, '', balancesVersion),
+    grade: allAgree(figures.stated) ? 'recomputed' : 'sealed',
+  };
+}
+
+function ofBands(bands: Facts['bands']): Evidence {
+  const facts = bands.map(({ target, stated }) => comparedFacts(stated, `${target}.`, bandsVersion));
+  const isProven = bands.length > 0 && bands.every(({ stated }) => allAgree(stated));
+  return { facts: Object.assign({}, ...facts), grade: isProven ? 'recomputed' : 'sealed' };
+}
+
+function comparedFacts(
+  stated: readonly ComparedFigure[],
+  prefix: string,
+  version: number,
+): Evidence['facts'] {
+  return Object.fromEntries(
+    stated.flatMap(({ name, recomputed }) =>
+      isDefined(recomputed)
+        ? [[`${prefix}${name}`, { value: recomputed.value, computed_by: version }] as const]
+        : [],
+    ),
   );
 }
 
