@@ -41,13 +41,11 @@ export function comparable(sides: Sides, comparison: Comparison): Statistic<Side
   const first = convertSeries(simulated, unit, comparison);
   const made = atStep(isDefined(first) ? first.value : simulated, step, comparison);
   if (!isDefined(made)) return undefinedBecause(`the simulated series: ${made.undefined}`);
+  if (isDefined(first)) return defined({ observed: seen.value, simulated: made.value });
   // mm a month can be made only of what stands by the month.
-  const converted = isDefined(first) ? made : convertSeries(made.value, unit, comparison);
-  if (!isDefined(converted))
-    return undefinedBecause(
-      isDefined(first) ? 'the units differ' : `the simulated series: ${first.undefined}`,
-    );
-  return defined({ observed: seen.value, simulated: converted.value });
+  const later = convertSeries(made.value, unit, comparison);
+  if (!isDefined(later)) return undefinedBecause(`the simulated series: ${first.undefined}`);
+  return defined({ observed: seen.value, simulated: later.value });
 }
 
 function coarser(one: Step, other: Step): Step {

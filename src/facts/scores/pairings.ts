@@ -43,6 +43,6 @@ export function simulatedDays({ simulated }: Sides): readonly Window[] {
   const [first, last] = [timeSeconds[0], timeSeconds.at(-1)];
   if (first === undefined || last === undefined) return [];
   // A step of a month or a year reaches beyond its first day.
-  const reach = simulated.step.kind === 'months' ? 366 * simulated.step.length : 1;
+  const reach = simulated.step.kind === 'months' ? 31 * simulated.step.length : 1;
   return [{ firstDay: Math.floor(first / secondsOfDay), lastDay: Math.floor(last / secondsOfDay) + reach }];
 }

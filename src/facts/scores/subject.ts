@@ -15,7 +15,7 @@ import type { Asked } from './window-figures.ts';
 
 type Target = RecordNode<'evaluation'>;
 
-/** What a target's figures are computed from, and all that they depend on. */
+/** Two series to compare, and all that their figures depend on. */
 export interface Subject {
   readonly basis: Basis;
   readonly asked: Asked;
@@ -26,6 +26,7 @@ export interface Subject {
 /** Raised whenever the same files may give another figure. */
 export const scoresVersion = 1;
 
+/** What a target's figures are computed from, where its files are named and their content is here. */
 export async function subjectOf(
   target: Target,
   stated: readonly StatedName[],

@@ -18,7 +18,8 @@ export interface WindowFigures {
   readonly pairs: number;
   /** Steps that the windows would hold if nothing were missing; for samples, those that there are. */
   readonly windowSteps: number;
-  readonly dropped: Dropped /** Those that were asked for. */;
+  readonly dropped: Dropped;
+  /** Those that were asked for. */
   readonly scores: Readonly<Partial<Record<ScoreName, Statistic>>>;
   readonly peaks: Statistic<PeakFigures>;
 }
