@@ -10,6 +10,7 @@ import { comparisonsOf, type Held, incompleteTotalsOf } from './profiles/beside-
 import { coveredDays, coveredTogether } from './profiles/covered-days.ts';
 import { type FileProfile, fileProfile, fileProfileVersion } from './profiles/file-profile.ts';
 import type { IncompleteTotal } from './profiles/incomplete-totals.ts';
+import { type ShareInTable, shareInTable } from './profiles/share-in-table.ts';
 import { remembered } from './remembered.ts';
 import { layoutOf, seriesFilesOf, seriesOfFile } from './series-of.ts';
 
@@ -29,6 +30,8 @@ export interface InputProfile {
   readonly files: readonly ProfiledFile[];
   /** Whether no file is missing. */
   readonly isComplete: boolean;
+  /** Null where the input states none in a table. */
+  readonly shareInTable: ShareInTable | null;
   /** Null where no step is stated. */
   readonly step: Step | null;
   /** The days that the files cover together (`coveredTogether`); null where there are none. */
@@ -75,6 +78,7 @@ async function profileOf(input: InputRecord, records: Records, snapshot: Snapsho
   return {
     files,
     isComplete: files.length === claims.length && elsewhere.length === 0,
+    shareInTable: await shareInTable(input, records, snapshot),
     step,
     days,
     annualMm: annualMmOf(files, input, areaKm2Of(data)),

@@ -7,6 +7,7 @@ import { yearBeginsOf } from './catchment.ts';
 import { findInput, readInputSeries } from './input.ts';
 import { nodesIn } from './nodes-in.ts';
 import { remembered } from './remembered.ts';
+import { inputsTakenBy } from './taken-inputs.ts';
 
 /** The rain of each complete hydrological year, step beside step. */
 export interface RainYears {
@@ -30,11 +31,10 @@ export async function rainYearsOf(
 }
 
 /** The precipitation inputs that a run takes, by name. */
-export function rainOfRun(run: RecordNode<'runs'> | undefined, { nodes }: Records): readonly string[] {
-  return (run?.fragment.takes ?? []).flatMap((taken) => {
-    const input = nodes.get(taken) as RecordNode<'inputs'> | undefined;
-    return input?.area === 'inputs' && input.fragment.role === 'precipitation' ? (input.name ?? []) : [];
-  });
+export function rainOfRun(run: RecordNode<'runs'> | undefined, records: Records): readonly string[] {
+  return inputsTakenBy(run, records).flatMap(({ name, fragment }) =>
+    fragment.role === 'precipitation' ? (name ?? []) : [],
+  );
 }
 
 async function rainYears(input: string, records: Records, snapshot: Snapshot): Promise<Statistic<RainYears>> {

@@ -6,6 +6,8 @@ import { Rows } from '../series/rows.ts';
 export interface TableRow {
   /** From 1. */
   readonly line: number;
+  /** What stands in the first column, by which a row is told from others. */
+  readonly first: string;
   /** The text below a column's name; decimal commas as points. Undefined where the table has no such column. */
   cell(column: string): string | undefined;
 }
@@ -32,6 +34,7 @@ export async function readTable(
     const cells = cellsOf(rows);
     found.push({
       line: rows.line,
+      first: cells[0] ?? '',
       cell(column) {
         const text = names.includes(column) ? (cells[names.indexOf(column)] ?? '') : undefined;
         return decimal === 'comma' && /^[-+\d]*,\d+$/.test(text ?? '') ? text?.replace(',', '.') : text;

@@ -109,7 +109,7 @@ export type Combine = (("mean" | "sum" | "each") | Weights)
 /**
  * Missing values as a share of all values. Unit: 1.
  */
-export type MissingShare = (number | SharePerFile)
+export type MissingShare = (number | SharePerFile | SharesInTable)
 /**
  * A script, or several.
  */
@@ -962,6 +962,15 @@ export interface SharePerFile {
      */
     [k: string]: number
   }
+}
+/**
+ * Shares in a table, for records that are alike.
+ */
+export interface SharesInTable {
+  /**
+   * The table; its first column holds the record's name or its entry, a column `missing_share` the share.
+   */
+  table: Table
 }
 /**
  * A step between the source and the files.
@@ -1921,7 +1930,7 @@ export interface ScoresByWindow {
    */
   validation?: Scores
   /**
-   * A table with the columns `window` (calibration or validation), `score` and `value`.
+   * A table with the columns `window` (calibration or validation), `score` and `value`, or with a column for each score; a column `target` names the target or its entry where several share the table.
    */
   table?: Table
 }

@@ -285,7 +285,7 @@ const schema: readonly Case[] = [
     'a share in percent',
     'stoplog: 1\ninputs: {a: {missing_share: 1.3}}\n',
     '2:29 inputs.a.missing_share',
-    '`inputs.a.missing_share` is 1.3; expected a share from 0 to 1, or {per_file: {...}}.',
+    '`inputs.a.missing_share` is 1.3; expected a share from 0 to 1, {per_file: {...}} or {table: path}.',
   ],
   [
     'a level in percent',

@@ -36,8 +36,11 @@ export function filesNamedBy(statement: Statement, stated: Stated): readonly Nam
         ...listed(statement.fragment.environment?.files, at('environment', 'files'), 'read'),
       ];
     case 'inputs': {
-      const { files, stored, preparation = [] } = statement.fragment;
+      const { files, stored, preparation = [], missing_share: share } = statement.fragment;
       return [
+        ...(typeof share === 'object' && 'table' in share
+          ? tabled(share.table, at('missing_share', 'table'), 'read')
+          : []),
         ...listed(files, at('files'), stored === 'elsewhere' ? stored : 'own'),
         ...preparation.flatMap(({ script }, index) =>
           listed(script, at('preparation', index, 'script'), 'read'),
@@ -75,7 +78,9 @@ export function filesNamedBy(statement: Statement, stated: Stated): readonly Nam
     }
     case 'evaluation': {
       const { simulated, scores } = statement.fragment;
-      return [...given(simulated, at('simulated')), ...tabled(scores?.table, at('scores', 'table'))];
+      // A table of many targets is no target's own.
+      const shared = statement.field.at(-1) === statement.name ? 'own' : 'read';
+      return [...given(simulated, at('simulated')), ...tabled(scores?.table, at('scores', 'table'), shared)];
     }
     case 'balance':
       return given(statement.fragment, at());
@@ -125,8 +130,12 @@ function listed(
   });
 }
 
-function tabled(table: Table | undefined, field: FieldPath): readonly NamedFile[] {
-  return table === undefined ? [] : [{ ...fileOfTable(table, field), use: 'own' }];
+function tabled(
+  table: Table | undefined,
+  field: FieldPath,
+  use: 'own' | 'read' = 'own',
+): readonly NamedFile[] {
+  return table === undefined ? [] : [{ ...fileOfTable(table, field), use }];
 }
 
 function given(

@@ -3,7 +3,7 @@ import type { Finding, Level, ManifestVerdict, Verdict } from '../verdict/findin
 import { passes } from '../verdict/judge.ts';
 import { caution } from './caution.ts';
 import { plain } from './escape.ts';
-import { foldStale, type Group, groupByRecord } from './fold.ts';
+import { fold, type Group, groupByRecord } from './fold.ts';
 import { wrap } from './wrap.ts';
 
 export interface TextOptions {
@@ -15,7 +15,7 @@ export interface TextOptions {
 const width = 100;
 const indent = ' '.repeat(5);
 const headings: Readonly<Record<Level, string>> = { block: 'BLOCKED', warn: 'WARNED', note: 'NOTED' };
-/** How many records that are stale from one cause are shown one by one. */
+/** How many records with one cause are shown one by one. */
 const shownPerCause = 12;
 
 /** The verdict for a terminal: what is held back and why, what to do, then the tally. */
@@ -54,14 +54,14 @@ function section(manifest: ManifestVerdict, level: Level, paint: ChalkInstance):
   );
   if (groups.length === 0) return [];
   const tint = { block: paint.red.bold, warn: paint.yellow.bold, note: paint.bold }[level];
-  const { shown, folded } = foldStale(groups, shownPerCause);
+  const { shown, folded } = fold(groups, shownPerCause);
   return [
     '',
     tint(`${headings[level]}   ${count(groups.length, 'record')}`),
     ...shown.flatMap((group) => recordLines(group, manifest, paint)),
-    ...[...folded].flatMap(([cause, records]) => [
+    ...folded.flatMap(({ records, why }) => [
       '',
-      `${indent}and ${count(records.length, 'more record')} that rest on ${plain(cause)}`,
+      `${indent}and ${count(records.length, 'more record')} that ${plain(why)}`,
     ]),
   ];
 }

@@ -71,26 +71,44 @@ export async function scoresInTable(
   const stated: StatedScore[] = [];
   const unread: UnreadRow[] = [];
   for (const row of read) {
-    const score = scoreIn(row, names);
-    if ('expected' in score) unread.push({ ...score, file, line: row.line });
-    else stated.push({ ...score, field: [...target.field, 'scores', 'table'], at: { file, line: row.line } });
+    if (!isAbout(target, row)) continue;
+    for (const score of scoresIn(row, names))
+      if ('expected' in score) unread.push({ ...score, file, line: row.line });
+      else
+        stated.push({ ...score, field: [...target.field, 'scores', 'table'], at: { file, line: row.line } });
   }
   return { stated, unread };
 }
 
+/** Whether a row is about a target: all are where the table has no column `target` (or `each`), which names the target or its entry. */
+function isAbout({ name }: RecordNode<'evaluation'>, { cell }: TableRow): boolean {
+  const named = cell('target') ?? cell('each');
+  return named === undefined || named === name || (name ?? '').endsWith(`.${named}`);
+}
+
 type InRow = Pick<StatedScore, 'window' | 'score' | 'printed'>;
 
-function scoreIn(
+/** The one score of a row, or with a column for each score, those that are there. */
+function scoresIn(
   { cell }: TableRow,
   names: ReadonlySet<string>,
-): InRow | Pick<UnreadRow, 'expected' | 'found'> {
+): readonly (InRow | Pick<UnreadRow, 'expected' | 'found'>)[] {
   const window = scoredWindows.find((one) => one === cell('window'));
   if (window === undefined)
-    return { expected: 'a window, calibration or validation', found: cell('window') ?? 'no column `window`' };
+    return [
+      { expected: 'a window, calibration or validation', found: cell('window') ?? 'no column `window`' },
+    ];
   const score = cell('score');
-  if (score === undefined || !names.has(score))
-    return { expected: `a score (${[...names].join(', ')})`, found: score ?? 'no column `score`' };
-  const printed = printedNumber(cell('value') ?? '');
-  if (printed === null) return { expected: 'a number', found: cell('value') ?? 'no column `value`' };
-  return { window, score: score as StatedName, printed };
+  const inColumns = [...names].filter((name) => (cell(name) ?? '') !== '');
+  const pairs: readonly (readonly [string, string | undefined])[] =
+    score === undefined && inColumns.length > 0
+      ? inColumns.map((name) => [name, cell(name)])
+      : [[score ?? '', cell('value')]];
+  return pairs.map(([name, value]) => {
+    if (!names.has(name))
+      return { expected: `a score (${[...names].join(', ')})`, found: score ?? 'no column `score`' };
+    const printed = printedNumber(value ?? '');
+    if (printed === null) return { expected: 'a number', found: value ?? 'no column `value`' };
+    return { window, score: name as StatedName, printed };
+  });
 }

@@ -15,7 +15,8 @@ export const inputsGapUntreated = rule({
     const { id, name, field, fragment } = record;
     const { missing_share: share, gaps_treated } = fragment;
     if (gaps_treated !== undefined) return [];
-    const perFile = typeof share === 'object' ? Math.max(0, ...Object.values(share.per_file)) : null;
+    const perFile =
+      typeof share === 'object' && 'per_file' in share ? Math.max(0, ...Object.values(share.per_file)) : null;
     const stated = perFile ?? (typeof share === 'number' ? share : 0);
     const profile = profiles.get(name ?? '');
     const counted = profile === undefined ? [] : missingShares(record, profile, manifest);

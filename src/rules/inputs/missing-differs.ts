@@ -27,16 +27,17 @@ export const inputsMissingDiffers = rule({
     );
     const isRepeated = field.at(-1) !== name;
     const known = new Set(shares.map(({ file }) => file));
-    const named =
-      typeof fragment.missing_share === 'object' ? Object.keys(fragment.missing_share.per_file) : [];
+    const { missing_share: share } = fragment;
+    const named = typeof share === 'object' && 'per_file' in share ? Object.keys(share.per_file) : [];
     const strangers = isRepeated || shares.length === 0 ? [] : named.filter((file) => !known.has(file));
     return [
-      ...differing.map(({ field: place, file, stated, found, missing, steps }): Draft => {
+      ...differing.map(({ field: place, file, stated, at, found, missing, steps }): Draft => {
         const says =
           stated === null ? 'nothing is stated for it' : `${manifest.source(place) ?? stated} is stated`;
         return {
           record: id,
           field: place,
+          ...(at ?? {}),
           ...(file === null ? {} : { subject: file }),
           ...(stated === null ? {} : { stated }),
           found: Number(found.toPrecision(3)),

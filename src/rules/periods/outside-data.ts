@@ -1,5 +1,6 @@
 import type { Facts } from '../../facts/facts.ts';
 import { nodesIn } from '../../facts/nodes-in.ts';
+import { inputsTakenBy } from '../../facts/taken-inputs.ts';
 import { windowsOfTarget } from '../../facts/windows.ts';
 import { dayNumber, type Period, parsePeriod } from '../../manifest/period.ts';
 import type { RecordNode } from '../../records/record.ts';
@@ -51,19 +52,23 @@ function simulationsBeyond(facts: Facts): readonly Draft[] {
   const { records, manifest } = facts;
   const scenarios = new Set(Object.values(manifest.data.scenarios?.cases ?? {}).map(({ run }) => run));
   return nodesIn(records.nodes, 'runs').flatMap((run) => {
-    const { simulation: own, takes = [] } = run.fragment;
+    const { simulation: own } = run.fragment;
     const simulation = parsePeriod(own ?? manifest.data.periods?.simulation ?? '');
     // A scenario that does not say what it simulates hardly simulates the study's own years.
     if (simulation === null || (own === undefined && scenarios.has(run.name ?? ''))) return [];
-    return takes.flatMap((taken) => {
-      const input = records.nodes.get(taken) as RecordNode<'inputs'> | undefined;
-      if (input?.area !== 'inputs' || !forcing.has(input.fragment.role ?? '')) return [];
+    // Of many inputs that one fragment states, the first that does not hold the days speaks for all that hold the same.
+    const told = new Set<string>();
+    return inputsTakenBy(run, records).flatMap((input) => {
+      if (!forcing.has(input.fragment.role ?? '')) return [];
       const held = recordOf(input.name ?? '', facts);
       if (held === null || !beyond(simulation, held)) return [];
+      const same = `${input.field.join('.')} ${written(held)}`;
+      if (told.has(same)) return [];
+      told.add(same);
       return {
         record: own === undefined ? 'periods' : run.id,
         field: own === undefined ? ['periods', 'simulation'] : [...run.field, 'simulation'],
-        subject: `${run.id} ${taken}`,
+        subject: `${run.id} ${input.id}`,
         stated: written(simulation),
         found: written(held),
         message: `Run ${run.name} simulates ${daysOutside(simulation, held)} for which its input ${input.name} holds no data.`,

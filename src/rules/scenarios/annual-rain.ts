@@ -1,4 +1,5 @@
 import type { Facts } from '../../facts/facts.ts';
+import { inputsNamed } from '../../facts/series-of.ts';
 import type { RecordNode } from '../../records/record.ts';
 
 /** Whether a driver is rain over whole years: an input of precipitation on either side, or called so. */
@@ -9,10 +10,8 @@ export function isAnnualRain(
 ): boolean {
   const condition = manifest.data.scenarios?.conditions?.[name];
   if (condition === undefined || condition.months !== undefined) return false;
-  const inputs = [condition.input, fragment.drivers?.[name]?.input];
-  const isRain = inputs.some((input) => {
-    const record = records.nodes.get(`inputs.${input}`) as RecordNode<'inputs'> | undefined;
-    return record?.fragment.role === 'precipitation';
-  });
+  const isRain = [condition.input, fragment.drivers?.[name]?.input]
+    .flatMap((input) => (input === undefined ? [] : inputsNamed(input, records)))
+    .some((input) => input.fragment.role === 'precipitation');
   return isRain || /rain|precipitation/i.test(name);
 }

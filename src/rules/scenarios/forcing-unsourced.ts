@@ -1,6 +1,7 @@
 import { inputsNamed } from '../../facts/series-of.ts';
+import { inputsTakenBy } from '../../facts/taken-inputs.ts';
 import { parsePeriod } from '../../manifest/period.ts';
-import type { RecordNode, Records } from '../../records/record.ts';
+import type { RecordNode } from '../../records/record.ts';
 import { rule } from '../rule.ts';
 
 export const scenariosForcingUnsourced = rule({
@@ -50,9 +51,3 @@ export const scenariosForcingUnsourced = rule({
     ];
   },
 });
-
-function inputsTakenBy({ fragment }: RecordNode<'runs'>, records: Records): readonly RecordNode<'inputs'>[] {
-  return (fragment.takes ?? []).flatMap((taken) =>
-    taken.startsWith('inputs.') ? inputsNamed(taken.slice('inputs.'.length), records) : [],
-  );
-}
