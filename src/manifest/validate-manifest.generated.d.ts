@@ -19,6 +19,7 @@ export const NoWarmUp: Validator;
 export const NoneFound: Validator;
 export const ScriptList: Validator;
 export const SharePerFile: Validator;
+export const SharesInTable: Validator;
 export const TableFile: Validator;
 export const TakeCell: Validator;
 export const TakeKey: Validator;
