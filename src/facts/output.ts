@@ -38,19 +38,24 @@ export async function findOutput(
   return defined({ path, sha256, layout: layoutOf(output) });
 }
 
-/** The columns of an output, by name; in the step that is stated, or else the one that the times have. */
+/**
+ * The columns of an output, by name; in the step that is stated, or else the one that the times have. Undefined where any row
+ * can't be read: what is left out silently would pass for missing.
+ */
 export async function readOutput(
   { path, layout }: OutputFile,
   snapshot: Snapshot,
 ): Promise<Statistic<ReadonlyMap<string, Series>>> {
   const table = await seriesOfFile(path, layout, snapshot);
   if (table === null) return undefinedBecause(`the content of ${path} is not here`);
-  if (table.columns.length === 0) {
-    const [problem] = table.problems.first;
+  const { first, total } = table.problems;
+  const [problem] = first;
+  if (problem !== undefined) {
+    const { line, expected, found, advice } = problem;
+    const where = line === null ? path : `${path} line ${line}`;
+    const more = total > 1 ? `, and ${total - 1} more such` : '';
     return undefinedBecause(
-      problem === undefined
-        ? `${path} can't be read as a series`
-        : `${path}: expected ${problem.expected}, found ${problem.found}`,
+      `${where}: expected ${expected}, found ${found}${more}${advice && ` (${advice})`}`,
     );
   }
   return defined(
@@ -68,7 +73,8 @@ export async function readOutputSeries(file: OutputFile, snapshot: Snapshot): Pr
   const columns = await readOutput(file, snapshot);
   if (!isDefined(columns)) return columns;
   const [series, ...more] = columns.value.values();
-  return series === undefined || more.length > 0
-    ? undefinedBecause(`${file.path} has several columns there, where one series is compared`)
+  if (series === undefined) return undefinedBecause(`${file.path} holds no series`);
+  return more.length > 0
+    ? undefinedBecause(`several columns of ${file.path} are named, where one is compared`)
     : defined(series);
 }

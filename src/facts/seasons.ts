@@ -2,10 +2,10 @@ import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrolo
 import { climatology } from '../hydrology/season/climatology.ts';
 import { type SeasonLag, seasonLag } from '../hydrology/season/season-lag.ts';
 import type { Season } from '../manifest/data.generated.ts';
-import { parsePeriod } from '../manifest/period.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
-import { parseDate } from '../series/calendar.ts';
+import type { Window } from '../series/calendar.ts';
+import type { YearBegins } from '../series/hydrological-year.ts';
 import { pairByDate } from '../series/pair.ts';
 import { monthly } from '../series/step.ts';
 import { yearBeginsOf } from './catchment.ts';
@@ -13,7 +13,8 @@ import { findInput, readInputSeries } from './input.ts';
 import { findOutput, readOutputSeries } from './output.ts';
 import { remembered } from './remembered.ts';
 import { atStep, type Sides } from './scores/comparable.ts';
-import { simulatedDays } from './scores/pairings.ts';
+import { daysOf, simulatedDays } from './scores/pairings.ts';
+import { windowsOfRun } from './windows.ts';
 
 /** By how much a simulated season is late. */
 export interface SeasonFigures extends Omit<SeasonLag, 'correlations'> {
@@ -44,10 +45,11 @@ async function compare(
   if ('undefined' in input) return input;
   const output = await findOutput(simulated ?? {}, records, snapshot);
   if ('undefined' in output) return output;
+  const run = records.nodes.get(`runs.${simulated?.run}`) as RecordNode<'runs'> | undefined;
   const settings = {
     variable,
     yearBegins: yearBeginsOf(records.manifest.data),
-    warmUp: warmUpOf(simulated?.run, records),
+    leftOut: daysOf(windowsOfRun(run, records), 'warm-up'),
   };
   const from = { input: input.value.from, output: output.value, ...settings };
   return remembered(snapshot, { what: 'season', version, from }, async () => {
@@ -60,24 +62,16 @@ async function compare(
 
 interface Settings {
   readonly variable: string;
-  readonly yearBegins: ReturnType<typeof yearBeginsOf>;
-  readonly warmUp: string | null;
+  readonly yearBegins: YearBegins;
+  /** The warm-up. */
+  readonly leftOut: readonly Window[];
 }
 
-function warmUpOf(run: string | undefined, { manifest, nodes }: Records): string | null {
-  const own = (nodes.get(`runs.${run}`) as RecordNode<'runs'> | undefined)?.fragment.warm_up;
-  const warmUp = own ?? manifest.data.periods?.warm_up;
-  return typeof warmUp === 'string' ? warmUp : null;
-}
-
-function lagOf(sides: Sides, { warmUp, ...settings }: Settings): Statistic<SeasonFigures> {
+function lagOf(sides: Sides, { leftOut, ...settings }: Settings): Statistic<SeasonFigures> {
   const observed = atStep(sides.observed, monthly, settings);
   if (!isDefined(observed)) return observed;
   const simulated = atStep(sides.simulated, monthly, settings);
   if (!isDefined(simulated)) return simulated;
-  const left = parsePeriod(warmUp ?? '');
-  const leftOut =
-    left === null ? [] : [{ firstDay: parseDate(left.first) ?? 0, lastDay: parseDate(left.last) ?? 0 }];
   const windows = simulatedDays({ observed: observed.value, simulated: simulated.value });
   const paired = pairByDate({ observed: observed.value, simulated: simulated.value, windows, leftOut });
   if (!isDefined(paired)) return paired;

@@ -2,11 +2,10 @@ import { mean } from '../hydrology/arithmetic.ts';
 import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
 import { type MannKendall, mannKendall } from '../hydrology/trend/mann-kendall.ts';
 import { type StoreDrift, storeDrift } from '../hydrology/warm-up/store-drift.ts';
-import { parsePeriod } from '../manifest/period.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { aggregate } from '../series/aggregate.ts';
-import { parseDate, secondsOfDay } from '../series/calendar.ts';
+import { secondsOfDay } from '../series/calendar.ts';
 import { daysOfYear, type YearBegins, yearOf } from '../series/hydrological-year.ts';
 import type { Series } from '../series/series.ts';
 import { conversion } from '../series/units/conversion.ts';
@@ -15,6 +14,8 @@ import { nodesIn } from './nodes-in.ts';
 import { findOutput, readOutput } from './output.ts';
 import { type RainYears, rainOfRun } from './rain-years.ts';
 import { remembered } from './remembered.ts';
+import { daysOf } from './scores/pairings.ts';
+import { windowsOfRun } from './windows.ts';
 
 /** How one store of a run moves from year to year after warm-up. */
 export interface StoreFigures {
@@ -22,7 +23,7 @@ export interface StoreFigures {
   readonly store: string;
   /** False where its unit is no depth, or is not stated: then its figures are in whatever unit it has, and not held against rain. */
   readonly isDepth: boolean;
-  /** On the last day of the warm-up and of each complete year after it. */
+  /** On the last day of each hydrological year, from the end of the warm-up on. */
   readonly sameDate: Statistic<Drift>;
   /** Means of the complete years after warm-up. */
   readonly annualMean: Statistic<Drift>;
@@ -50,12 +51,9 @@ export async function storesOf(
 ): Promise<ReadonlyMap<string, RunStores>> {
   const found = new Map<string, RunStores>();
   for (const run of nodesIn(records.nodes, 'runs')) {
-    const { stores, warm_up } = run.fragment;
-    const stated = warm_up ?? records.manifest.data.periods?.warm_up;
-    const warmUp = typeof stated === 'string' ? parsePeriod(stated) : null;
-    if (stores?.file === undefined || warmUp === null) continue;
-    const after = (parseDate(warmUp.last) ?? 0) + 1;
-    found.set(run.name ?? '', await storesOfRun(run, after, records, rain, snapshot));
+    const [warmUp] = daysOf(windowsOfRun(run, records), 'warm-up');
+    if (run.fragment.stores?.file === undefined || warmUp === undefined) continue;
+    found.set(run.name ?? '', await storesOfRun(run, warmUp.lastDay + 1, records, rain, snapshot));
   }
   return found;
 }
@@ -118,11 +116,11 @@ function figuresOf(
     });
     return isDefined(found) ? defined({ ...found.value, years: yearly.length }) : found;
   };
-  const from = series.timeSeconds.findIndex((time) => time >= firstDay * secondsOfDay);
+  const rows = series.timeSeconds.filter((time) => time < firstDay * secondsOfDay).length;
   const after = {
     ...series,
-    timeSeconds: series.timeSeconds.subarray(from < 0 ? series.timeSeconds.length : from),
-    values: series.values.subarray(from < 0 ? series.values.length : from),
+    timeSeconds: series.timeSeconds.subarray(rows),
+    values: series.values.subarray(rows),
   };
   return {
     store,

@@ -183,6 +183,22 @@ describe('no scores, with a reason', () => {
       set: { 'evaluation.outlet-flow.simulated.values': 'runoff' },
       reason: 'expected a column named "runoff"',
     },
+    {
+      name: 'a row of the simulation that can’t be read',
+      files: {
+        'runs/calibrated/daily.csv': (old) => old.replace(/^(2005-07-04(?:,[^,]*){3}),[^,]*/m, '$1,n/a'),
+      },
+      set: {
+        'evaluation.outlet-flow.simulated.values': 'flow_mm',
+        'evaluation.outlet-flow.simulated.unit': 'mm',
+      },
+      reason: 'runs/calibrated/daily.csv line 1374: expected a number in mm',
+    },
+    {
+      name: 'two columns',
+      set: { 'evaluation.outlet-flow.simulated.values': ['flow_m3s', 'flow_mm'] },
+      reason: 'several columns of runs/calibrated/daily.csv',
+    },
     { name: 'no observed input', remove: ['evaluation.outlet-flow.observed'], reason: 'no observed input' },
     { name: 'no file', remove: ['evaluation.outlet-flow.simulated.file'], reason: 'no file is named' },
     {
