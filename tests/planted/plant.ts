@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { parse } from 'yaml';
+import type { Files } from '../harness/check-in-memory.ts';
 
 /** One line of faults.yaml. Its head says what each key means. */
 export interface PlantedFault {
@@ -25,8 +26,6 @@ export function plantedFaults(): readonly PlantedFault[] {
   return parse(readFileSync(new URL('faults.yaml', import.meta.url), 'utf8')) as readonly PlantedFault[];
 }
 
-type Files = Readonly<Record<string, string>>;
-
 /** The files with the fault in them. Throws where it would change nothing. */
 export function plant(fault: PlantedFault, files: Files): Files {
   const { [fault.in]: old, ...others } = files;
@@ -50,26 +49,34 @@ function inText(change: Readonly<Record<string, string>>, text: string): string 
 function inRows(fault: PlantedFault, text: string): string {
   const [head = '', ...rows] = text.trimEnd().split('\n');
   const [from = '', to = from] = (fault.rows ?? '/9999').split('/');
-  const isMeant = (row: string | undefined) => {
-    const time = row?.split(',')[0] ?? '';
+  const isMeant = (row: string) => {
+    const [time = ''] = row.split(',');
     return time >= from && time <= to;
   };
+  if (fault.do === 'swapped') {
+    const place = rows.findIndex(isMeant);
+    rows.splice(place, 2, ...rows.slice(place, place + 2).reverse());
+    return `${[head, ...rows].join('\n')}\n`;
+  }
   const column = fault.column === undefined ? 1 : head.split(',').indexOf(fault.column);
-  const cell = (row: string | undefined) => row?.split(',')[column] ?? '';
-  const write = (row: string, value: string) => row.split(',').with(column, value).join(',');
   const planted = rows.flatMap((row, place): readonly string[] => {
-    if (fault.do === 'swapped')
-      return [isMeant(row) ? rows[place + 1] : isMeant(rows[place - 1]) ? rows[place - 1] : row].flatMap(
-        (one) => one ?? [],
-      );
     if (!isMeant(row)) return [row];
     if (fault.do === 'dropped') return [];
     if (fault.do === 'doubled') return [row, row];
-    if (fault.move !== undefined) return [write(row, cell(rows[place - fault.move] ?? row))];
-    if (fault.write !== undefined) return [write(row, fault.write)];
-    const number = Number(cell(row) || 'none');
-    if (Number.isNaN(number) || number === -9.9) return [row];
-    return [write(row, String(Math.min(number * (fault.times ?? 1), fault.atMost ?? Infinity)))];
+    const from = fault.move === undefined ? row : (rows[place - fault.move] ?? row);
+    const value = from.split(',')[column] ?? '';
+    return [
+      row
+        .split(',')
+        .with(column, fault.write ?? valueFor(fault, value))
+        .join(','),
+    ];
   });
   return `${[head, ...planted].join('\n')}\n`;
+}
+
+/** Codes for missing values stay what they are: blank, NA, and -9.9 in the example's rain. */
+function valueFor({ times = 1, atMost = Number.POSITIVE_INFINITY }: PlantedFault, value: string): string {
+  const number = Number(value || 'none');
+  return Number.isNaN(number) || number === -9.9 ? value : String(Math.min(number * times, atMost));
 }

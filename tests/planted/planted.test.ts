@@ -1,7 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import type { Finding } from '../../src/verdict/finding.ts';
-import { passes } from '../../src/verdict/judge.ts';
-import { above, example, findingsIn, sealedAnew } from './fennock.ts';
+import { blocks, told } from '../harness/check-in-memory.ts';
+import { above, check, example } from './fennock.ts';
 import { type PlantedFault, plant, plantedFaults } from './plant.ts';
 
 const faults = plantedFaults();
@@ -9,11 +8,10 @@ const faults = plantedFaults();
 /** Rules about seals themselves say nothing any more once all is sealed anew. */
 const isOfSeals = ({ rule }: PlantedFault) => rule.startsWith('seal.');
 const changed = ({ changed, record }: PlantedFault) => changed ?? record;
-const blocks = (finding: Finding) => finding.level === 'block' && passes(finding) === null;
 
 describe('the sound example', () => {
   it('has no finding that blocks', async () => {
-    expect(told((await findingsIn(example)).filter(blocks))).toEqual([]);
+    expect(told((await check.findingsIn(example)).filter(blocks))).toEqual([]);
   });
 });
 
@@ -25,7 +23,7 @@ describe('a planted fault is found with its rule and record, though all was seal
 
   it.each(faults)('$fault', async (fault) => {
     const planted = plant(fault, example);
-    const found = await findingsIn(isOfSeals(fault) ? planted : await sealedAnew(planted));
+    const found = await check.findingsIn(isOfSeals(fault) ? planted : await check.sealedAnew(planted));
     const named = found.filter(({ rule, record }) => rule === fault.rule && record === fault.record);
     expect(named, told(found).join('\n')).not.toEqual([]);
     expect(named.map(({ level }) => level)).toEqual(named.map(() => fault.level ?? 'block'));
@@ -44,12 +42,8 @@ describe('a file with a planted fault makes its record stale until that is seale
   const inFiles = faults.filter((fault) => !fault.in.startsWith('stoplog.') && fault.text === undefined);
 
   it.each(inFiles)('$fault', async (fault) => {
-    const found = await findingsIn(plant(fault, example));
+    const found = await check.findingsIn(plant(fault, example));
     const stale = found.filter(({ rule, record }) => rule === 'seal.stale' && record === changed(fault));
     expect(stale).toMatchObject([{ level: 'block', message: expect.stringContaining(fault.in) }]);
   });
 });
-
-function told(found: readonly Finding[]): readonly string[] {
-  return found.map(({ level, rule, record, message }) => `${level} ${rule} ${record}: ${message}`);
-}
