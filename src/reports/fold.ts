@@ -17,39 +17,53 @@ export interface Folded {
   readonly why: string;
 }
 
+/** How many records with one cause are shown one by one: stale ones, and those of one fragment with the same findings. */
+const shownStale = 12;
+const shownAlike = 3;
+
 /**
- * Where one cause makes more than `listed` records stale, or one fragment that stands for many records gives more than that
- * the same findings, the rest are counted, so that three hundred gauges do not hide what happened to them.
+ * Where one cause makes many records stale, or one fragment that stands for many records gives them the same findings, most are
+ * counted, so that three hundred gauges do not hide what happened to them.
  */
-export function fold(
-  groups: readonly Group[],
-  listed: number,
-): { readonly shown: readonly Group[]; readonly folded: readonly Folded[] } {
+export function fold(groups: readonly Group[]): {
+  readonly shown: readonly Group[];
+  readonly folded: readonly Folded[];
+} {
   const shown: Group[] = [];
-  const byCause = new Map<string, { records: string[]; why: string }>();
+  const byCause = new Map<string, { records: string[]; listed: number; why: string }>();
   for (const group of groups) {
     const cause = causeOf(group);
-    const same = byCause.get(cause?.key ?? '') ?? { records: [], why: cause?.why ?? '' };
+    const same = byCause.get(cause?.key ?? '') ?? { records: [], listed: 0, why: '', ...cause };
     if (cause !== null) {
       same.records.push(group[0]);
       byCause.set(cause.key, same);
     }
-    if (cause === null || same.records.length <= listed) shown.push(group);
+    if (cause === null || same.records.length <= same.listed) shown.push(group);
   }
   const folded = [...byCause.values()]
-    .map(({ records, why }) => ({ records: records.slice(listed), why }))
+    .map(({ records, listed, why }) => ({ records: records.slice(listed), why }))
     .filter(({ records }) => records.length > 0);
   return { shown, folded };
 }
 
+interface Cause {
+  readonly key: string;
+  readonly listed: number;
+  readonly why: string;
+}
+
 /** What a record's findings come from, where that may be other records' too; null where they are its own. */
-function causeOf([record, findings]: Group): { readonly key: string; readonly why: string } | null {
+function causeOf([record, findings]: Group): Cause | null {
   const [only] = findings;
   const last = only?.trail.at(-1);
   if (findings.length === 1 && only !== undefined && last !== undefined && only.trail.length > 2)
-    return { key: last, why: `rest on ${last}` };
+    return { key: last, listed: shownStale, why: `rest on ${last}` };
   const [area, name, ...entry] = record.split('.');
   if (only === undefined || entry.length === 0) return null;
   const what = findings.map(({ rule, file, line, trail }) => `${rule} ${file}:${line} ${trail.length}`);
-  return { key: `${area}.${name}\0${what.join()}`, why: `stand in ${area}.${name} and have the same findings` };
+  return {
+    key: `${area}.${name}\0${what.join()}`,
+    listed: shownAlike,
+    why: `stand in ${area}.${name} and have the same findings`,
+  };
 }

@@ -15,8 +15,6 @@ export interface TextOptions {
 const width = 100;
 const indent = ' '.repeat(5);
 const headings: Readonly<Record<Level, string>> = { block: 'BLOCKED', warn: 'WARNED', note: 'NOTED' };
-/** How many records with one cause are shown one by one. */
-const shownPerCause = 12;
 
 /** The verdict for a terminal: what is held back and why, what to do, then the tally. */
 export function textReport(verdict: Verdict, { color, quiet }: TextOptions): string {
@@ -54,7 +52,7 @@ function section(manifest: ManifestVerdict, level: Level, paint: ChalkInstance):
   );
   if (groups.length === 0) return [];
   const tint = { block: paint.red.bold, warn: paint.yellow.bold, note: paint.bold }[level];
-  const { shown, folded } = fold(groups, shownPerCause);
+  const { shown, folded } = fold(groups);
   return [
     '',
     tint(`${headings[level]}   ${count(groups.length, 'record')}`),
