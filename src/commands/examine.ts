@@ -1,5 +1,5 @@
 import { buildFacts } from '../facts/build.ts';
-import type { KnownRules } from '../facts/facts.ts';
+import type { Facts, KnownRules } from '../facts/facts.ts';
 import type { Manifest } from '../manifest/manifest.ts';
 import { readManifest } from '../manifest/read.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
@@ -20,19 +20,36 @@ export interface ExamineOptions {
 
 const known: KnownRules = knownRules();
 
+/** One manifest with its verdict, and what was found out about it; facts are null where it can't be read. */
+export interface ExaminedStudy {
+  readonly facts: Facts | null;
+  readonly verdict: ManifestVerdict;
+}
+
+export interface Examined {
+  readonly studies: readonly ExaminedStudy[];
+  readonly verdict: Verdict;
+}
+
 /** The whole check of one snapshot, from its files to the verdict. */
 export async function examine(snapshot: Snapshot, options: ExamineOptions): Promise<Verdict> {
+  return (await examineWithFacts(snapshot, options)).verdict;
+}
+
+/** The same, with the facts that the verdict rests on. */
+export async function examineWithFacts(snapshot: Snapshot, options: ExamineOptions): Promise<Examined> {
   const all = await readStudies(snapshot);
   const chosen = choose(all, options.only);
-  const manifests: ManifestVerdict[] = [];
+  const studies: ExaminedStudy[] = [];
   for (const study of chosen.studies) {
-    manifests.push(
+    studies.push(
       'problems' in study
-        ? judgeUnread(runFileRules(rules, study), study.path)
+        ? { facts: null, verdict: judgeUnread(runFileRules(rules, study), study.path) }
         : await examineStudy(study, all, snapshot, chosen, options),
     );
   }
-  return concludeVerdict(snapshot.label, null, manifests);
+  const manifests = studies.map(({ verdict }) => verdict);
+  return { studies, verdict: concludeVerdict(snapshot.label, null, manifests) };
 }
 
 async function examineStudy(
@@ -41,7 +58,7 @@ async function examineStudy(
   snapshot: Snapshot,
   chosen: Chosen,
   { today, phase: asked }: ExamineOptions,
-): Promise<ManifestVerdict> {
+): Promise<ExaminedStudy> {
   const phase = asked ?? study.manifest.data.study?.phase ?? 'setup';
   const facts = await buildFacts({
     ...study,
@@ -53,13 +70,16 @@ async function examineStudy(
     claimedElsewhere: ownedByOthers(study, all),
   });
   const raised = runRules(rules, facts).filter(({ draft }) => chosen.includes(draft.record));
-  return judgeManifest(raised, facts, phase, chosen.includes);
+  return { facts, verdict: judgeManifest(raised, facts, phase, chosen.includes) };
 }
 
 /** The manifest as it stood in the commit that this snapshot follows; null where there was none, or none that can be read. */
 async function manifestBefore(manifest: Manifest, snapshot: Snapshot): Promise<Manifest | null> {
   const bytes = await snapshot.readBefore(manifest.path);
-  return bytes === null ? null : readManifest(manifest.path, new TextDecoder().decode(bytes)).manifest;
+  if (bytes === null) return null;
+  const text = new TextDecoder().decode(bytes);
+  // Reading a manifest costs more than the rest of a check, and most commits leave it as it is.
+  return text === manifest.text ? manifest : readManifest(manifest.path, text).manifest;
 }
 
 function ownedByOthers(

@@ -1,0 +1,41 @@
+import type { DossierContent, DossierStudy } from '../dossier/content.ts';
+import { commitDate } from '../repository/commit-date.ts';
+import { ask } from '../repository/git.ts';
+import { openSnapshot } from '../repository/open-snapshot.ts';
+import { openRepository } from '../repository/repository.ts';
+import type { Verdict } from '../verdict/finding.ts';
+import type { Context } from './command.ts';
+import { examineWithFacts } from './examine.ts';
+import { version } from './version.ts';
+
+export interface Gathered {
+  readonly verdict: Verdict;
+  /** Null where a manifest can't be read, so that there is nothing to make a dossier of. */
+  readonly content: DossierContent | null;
+}
+
+/**
+ * Checks a revision as `stoplog check` would have on the day of its commit, and hands on all that was found out while the
+ * revision's content is open.
+ */
+export async function gather<Result>(
+  context: Context,
+  revision: string,
+  use: (gathered: Gathered) => Promise<Result>,
+): Promise<Result> {
+  const repository = await openRepository(context.cwd, context.environment);
+  const commit = await repository.resolve(revision);
+  const committedAt = await ask(repository, commitDate(commit));
+  const snapshot = await openSnapshot(repository, { kind: 'revision', revision: commit });
+  try {
+    const { studies, verdict } = await examineWithFacts(snapshot, { today: committedAt.slice(0, 10) });
+    const read = studies.flatMap(({ facts, verdict }): DossierStudy[] =>
+      facts === null ? [] : [{ facts, verdict }],
+    );
+    const draft = verdict.verdict === 'blocked';
+    const content = { madeBy: version, commit, committedAt, draft, studies: read, verdict, snapshot };
+    return await use({ verdict, content: read.length < studies.length ? null : content });
+  } finally {
+    await snapshot.close();
+  }
+}
