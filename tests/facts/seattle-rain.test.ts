@@ -31,7 +31,7 @@ const input = (file: string, values: string, role: string, unit: string) => ({
   source: {
     provider: 'NOAA',
     title: 'Daily weather of Seattle',
-    url: 'https://www.npmjs.com/package/vega-datasets',
+    url: 'https://github.com/vega/vega-datasets',
     licence: 'LicenseRef-public-domain',
     retrieved: '2021-01-04',
     published_sha256: createHash('sha256').update(text).digest('hex'),

@@ -31,7 +31,7 @@ export const setupChoiceMissing = rule({
           ...about,
           field: [...about.field, index],
           subject: 'thresholds',
-          message: `Nothing says by which thresholds ${chosen} were drawn: least area, bounds of height, size of a cell.`,
+          message: `Nothing says by which thresholds the spatial units (${chosen}) were drawn: least area, bounds of height, size of a cell.`,
           clear: 'Add `thresholds` to the choice, such as {least_area_km2: 2}.',
         };
       }),
