@@ -1,5 +1,9 @@
 import type { KnownRules } from '../facts/facts.ts';
+import { balanceBeyondLimit } from './balance/beyond-limit.ts';
+import { balanceDiffers } from './balance/differs.ts';
 import { balanceMissing } from './balance/missing.ts';
+import { balanceNotClosed } from './balance/not-closed.ts';
+import { balanceStorageUnstated } from './balance/storage-unstated.ts';
 import { evaluationDrop } from './evaluation/drop.ts';
 import { evaluationFewPairs } from './evaluation/few-pairs.ts';
 import { evaluationIdentityBroken } from './evaluation/identity-broken.ts';
@@ -52,9 +56,14 @@ import { modelVersionMissing } from './model/version-missing.ts';
 import { modelVersionVague } from './model/version-vague.ts';
 import { parametersAtBound } from './parameters/at-bound.ts';
 import { parametersChangeDiffers } from './parameters/change-differs.ts';
+import { parametersFileDiffers } from './parameters/file-differs.ts';
+import { parametersImplausible } from './parameters/implausible.ts';
 import { parametersIncomplete } from './parameters/incomplete.ts';
+import { parametersMany } from './parameters/many.ts';
 import { parametersMissing } from './parameters/missing.ts';
+import { parametersOrderBroken } from './parameters/order-broken.ts';
 import { parametersOutOfRange } from './parameters/out-of-range.ts';
+import { parametersSensitivityMissing } from './parameters/sensitivity-missing.ts';
 import { periodsCalibrationMissing } from './periods/calibration-missing.ts';
 import { periodsOneSided } from './periods/one-sided.ts';
 import { periodsOutsideData } from './periods/outside-data.ts';
@@ -92,8 +101,11 @@ import { studyLiteratureMissing } from './study/literature-missing.ts';
 import { studyNeedsMissing } from './study/needs-missing.ts';
 import { studyPhaseBehind } from './study/phase-behind.ts';
 import { studyPurposeMissing } from './study/purpose-missing.ts';
+import { uncertaintyBandBroken } from './uncertainty/band-broken.ts';
 import { uncertaintyBandMissing } from './uncertainty/band-missing.ts';
+import { uncertaintyDiffers } from './uncertainty/differs.ts';
 import { uncertaintySourceUnaddressed } from './uncertainty/source-unaddressed.ts';
+import { uncertaintyWeak } from './uncertainty/weak.ts';
 import { waiverExpired } from './waiver/expired.ts';
 import { waiverUnsigned } from './waiver/unsigned.ts';
 import { waiverUnused } from './waiver/unused.ts';
@@ -170,6 +182,11 @@ export const rules: readonly Rule[] = [
   parametersOutOfRange,
   parametersAtBound,
   parametersChangeDiffers,
+  parametersOrderBroken,
+  parametersImplausible,
+  parametersFileDiffers,
+  parametersMany,
+  parametersSensitivityMissing,
   evaluationMissing,
   evaluationScoreDiffers,
   evaluationIdentityBroken,
@@ -182,12 +199,19 @@ export const rules: readonly Rule[] = [
   evaluationUnseen,
   evaluationFewPairs,
   balanceMissing,
+  balanceDiffers,
+  balanceNotClosed,
+  balanceBeyondLimit,
+  balanceStorageUnstated,
   interventionsUndeclared,
   interventionsUnrepresented,
   interventionsDefaultUnstated,
   interventionsSeasonShifted,
   uncertaintySourceUnaddressed,
   uncertaintyBandMissing,
+  uncertaintyBandBroken,
+  uncertaintyDiffers,
+  uncertaintyWeak,
   runsMissing,
   scenariosConditionsMissing,
   scenariosBeyondRange,

@@ -1,4 +1,5 @@
 import { rule } from '../rule.ts';
+import { placeOf } from './place.ts';
 import { type Searched, searchedParameters } from './searched.ts';
 
 export const parametersAtBound = rule({
@@ -26,21 +27,19 @@ export const parametersAtBound = rule({
       looser: 'higher',
     },
   },
-  check: ({ id, fragment }, _facts, limits) => {
-    const atEnd = searchedParameters(fragment.values ?? []).flatMap((parameter) => {
+  check: (_, { parameters }, limits) => {
+    const atEnd = searchedParameters(parameters.values).flatMap((parameter) => {
       const end = endReached(parameter, limits.at_bound_share ?? 0);
       return end === null ? [] : [{ parameter, end }];
     });
     const several = atEnd.length >= (limits.at_bound_several ?? Number.POSITIVE_INFINITY);
-    return atEnd.map(({ parameter: { name, index, searched, what, low, high, unit }, end }) => ({
-      record: id,
-      field: ['parameters', 'values', index],
-      subject: name,
+    return atEnd.map(({ parameter: { of, searched, what, low, high, unit }, end }) => ({
+      ...placeOf(of),
       stated: `${low} to ${high}`,
       found: searched,
       ...(unit === '' ? {} : { unit }),
       ...(several ? { from: 'calibration' as const } : {}),
-      message: `The ${what} of ${name} stopped at the ${end} end of its range${several ? `, one of ${atEnd.length} that did` : ''}.`,
+      message: `The ${what} of ${of.label} stopped at the ${end} end of its range${several ? `, one of ${atEnd.length} that did` : ''}.`,
     }));
   },
 });

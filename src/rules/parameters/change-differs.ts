@@ -1,6 +1,7 @@
 import { printedInterval, printedNumber } from '../../hydrology/stated/printed-number.ts';
 import type { ParameterValue } from '../../manifest/data.generated.ts';
 import { rule } from '../rule.ts';
+import { placeOf } from './place.ts';
 
 export const parametersChangeDiffers = rule({
   id: 'parameters.change-differs',
@@ -15,12 +16,12 @@ export const parametersChangeDiffers = rule({
       'Arithmetic: set gives `by`, shift initial + by, scale initial x by, within the final value’s decimals.',
   },
   clear: 'Compare with the calibration’s own output and correct the number that is wrong.',
-  check: ({ id, fragment }, { manifest }) =>
-    (fragment.values ?? []).flatMap((parameter, index) => {
+  check: (_, { parameters }) =>
+    parameters.values.flatMap((of) => {
+      const { parameter, written, label } = of;
       const given = changed(parameter);
       if (given === null || parameter.value === undefined) return [];
-      const field = ['parameters', 'values', index];
-      const printed = printedNumber(manifest.source([...field, 'value']) ?? String(parameter.value));
+      const printed = printedNumber(written ?? '');
       if (printed === null) return [];
       const { lowest, highest } = printedInterval(printed);
       // A product of two decimals is rarely exact in binary.
@@ -28,13 +29,11 @@ export const parametersChangeDiffers = rule({
       if (given >= lowest - slack && given <= highest + slack) return [];
       return [
         {
-          record: id,
-          field: [...field, 'value'],
-          subject: parameter.name,
+          ...placeOf(of, 'value'),
           stated: parameter.value,
           found: Number(given.toPrecision(10)),
           ...(parameter.unit === undefined ? {} : { unit: parameter.unit }),
-          message: `Parameter ${parameter.name}: ${arithmetic(parameter)} is not the final value.`,
+          message: `Parameter ${label}: ${arithmetic(parameter)} is not the final value.`,
         },
       ];
     }),

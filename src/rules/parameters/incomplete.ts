@@ -1,30 +1,39 @@
 import type { ParameterValue } from '../../manifest/data.generated.ts';
 import { rule } from '../rule.ts';
 import { isStated } from '../stand-in.ts';
+import { placeOf } from './place.ts';
 
 export const parametersIncomplete = rule({
   id: 'parameters.incomplete',
   scope: 'parameters',
   from: 'calibration',
   means: 'incomplete',
-  statement: 'A parameter lacks its unit, value, way of change, range or the source of its range.',
+  statement:
+    'A parameter lacks its unit, value, way of change, range or the source of its range, or a row of its table can’t be read.',
   why: 'A number without unit and range can’t be judged: nobody sees whether it is physically possible or whether the search stopped at its wall.',
   source: { basis: 'practice', citation: 'Common practice in reporting calibrations.' },
   clear:
     'Fill in what is missing; a parameter that was not calibrated says `calibrated: false` and needs unit and value only.',
-  check: ({ id, fragment }) =>
-    (fragment.values ?? []).flatMap((parameter, index) => {
-      const missing = missingIn(parameter);
+  check: (_, { parameters }) => [
+    ...parameters.unread.map(({ file, line, expected, found }) => ({
+      record: 'parameters',
+      subject: `${file} ${line}`,
+      file,
+      line,
+      message: `A row of the parameter table can’t be read: expected ${expected}, received "${found}".`,
+      clear: 'Correct the row; its columns are named as the keys of a parameter in the manifest.',
+    })),
+    ...parameters.values.flatMap((of) => {
+      const missing = missingIn(of.parameter);
       if (missing.length === 0) return [];
       return [
         {
-          record: id,
-          field: ['parameters', 'values', index],
-          subject: parameter.name,
-          message: `Parameter ${parameter.name} lacks ${missing.join(', ')}.`,
+          ...placeOf(of),
+          message: `Parameter ${of.label} lacks ${missing.join(', ')}.`,
         },
       ];
     }),
+  ],
 });
 
 function missingIn(parameter: ParameterValue): readonly string[] {

@@ -1,4 +1,5 @@
 import { rule } from '../rule.ts';
+import { placeOf } from './place.ts';
 import { searchedParameters } from './searched.ts';
 
 export const parametersOutOfRange = rule({
@@ -11,21 +12,19 @@ export const parametersOutOfRange = rule({
   why: 'The search can’t have found it there: either the value or the range is not the one that was used.',
   source: { basis: 'house', citation: 'Our own choice: both ends of the range belong to it.' },
   clear: 'Correct the value or the range to what the calibration used.',
-  check: ({ id, fragment }) =>
-    searchedParameters(fragment.values ?? []).flatMap(({ name, index, searched, what, low, high, unit }) => {
+  check: (_, { parameters }) =>
+    searchedParameters(parameters.values).flatMap(({ of, searched, what, low, high, unit }) => {
       if (searched >= low && searched <= high) return [];
       return [
         {
-          record: id,
-          field: ['parameters', 'values', index],
-          subject: name,
+          ...placeOf(of),
           stated: `${low} to ${high}`,
           found: searched,
           ...(unit === '' ? {} : { unit }),
           message:
             low > high
-              ? `The range of ${name} ends at ${high}, below its beginning at ${low}.`
-              : `The ${what} of ${name} lies outside its own range.`,
+              ? `The range of ${of.label} ends at ${high}, below its beginning at ${low}.`
+              : `The ${what} of ${of.label} lies outside its own range.`,
         },
       ];
     }),

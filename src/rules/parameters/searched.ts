@@ -1,9 +1,8 @@
-import type { ParameterValue } from '../../manifest/data.generated.ts';
+import type { StatedParameter } from '../../facts/parameters/stated.ts';
 
 /** A calibrated parameter with the number that its range bounds. */
 export interface Searched {
-  readonly name: string;
-  readonly index: number;
+  readonly of: StatedParameter;
   /** The value, or the factor or shift where the range bounds that. */
   readonly searched: number;
   readonly what: string;
@@ -14,21 +13,21 @@ export interface Searched {
 }
 
 /** The parameters whose range and searched number are stated; the range bounds `by` where it says `range_of: factor`. */
-export function searchedParameters(values: readonly ParameterValue[]): readonly Searched[] {
-  return values.flatMap((parameter, index) => {
-    const factor = parameter.range_of === 'factor';
-    const searched = factor ? parameter.by : parameter.value;
-    if (parameter.range === undefined || searched === undefined || parameter.calibrated === false) return [];
-    const [low, high] = parameter.range;
+export function searchedParameters(values: readonly StatedParameter[]): readonly Searched[] {
+  return values.flatMap((of) => {
+    const { range, range_of, by, value, calibrated, change, unit, search } = of.parameter;
+    const factor = range_of === 'factor';
+    const searched = factor ? by : value;
+    if (range === undefined || searched === undefined || calibrated === false) return [];
+    const [low, high] = range;
     return {
-      name: parameter.name,
-      index,
+      of,
       searched,
-      what: factor ? (parameter.change === 'shift' ? 'shift' : 'factor') : 'value',
+      what: factor ? (change === 'shift' ? 'shift' : 'factor') : 'value',
       low,
       high,
-      unit: factor && parameter.change !== 'shift' ? '1' : (parameter.unit ?? ''),
-      logarithmic: parameter.search === 'log',
+      unit: factor && change !== 'shift' ? '1' : (unit ?? ''),
+      logarithmic: search === 'log',
     };
   });
 }
