@@ -5,6 +5,7 @@ import { wrap } from '../reports/wrap.ts';
 import { phases } from '../rules/rule.ts';
 import { checkCommand } from './check.ts';
 import type { Context, ExitStatus } from './command.ts';
+import type { DossierOptions } from './dossier.ts';
 import { hookAdd, hookList, hookRemove } from './hook.ts';
 import { rulesCommand } from './rules.ts';
 import { sealCommand } from './seal.ts';
@@ -72,6 +73,22 @@ function describe(run: Run): Command {
     .option('--moved', 'follow files and records that were renamed, keeping who sealed them and when')
     .option('--only <folder>', 'one manifest’s folder')
     .action(run(sealCommand));
+
+  program
+    .command('dossier')
+    .description('the provenance summary and the package for an archive, or the check of one')
+    .option('--at <revision>', 'of which commit', 'HEAD')
+    .option('--out <path>', 'a new folder, `.zip` or `.tar.gz`; nothing is written over')
+    .option('--bag', 'as a BagIt 1.0 bag, with the study’s files')
+    .option('--draft', 'also where the check blocks; every page then says so')
+    .option('--verify <path>', 'check a dossier or bag: a folder, `.zip` or `.tar.gz`')
+    .action(
+      run(async (context, options: DossierOptions) => {
+        // Charts and archives are not loaded in a hook.
+        const { dossierCommand } = await import('./dossier.ts');
+        return dossierCommand(context, options);
+      }),
+    );
 
   program
     .command('rules')
