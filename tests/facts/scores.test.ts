@@ -254,6 +254,13 @@ describe('the likely cause of a stated score', () => {
     observed: pair.simulated,
     simulated: pair.observed,
   }));
+  const daysMoved = (days: number) => {
+    const moved = [...simulated].map(([date, flow]) => {
+      const other = new Date(Date.parse(date) + days * 86_400_000);
+      return [other.toISOString().slice(0, 10), flow] as const;
+    });
+    return pairsIn(observed, new Map(moved), [windows.calibration]);
+  };
   const months = pairsIn(monthly(observed, 5), monthly(simulated, 0), [windows.calibration]);
 
   const ofPairs: readonly (readonly [string, readonly Pair[], Cause])[] = [
@@ -263,12 +270,21 @@ describe('the likely cause of a stated score', () => {
     ['the whole simulation', days(all), { is: 'whole-simulation' }],
     ['monthly for daily', months, { is: 'other-step', step: 'monthly' }],
     ['observed and simulated swapped', swapped, { is: 'swapped-sides' }],
+    ['a run that is now dated a day early', daysMoved(1), { is: 'other-day', days: 1 }],
+    ['a run that is now dated a day late', daysMoved(-1), { is: 'other-day', days: -1 }],
   ];
   it.each(ofPairs)('%s, on every score', async (_, pairs, cause) => {
     expect(await causesOf(both(pairs))).toEqual([[cause], [cause]]);
   });
   it.each(ofPairs)('%s, on the one that is stated', async (_, pairs, cause) => {
     expect(await causesOf({ nse: plainScores(pairs).nse })).toEqual([[cause]]);
+  });
+
+  it('another unit than is said', async () => {
+    const edits = { set: { 'evaluation.outlet-flow.simulated.unit': 'mm/d' } };
+    expect(await causesOf(both(days(windows.calibration)), edits)).toEqual(
+      Array(2).fill([{ is: 'one-unit', unit: 'm3/s' }]),
+    );
   });
 
   it('daily for monthly', async () => {

@@ -2,7 +2,10 @@ import { errorSampleDeviationRatio } from '../../hydrology/fit/error-sample-devi
 import { isDefined, type Paired, type Statistic } from '../../hydrology/paired.ts';
 import { type ScoreName, scores } from '../../hydrology/scores.ts';
 import { agreesAsPrinted } from '../../hydrology/stated/printed-number.ts';
+import { secondsOfDay } from '../../series/calendar.ts';
+import type { Series } from '../../series/series.ts';
 import { daily, monthly, type Step, sameStep, yearly } from '../../series/step.ts';
+import type { Sides } from './comparable.ts';
 import { daysOf, type Pairable, pairedOver, pairsOf, simulatedDays } from './pairings.ts';
 import type { ScoredWindow, StatedScore } from './stated.ts';
 
@@ -12,7 +15,11 @@ export type Cause =
   | { readonly is: 'whole-simulation' | 'both-windows' | 'incomplete-counted' }
   | { readonly is: 'other-score'; readonly score: ScoreName }
   | { readonly is: 'other-window'; readonly window: ScoredWindow }
-  | { readonly is: 'other-step'; readonly step: 'daily' | 'monthly' | 'annual' };
+  | { readonly is: 'other-step'; readonly step: 'daily' | 'monthly' | 'annual' }
+  /** The simulated series so many days later. */
+  | { readonly is: 'other-day'; readonly days: 1 | -1 }
+  /** Both sides taken to be in this unit, whatever the simulated one is said to be in. */
+  | { readonly is: 'one-unit'; readonly unit: string };
 
 /** Whether a figure is the stated one within its printed decimals. */
 export function fits({ printed }: StatedScore, recomputed: Statistic): boolean {
@@ -135,5 +142,27 @@ function otherPairings(pairable: Pairable, window: ScoredWindow): readonly Try[]
           : paired;
       },
     },
+    ...otherSimulations(sides).map(({ cause, simulated }) => ({
+      cause,
+      pairs: () => pairsOf({ ...pairable, sides: { ...sides, simulated } }, window),
+    })),
+  ];
+}
+
+/** The simulated series dated a day off, or in another unit than is said. */
+function otherSimulations({ observed, simulated }: Sides): readonly { cause: Cause; simulated: Series }[] {
+  const moved = (days: 1 | -1) => ({
+    cause: { is: 'other-day', days } as const,
+    simulated: {
+      ...simulated,
+      timeSeconds: simulated.timeSeconds.map((seconds) => seconds + days * secondsOfDay),
+    },
+  });
+  const { unit } = observed;
+  return [
+    ...(sameStep(observed.step, daily) && sameStep(simulated.step, daily) ? [moved(-1), moved(1)] : []),
+    ...(unit === simulated.unit
+      ? []
+      : [{ cause: { is: 'one-unit', unit } as const, simulated: { ...simulated, unit } }]),
   ];
 }

@@ -28,6 +28,10 @@ function inWords(cause: Cause): string {
       return 'the figure of the whole simulation, warm-up and all';
     case 'other-step':
       return `the figure of ${cause.step} values`;
+    case 'other-day':
+      return `what comes out with the simulated series moved a day ${cause.days > 0 ? 'later' : 'earlier'}, as if one of the two were dated a day off`;
+    case 'one-unit':
+      return `what comes out when the simulated values are taken to be in ${cause.unit} like the observed ones, as if one of the two units were wrong`;
     case 'incomplete-counted':
       return 'what comes out when months or years with days missing are counted too';
   }
