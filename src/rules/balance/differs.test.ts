@@ -13,7 +13,8 @@ ruleCases(balanceDiffers, {
         field: 'balance.catchment.stated.runoff_ratio',
         stated: 0.48,
         found: 0.469638,
-        message: 'The runoff ratio of the water balance of catchment is stated as 0.48; the files give 0.469638.',
+        message:
+          'The runoff ratio of the water balance of catchment is stated as 0.48; the files give 0.469638.',
         level: 'block',
       },
     },
@@ -61,7 +62,10 @@ ruleCases(balanceDiffers, {
     },
     {
       name: 'a window that begins with the file',
-      set: { 'balance.catchment.over': '2001-10-01/2005-09-30', 'periods.warm_up': { zero_because: 'settled' } },
+      set: {
+        'balance.catchment.over': '2001-10-01/2005-09-30',
+        'periods.warm_up': { zero_because: 'settled' },
+      },
       finds: { message: 'what was stored before is not known (`storage_before`)' },
     },
     {
@@ -71,7 +75,9 @@ ruleCases(balanceDiffers, {
     },
     {
       name: 'a volume besides the catchment without its flows',
-      set: { 'balance.soil': { run: 'calibrated', file: daily, time: 'date', outflow: { evaporation: 'et_mm' } } },
+      set: {
+        'balance.soil': { run: 'calibrated', file: daily, time: 'date', outflow: { evaporation: 'et_mm' } },
+      },
       finds: { record: 'balance.soil', message: 'it names no inflow' },
     },
   ],

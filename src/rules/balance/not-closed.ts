@@ -39,7 +39,9 @@ export const balanceNotClosed = rule({
     const most = limits.residual_share ?? 0;
     const { residualMm: residual, inflowMm: inflow, residualShare: share } = balance;
     const about = { record: record.id, field: record.field, unit: '1' };
-    const size = isDefined(share) ? Math.abs(share.value) : residual === 0 ? 0 : Number.POSITIVE_INFINITY;
+    // In a window without inflow, what flows out is all there is to compare with.
+    const whole = inflow > 0 ? inflow : balance.outflowMm;
+    const size = whole > 0 ? Math.abs(residual) / whole : 0;
     if (size > Math.min(most, limits.residual_share_warned ?? 0)) {
       const amount = `${figure(Math.abs(residual))}${withUnit(balance)}`;
       const part = isDefined(share) ? ` (${figure(100 * size)} %)` : '';
