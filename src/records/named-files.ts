@@ -78,9 +78,8 @@ export function filesNamedBy(statement: Statement, stated: Stated): readonly Nam
     }
     case 'evaluation': {
       const { simulated, scores } = statement.fragment;
-      // A table of many targets is no target's own.
-      const shared = statement.field.at(-1) === statement.name ? 'own' : 'read';
-      return [...given(simulated, at('simulated')), ...tabled(scores?.table, at('scores', 'table'), shared)];
+      // A table may hold the scores of many targets, so it is no target's own.
+      return [...given(simulated, at('simulated')), ...tabled(scores?.table, at('scores', 'table'), 'read')];
     }
     case 'balance':
       return given(statement.fragment, at());

@@ -65,7 +65,10 @@ ruleCases(scenariosBeyondJointly, {
         [1050, 1.5],
         [950, 2.5],
       ]),
-      finds: { subject: 'joint', message: '2 of 3 years of scenario dry that lie inside' },
+      finds: {
+        subject: 'joint',
+        message: '2 of 3 years of scenario dry lie inside the calibrated range of every driver',
+      },
     },
     {
       name: 'a corner outside the hull that the distance alone lets pass',

@@ -23,7 +23,7 @@ export const scenariosBeyondJointly = rule({
     joint_years_share: {
       default: 0.2,
       unit: '1',
-      states: 'share of the scenario’s years inside every range that may lie outside the joint domain',
+      states: 'share of a scenario’s years that may lie inside every range and outside the joint domain',
       looser: 'higher',
     },
   },
@@ -45,10 +45,9 @@ export const scenariosBeyondJointly = rule({
       ];
     }
     const { mean, years, drivers, calibratedYears } = joint.value;
-    const inRange = years.filter(({ isInEveryRange }) => isInEveryRange);
-    const beyond = inRange.filter(isBeyond);
+    const beyond = years.filter((year) => year.isInEveryRange && isBeyond(year));
     const isMeanBeyond = mean.isInEveryRange && (isBeyond(mean) || hullOf(mean) > 0);
-    if (!isMeanBeyond && beyond.length <= joint_years_share * Math.max(1, inRange.length)) return [];
+    if (!isMeanBeyond && beyond.length <= joint_years_share * years.length) return [];
     const together = drivers.map((driver) => driver.replaceAll('_', ' ')).join(' and ');
     return [
       {
@@ -56,7 +55,7 @@ export const scenariosBeyondJointly = rule({
         subject: 'joint',
         message: isMeanBeyond
           ? `In its mean, scenario ${name} lies inside the calibrated range of every driver, but the combination of ${together} lies outside of what calibration held.`
-          : `${beyond.length} of ${inRange.length} years of scenario ${name} that lie inside the calibrated range of every driver combine ${together} as no calibrated year does.`,
+          : `${beyond.length} of ${years.length} years of scenario ${name} lie inside the calibrated range of every driver, but combine ${together} as no calibrated year does.`,
         detail: [
           `${calibratedYears} calibrated years; mean of the scenario: ${inWords(mean)}`,
           ...(beyond.length > 0 ? [`years: ${few(beyond.map(ofYear), 4)}`] : []),

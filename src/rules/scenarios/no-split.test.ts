@@ -25,6 +25,12 @@ ruleCases(scenariosNoSplit, {
   ],
   silent: [
     {
+      name: 'other land under the rain of the study itself',
+      set: {
+        'scenarios.cases.dry.drivers.annual_rainfall': { input: 'rainfall', over: '2006-10-01/2008-09-30' },
+      },
+    },
+    {
       name: 'a differential split-sample test is recorded',
       files: drier,
       set: { 'evaluation.outlet-flow.split_test': 'differential' },

@@ -28,7 +28,10 @@ export const scenariosNoSplit = rule({
     return [...(facts.scenarios.cases.get(record.id)?.drivers ?? [])].flatMap(([name, { figures }]) => {
       const calibrated = facts.scenarios.conditions.get(name)?.figures;
       if (calibrated === undefined || !isDefined(calibrated) || !isDefined(figures)) return [];
-      if (!isAnnualRain(name, record, facts)) return [];
+      // The rain of the study itself is no other climate.
+      const { input } = facts.manifest.data.scenarios?.conditions?.[name] ?? {};
+      const isSame = input !== undefined && record.fragment.drivers?.[name]?.input === input;
+      if (isSame || !isAnnualRain(name, record, facts)) return [];
       const { labels, values } = calibrated.value;
       const classes = wetnessClasses({ years: labels.map(Number), totals: values });
       if (!isDefined(classes)) return [];
