@@ -46,6 +46,20 @@ ruleCases(parametersAtBound, {
       },
       finds: { subject: 'soil_capacity' },
     },
+    {
+      name: 'in a table, searched in logarithms',
+      set: { 'parameters.table': 'calibration/parameters.csv' },
+      files: {
+        'calibration/parameters.csv':
+          'name,unit,value,range_low,range_high,search\nksat,mm/h,1.03,1,1000,log\n',
+      },
+      finds: {
+        file: 'calibration/parameters.csv',
+        line: 2,
+        subject: 'ksat',
+        message: 'The value of ksat stopped at the lower end',
+      },
+    },
   ],
   silent: [
     { name: 'just inside', set: { [value(0)]: 53.6 } },

@@ -41,6 +41,22 @@ ruleCases(parametersChangeDiffers, {
       },
       finds: { subject: 'leakage', stated: 5e-9, found: 4e-9 },
     },
+    {
+      // 8 x 1.5 = 12, and 13.0 says 12.95 to 13.05.
+      name: 'one layer of a table',
+      set: { 'parameters.table': 'calibration/parameters.csv' },
+      files: {
+        'calibration/parameters.csv':
+          'name,layer,change,initial,by,value\nksat,1,scale,20,1.5,30\nksat,2,scale,8,1.5,13.0\n',
+      },
+      finds: {
+        file: 'calibration/parameters.csv',
+        line: 3,
+        subject: 'ksat (layer 2)',
+        stated: 13,
+        found: 12,
+      },
+    },
   ],
   silent: [
     // 0.9 stands for 0.85 to 0.95.

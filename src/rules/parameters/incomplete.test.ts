@@ -27,6 +27,29 @@ ruleCases(parametersIncomplete, {
       remove: [`${first}.value`],
       finds: { message: 'lacks value.' },
     },
+    {
+      name: 'a row of a table without unit and range',
+      set: { 'parameters.table': 'calibration/parameters.csv' },
+      files: { 'calibration/parameters.csv': 'name,change,value,unit\nksat,set,12,\n' },
+      finds: {
+        file: 'calibration/parameters.csv',
+        line: 2,
+        field: 'parameters.table',
+        subject: 'ksat',
+        message: 'Parameter ksat lacks unit, range, source of its range (`range_from`).',
+      },
+    },
+    ...[
+      ['name,value\nksat,twelve\n', 'expected a number in `value`, received "twelve"'],
+      ['name,change\nksat,double\n', 'expected set, shift, scale in `change`, received "double"'],
+      ['name,value\n,12\n', 'expected a parameter’s name, received ""'],
+      ['parameter,value\nksat,12\n', 'received "no column `name`"'],
+    ].map(([table = '', message = '']) => ({
+      name: `a row that can’t be read: ${table.split('\n')[1]}`,
+      set: { 'parameters.table': 'calibration/parameters.csv' },
+      files: { 'calibration/parameters.csv': table },
+      finds: { file: 'calibration/parameters.csv', line: 2, message },
+    })),
   ],
   silent: [
     {

@@ -36,6 +36,14 @@ ruleCases(parametersOutOfRange, {
       set: { [`${first}.range`]: [400, 50] },
       finds: { message: 'ends at 50, below its beginning at 400' },
     },
+    {
+      name: 'in a table with decimal commas',
+      set: {
+        'parameters.table': { file: 'calibration/parameters.csv', separator: 'semicolon', decimal: 'comma' },
+      },
+      files: { 'calibration/parameters.csv': 'name;unit;value;range_low;range_high\nn;1;0,9;0,01;0,2\n' },
+      finds: { file: 'calibration/parameters.csv', line: 2, subject: 'n', stated: '0.01 to 0.2', found: 0.9 },
+    },
   ],
   silent: [
     { name: 'on an end', set: { [`${first}.value`]: 400 } },
