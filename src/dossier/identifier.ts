@@ -13,7 +13,7 @@ export function dossierIdentifier({ commit, studies }: DossierContent): string {
   return uuidOf(JSON.stringify(['stoplog dossier 1', commit, records]));
 }
 
-function uuidOf(text: string): string {
+export function uuidOf(text: string): string {
   const bytes = createHash('sha256').update(text).digest().subarray(0, 16);
   bytes[6] = ((bytes[6] ?? 0) & 0x0f) | 0x80;
   bytes[8] = ((bytes[8] ?? 0) & 0x3f) | 0x80;
