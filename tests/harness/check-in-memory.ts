@@ -32,13 +32,13 @@ export class CheckInMemory {
 
   /** The one study in the files; null where its manifest can't be read. */
   async studyIn(files: Files): Promise<Study | null> {
-    const [study] = await readStudies(this.snapshotOf(files));
-    return study === undefined || 'problems' in study ? null : study;
+    return studyOf(this.snapshotOf(files));
   }
 
   /** The files with a seal of every record as it stands, by an invented reviewer; as they are where nothing can be sealed. */
   async sealedAnew(files: Files): Promise<Files> {
-    const study = await this.studyIn(files);
+    const snapshot = this.snapshotOf(files);
+    const study = await studyOf(snapshot);
     if (study === null) return files;
     const { seals } = makeSeals({
       ...study,
@@ -46,7 +46,7 @@ export class CheckInMemory {
       because: 'sealed by a test',
       person: 'Test Reviewer <reviewer@eastmoor.example>',
       today: this.today,
-      evidence: await evidenceFor(study, this.snapshotOf(files)),
+      evidence: await evidenceFor(study, snapshot),
     });
     return { ...files, 'stoplog.seals.json': writeSealsFile(seals) };
   }
@@ -62,6 +62,11 @@ export class CheckInMemory {
       readBefore: (path) => committed.read(path),
     };
   }
+}
+
+async function studyOf(snapshot: Snapshot): Promise<Study | null> {
+  const [study] = await readStudies(snapshot);
+  return study === undefined || 'problems' in study ? null : study;
 }
 
 /** Whether a finding holds the commit back. */

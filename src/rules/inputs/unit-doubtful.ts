@@ -154,7 +154,7 @@ function beyondAir({ files }: InputProfile, unit: string): readonly Doubt[] {
       return [
         {
           found: beyond.value,
-          message: `${path} has ${beyond.value} ${unit} on ${beyond.time} (line ${beyond.line}); no air was ever measured so ${beyond.value * factor + offset > airDegC.highest ? 'hot' : 'cold'}. Kelvin or degrees Fahrenheit may be meant.`,
+          message: `${path} has ${beyond.value} ${unit} on ${beyond.time} (line ${beyond.line}); no air was ever measured so ${beyond.value * factor + offset > airDegC.highest ? 'hot' : 'cold'}. Kelvin, degrees Fahrenheit or tenths of a degree may be meant.`,
         },
       ];
     }
