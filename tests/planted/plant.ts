@@ -13,6 +13,8 @@ export interface PlantedFault {
   readonly write?: string;
   readonly atMost?: number;
   readonly move?: number;
+  readonly leak?: number;
+  readonly into?: string;
   readonly do?: 'removed' | 'dropped' | 'doubled' | 'swapped';
   readonly text?: string;
   readonly rule: string;
@@ -59,6 +61,8 @@ function inRows(fault: PlantedFault, text: string): string {
     return `${[head, ...rows].join('\n')}\n`;
   }
   const column = fault.column === undefined ? 1 : head.split(',').indexOf(fault.column);
+  if (fault.leak !== undefined)
+    return leaking(text, column, head.split(',').indexOf(fault.into ?? ''), fault.leak);
   const planted = rows.flatMap((row, place): readonly string[] => {
     if (!isMeant(row)) return [row];
     if (fault.do === 'dropped') return [];
@@ -73,6 +77,18 @@ function inRows(fault: PlantedFault, text: string): string {
     ];
   });
   return `${[head, ...planted].join('\n')}\n`;
+}
+
+/** A flow from which so much is lost on every step, and a store in which what is lost adds up. */
+function leaking(text: string, from: number, into: number, leak: number): string {
+  let lost = 0;
+  return text.replace(/^\d.*$/gm, (row) => {
+    lost += leak;
+    const cells = row.split(',');
+    const less = (Number(cells[from]) - leak).toFixed(4);
+    const more = (Number(cells[into]) + lost).toFixed(4);
+    return cells.with(from, less).with(into, more).join(',');
+  });
 }
 
 /** Codes for missing values stay what they are: blank, NA, and -9.9 in the example's rain. */

@@ -66,7 +66,7 @@ function statedOrder(order: Order, index: number, values: readonly StatedParamet
         drafts.push({
           ...pair(low, high),
           field,
-          message: `${low.label} is ${told(low)}, ${equals(low, high) ? 'as much as' : 'above'} ${high.label} with ${told(high)}. The record says: ${states ?? rising.join(' < ')}`,
+          message: `${low.label} is ${told(low)}, ${equals(low, high) ? 'as much as' : 'above'} ${high.label} with ${told(high)}. The record says: ${(states ?? rising.join(' < ')).replace(/\.$/, '')}.`,
         });
       }
   return drafts;
