@@ -8,6 +8,7 @@ export default defineConfig({
     hookTimeout: 60_000,
     // Loading all rooms anew for every file costs more than most of the tests.
     isolate: false,
+    maxWorkers: '100%',
     reporters: ['default', './tests/closing-line.ts'],
   },
 });
