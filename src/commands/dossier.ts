@@ -1,11 +1,12 @@
 import { resolve } from 'node:path';
 import { writePackage } from '../dossier/archive/write-package.ts';
-import type { DossierContent, DossierFile } from '../dossier/content.ts';
+import type { DossierContent } from '../dossier/content.ts';
 import { packageFiles } from '../dossier/package/package-files.ts';
 import { Failure } from '../failure.ts';
 import { textReport } from '../reports/text.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { type Gathered, gather } from './gather.ts';
+import { verifyDossier } from './verify-dossier.ts';
 
 export interface DossierOptions {
   readonly at: string;
@@ -17,12 +18,13 @@ export interface DossierOptions {
 
 /** `stoplog dossier`: 0 when it was written or is valid, 1 when it was refused or is not. */
 export async function dossierCommand(context: Context, options: DossierOptions): Promise<ExitStatus> {
-  const { out, at } = options;
+  const { verify, out, at } = options;
+  if (verify !== undefined) return verifyDossier(context, verify);
   if (out !== undefined) return gather(context, at, (gathered) => make(context, options, out, gathered));
   throw new Failure(
     'usage',
-    '`stoplog dossier` needs to know where to write.',
-    'Make one: stoplog dossier --out dossier.zip (or a .tar.gz, or a folder).',
+    '`stoplog dossier` needs to know where to write, or what to verify.',
+    'Make one: stoplog dossier --out dossier.zip (or a .tar.gz, or a folder). Verify one: stoplog dossier --verify dossier.zip',
   );
 }
 
@@ -37,7 +39,7 @@ async function make(
     context.write(`\nNo dossier was written: ${refusal(content)}\n`);
     return 1;
   }
-  const prepared = await packageFiles(content, await documentsOf(content), bag === true);
+  const prepared = await packageFiles(content, bag === true);
   if (prepared.files === null) {
     context.write(`No dossier was written: these names can’t be unpacked everywhere.\n`);
     for (const problem of prepared.problems) context.write(`  ${problem}\n`);
@@ -51,10 +53,6 @@ async function make(
   );
   context.write(`Verify it: stoplog dossier --verify ${out}\n`);
   return 0;
-}
-
-async function documentsOf(_content: DossierContent): Promise<readonly DossierFile[]> {
-  return [];
 }
 
 function refusal(content: DossierContent | null): string {

@@ -19,8 +19,8 @@ export interface ContentsRecord {
   readonly manifest: string;
   readonly id: string;
   readonly state: State;
-  /** SHA-256 of what it states, its files and what it rests on. */
-  readonly digest: string;
+  /** SHA-256 of what it states, its files and what it rests on; null for a record that is missing. */
+  readonly digest: string | null;
 }
 
 export interface ContentsFile {
@@ -62,7 +62,7 @@ export function contentsDocument(content: DossierContent, payload: Payload, bagg
     records: content.studies.flatMap(({ facts, verdict }) =>
       verdict.records.map(({ id, state }) => ({
         ...{ manifest: verdict.path, id, state },
-        digest: facts.records.nodes.get(id)?.digest ?? '',
+        digest: facts.records.nodes.get(id)?.digest || null,
       })),
     ),
     files: files.sort((a, b) => (a.path < b.path ? -1 : 1)),

@@ -2,7 +2,8 @@ import { bagFiles } from '../bag/bag-files.ts';
 import { portabilityProblems } from '../bag/portable-names.ts';
 import type { DossierContent, DossierFile } from '../content.ts';
 import { contentsDocument } from '../contents.ts';
-import { crateName, payloadPath } from '../layout.ts';
+import { payloadPath } from '../layout.ts';
+import { crateDocument, machineDocuments } from '../machine/index.ts';
 import { payloadOf } from '../payload.ts';
 import type { PackedFile } from './packed-file.ts';
 import { plainFiles } from './plain-files.ts';
@@ -13,21 +14,17 @@ export type Prepared =
   | { readonly files: null; readonly problems: readonly string[] };
 
 /** The dossier's documents alone, or with `bagged` in a bag with the study's files. */
-export async function packageFiles(
-  content: DossierContent,
-  documents: readonly DossierFile[],
-  bagged: boolean,
-): Promise<Prepared> {
+export async function packageFiles(content: DossierContent, bagged: boolean): Promise<Prepared> {
   const payload = await payloadOf(content);
-  const contents = contentsDocument(content, payload, bagged);
-  if (!bagged) {
-    // A crate describes files that lie beside it.
-    const alone = documents.filter(({ path }) => path !== crateName);
-    return { files: plainFiles([...alone, contents]), problems: [] };
-  }
+  const documents: readonly DossierFile[] = [
+    ...machineDocuments(content),
+    contentsDocument(content, payload, bagged),
+  ];
+  if (!bagged) return { files: plainFiles(documents), problems: [] };
   const paths = [...payload.files, ...payload.fetched].map(({ path }) => payloadPath(path));
   const problems = portabilityProblems(paths);
-  return problems.length > 0
-    ? { files: null, problems }
-    : { files: bagFiles(content, payload, [...documents, contents]), problems: [] };
+  if (problems.length > 0) return { files: null, problems };
+  // A crate describes files that lie beside it, so only a bag has one.
+  const withCrate = [...documents, crateDocument(content, payload, documents)];
+  return { files: bagFiles(content, payload, withCrate), problems: [] };
 }
