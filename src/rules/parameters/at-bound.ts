@@ -1,3 +1,5 @@
+import { isDefined } from '../../hydrology/paired.ts';
+import { boundPosition } from '../../hydrology/parameters/bound-position.ts';
 import { rule } from '../rule.ts';
 import { placeOf } from './place.ts';
 import { type Searched, searchedParameters } from './searched.ts';
@@ -45,10 +47,18 @@ export const parametersAtBound = rule({
 });
 
 /** Which end the value stopped at; null inside, outside (another rule), and for a range of no width (a fixed value). */
-function endReached({ searched, low, high, logarithmic }: Searched, share: number): 'lower' | 'upper' | null {
-  if (!(low < high) || searched < low || searched > high) return null;
-  const scale = logarithmic && low > 0 ? Math.log : (value: number) => value;
-  const place = (scale(searched) - scale(low)) / (scale(high) - scale(low));
-  if (place <= share) return 'lower';
-  return place >= 1 - share ? 'upper' : null;
+function endReached(
+  { searched, low, high, logarithmic }: Searched,
+  tolerance: number,
+): 'lower' | 'upper' | null {
+  const position = boundPosition({
+    value: searched,
+    lower: low,
+    upper: high,
+    tolerance,
+    logarithmic: logarithmic && low > 0,
+  });
+  if (!isDefined(position)) return null;
+  const { state } = position.value;
+  return state === 'at lower bound' ? 'lower' : state === 'at upper bound' ? 'upper' : null;
 }

@@ -57,6 +57,11 @@ ruleCases(parametersChangeDiffers, {
         found: 12,
       },
     },
+    {
+      name: 'a factor of zero',
+      set: { 'parameters.values.1.by': 0 },
+      finds: { stated: 0.9, found: 0, message: '1 scaled by 0 is not the final value' },
+    },
   ],
   silent: [
     // 0.9 stands for 0.85 to 0.95.

@@ -1,3 +1,5 @@
+import { isDefined } from '../../hydrology/paired.ts';
+import { changedValue } from '../../hydrology/parameters/changed-value.ts';
 import { printedInterval, printedNumber } from '../../hydrology/stated/printed-number.ts';
 import type { ParameterValue } from '../../manifest/data.generated.ts';
 import { rule } from '../rule.ts';
@@ -40,10 +42,10 @@ export const parametersChangeDiffers = rule({
 });
 
 function changed({ change, initial, by }: ParameterValue): number | null {
-  if (by === undefined) return null;
-  if (change === 'set') return by;
-  if (initial === undefined) return null;
-  return change === 'shift' ? initial + by : change === 'scale' ? initial * by : null;
+  if (change === undefined || by === undefined || (change !== 'set' && initial === undefined)) return null;
+  const given = changedValue({ change, initial: initial ?? 0, by });
+  // A factor of zero leaves nothing.
+  return isDefined(given) ? given.value : 0;
 }
 
 function arithmetic({ change, initial, by }: ParameterValue): string {

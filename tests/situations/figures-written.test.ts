@@ -1,0 +1,32 @@
+import { afterEach, expect, it } from 'vitest';
+import { check, stoplog } from '../harness/command.ts';
+import { type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
+
+let project: SoundRepository;
+afterEach(() => project.remove());
+
+it('writes the figures of balance and band that a new run gives, and is content with them', async () => {
+  project = await soundRepository();
+  // Everything that flows out is less by a tenth in the last year, and so is the band.
+  const tenthLess = (columns: readonly number[]) => (text: string) =>
+    text.replace(/^20(?:09-1[0-2]|10-).*$/gm, (row) =>
+      row
+        .split(',')
+        .map((cell, place) => (columns.includes(place) ? (Number(cell) * 0.9).toFixed(4) : cell))
+        .join(','),
+    );
+  await project.edit('runs/calibrated/daily.csv', tenthLess([4]));
+  await project.edit('runs/calibrated/band.csv', tenthLess([1, 2]));
+  const stale = (await check(project.folder)).blocking;
+  expect(stale).toEqual(
+    expect.arrayContaining(['balance.differs balance.catchment', 'uncertainty.differs uncertainty']),
+  );
+
+  const { text } = await stoplog(project.folder, ['seal', '--all', '--figures']);
+  expect(text).toContain('balance.catchment.stated.runoff_ratio');
+  expect(text).toContain('uncertainty.bands.outlet-flow.stated.coverage');
+  const manifest = await project.read('stoplog.yaml');
+  expect(manifest).toMatch(/stated: \{ residual_share: 0\.\d{4}, runoff_ratio: 0\.46\d \}/);
+  expect(manifest).toMatch(/stated: \{ coverage: 0\.\d\d, relative_width: 0\.\d\d \}/);
+  expect((await check(project.folder)).blocking.filter((one) => one.includes('.differs'))).toEqual([]);
+});
