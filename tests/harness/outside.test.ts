@@ -1,5 +1,5 @@
 import { afterEach, expect, it, vi } from 'vitest';
-import { outside } from './outside.ts';
+import { outside, outsidePackage } from './outside.ts';
 
 afterEach(() => {
   vi.unstubAllEnvs();
@@ -18,4 +18,14 @@ it('says why a tool cannot be used, or fails where it is asked for', () => {
   expect(outside('git', ['no-such-command']).available).toBe(false);
   vi.stubEnv('STOPLOG_REQUIRE_OUTSIDE', '1');
   expect(() => outside('no-such-tool')).toThrow(/no-such-tool could not be started/);
+});
+
+it('finds a package of tests/validators, or says that it is not there', () => {
+  vi.stubEnv('STOPLOG_REQUIRE_OUTSIDE', undefined);
+  expect(outsidePackage('no-such-package')).toMatchObject({
+    available: false,
+    reason: 'the package no-such-package is not installed in tests/validators',
+  });
+  vi.stubEnv('STOPLOG_REQUIRE_OUTSIDE', '1');
+  expect(() => outsidePackage('no-such-package')).toThrow(/no-such-package is not installed/);
 });

@@ -1,4 +1,6 @@
 import { spawnSync } from 'node:child_process';
+import { existsSync } from 'node:fs';
+import { join } from 'node:path';
 
 /** Whether an outside tool that a test checks us against is here, and why not. */
 export interface Outside {
@@ -14,7 +16,21 @@ export interface Outside {
 export function outside(tool: string, args: readonly string[] = ['--version']): Outside {
   const tried = spawnSync(tool, args, { stdio: 'ignore' });
   if (tried.error === undefined && tried.status === 0) return { available: true, reason: '' };
-  const reason = `${tool} could not be started here (${tried.error?.message ?? `status ${tried.status}`})`;
+  return absent(`${tool} could not be started here (${tried.error?.message ?? `status ${tried.status}`})`);
+}
+
+/** Where the packages of tests/validators lie. */
+const packages = join(import.meta.dirname, '../validators/node_modules');
+
+/** Looks for a package of tests/validators, which `npm test` does not install; `folder` is where it lies. */
+export function outsidePackage(name: string): Outside & { readonly folder: string } {
+  const folder = join(packages, name);
+  const found = existsSync(join(folder, 'package.json'));
+  const reason = `the package ${name} is not installed in tests/validators`;
+  return { folder, ...(found ? { available: true, reason: '' } : absent(reason)) };
+}
+
+function absent(reason: string): Outside {
   if (process.env.STOPLOG_REQUIRE_OUTSIDE === '1') {
     throw new Error(`${reason}, and STOPLOG_REQUIRE_OUTSIDE=1 asks for it.`);
   }

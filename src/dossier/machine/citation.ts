@@ -29,7 +29,12 @@ export function citation(content: DossierContent): string {
     keywords: keywordsOf(content),
     ...licence(licencesOf(content)),
   };
-  return stringify(whole, { defaultStringType: 'QUOTE_DOUBLE', defaultKeyType: 'PLAIN', lineWidth: 0 });
+  return stringify(whole, {
+    defaultStringType: 'QUOTE_DOUBLE',
+    defaultKeyType: 'PLAIN',
+    lineWidth: 0,
+    doubleQuotedMinMultiLineLength: Number.MAX_SAFE_INTEGER,
+  });
 }
 
 function author({ name, email, orcid, url }: Party): object {

@@ -5,7 +5,7 @@ import type { ComparedFigure } from '../../facts/stated-figure.ts';
 import { isDefined, type Statistic } from '../../hydrology/paired.ts';
 import { formatDate, type Window } from '../../series/calendar.ts';
 
-/** A computed number to twelve digits, which every machine gives alike, or why there is none. */
+/** A computed number to twelve digits, or why there is none. */
 type Figure = number | { readonly undefined: string };
 
 /** What was computed about a study, by the names that its manifest gives. */
@@ -139,8 +139,9 @@ function figure(statistic: Statistic): Figure {
   return isDefined(statistic) ? rounded(statistic.value) : statistic;
 }
 
+/** Further digits, and what lies below 1e-12, are the arithmetic's own and need not be the same on every machine. */
 function rounded(value: number): number {
-  return Number(value.toPrecision(12));
+  return Math.abs(value) < 1e-12 ? 0 : Number(value.toPrecision(12));
 }
 
 function span(days: Window | null): string | null {

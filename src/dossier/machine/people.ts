@@ -1,6 +1,7 @@
 import type { Contact } from '../../manifest/data.generated.ts';
 import type { DossierContent, DossierStudy } from '../content.ts';
 import { idOf } from './identifier.ts';
+import { oneLine } from './telling.ts';
 
 /** A person or body that a dossier names. */
 export interface Party {
@@ -43,9 +44,8 @@ export function sealerOf(sealedBy: string): Party {
 }
 
 function partyOf(contact: Contact): readonly Party[] {
-  return contact.name === undefined || contact.name.trim() === ''
-    ? []
-    : [party({ ...contact, name: contact.name })];
+  const name = oneLine(contact.name ?? '');
+  return name === '' ? [] : [party({ ...contact, name })];
 }
 
 interface Named extends Omit<Contact, 'name' | 'email'> {

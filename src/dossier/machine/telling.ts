@@ -8,14 +8,20 @@ export function titleOf(content: DossierContent): string {
 
 export function titleOfStudy({ facts, verdict }: DossierStudy): string {
   const { study, catchment } = facts.manifest.data;
-  return study?.title ?? study?.id ?? catchment?.name ?? `Catchment model in ${verdict.path}`;
+  const named = [study?.title, study?.id, catchment?.name].map((text) => oneLine(text ?? ''));
+  return named.find((text) => text !== '') ?? `Catchment model in ${oneLine(verdict.path)}`;
+}
+
+/** A text without line breaks and control characters, which some archives' formats can't hold. */
+export function oneLine(text: string): string {
+  return text.replace(/[\s\p{Cc}]+/gu, ' ').trim();
 }
 
 /** What the studies are for, and what state their records are in. */
 export function descriptionOf({ studies, commit, draft, verdict }: DossierContent): string {
   const purposes = studies.flatMap(({ facts }) => {
     const { purpose, decision } = facts.manifest.data.study ?? {};
-    return [purpose, decision].filter((text) => text !== undefined);
+    return [purpose, decision].flatMap((text) => (text === undefined ? [] : oneLine(text)));
   });
   const { records, sound } = verdict.totals;
   return [

@@ -1,4 +1,4 @@
-import { cpSync, mkdirSync, writeFileSync } from 'node:fs';
+import { cpSync, mkdirSync, rmSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { gather } from '../../../src/commands/gather.ts';
 import type { DossierContent, DossierFile } from '../../../src/dossier/content.ts';
@@ -168,11 +168,17 @@ let awkward: Promise<Project> | undefined;
 
 /** Made once for all test files; the repositories lie in a temporary folder. */
 export function theExample(): Promise<Project> {
-  example ??= exampleProject().then(projectOf);
+  example ??= exampleProject().then(kept);
   return example;
 }
 
 export function theAwkward(): Promise<Project> {
-  awkward ??= awkwardProject().then(projectOf);
+  awkward ??= awkwardProject().then(kept);
   return awkward;
+}
+
+/** Removed when the last test file is through. */
+function kept(repository: TemporaryRepository): Promise<Project> {
+  process.on('exit', () => rmSync(repository.folder, { recursive: true, force: true }));
+  return projectOf(repository);
 }

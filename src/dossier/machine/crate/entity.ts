@@ -20,18 +20,12 @@ export function referTo(entities: readonly Reference[]): Reference | readonly Re
   return more.length === 0 ? first : ids.map((id) => ({ '@id': id }));
 }
 
-/** A text, where there is one; JSON-LD has no use for an empty one. */
-export function textOrNone(text: string | undefined): string | undefined {
-  return text === undefined || text.trim() === '' ? undefined : text;
+/** A path as an identifier: URI-encoded, but letters of all scripts stay as they are. Source: RO-Crate 1.2, "Data Entities". */
+export function idOfPath(path: string): string {
+  return path.replace(/[^A-Za-z0-9\-._~!$&'()*+,;=:@/\p{L}\p{M}\p{N}]/gu, (sign) => encodeURIComponent(sign));
 }
 
-/**
- * A path as an identifier: URI-encoded, but letters of all scripts stay as they are. Source: RO-Crate 1.2, "Data Entities";
- * RFC 3987 section 2.2 for the characters that an IRI may hold.
- */
-export function idOfPath(path: string): string {
-  return path.replace(
-    /[^A-Za-z0-9\-._~!$&'()*+,;=:@/\u00a0-\ud7ff\uf900-\ufdcf\ufdf0-\uffef\u{10000}-\u{dffff}]|[\u2028\u2029\u200e\u200f\u202a-\u202e\u00a0\u2000-\u200a\u3000\ufffe\uffff]/gu,
-    (sign) => encodeURIComponent(sign),
-  );
+/** An absolute address as an identifier: without the signs that browsers allow in an address and an IRI must not have. */
+export function idOfAddress(address: string): string {
+  return new URL(address).href.replace(/[\s"<>\\^`{|}]/g, (sign) => encodeURIComponent(sign));
 }

@@ -5,7 +5,7 @@ import type { Payload } from '../../payload.ts';
 import { recordedFiles } from '../files-of.ts';
 import { idOf } from '../identifier.ts';
 import { mediaTypeOf } from '../media-type.ts';
-import { type Entity, idOfPath } from './entity.ts';
+import { type Entity, idOfAddress, idOfPath } from './entity.ts';
 
 /** The files of a crate. Those in `parts` lie in it or download from their address; the others are described only. */
 export interface FileEntities {
@@ -33,21 +33,16 @@ export function fileEntities(
     byPath.set(path, entity);
     parts.push(entity);
   }
+  // Several paths may be fetched from one address: one entity stands for them.
+  const addresses = new Map<string, Entity>();
   for (const { path, sha256, bytes, url } of payload.fetched) {
-    const known = parts.find((entity) => entity['@id'] === url);
-    const entity =
-      known ??
-      fileEntity(url, path, {
-        sha256,
-        bytes,
-        description: uses.get(path),
-        url,
-        localPath: payloadPath(path),
-        sdDatePublished: content.committedAt,
-      });
+    const told = { sha256, bytes, description: uses.get(path), url, localPath: payloadPath(path) };
+    const sdDatePublished = content.committedAt;
+    const entity = addresses.get(url) ?? fileEntity(idOfAddress(url), path, { ...told, sdDatePublished });
+    addresses.set(url, entity);
     byPath.set(path, entity);
-    if (known === undefined) parts.push(entity);
   }
+  parts.push(...addresses.values());
   for (const { path, sha256, bytes, why, location } of payload.absent) {
     const kept = location === null ? '' : ` It is kept at: ${location}.`;
     const description = [uses.get(path), `Not in this package: ${why}.${kept}`].filter(Boolean).join('. ');

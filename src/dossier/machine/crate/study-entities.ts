@@ -2,7 +2,7 @@ import type { DossierStudy } from '../../content.ts';
 import { doiAddress } from '../doi.ts';
 import { idOf } from '../identifier.ts';
 import { licenceUrl } from '../licence.ts';
-import type { Entity } from './entity.ts';
+import { type Entity, idOfAddress } from './entity.ts';
 
 /** A licence; where none is stated, that nothing is granted. */
 export function licenceEntity(name: string | undefined): Entity {
@@ -56,7 +56,7 @@ export function literatureEntities({ facts }: DossierStudy): readonly Entity[] {
     const name = cites ?? doi ?? url;
     if (name === undefined) return [];
     const address = doi === undefined ? url : doiAddress(doi);
-    const id = address !== undefined && URL.canParse(address) ? new URL(address).href : undefined;
+    const id = address !== undefined && URL.canParse(address) ? idOfAddress(address) : undefined;
     return [{ '@id': id ?? `#citation-${idOf('citation', name)}`, '@type': 'CreativeWork', name }];
   });
 }

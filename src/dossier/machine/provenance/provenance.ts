@@ -28,7 +28,7 @@ export function provenance(content: DossierContent): object {
     for (const [record, { seal }] of study.facts.standings)
       if (seal !== null) stateSeal(record, seal, study, statements);
   }
-  stateCheck(content, [...files.values()], statements);
+  stateCheck(content, files, statements);
   return { prefix, ...statements.grouped() };
 }
 
@@ -171,10 +171,11 @@ function stateParty({ uuid, name, email }: Party, statements: Statements): strin
 
 /** Stoplog read the files as they are in the commit. When it did so is not told: the same commit gives the same bytes. */
 function stateCheck(
-  { commit, madeBy, verdict }: DossierContent,
-  files: readonly string[],
+  content: DossierContent,
+  files: ReadonlyMap<string, string>,
   statements: Statements,
 ): void {
+  const { commit, madeBy, verdict } = content;
   const tool = statements.add('agent', idOf('stoplog', madeBy), {
     'prov:type': typed('prov:SoftwareAgent'),
     'prov:label': `Stoplog ${madeBy}`,
@@ -189,7 +190,11 @@ function stateCheck(
   });
   statements.relate('wasAssociatedWith', { 'prov:activity': activity, 'prov:agent': tool });
   statements.relate('wasGeneratedBy', { 'prov:entity': entity, 'prov:activity': activity });
-  for (const file of files) statements.relate('used', { 'prov:activity': activity, 'prov:entity': file });
+  for (const { path, isHere } of recordedFiles(content)) {
+    const file = files.get(path);
+    if (isHere && file !== undefined)
+      statements.relate('used', { 'prov:activity': activity, 'prov:entity': file });
+  }
 }
 
 function wholeDay(date: string | undefined): object {
