@@ -1,38 +1,32 @@
+import { isDefined } from '../hydrology/paired.ts';
 import type { RecordNode } from '../records/record.ts';
 import { type StatedCondition, statedConditions, statedDrivers } from './conditions/stated.ts';
 import type { Facts } from './facts.ts';
 import type { Figure } from './figures.ts';
 import { nodesIn } from './nodes-in.ts';
+import { figuresOf } from './stated-figure.ts';
 
 /** Digits that count in a figure that is not stated yet. */
 const usualDigits = 4;
 
-/**
- * Figures of conditions and drivers that the files give otherwise, and those of all that state none. Conditions belong to the
- * first scenario; a case that stands for many records has no place for one's figures.
- */
-export function conditionFigures(
+/** What `seal --figures` writes of conditions, which belong to the first scenario, and of drivers. */
+export function conditionFiguresToWrite(
   facts: Pick<Facts, 'records' | 'manifest' | 'scenarios'>,
 ): readonly Figure[] {
   const cases = nodesIn(facts.records.nodes, 'scenarios');
   const [first] = cases;
   if (first === undefined) return [];
   return [
-    ...toWrite(first, statedConditions(facts)),
-    ...cases.flatMap((one) => (one.field.at(-1) === one.name ? toWrite(one, statedDrivers(one, facts)) : [])),
+    // No fragment of many records states a condition.
+    ...statedConditions(facts).flatMap((one) => toWrite({ ...first, name: null }, one)),
+    ...cases.flatMap((node) => statedDrivers(node, facts).flatMap((one) => toWrite(node, one))),
   ];
 }
 
-function toWrite({ id }: RecordNode, all: readonly StatedCondition[]): readonly Figure[] {
-  const says = new Set(all.flatMap(({ of, name, stated }) => (stated === null ? [] : `${of} ${name}`)));
-  return all.flatMap(({ of, name, field, stated, found, agrees }) => {
-    if (found === null || agrees || (stated === null && says.has(`${of} ${name}`))) return [];
-    const decimals = stated?.decimals ?? usualDigits - 1 - Math.floor(Math.log10(Math.abs(found) || 1));
-    return {
-      record: id,
-      field,
-      stated: stated?.value ?? null,
-      found: Number(found.toFixed(Math.min(20, Math.max(0, decimals)))),
-    };
+function toWrite(node: RecordNode, { field, compared, found }: StatedCondition): readonly Figure[] {
+  const usual = [...found].flatMap(([key, figure]) => {
+    const size = isDefined(figure) ? Math.floor(Math.log10(Math.abs(figure.value) || 1)) : 0;
+    return [[key, Math.max(0, usualDigits - 1 - size)] as const];
   });
+  return figuresOf(node, field, compared, found, Object.fromEntries(usual));
 }

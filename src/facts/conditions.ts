@@ -19,6 +19,7 @@ import { type ConditionSource, sourceOf } from './conditions/source.ts';
 import { daysOfCondition, daysOfDriver } from './conditions/windows.ts';
 import type { Unusable } from './input.ts';
 import { nodesIn } from './nodes-in.ts';
+import type { Days } from './over.ts';
 import { remembered } from './remembered.ts';
 
 /** What a condition or a driver was. */
@@ -84,14 +85,15 @@ interface Source {
 async function measure(
   stated: Condition | Driver,
   condition: Condition,
-  days: Pick<Making, 'windows' | 'leftOut'>,
+  days: Statistic<Days>,
   records: Records,
   snapshot: Snapshot,
 ): Promise<Measured> {
+  if (!isDefined(days)) return { figures: days, isHere: true, series: { ...days, isAway: false } };
   const { data } = records.manifest;
   const { by = 'year', total = false, unit } = condition;
   const making: Making = {
-    ...days,
+    ...days.value,
     by,
     total,
     yearBegins: yearBeginsOf(data),

@@ -8,7 +8,7 @@ import { parseDate } from '../series/calendar.ts';
 import { balancesOf, balancesVersion, type VolumeFigures } from './balances.ts';
 import { bandsOf, bandsVersion } from './bands.ts';
 import { conditionVersion } from './conditions/figures.ts';
-import { type StatedCondition, statedConditions, statedDrivers } from './conditions/stated.ts';
+import { statedConditions, statedDrivers } from './conditions/stated.ts';
 import { scenariosOf } from './conditions.ts';
 import type { Facts } from './facts.ts';
 import { missingShares } from './missing-shares.ts';
@@ -151,14 +151,10 @@ function comparedFacts(
 function ofScenario(record: RecordNode<'scenarios'>, computed: Computed): Evidence {
   const drivers = statedDrivers(record, computed);
   const against = new Set(drivers.map(({ name }) => name));
-  const all: readonly StatedCondition[] = [
-    ...statedConditions(computed).filter(({ name }) => against.has(name)),
-    ...drivers,
-  ];
-  const facts: Record<string, Evidence['facts'][string]> = {};
-  for (const { of, name, key, found } of all)
-    if (found !== null) facts[`${of} ${name} ${key}`] = { value: found, computed_by: conditionVersion };
-  const stated = all.filter((one) => one.stated !== null);
-  const isProven = stated.length > 0 && stated.every(({ agrees }) => agrees);
-  return { facts, grade: isProven ? 'recomputed' : 'sealed' };
+  const all = [...statedConditions(computed).filter(({ name }) => against.has(name)), ...drivers];
+  const facts = all.map(({ of, name, compared }) =>
+    comparedFacts(compared, `${of} ${name}.`, conditionVersion),
+  );
+  const isProven = allAgree(all.flatMap(({ compared }) => compared));
+  return { facts: Object.assign({}, ...facts), grade: isProven ? 'recomputed' : 'sealed' };
 }

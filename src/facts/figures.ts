@@ -1,7 +1,7 @@
 import type { FieldPath } from '../manifest/manifest.ts';
 import { balanceFiguresToWrite } from './balances.ts';
 import { bandFiguresToWrite } from './bands.ts';
-import { conditionFigures } from './condition-figures.ts';
+import { conditionFiguresToWrite } from './condition-figures.ts';
 import type { Facts } from './facts.ts';
 import { missingShareFigures } from './missing-shares.ts';
 import { scoreFigures } from './score-figures.ts';
@@ -23,6 +23,6 @@ export function figuresToWrite(facts: Facts): readonly Figure[] {
     ...scoreFigures(facts),
     ...balanceFiguresToWrite(facts),
     ...bandFiguresToWrite(facts),
-    ...conditionFigures(facts),
+    ...conditionFiguresToWrite(facts),
   ];
 }

@@ -1,4 +1,6 @@
-import { type StatedCondition, statedConditions, statedDrivers } from '../../facts/conditions/stated.ts';
+import { statedConditions, statedDrivers } from '../../facts/conditions/stated.ts';
+import { isDefined } from '../../hydrology/paired.ts';
+import { asPrinted } from '../evaluation/score-names.ts';
 import { rule } from '../rule.ts';
 import { firstCase } from './first-case.ts';
 
@@ -20,23 +22,23 @@ export const scenariosConditionsDiffer = rule({
     const conditions = statedConditions(facts).filter(
       ({ name }) => firstCase(name, facts.records) === record.id,
     );
-    const unit = (name: string) => facts.manifest.data.scenarios?.conditions?.[name]?.unit;
-    return [...conditions, ...statedDrivers(record, facts)].flatMap((one: StatedCondition) => {
-      const { name, of, key, field, stated, found, agrees } = one;
-      if (stated === null || found === null || agrees) return [];
-      const shown = Number(found.toFixed(Math.min(20, Math.max(0, stated.decimals + 1))));
+    return [...conditions, ...statedDrivers(record, facts)].flatMap(({ name, of, compared }) => {
       const whose = of === 'condition' ? 'during calibration' : `in scenario ${record.name}`;
-      const what = key === 'mean' ? 'mean' : `${key} value`;
-      const ofUnit = unit(name);
-      return {
-        record: record.id,
-        field,
-        subject: `${of} ${name} ${key}`,
-        stated: stated.value,
-        found: shown,
-        ...(ofUnit === undefined ? {} : { unit: ofUnit }),
-        message: `The ${what} of ${name.replaceAll('_', ' ')} ${whose} is stated as ${stated.value.toFixed(Math.max(0, stated.decimals))}; the files give ${shown}.`,
-      };
+      const { unit } = facts.manifest.data.scenarios?.conditions?.[name] ?? {};
+      return compared.flatMap(({ name: key, field, printed, recomputed, agrees }) => {
+        // That nothing can be computed has a rule of its own.
+        if (agrees || !isDefined(recomputed)) return [];
+        const found = Number(asPrinted({ value: recomputed.value, decimals: printed.decimals + 1 }));
+        return {
+          record: record.id,
+          field,
+          subject: `${of} ${name} ${key}`,
+          stated: printed.value,
+          found,
+          ...(unit === undefined ? {} : { unit }),
+          message: `The ${key === 'mean' ? key : `${key} value`} of ${name.replaceAll('_', ' ')} ${whose} is stated as ${asPrinted(printed)}; the files give ${found}.`,
+        };
+      });
     });
   },
 });
