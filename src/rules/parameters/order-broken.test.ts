@@ -71,7 +71,7 @@ ruleCases(parametersOrderBroken, {
         layered('valley', 2, 8, -1, -8),
         layered('hill', 1, 30, -1, -30),
       ),
-      finds: { message: 'turned the order of ksat in 2 pairs of layers and units' },
+      finds: { message: 'turned the order of ksat in 2 layers and units' },
     },
     {
       name: 'values that were set, where the record says that their order is kept',
