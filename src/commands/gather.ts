@@ -1,4 +1,5 @@
 import type { DossierContent, DossierStudy } from '../dossier/content.ts';
+import { ownFrameworks } from '../dossier/frameworks/own.ts';
 import { commitDate } from '../repository/commit-date.ts';
 import { ask } from '../repository/git.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
@@ -29,9 +30,11 @@ export async function gather<Result>(
   const snapshot = await openSnapshot(repository, { kind: 'revision', revision: commit });
   try {
     const { studies, verdict } = await examineWithFacts(snapshot, { today: committedAt.slice(0, 10) });
-    const read = studies.flatMap(({ facts, verdict }): DossierStudy[] =>
-      facts === null ? [] : [{ facts, verdict }],
-    );
+    const read: DossierStudy[] = [];
+    for (const { facts, verdict } of studies) {
+      if (facts === null) continue;
+      read.push({ facts, verdict, frameworks: await ownFrameworks(snapshot, facts.manifest.folder) });
+    }
     const draft = verdict.verdict === 'blocked';
     const content = { madeBy: version, commit, committedAt, draft, studies: read, verdict, snapshot };
     return await use({ verdict, content: read.length < studies.length ? null : content });

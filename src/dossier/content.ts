@@ -1,12 +1,15 @@
 import type { Facts } from '../facts/facts.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import type { ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import type { Framework } from './frameworks/framework.ts';
 
 /** One manifest of the revision with everything that was found out about it. */
 export interface DossierStudy {
   /** Manifest, records, standings, profiles, scores, readings and what else was computed. */
   readonly facts: Facts;
   readonly verdict: ManifestVerdict;
+  /** Frameworks that the group keeps beside the manifest, for the crosswalk. */
+  readonly frameworks: readonly Framework[];
 }
 
 /** All that a dossier is made of. Dates are the commit's: the same revision gives the same bytes. */

@@ -22,12 +22,9 @@ export interface Answer extends Pick<RecordSummary, 'state' | 'grade'> {
   readonly fields: readonly string[];
 }
 
-/** Where a study answers each element of each framework. */
-export function crosswalksOf(
-  study: DossierStudy,
-  frameworks: readonly Framework[] = published,
-): readonly Crosswalk[] {
-  return frameworks.map(({ elements, ...framework }) => ({
+/** Where a study answers each element of the published frameworks, and of those of its own. */
+export function crosswalksOf(study: DossierStudy): readonly Crosswalk[] {
+  return [...published, ...study.frameworks].map(({ elements, ...framework }) => ({
     ...framework,
     elements: elements.map(({ answered_by, ...element }) => ({
       ...element,

@@ -4,7 +4,7 @@ import { createRequire } from 'node:module';
 import { tmpdir } from 'node:os';
 import { join, relative } from 'node:path';
 import { afterEach, beforeAll, describe, expect, it } from 'vitest';
-import { commandLine } from '../../../src/dossier/machine/crate/run-entities.ts';
+import { commandLine } from '../../../src/dossier/machine/command-line.ts';
 import { outside, outsidePackage } from '../../harness/outside.ts';
 import { awkwardNames, type Json, type Project, theAwkward, theExample, writeCrate } from './projects.ts';
 
@@ -250,7 +250,7 @@ describe('what a crate says', () => {
   it('of a command, so that a shell takes it as it was', () => {
     const start = ['node', "it's", 'a\\b', '$HOME', ''] as const;
     expect(commandLine({ start: [...start], folder: 'model' })).toBe(
-      `node 'it'\\\\''s' 'a\\\\b' '$HOME' '' (in model)`,
+      `node 'it'\\''s' 'a\\b' '$HOME' '' (in model)`,
     );
   });
 });

@@ -2,7 +2,6 @@ import { readFileSync } from 'node:fs';
 import { Ajv2020 } from 'ajv/dist/2020.js';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { frameworks } from '../../../src/dossier/frameworks/index.ts';
-import { crosswalksOf } from '../../../src/dossier/machine/crosswalk.ts';
 import { areas } from '../../../src/records/record.ts';
 import {
   awkwardNames,
@@ -133,9 +132,7 @@ describe('crosswalk.json', () => {
     });
   });
 
-  it('takes a framework of a group’s own', () => {
-    const [study] = example.content.studies;
-    if (study === undefined) throw new Error('no study');
+  it('takes the frameworks that a group keeps beside its manifest, and says where one can’t be read', async () => {
     const own = {
       name: 'Office check list',
       source: 'Northmere Catchment Office (2020), invented',
@@ -143,7 +140,25 @@ describe('crosswalk.json', () => {
         { id: '1', title: 'Where is the outlet?', answered_by: ['catchment.outlet', 'catchment.area.value'] },
       ],
     };
-    expect(crosswalksOf(study, [own])[0]?.elements[0]?.answers).toEqual([
+    const unknown = { id: '2', title: 'What colour?', answered_by: ['colour.of_water'] };
+    const repository = await exampleProject({
+      'office.framework.json': JSON.stringify(own),
+      'wrong.framework.json': JSON.stringify({ ...own, elements: [...own.elements, unknown] }),
+      'text.framework.json': 'elements: none',
+      'deeper/other.framework.json': JSON.stringify(own),
+    });
+    const project = await projectOf(repository);
+    await repository.remove();
+    const [, , ...more] = project.json('crosswalk.json').studies[0].frameworks;
+    expect(more.map(({ name, note }: Json) => [name, note])).toEqual([
+      ['Office check list', undefined],
+      ['text.framework.json', 'Not read: it is no JSON.'],
+      [
+        'wrong.framework.json',
+        expect.stringContaining('Not read: `elements[1]`: `colour.of_water` begins with no area'),
+      ],
+    ]);
+    expect(more[0].elements[0].answers).toEqual([
       { record: 'catchment', fields: ['outlet', 'area.value'], state: 'sound', grade: 'sealed' },
     ]);
   });

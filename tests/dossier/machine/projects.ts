@@ -49,10 +49,11 @@ export async function projectOf(repository: TemporaryRepository): Promise<Projec
   });
 }
 
-/** The example project in a repository of its own. */
-export async function exampleProject(): Promise<TemporaryRepository> {
+/** The example project in a repository of its own, with further files. */
+export async function exampleProject(more: Record<string, string> = {}): Promise<TemporaryRepository> {
   const repository = await temporaryRepository();
   cpSync(join(import.meta.dirname, '../../../example-project'), repository.folder, { recursive: true });
+  for (const [path, content] of Object.entries(more)) await repository.write(path, content);
   await commitAll(repository);
   return repository;
 }

@@ -1,4 +1,5 @@
 import type { DossierStudy } from '../../content.ts';
+import { commandLine } from '../command-line.ts';
 import { filesOfRun, runsOf } from '../files-of.ts';
 import { idOf } from '../identifier.ts';
 import { authorsOf } from '../people.ts';
@@ -43,22 +44,6 @@ export function runEntities(
     };
   });
   return { actions, software };
-}
-
-/** The words of a command as a POSIX shell takes them; backslashes doubled. Undefined where no command is stated. */
-export function commandLine({
-  start,
-  folder,
-}: {
-  readonly start?: readonly string[];
-  readonly folder?: string;
-}): string | undefined {
-  if (start === undefined) return undefined;
-  const words = start.map((word) =>
-    /^[\w@%+=:,./-]+$/.test(word) ? word : `'${word.replaceAll("'", "'\\''")}'`,
-  );
-  const where = folder === undefined ? '' : ` (in ${folder})`;
-  return `${words.join(' ')}${where}`.replaceAll('\\', '\\\\');
 }
 
 /** The model first, then the runtime that it needs. */

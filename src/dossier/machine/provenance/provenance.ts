@@ -2,7 +2,7 @@ import { isDate } from '../../../manifest/period.ts';
 import type { RecordNode } from '../../../records/record.ts';
 import type { Seal } from '../../../records/seal.ts';
 import type { DossierContent, DossierStudy } from '../../content.ts';
-import { commandLine } from '../crate/run-entities.ts';
+import { commandLine } from '../command-line.ts';
 import { filesElsewhere, filesOfRun, recordedFiles, runsOf, sealedPath } from '../files-of.ts';
 import { idOf } from '../identifier.ts';
 import { type Party, sealerOf } from '../people.ts';
