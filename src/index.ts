@@ -9,4 +9,13 @@ export { openSnapshot } from './repository/open-snapshot.ts';
 export { openRepository } from './repository/repository.ts';
 export type { At, Snapshot } from './repository/snapshot.ts';
 export { rules } from './rules/index.ts';
-export type { Finding, Level, ManifestVerdict, State, Totals, Verdict } from './verdict/finding.ts';
+export type {
+  Comparison,
+  Cured,
+  Finding,
+  Level,
+  ManifestVerdict,
+  State,
+  Totals,
+  Verdict,
+} from './verdict/finding.ts';

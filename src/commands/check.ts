@@ -4,16 +4,21 @@ import { jsonReport } from '../reports/json.ts';
 import { textReport } from '../reports/text.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
 import { openRepository } from '../repository/repository.ts';
-import type { At } from '../repository/snapshot.ts';
+import type { At, Snapshot } from '../repository/snapshot.ts';
 import type { Phase } from '../rules/rule.ts';
 import type { Verdict } from '../verdict/finding.ts';
+import { openBase } from './base.ts';
 import type { Context, ExitStatus } from './command.ts';
-import { examine } from './examine.ts';
+import { type Against, examine } from './examine.ts';
 import { stoplogFiles } from './studies.ts';
+import { touchesGoverned } from './touched.ts';
 import { writeFileSafely } from './write-file.ts';
 
 export interface CheckOptions {
   readonly at: string;
+  readonly base?: string;
+  readonly strict?: boolean;
+  readonly ifTouched?: boolean;
   readonly only?: string;
   readonly phase?: Phase;
   readonly report?: readonly string[];
@@ -39,12 +44,18 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
     alsoUntracked: stoplogFiles,
     remember: options.cache,
   });
+  let against: Against | undefined;
   try {
-    const verdict = await examine(snapshot, {
-      today: context.today,
-      only: options.only,
-      phase: options.phase,
-    });
+    const { base: asked, strict = false, cache } = options;
+    if (asked !== undefined) {
+      against = { asked, strict, ...(await openBase(repository, asked, snapshot, cache)) };
+    }
+    if (options.ifTouched && !(await touchesGoverned(snapshot, against?.base ?? null))) {
+      if (!options.quiet) context.write(untouched(snapshot, against?.base ?? null));
+      return 0;
+    }
+    const { only, phase } = options;
+    const verdict = await examine(snapshot, { today: context.today, only, phase, against });
     for (const { kind, to } of reports) {
       const text = write(kind, verdict, options, to === '-' && context.color);
       if (to === '-') context.write(text);
@@ -52,8 +63,15 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
     }
     return verdict.verdict === 'pass' ? 0 : 1;
   } finally {
+    await against?.base?.close();
     await snapshot.close();
   }
+}
+
+function untouched({ label }: Snapshot, base: Snapshot | null): string {
+  return base === null
+    ? `stoplog   ${label} holds no manifest, so there is nothing to check\n`
+    : `stoplog   nothing that a manifest governs differs between ${base.label} and ${label}\n`;
 }
 
 /** `worktree`, `index`, or anything else as a revision. */

@@ -54,6 +54,12 @@ function describe(run: Run): Command {
     .command('check')
     .description('check the records against the files: the main job')
     .option('--at <content>', '`worktree`, `index` (what is staged), or a revision', 'worktree')
+    .option(
+      '--base <revision>',
+      'only what is new since this content left that revision blocks; the rest is listed',
+    )
+    .option('--strict', 'what the base had already blocks too')
+    .option('--if-touched', 'pass at once where nothing that a manifest governs differs from the base')
     .option('--only <what>', 'one record, one area (such as `inputs`), or one manifest’s folder')
     .addOption(new Option('--phase <phase>', 'judge as if the study had come this far').choices(phases))
     .option('--report <kind=path>', '`text` or `json`, to a file or to `-`; may be repeated', collect)

@@ -1,14 +1,16 @@
 import { buildFacts } from '../facts/build.ts';
 import type { Facts, KnownRules } from '../facts/facts.ts';
+import { Failure } from '../failure.ts';
 import type { Manifest } from '../manifest/manifest.ts';
 import { readManifest } from '../manifest/read.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { knownRules, rules } from '../rules/index.ts';
 import type { Phase } from '../rules/rule.ts';
 import { runFileRules, runRules } from '../rules/run.ts';
-import type { ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import { againstBase, type Judged } from '../verdict/against-base.ts';
+import type { Comparison, ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { concludeVerdict, judgeManifest, judgeUnread } from '../verdict/judge.ts';
-import { type Chosen, choose } from './only.ts';
+import { type Chosen, choose, pathOf } from './only.ts';
 import { readStudies, type Study, type Unread } from './studies.ts';
 
 export interface ExamineOptions {
@@ -16,6 +18,13 @@ export interface ExamineOptions {
   readonly only?: string | undefined;
   /** Judge as if the study had come this far, whatever the manifest says. */
   readonly phase?: Phase | undefined;
+  readonly against?: Against | undefined;
+}
+
+/** What a state is compared with. */
+export interface Against extends Pick<Comparison, 'asked' | 'strict' | 'unavailable'> {
+  /** The state of the base; null where there is none to be had. */
+  readonly base: Snapshot | null;
 }
 
 const known: KnownRules = knownRules();
@@ -36,20 +45,67 @@ export async function examine(snapshot: Snapshot, options: ExamineOptions): Prom
   return (await examineWithFacts(snapshot, options)).verdict;
 }
 
-/** The same, with the facts that the verdict rests on. */
+/** The same, with the facts that the verdict rests on. A base is examined in the same way, on its own. */
 export async function examineWithFacts(snapshot: Snapshot, options: ExamineOptions): Promise<Examined> {
+  const { against, only } = options;
   const all = await readStudies(snapshot);
-  const chosen = choose(all, options.only);
+  const chosen = choose(all, only);
+  const base = against?.base ?? null;
+  const before = base === null ? [] : await examineBase(base, options);
+  // What this state is compared with takes the place of the commit that it follows.
+  const seen = base === null ? snapshot : { ...snapshot, readBefore: (path: string) => base.read(path) };
   const studies: ExaminedStudy[] = [];
   for (const study of chosen.studies) {
-    studies.push(
+    const examined =
       'problems' in study
         ? { facts: null, verdict: judgeUnread(runFileRules(rules, study), study.path) }
-        : await examineStudy(study, all, snapshot, chosen, options),
+        : await examineStudy(study, all, seen, chosen, options);
+    const same = before.find(({ verdict }) => verdict.path === examined.verdict.path);
+    studies.push(
+      same === undefined
+        ? examined
+        : { ...examined, verdict: againstBase(judged(examined), judged(same), chosen.includes) },
     );
   }
+  const comparison =
+    against === undefined ? null : compared(against, before, only === undefined ? all : null);
   const manifests = studies.map(({ verdict }) => verdict);
-  return { studies, verdict: concludeVerdict(snapshot.label, null, manifests) };
+  return { studies, verdict: concludeVerdict(snapshot.label, base?.label ?? null, manifests, comparison) };
+}
+
+/** Of a base without any manifest nothing is known, and all that is found since is new. */
+async function examineBase(
+  base: Snapshot,
+  { today, phase }: ExamineOptions,
+): Promise<readonly ExaminedStudy[]> {
+  try {
+    return (await examineWithFacts(base, { today, phase })).studies;
+  } catch (error) {
+    if (error instanceof Failure && error.code === 'no-manifest') return [];
+    throw error;
+  }
+}
+
+function judged({ facts, verdict }: ExaminedStudy): Judged {
+  const nodes = [...(facts?.records.nodes.values() ?? [])];
+  return { verdict, digests: new Map(nodes.map(({ id, digest }) => [id, digest])) };
+}
+
+/** `all` is null where only some of what is there was asked about. */
+function compared(
+  { asked, strict, unavailable, base }: Against,
+  before: readonly ExaminedStudy[],
+  all: readonly (Study | Unread)[] | null,
+): Comparison {
+  const notes = before.flatMap(({ facts, verdict: { path } }) => [
+    ...(all === null || all.some((study) => pathOf(study) === path)
+      ? []
+      : [`${path} is gone since ${base?.label}: the model that it governed is no longer checked.`]),
+    ...(facts === null
+      ? [`${path} could not be read in ${base?.label}, so all that is found in it counts as new.`]
+      : []),
+  ]);
+  return { asked, strict, unavailable, notes };
 }
 
 async function examineStudy(

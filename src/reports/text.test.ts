@@ -46,6 +46,7 @@ function verdictOf(findings: readonly Finding[], over: Partial<ManifestVerdict> 
       })),
       findings,
       departures: [],
+      cured: [],
       ...over,
     },
   ]);

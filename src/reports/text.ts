@@ -1,6 +1,6 @@
 import { Chalk, type ChalkInstance } from 'chalk';
-import type { Finding, Level, ManifestVerdict, Verdict } from '../verdict/finding.ts';
-import { passes } from '../verdict/judge.ts';
+import type { Cured, Finding, Level, ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import { counts, passes } from '../verdict/judge.ts';
 import { caution } from './caution.ts';
 import { plain } from './escape.ts';
 import { fold, type Group, groupByRecord } from './fold.ts';
@@ -24,12 +24,14 @@ export function textReport(verdict: Verdict, { color, quiet }: TextOptions): str
   const lines = verdict.manifests.flatMap((manifest, index) => [
     ...(index > 0 ? [''] : []),
     ...opening(verdict, manifest, index === 0 ? paint.bold('stoplog') : ' '.repeat(7)),
-    ...levels.flatMap((level) => section(manifest, level, paint)),
-    ...(quiet ? [] : answered(manifest)),
+    ...sections(verdict, manifest, levels, paint),
+    ...(quiet ? [] : [...standing(verdict, manifest), ...cured(verdict, manifest), ...answered(manifest)]),
   ]);
-  const { block, warn, note } = verdict.totals;
-  const tally = `${count(block, 'finding')} to clear, ${count(warn, 'warning')}, ${count(note, 'note')}`;
+  const { block, warn, note, standing: stood, cured: gone } = verdict.totals;
+  const compared = verdict.base === null ? '' : `; ${stood} standing, ${gone} cured`;
+  const tally = `${count(block, 'finding')} to clear, ${count(warn, 'warning')}, ${count(note, 'note')}${compared}`;
   const pass = verdict.verdict === 'pass';
+  lines.push(...aboutBase(verdict));
   lines.push('', `${pass ? paint.green.bold('PASS') : paint.red.bold('BLOCKED')}   ${tally}`);
   if (pass) lines.push('', ...wrap(caution, width).map((line) => paint.dim(line)));
   return `${lines.join('\n')}\n`;
@@ -46,10 +48,52 @@ function opening(verdict: Verdict, manifest: ManifestVerdict, name: string): rea
   ];
 }
 
-function section(manifest: ManifestVerdict, level: Level, paint: ChalkInstance): readonly string[] {
-  const groups = groupByRecord(
-    manifest.findings.filter((finding) => finding.level === level && passes(finding) === null),
-  );
+/** What the change asks less for comes first, then the levels. */
+function sections(
+  { comparison }: Verdict,
+  manifest: ManifestVerdict,
+  levels: readonly Level[],
+  paint: ChalkInstance,
+): readonly string[] {
+  const shown = manifest.findings.filter((finding) => counts(finding, comparison));
+  const loosens = ({ rule }: Finding) => rule === 'manifest.loosened';
+  return levels.flatMap((level, place) => [
+    ...(place > 0
+      ? []
+      : loosened(
+          shown.filter((one) => loosens(one) && levels.includes(one.level)),
+          manifest,
+          paint,
+        )),
+    ...section(
+      manifest,
+      level,
+      shown.filter((one) => one.level === level && !loosens(one)),
+      paint,
+    ),
+  ]);
+}
+
+function loosened(
+  findings: readonly Finding[],
+  manifest: ManifestVerdict,
+  paint: ChalkInstance,
+): readonly string[] {
+  if (findings.length === 0) return [];
+  return [
+    '',
+    paint.yellow.bold(`ASKS FOR LESS   ${count(findings.length, 'change')}`),
+    ...groupByRecord(findings).flatMap((group) => recordLines(group, manifest, paint)),
+  ];
+}
+
+function section(
+  manifest: ManifestVerdict,
+  level: Level,
+  findings: readonly Finding[],
+  paint: ChalkInstance,
+): readonly string[] {
+  const groups = groupByRecord(findings);
   if (groups.length === 0) return [];
   const tint = { block: paint.red.bold, warn: paint.yellow.bold, note: paint.bold }[level];
   const { shown, folded } = fold(groups);
@@ -107,6 +151,51 @@ function comparison({ stated, found, unit }: Finding): readonly string[] {
   return [`${indent}stated ${shown(stated)}, found ${shown(found)}${unit === null ? '' : ` ${plain(unit)}`}`];
 }
 
+const listedAtMost = 12;
+
+/** What the base had already, in a line for each record. */
+function standing({ base, comparison }: Verdict, { findings }: ManifestVerdict): readonly string[] {
+  const stood = findings.filter((one) => one.standing && !counts(one, comparison) && passes(one) === null);
+  return listing(`STANDING   ${count(stood.length, 'finding')} that ${base} had already`, stood);
+}
+
+/** What the base had and is gone. */
+function cured({ base }: Verdict, { cured: gone }: ManifestVerdict): readonly string[] {
+  return listing(`CURED   ${count(gone.length, 'finding')} that ${base} had`, gone);
+}
+
+function listing(title: string, found: readonly (Finding | Cured)[]): readonly string[] {
+  if (found.length === 0) return [];
+  const records = [...new Set(found.map(({ record }) => record))];
+  const rest = records.length - listedAtMost;
+  const rulesOf = (id: string) => [
+    ...new Set(found.filter(({ record }) => record === id).map(({ rule }) => rule)),
+  ];
+  return [
+    '',
+    title,
+    ...records.slice(0, listedAtMost).flatMap((id) => hanging(`${id}   ${rulesOf(id).join(', ')}`)),
+    ...(rest > 0 ? [`${indent}and those of ${count(rest, 'more record')}`] : []),
+  ];
+}
+
+function hanging(line: string): readonly string[] {
+  return wrap(plain(line), width - 2).map((part, index) => (index === 0 ? `  ${part}` : indent + part));
+}
+
+/** Why nothing was compared, or what to know of the comparison. */
+function aboutBase({ comparison }: Verdict): readonly string[] {
+  if (comparison === null) return [];
+  const { asked, unavailable, notes } = comparison;
+  const said =
+    unavailable === null
+      ? notes
+      : [
+          `Not compared with ${asked}: ${unavailable} All of this content was checked instead, and everything found counts as new.`,
+        ];
+  return said.flatMap((sentence) => ['', ...wrap(plain(sentence), width)]);
+}
+
 /** Findings that pass by somebody's signed word, and departures from the default levels: always said. */
 function answered(manifest: ManifestVerdict): readonly string[] {
   const lines = [
@@ -121,13 +210,7 @@ function answered(manifest: ManifestVerdict): readonly string[] {
     ),
   ];
   if (lines.length === 0) return [];
-  return [
-    '',
-    'BY SOMEBODY’S WORD',
-    ...lines.flatMap((line) =>
-      wrap(plain(line), width - 2).map((part, index) => (index === 0 ? `  ${part}` : indent + part)),
-    ),
-  ];
+  return ['', 'BY SOMEBODY’S WORD', ...lines.flatMap(hanging)];
 }
 
 /** `1 record`, `12 records`. */

@@ -18,7 +18,7 @@ export interface Finding {
   readonly detail: readonly string[];
   readonly source: string;
   readonly clear: string;
-  /** The base revision had it already. */
+  /** The base revision had it already, and the record it concerns has not changed since. */
   readonly standing: boolean;
   /** The waiver or acceptance that lets it pass, as `reason (person, date)`; null when none does. */
   readonly waived: string | null;
@@ -45,6 +45,15 @@ export interface DepartureSummary {
   readonly loosens: boolean;
 }
 
+/** A finding that the base revision had and that is gone. */
+export interface Cured {
+  readonly rule: string;
+  readonly record: string;
+  /** As it was said of the base. */
+  readonly message: string;
+  readonly fingerprint: string;
+}
+
 export interface ManifestVerdict {
   readonly path: string;
   readonly study: string | null;
@@ -52,6 +61,8 @@ export interface ManifestVerdict {
   readonly records: readonly RecordSummary[];
   readonly findings: readonly Finding[];
   readonly departures: readonly DepartureSummary[];
+  /** Empty where nothing was compared. */
+  readonly cured: readonly Cured[];
 }
 
 export interface Totals {
@@ -62,13 +73,32 @@ export interface Totals {
   readonly note: number;
   readonly waived: number;
   readonly accepted: number;
+  /** Findings that the base revision had already and nobody's word lets pass; counted under their level too only in a strict run. */
+  readonly standing: number;
+  /** Findings of the base revision that are gone. */
+  readonly cured: number;
+}
+
+/** What came of the wish to compare with a base revision. */
+export interface Comparison {
+  /** The revision as it was asked for. */
+  readonly asked: string;
+  /** Whether standing findings block too. */
+  readonly strict: boolean;
+  /** Why nothing could be compared, so that every finding counts as new, and what to do about it; null where it was compared. */
+  readonly unavailable: string | null;
+  /** What a reviewer should know about the comparison, in whole sentences: a manifest that is gone, or that could not be read in the base. */
+  readonly notes: readonly string[];
 }
 
 /** The outcome of one check: the JSON report's content. */
 export interface Verdict {
   readonly format: 'stoplog-findings/1';
   readonly at: string;
+  /** The commit that was compared with: where the checked state left the base that was asked for. Null where nothing was compared. */
   readonly base: string | null;
+  /** Null where no base was asked for. */
+  readonly comparison: Comparison | null;
   readonly manifests: readonly ManifestVerdict[];
   readonly totals: Totals;
   readonly verdict: 'pass' | 'blocked';

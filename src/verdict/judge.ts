@@ -2,7 +2,15 @@ import type { Facts } from '../facts/facts.ts';
 import { type DepartedLevel, departedLevels, loosens } from '../rules/departure.ts';
 import type { Phase, Rule } from '../rules/rule.ts';
 import type { Raised } from '../rules/run.ts';
-import type { DepartureSummary, Finding, Level, ManifestVerdict, Totals, Verdict } from './finding.ts';
+import type {
+  Comparison,
+  DepartureSummary,
+  Finding,
+  Level,
+  ManifestVerdict,
+  Totals,
+  Verdict,
+} from './finding.ts';
 import { fingerprint } from './fingerprint.ts';
 import { levelOf } from './level.ts';
 import { acceptanceFor, waiverFor } from './pass-reason.ts';
@@ -41,6 +49,7 @@ export function judgeManifest(
     records: ids.map((id) => summarise(id, facts.standings.get(id), means.get(id) ?? new Set())),
     findings: sorted(findings, ids),
     departures: departuresOf(facts),
+    cured: [],
   };
 }
 
@@ -57,7 +66,10 @@ export function judgeUnread(raised: readonly Raised[], path: string): ManifestVe
       accepted: null,
     }),
   );
-  return { path, study: null, phase: 'setup', records: [], findings: sorted(findings, []), departures: [] };
+  return {
+    ...{ path, study: null, phase: 'setup', records: [], departures: [], cured: [] },
+    findings: sorted(findings, []),
+  };
 }
 
 /** One verdict over all manifests. */
@@ -65,10 +77,11 @@ export function concludeVerdict(
   at: string,
   base: string | null,
   manifests: readonly ManifestVerdict[],
+  comparison: Comparison | null = null,
 ): Verdict {
   const all = manifests.flatMap((one) => one.findings);
   const records = manifests.flatMap((one) => one.records);
-  const open = (level: Level) => all.filter((one) => one.level === level && passes(one) === null).length;
+  const open = (level: Level) => all.filter((one) => one.level === level && counts(one, comparison)).length;
   const totals: Totals = {
     records: records.length,
     sound: records.filter((one) => one.state === 'sound').length,
@@ -77,11 +90,14 @@ export function concludeVerdict(
     note: open('note'),
     waived: all.filter((one) => one.waived !== null).length,
     accepted: all.filter((one) => one.waived === null && one.accepted !== null).length,
+    standing: all.filter((one) => one.standing && passes(one) === null).length,
+    cured: manifests.reduce((sum, one) => sum + one.cured.length, 0),
   };
   return {
     format: 'stoplog-findings/1',
     at,
     base,
+    comparison,
     manifests,
     totals,
     verdict: totals.block > 0 ? 'blocked' : 'pass',
@@ -91,6 +107,11 @@ export function concludeVerdict(
 /** The signed reason that lets a finding pass, or null. */
 export function passes(finding: Finding): string | null {
   return finding.waived ?? finding.accepted;
+}
+
+/** Whether a finding counts at its level: nobody's word lets it pass, and it is new, or standing ones are meant too. */
+export function counts(finding: Finding, comparison: Comparison | null): boolean {
+  return passes(finding) === null && (!finding.standing || comparison?.strict === true);
 }
 
 type Placed = 'level' | 'file' | 'line' | 'column' | 'waived' | 'accepted';

@@ -3,8 +3,8 @@ import type { Draft, Rule } from '../rules/rule.ts';
 import { isStated } from '../rules/stand-in.ts';
 import { isMeantFor } from '../rules/waived.ts';
 
-/** Faults that leave nothing to judge by; no waiver reaches them. */
-const neverWaived: ReadonlySet<string> = new Set(['manifest.unreadable', 'seal.unreadable']);
+/** Faults that leave nothing to judge by; no waiver reaches them, and they never stand. */
+export const neverWaived: ReadonlySet<string> = new Set(['manifest.unreadable', 'seal.unreadable']);
 
 /** The waiver that lets a finding pass, as `reason (person, until date)`; null when none in force names it. */
 export function waiverFor(rule: Rule, draft: Draft, facts: Facts): string | null {

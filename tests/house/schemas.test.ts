@@ -100,6 +100,7 @@ describe('the schema of findings', () => {
     format: 'stoplog-findings/1',
     at: 'staged for commit',
     base: null,
+    comparison: { asked: 'main', strict: false, unavailable: 'It shares no commit.', notes: ['A note.'] },
     manifests: [
       {
         path: 'stoplog.yaml',
@@ -137,9 +138,20 @@ describe('the schema of findings', () => {
           },
         ],
         departures: [{ of: 'evaluation.drop', now: 'blocks', because: 'licence', loosens: false }],
+        cured: [{ rule: 'seal.stale', record: 'model', message: 'It changed.', fingerprint: 'cd34' }],
       },
     ],
-    totals: { records: 1, sound: 1, block: 1, warn: 0, note: 0, waived: 0, accepted: 0 },
+    totals: {
+      records: 1,
+      sound: 1,
+      block: 1,
+      warn: 0,
+      note: 0,
+      waived: 0,
+      accepted: 0,
+      standing: 0,
+      cured: 1,
+    },
     verdict: 'blocked',
   };
 
