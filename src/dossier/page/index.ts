@@ -18,6 +18,7 @@ import { periodsSection } from './sections/periods.ts';
 import { recordsSection } from './sections/records.ts';
 import { rerunSection } from './sections/rerun.ts';
 import { scenariosSection } from './sections/scenarios.ts';
+import { studySection } from './sections/study.ts';
 import { targetsSection } from './sections/targets.ts';
 import { manyColumns, type Subject } from './subject.ts';
 import { toHtml } from './to-html.ts';
@@ -55,6 +56,7 @@ function columnsFor(targets: number): number {
 
 async function sectionsOf(subject: Subject): Promise<readonly Block[]> {
   return [
+    ...studySection(subject),
     ...recordsSection(subject),
     ...findingsSection(subject),
     ...(await inputsSection(subject)),

@@ -78,7 +78,9 @@ svg .tip { fill: var(--ink); }
 .draft-mark { display: none; }
 @media (max-width: 40rem) {
   body { padding: .75rem; }
-  dl div { grid-template-columns: 1fr; padding: .3rem 0; }
+  dl div { display: block; }
+  dt, dd { display: inline; }
+  dt::after { content: ": "; }
   table, tbody, tr, td, th, caption { display: block; }
   thead { position: absolute; width: 1px; height: 1px; overflow: hidden; clip-path: inset(50%); }
   tr { padding: .4rem 0; border-bottom: 1px solid var(--ink); }
@@ -95,6 +97,9 @@ svg .tip { fill: var(--ink); }
   h2, h3, h4, caption, figcaption { break-after: avoid; }
   figure, tr, dl div, p, li { break-inside: avoid; }
   thead { display: table-header-group; }
+  thead, thead tr { break-after: avoid; }
+  tbody tr:first-child { break-before: avoid; }
+  figure:only-child { grid-column: 1 / -1; max-width: 125mm; }
   table, tbody { display: revert; }
   .figures { grid-template-columns: 1fr 1fr; gap: 5mm 7mm; }
   .draft-mark { display: block; position: fixed; left: 0; right: 0; top: 40%; text-align: center; font-size: 90pt;

@@ -1,4 +1,5 @@
-import { crosswalksOf } from '../../machine/crosswalk.ts';
+import { few } from '../../../rules/figures.ts';
+import { type Answer, crosswalksOf } from '../../machine/crosswalk.ts';
 import { type Block, heading, paragraph, type Text, tableOr } from '../document.ts';
 import type { Subject } from '../subject.ts';
 
@@ -12,19 +13,35 @@ export function crosswalkSection(subject: Subject): readonly Block[] {
       tableOr(
         'It has no elements.',
         `Records that answer ${name}`,
-        ['Element', 'Title', 'Answered by'],
-        elements.map(({ id, title, answers }): readonly Text[] => [
-          id,
-          title,
-          answers.length === 0
-            ? 'no record answers it'
-            : answers.flatMap(({ record, fields, state }, at) => [
-                at === 0 ? '' : '; ',
-                { code: record },
-                ` ${fields.length === 0 ? '' : `(${fields.join(', ')}) `}${state}`,
-              ]),
-        ]),
+        ['Element', 'Title', 'Answered by', 'State'],
+        elements.flatMap(({ id, title, answers }) => rowsOf(id, title, answers)),
       ),
     ]),
   ];
+}
+
+/** Records of one area that answer by the same fields and are in the same state are one row; the element is told once. */
+function rowsOf(id: string, title: string, answers: readonly Answer[]): readonly (readonly Text[])[] {
+  const alike = new Map<string, Answer[]>();
+  for (const answer of answers) {
+    const key = [answer.record.split('.')[0], ...answer.fields, answer.state].join(' ');
+    alike.set(key, [...(alike.get(key) ?? []), answer]);
+  }
+  const groups = [...alike.values()];
+  if (groups.length === 0) return [[id, title, 'no record answers it', '-']];
+  return groups.map((group) => {
+    const [first] = group;
+    const fields = first?.fields ?? [];
+    const records = few(
+      group.map(({ record }) => record),
+      4,
+    );
+    const state = first?.state ?? '';
+    return [
+      id,
+      title,
+      [{ code: records }, fields.length === 0 ? '' : `: ${fields.join(', ')}`],
+      state === 'sound' ? state : { strong: state },
+    ];
+  });
 }

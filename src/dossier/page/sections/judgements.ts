@@ -2,7 +2,7 @@ import { isDefined, type Statistic } from '../../../hydrology/paired.ts';
 import type { Acceptance, ManifestData, UncertaintySource } from '../../../manifest/data.generated.ts';
 import { asPrinted } from '../../../rules/evaluation/score-names.ts';
 import { figure } from '../../../rules/figures.ts';
-import { type Block, facts, heading, paragraph, type Text, tableOr } from '../document.ts';
+import { type Block, heading, paragraph, type Text, tableOr } from '../document.ts';
 import { besideStated, capital, notStated, words, yesOrNo } from '../say.ts';
 import type { Subject } from '../subject.ts';
 
@@ -11,25 +11,7 @@ export function assumptionsSection({ facts: computed, key }: Subject): readonly 
   const { model, setup, study } = computed.manifest.data;
   const literature = study?.literature;
   return [
-    heading(1, 'Model, set-up and assumptions', `${key}-assumptions`),
-    ...facts(
-      ['Why this model', model?.justification],
-      ['Released', model?.released],
-      [
-        'Source',
-        model?.source === undefined
-          ? null
-          : [
-              {
-                code: [model.source.url, model.source.doi, model.source.commit]
-                  .filter((part) => part !== undefined)
-                  .join(' '),
-              },
-            ],
-      ],
-      ['Licence', model?.licence],
-      ['Note', model?.note],
-    ),
+    heading(1, 'Assumptions and set-up', `${key}-assumptions`),
     tableOr(
       'No alternative model is recorded.',
       'Alternatives weighed',

@@ -3,7 +3,7 @@ import { isStated } from '../../../rules/stand-in.ts';
 import type { DossierContent, DossierStudy } from '../../content.ts';
 import { titleOfStudy } from '../../machine/telling.ts';
 import { type Block, facts, type Text } from '../document.ts';
-import { count, notStated, words } from '../say.ts';
+import { count, notStated } from '../say.ts';
 
 /** The first screen: what this is, what was modelled, whether the records hold, and the caution. */
 export function opening(content: DossierContent): readonly Block[] {
@@ -45,18 +45,10 @@ export function opening(content: DossierContent): readonly Block[] {
 
 function modelled({ facts: { manifest } }: DossierStudy, several: boolean): readonly Block[] {
   const { study = {}, catchment = {}, model = {} } = manifest.data;
-  const needs = (study.needs ?? []).map(({ variable, regime }) =>
-    [
-      words(variable ?? 'other'),
-      regime === undefined ? '' : ` (${regime === 'whole' ? 'all' : regime} values)`,
-    ].join(''),
-  );
   const area = catchment.area === undefined ? '' : `, ${catchment.area.value} ${catchment.area.unit}`;
   return facts(
     ...(several ? [['Study', study.title ?? manifest.path] as const] : []),
     ['Purpose', stated(study.purpose)],
-    ['Decision it serves', stated(study.decision)],
-    ['Needs', needs.join(', ')],
     ['Catchment', catchment.name === undefined ? notStated : `${catchment.name}${area}`],
     [
       'Model',
@@ -64,7 +56,6 @@ function modelled({ facts: { manifest } }: DossierStudy, several: boolean): read
         ? notStated
         : `${model.name} ${model.release ?? model.version ?? '(no release stated)'}`,
     ],
-    ['Phase', study.phase ?? notStated],
   );
 }
 
