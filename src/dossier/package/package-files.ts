@@ -4,6 +4,7 @@ import type { DossierContent, DossierFile } from '../content.ts';
 import { contentsDocument } from '../contents.ts';
 import { payloadPath } from '../layout.ts';
 import { crateDocument, machineDocuments } from '../machine/index.ts';
+import { pageDocuments } from '../page/index.ts';
 import { payloadOf } from '../payload.ts';
 import type { PackedFile } from './packed-file.ts';
 import { plainFiles } from './plain-files.ts';
@@ -17,6 +18,7 @@ export type Prepared =
 export async function packageFiles(content: DossierContent, bagged: boolean): Promise<Prepared> {
   const payload = await payloadOf(content);
   const documents: readonly DossierFile[] = [
+    ...(await pageDocuments(content)),
     ...machineDocuments(content),
     contentsDocument(content, payload, bagged),
   ];

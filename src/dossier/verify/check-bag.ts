@@ -108,7 +108,7 @@ function oxumProblems(
   const found = `${sizes.reduce((sum, bytes) => sum + bytes, 0)}.${sizes.length}`;
   return stated.length === 1 && stated[0] === found
     ? []
-    : [broken('bag-info.txt', `says Payload-Oxum ${stated.join(' and ')}, found ${found} (bytes.files)`)];
+    : [incomplete('bag-info.txt', `says Payload-Oxum ${stated.join(' and ')}, found ${found} (bytes.files)`)];
 }
 
 function broken(file: string, message: string): PackageProblem {
