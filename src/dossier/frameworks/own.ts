@@ -56,7 +56,9 @@ function faultOf(element: unknown): string | null {
   if (typeof id !== 'string') return '`id` is no text';
   if (typeof title !== 'string') return '`title` is no text';
   if (!Array.isArray(fields)) return '`answered_by` is no list of fields';
-  const unknown = fields.find((field) => !areas.some((area) => area === String(field).split('.')[0]));
+  const unknown = fields.find(
+    (field) => typeof field !== 'string' || !areas.some((area) => area === field.split('.')[0]),
+  );
   return unknown === undefined
     ? null
     : `\`${unknown}\` begins with no area of a manifest (${areas.join(', ')})`;

@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { Ajv2020 } from 'ajv/dist/2020.js';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { beforeAll, describe, expect, it } from 'vitest';
 import { frameworks } from '../../../src/dossier/frameworks/index.ts';
 import { areas } from '../../../src/records/record.ts';
 import {
@@ -8,7 +8,7 @@ import {
   exampleProject,
   type Json,
   type Project,
-  projectOf,
+  readAndRemoved,
   theAwkward,
   theExample,
 } from './projects.ts';
@@ -23,9 +23,8 @@ let again: Project;
 beforeAll(async () => {
   example = await theExample();
   awkward = await theAwkward();
-  again = await projectOf(await exampleProject());
+  again = await readAndRemoved(await exampleProject());
 }, 120_000);
-afterAll(() => again.repository.remove());
 
 const record = (project: Project, id: string): Json =>
   project.json('facts.json').studies[0].records.find((one: Json) => one.id === id);
@@ -147,8 +146,7 @@ describe('crosswalk.json', () => {
       'text.framework.json': 'elements: none',
       'deeper/other.framework.json': JSON.stringify(own),
     });
-    const project = await projectOf(repository);
-    await repository.remove();
+    const project = await readAndRemoved(repository);
     const [, , ...more] = project.json('crosswalk.json').studies[0].frameworks;
     expect(more.map(({ name, note }: Json) => [name, note])).toEqual([
       ['Office check list', undefined],

@@ -1,4 +1,4 @@
-import { cpSync, mkdirSync, rmSync, writeFileSync } from 'node:fs';
+import { cpSync, mkdirSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { gather } from '../../../src/commands/gather.ts';
 import type { DossierContent, DossierFile } from '../../../src/dossier/content.ts';
@@ -26,7 +26,7 @@ export interface Project {
 // biome-ignore lint/suspicious/noExplicitAny: a test reaches into documents whose shape it is there to find out.
 export type Json = any;
 
-export async function projectOf(repository: TemporaryRepository): Promise<Project> {
+async function projectOf(repository: TemporaryRepository): Promise<Project> {
   const context = {
     cwd: repository.folder,
     environment: repository.environment,
@@ -167,19 +167,19 @@ export function writeCrate(folder: string, { documents, crate, payload }: Projec
 let example: Promise<Project> | undefined;
 let awkward: Promise<Project> | undefined;
 
-/** Made once for all test files; the repositories lie in a temporary folder. */
+/** Made once for all test files: documents are all that they look at. */
 export function theExample(): Promise<Project> {
-  example ??= exampleProject().then(kept);
+  example ??= exampleProject().then(readAndRemoved);
   return example;
 }
 
 export function theAwkward(): Promise<Project> {
-  awkward ??= awkwardProject().then(kept);
+  awkward ??= awkwardProject().then(readAndRemoved);
   return awkward;
 }
 
-/** Removed when the last test file is through. */
-function kept(repository: TemporaryRepository): Promise<Project> {
-  process.on('exit', () => rmSync(repository.folder, { recursive: true, force: true }));
-  return projectOf(repository);
+export async function readAndRemoved(repository: TemporaryRepository): Promise<Project> {
+  const project = await projectOf(repository);
+  await repository.remove();
+  return project;
 }

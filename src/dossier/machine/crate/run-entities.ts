@@ -40,7 +40,7 @@ export function runEntities(
       result: referTo(entitiesOf(gives)),
       agent: referTo(agents),
       endTime: run.fragment.ran_on,
-      actionStatus: { '@id': 'http://schema.org/CompletedActionStatus' },
+      actionStatus: gives.length === 0 ? undefined : { '@id': 'http://schema.org/CompletedActionStatus' },
     };
   });
   return { actions, software };
