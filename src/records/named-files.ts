@@ -61,7 +61,7 @@ export function filesNamedBy(statement: Statement, stated: Stated): readonly Nam
         ...Object.entries(handbook_tables).flatMap(([name, handbook]) =>
           tabled(handbook.table, at('handbook_tables', name, 'table')),
         ),
-        ...listed(model_file?.file, at('model_file', 'file'), 'seen'),
+        ...listed(model_file?.file, at('model_file', 'file'), 'read'),
         ...listed(sensitivity?.file, at('sensitivity', 'file'), 'own'),
         ...listed(calibrated_by?.files, at('calibrated_by', 'files'), 'read'),
         ...listed(files, at('files'), 'read'),

@@ -49,7 +49,10 @@ export function unitOfTotals(unit: string | undefined): Statistic<string> {
   if (!isDefined(parsed)) return parsed;
   const [length, , time, , , , , month] = parsed.value.dimension;
   if (time === 0 && month === 0) return defined(unit);
-  return length === 1 ? defined('mm') : defined('m3');
+  if (length === 1) return defined('mm');
+  return length === 3
+    ? defined('m3')
+    : undefinedBecause(`${unit} is no flow of water; state amounts for each step`);
 }
 
 /** Columns brought to one unit. Undefined where one does not fit. */

@@ -78,6 +78,8 @@ async function parametersInTable(
   const rows = await readTable(file, layout, snapshot);
   if (typeof rows === 'string')
     return { values: [], unread: [{ file, line: 1, expected: 'a table', found: rows }] };
+  if (rows.length === 0)
+    return { values: [], unread: [{ file, line: 1, expected: 'a row for each parameter', found: 'none' }] };
   const field = ['parameters', 'table'];
   const values: Unlabelled[] = [];
   const unread: UnreadRow[] = [];

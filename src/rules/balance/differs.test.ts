@@ -74,6 +74,11 @@ ruleCases(balanceDiffers, {
       finds: { message: 'flow_m3s: ' },
     },
     {
+      name: 'a unit that is no flow of water',
+      set: { 'balance.catchment.unit': 'kg/d' },
+      finds: { message: 'kg/d is no flow of water; state amounts for each step' },
+    },
+    {
       name: 'a volume besides the catchment without its flows',
       set: {
         'balance.soil': { run: 'calibrated', file: daily, time: 'date', outflow: { evaporation: 'et_mm' } },

@@ -39,6 +39,13 @@ ruleCases(parametersIncomplete, {
         message: 'Parameter ksat lacks unit, range, source of its range (`range_from`).',
       },
     },
+    {
+      name: 'a table of no parameters',
+      set: { 'parameters.table': 'calibration/parameters.csv' },
+      remove: ['parameters.values'],
+      files: { 'calibration/parameters.csv': 'name,value\n' },
+      finds: { message: 'expected a row for each parameter, received "none"' },
+    },
     ...[
       ['name,value\nksat,twelve\n', 'expected a number in `value`, received "twelve"'],
       ['name,change\nksat,double\n', 'expected set, shift, scale in `change`, received "double"'],
