@@ -84,6 +84,7 @@ function describe(run: Run): Command {
     .command('dossier')
     .description('the provenance summary and the package for an archive, or the check of one')
     .option('--at <revision>', 'of which commit', 'HEAD')
+    .option('--only <folder>', 'one manifest’s folder')
     .option('--out <path>', 'a new folder, `.zip` or `.tar.gz`; nothing is written over')
     .option('--bag', 'as a BagIt 1.0 bag, with the study’s files')
     .option('--draft', 'also where the check blocks; every page then says so')

@@ -10,6 +10,7 @@ import { verifyDossier } from './verify-dossier.ts';
 
 export interface DossierOptions {
   readonly at: string;
+  readonly only?: string;
   readonly out?: string;
   readonly draft?: boolean;
   readonly bag?: boolean;
@@ -18,9 +19,10 @@ export interface DossierOptions {
 
 /** `stoplog dossier`: 0 when it was written or is valid, 1 when it was refused or is not. */
 export async function dossierCommand(context: Context, options: DossierOptions): Promise<ExitStatus> {
-  const { verify, out, at } = options;
+  const { verify, out, at, only } = options;
   if (verify !== undefined) return verifyDossier(context, verify);
-  if (out !== undefined) return gather(context, at, (gathered) => make(context, options, out, gathered));
+  if (out !== undefined)
+    return gather(context, at, (gathered) => make(context, options, out, gathered), only);
   throw new Failure(
     'usage',
     '`stoplog dossier` needs to know where to write, or what to verify.',

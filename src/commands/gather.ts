@@ -1,9 +1,12 @@
 import type { DossierContent, DossierStudy } from '../dossier/content.ts';
 import { ownFrameworks } from '../dossier/frameworks/own.ts';
+import { Failure } from '../failure.ts';
+import { discoverManifests } from '../manifest/discover.ts';
 import { commitDate } from '../repository/commit-date.ts';
 import { ask } from '../repository/git.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
 import { openRepository } from '../repository/repository.ts';
+import type { Snapshot } from '../repository/snapshot.ts';
 import type { Verdict } from '../verdict/finding.ts';
 import type { Context } from './command.ts';
 import { examineWithFacts } from './examine.ts';
@@ -17,19 +20,23 @@ export interface Gathered {
 
 /**
  * Checks a revision as `stoplog check` would have on the day of its commit, and hands on all that was found out while the
- * revision's content is open.
+ * revision's content is open. `only` is the folder of one manifest; without it all of them are in.
  */
 export async function gather<Result>(
   context: Context,
   revision: string,
   use: (gathered: Gathered) => Promise<Result>,
+  only?: string,
 ): Promise<Result> {
   const repository = await openRepository(context.cwd, context.environment);
   const commit = await repository.resolve(revision);
   const committedAt = await ask(repository, commitDate(commit));
   const snapshot = await openSnapshot(repository, { kind: 'revision', revision: commit });
   try {
-    const { studies, verdict } = await examineWithFacts(snapshot, { today: committedAt.slice(0, 10) });
+    const { studies, verdict } = await examineWithFacts(snapshot, {
+      today: committedAt.slice(0, 10),
+      only: only === undefined ? undefined : folderOf(only, snapshot),
+    });
     const read: DossierStudy[] = [];
     for (const { facts, verdict } of studies) {
       if (facts === null) continue;
@@ -41,4 +48,16 @@ export async function gather<Result>(
   } finally {
     await snapshot.close();
   }
+}
+
+/** A dossier is of whole studies, never of single records. */
+function folderOf(only: string, { entries }: Snapshot): string {
+  const folder = only.replace(/^\.\//, '').replace(/\/+$/, '');
+  const folders = discoverManifests(entries.keys()).map((manifest) => manifest.folder || '.');
+  if (folders.includes(folder)) return folder;
+  throw new Failure(
+    'usage',
+    `\`--only ${only}\` is the folder of no manifest.`,
+    `Manifests lie in: ${folders.join(', ')} (from the top of the repository).`,
+  );
 }

@@ -76,6 +76,29 @@ describe('names that can’t be unpacked everywhere', () => {
   });
 });
 
+it('of several studies, one by its folder is packed alone', async () => {
+  const young =
+    'stoplog: 1\nstudy: {title: T, purpose: Invented., decision: None., phase: setup}\nmodel: {name: pond, version: "1.0", release: "1.0.0"}\n';
+  const repository = await temporaryRepository({
+    'east/stoplog.yaml': young,
+    'east/rain.csv': '1\n',
+    'west/stoplog.yaml': 'stoplog: 1\n',
+    'more.txt': 'x\n',
+  });
+  const words = ['dossier', '--bag', '--out', out()];
+  expect((await stoplog(repository.folder, words)).status).toBe(1);
+  expect((await stoplog(repository.folder, [...words, '--only', 'model'])).failure?.next).toContain(
+    'east, west',
+  );
+  expect((await stoplog(repository.folder, [...words, '--only', './east/'])).status).toBe(0);
+  const text = await readFile(join(out(), 'data/contents.json'), 'utf8');
+  expect((JSON.parse(text) as Contents).files.map(({ path }) => path)).toEqual([
+    'east/rain.csv',
+    'east/stoplog.yaml',
+  ]);
+  await repository.remove();
+});
+
 it('without a place to write is no command', async () => {
   const project = await soundRepository();
   expect((await stoplog(project.folder, ['dossier'])).failure).toMatchObject({ code: 'usage' });
