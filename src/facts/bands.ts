@@ -3,7 +3,6 @@ import type { Band } from '../manifest/data.generated.ts';
 import type { FieldPath } from '../manifest/manifest.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
-import { convertSeries } from '../series/convert-series.ts';
 import type { Series } from '../series/series.ts';
 import { formatTime } from '../series/step.ts';
 import { type BandOver, bandOver, crossings } from './bands/band-over.ts';
@@ -13,7 +12,7 @@ import { findInput, readInputSeries, type Unusable } from './input.ts';
 import { findOutput, readOutput, readOutputSeries } from './output.ts';
 import { type Days, daysOver } from './over.ts';
 import { remembered } from './remembered.ts';
-import { atStep } from './scores/comparable.ts';
+import { type Comparison, inUnitAndStep } from './scores/comparable.ts';
 import { type ComparedFigure, compareFigures, figuresOf, withWindows } from './stated-figure.ts';
 import { runOf, windowsOfTarget } from './windows.ts';
 
@@ -172,14 +171,15 @@ async function recompute(
     return undefinedBecause('it does not name two columns, `lower` and `upper`');
   const yearBegins = yearBeginsOf(data);
   const areaKm2 = areaKm2Of(data);
-  const comparison = { variable: target.fragment.variable ?? 'other', yearBegins };
-  /** A series in the band's unit and step. */
-  const beside = (series: Series): Statistic<Series> => {
-    const over = areaKm2 === null ? {} : { areaKm2 };
-    const first = convertSeries(series, lower.unit, over);
-    if (!isDefined(first)) return first;
-    return atStep(first.value, lower.step, comparison);
+  const comparison: Comparison = {
+    variable: target.fragment.variable ?? 'other',
+    step: lower.step,
+    yearBegins,
+    ...(areaKm2 === null ? {} : { areaKm2 }),
   };
+  /** A series in the band's unit and step. */
+  const beside = (series: Series): Statistic<Series> =>
+    inUnitAndStep(series, lower.unit, lower.step, comparison);
   const input = findInput(target.fragment.observed ?? { input: '' }, records);
   if (isUnusable(input)) return input;
   const seen = await readInputSeries(input.value, records, snapshot);

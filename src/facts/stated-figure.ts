@@ -33,7 +33,7 @@ export function compareFigures(
     const name = field.slice(base.length).join(' ');
     const recomputed =
       found instanceof Map
-        ? (found.get(name) ?? { undefined: `no such term is named` })
+        ? (found.get(name) ?? { undefined: 'no such term is named' })
         : (found as { readonly undefined: string });
     return { name, field, printed, recomputed, agrees: fits(printed, recomputed), windows: [] };
   });

@@ -37,15 +37,24 @@ export function comparable(sides: Sides, comparison: Comparison): Statistic<Side
   const step = comparison.step ?? coarser(observed.step, simulated.step);
   const seen = atStep(observed, step, comparison);
   if (!isDefined(seen)) return undefinedBecause(`the observed series: ${seen.undefined}`);
-  const unit = observed.unit;
-  const first = convertSeries(simulated, unit, comparison);
-  const made = atStep(isDefined(first) ? first.value : simulated, step, comparison);
+  const made = inUnitAndStep(simulated, observed.unit, step, comparison);
   if (!isDefined(made)) return undefinedBecause(`the simulated series: ${made.undefined}`);
-  if (isDefined(first)) return defined({ observed: seen.value, simulated: made.value });
+  return defined({ observed: seen.value, simulated: made.value });
+}
+
+/** A series in another unit and step; undefined where either does not fit. */
+export function inUnitAndStep(
+  series: Series,
+  unit: string,
+  step: Step,
+  comparison: Comparison,
+): Statistic<Series> {
+  const first = convertSeries(series, unit, comparison);
+  const made = atStep(isDefined(first) ? first.value : series, step, comparison);
+  if (isDefined(first) || !isDefined(made)) return made;
   // mm a month can be made only of what stands by the month.
   const later = convertSeries(made.value, unit, comparison);
-  if (!isDefined(later)) return undefinedBecause(`the simulated series: ${first.undefined}`);
-  return defined({ observed: seen.value, simulated: later.value });
+  return isDefined(later) ? later : first;
 }
 
 function coarser(one: Step, other: Step): Step {
