@@ -27,7 +27,9 @@ export interface LegendEntry {
 /** Where the plot lies. */
 export const plot = { left: 46, right: chartWidth - 8, top: 44, bottom: 226 } as const;
 export const plotHeight = 264;
+/** Of the widest common letters, so that what is drawn fits whatever the reader has. */
 const letterWidth = 6.5;
+const digitWidth = 7.2;
 
 /** Grid, ticks, both labels and the legend of a plot. */
 export function axes({ xLabel, yLabel, xTicks, yTicks, legend }: AxesOf): string {
@@ -72,7 +74,7 @@ function sample(shape: LegendEntry['shape'], mark: string, x: number, y: number)
 
 /** The text of a tick on a lying axis, moved inwards where it would be cut. */
 export function tickLabel({ at, text }: Tick, y: number): string {
-  const half = (text.length * letterWidth) / 2;
+  const half = (text.length * digitWidth) / 2 + 1;
   const x = Math.min(Math.max(at, half), chartWidth - half);
   return label(x, y, text, { class: 'tick', 'text-anchor': 'middle' });
 }

@@ -13,6 +13,7 @@ import {
   uncertaintySection,
 } from './sections/judgements.ts';
 import { opening } from './sections/opening.ts';
+import { outsideSection } from './sections/outside.ts';
 import { parametersSection } from './sections/parameters.ts';
 import { periodsSection } from './sections/periods.ts';
 import { recordsSection } from './sections/records.ts';
@@ -30,7 +31,7 @@ export async function pageDocuments(content: DossierContent): Promise<readonly D
     title: content.studies.map(titleOfStudy).join('; ') || 'Catchment model',
     draft: content.draft,
     foot: `${content.draft ? 'DRAFT, ' : ''}commit ${content.commit}`,
-    blocks: [...opening(content), ...(await studyBlocks(content))],
+    blocks: [...opening(content), ...(await studyBlocks(content)), ...(await outsideSection(content))],
   };
   return [
     { path: documentPath('dossier.html'), content: toHtml(page) },

@@ -13,9 +13,11 @@ function blockText(block: Block): string {
     case 'heading':
       return `${'#'.repeat(block.level + 1)} ${inText(block.text)}`;
     case 'paragraph':
-      return block.tone === undefined ? lineText(block.text) : `> ${lineText(block.text)}`;
+      return block.tone === undefined
+        ? beginning(lineText(block.text))
+        : `> ${beginning(lineText(block.text))}`;
     case 'list':
-      return block.items.map((item) => `- ${lineText(item)}`).join('\n');
+      return block.items.map((item) => `- ${beginning(lineText(item))}`).join('\n');
     case 'facts':
       return block.entries.map(([name, text]) => `- **${inText(name)}:** ${lineText(text)}`).join('\n');
     case 'table':
@@ -42,7 +44,11 @@ function row(cells: readonly string[]): string {
 }
 
 function lineText(text: Text): string {
-  const line = pieces(text).map(pieceText).join('').trim();
+  return pieces(text).map(pieceText).join('').trim();
+}
+
+/** At the beginning of a line some more characters are markup: of lists, and of lines below headings. */
+function beginning(line: string): string {
   return line.replace(/^[-+=:]/, '\\$&').replace(/^(\d+)([.)])/, '$1\\$2');
 }
 

@@ -2,7 +2,12 @@ import { cp, readFile, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { gather } from '../../../src/commands/gather.ts';
 import type { DossierContent } from '../../../src/dossier/content.ts';
-import { cleanEnvironment, gitIn, type TemporaryRepository, temporaryRepository } from '../../harness/repository.ts';
+import {
+  cleanEnvironment,
+  gitIn,
+  type TemporaryRepository,
+  temporaryRepository,
+} from '../../harness/repository.ts';
 
 const example = join(import.meta.dirname, '../../../example-project');
 

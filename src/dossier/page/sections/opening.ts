@@ -38,7 +38,7 @@ export function opening(content: DossierContent): readonly Block[] {
         ],
       }),
     ),
-    { kind: 'paragraph', tone: 'caution', text: [{ strong: 'Caution. ' }, caution] },
+    { kind: 'paragraph', tone: 'caution', text: [{ strong: 'Caution.' }, ` ${caution}`] },
     ...facts(['Commit', [{ code: commit }, ` of ${committedAt}`]], ['Written by', `Stoplog ${madeBy}`]),
   ];
 }
@@ -73,8 +73,8 @@ function holding(study: DossierStudy, several: boolean): Block {
   const isGood = blocking.length === 0;
   const whose = several ? ` of ${titleOfStudy(study)}` : '';
   const text: Text = [
-    { strong: isGood ? `The records${whose} hold. ` : `The records${whose} do not hold. ` },
-    `${sound} of ${count(records.length, 'record')} ${sound === 1 ? 'is' : 'are'} sound: sealed by a named person and in agreement with the files now. `,
+    { strong: isGood ? `The records${whose} hold.` : `The records${whose} do not hold.` },
+    ` ${sound} of ${count(records.length, 'record')} ${sound === 1 ? 'is' : 'are'} sound: sealed by a named person and in agreement with the files now. `,
     `${count(blocking.length, 'finding')} to clear`,
     answered.length === 0 ? '.' : `; ${count(answered.length, 'finding')} passed by somebody’s signed word.`,
   ];
