@@ -71,7 +71,14 @@ ruleCases(parametersImplausible, {
     {
       name: 'a part of a class’s name',
       ...withHandbook(0.05, '1', { table: 'manning-n', class: 'sluggish reaches' }),
-      finds: { message: `did you mean "${weedy}"?` },
+      finds: {
+        message: `the table has no class "sluggish reaches"; it has "${weedy}", "minor stream`,
+      },
+    },
+    {
+      name: 'a class that is like none',
+      ...withHandbook(60, 'mm/h', { table: 'saturated-conductivity', class: 'peat' }),
+      finds: { message: 'it has "sand", "loamy sand", "sandy loam", "loam", "silt" and 7 more' },
     },
     {
       name: 'a table that is not known',

@@ -11,7 +11,7 @@ import {
 import type { Handbook } from '../../manifest/data.generated.ts';
 import { nearestName } from '../../manifest/nearest.ts';
 import { conversion } from '../../series/units/conversion.ts';
-import { figure } from '../figures.ts';
+import { few, figure } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
 import { handbookClassOf } from './handbook-class.ts';
 import { placeOf } from './place.ts';
@@ -117,15 +117,17 @@ function rangeOf(handbook: Handbook, ownTables: ReadonlyMap<string, OwnTable>): 
     : defined({ low: row.low, high: row.high, unit: own.unit, source: own.source });
 }
 
+/** Names the class that is meant, or some that share a word with it. */
 function unknownClass(
   reason: string,
   name: string,
   classes: readonly string[],
 ): { readonly undefined: string } {
-  const nearest =
-    nearestName(name, classes) ??
-    classes.find((one) => name.trim() !== '' && one.toLowerCase().includes(name.trim().toLowerCase()));
-  return undefinedBecause(
-    nearest === undefined || nearest === name ? reason : `${reason}; did you mean "${nearest}"?`,
-  );
+  const nearest = nearestName(name, classes);
+  if (nearest !== undefined && nearest !== name)
+    return undefinedBecause(`${reason}; did you mean "${nearest}"?`);
+  const words = name.toLowerCase().match(/[a-z]{4,}/g) ?? [];
+  const alike = classes.filter((one) => words.some((word) => one.toLowerCase().includes(word)));
+  const shown = (alike.length > 0 ? alike : classes).map((one) => `"${one}"`);
+  return undefinedBecause(`${reason}; it has ${few(shown, 5)}`);
 }
