@@ -1,7 +1,7 @@
 import type { State } from '../verdict/finding.ts';
 import type { DossierContent, DossierFile } from './content.ts';
 import { contentsName, documentPath, payloadPath } from './layout.ts';
-import type { Payload } from './payload.ts';
+import { outsideFiles, type Payload } from './payload.ts';
 
 /** `contents.json`: what the package is about, and what of the study lies in it and what does not. */
 export interface Contents {
@@ -37,19 +37,15 @@ export interface ContentsFile {
 /** `bagged` tells whether the study's files come with the documents. */
 export function contentsDocument(content: DossierContent, payload: Payload, bagged: boolean): DossierFile {
   const outside = 'in the repository; `stoplog dossier --bag` packs it';
+  const awaited = new Set(bagged ? payload.fetched.map(({ path }) => path) : []);
   const files: ContentsFile[] = [
     ...payload.files.map(({ path, sha256, bytes }) => ({
       ...{ path, sha256, bytes },
       ...(bagged ? { lies: payloadPath(path), note: '' } : { lies: null, note: outside }),
     })),
-    ...payload.fetched.map(({ path, sha256, bytes, url }) => ({
-      ...{ path, sha256, bytes },
-      lies: bagged ? payloadPath(path) : null,
-      note: `to be fetched from ${url}`,
-    })),
-    ...payload.absent.map(({ path, sha256, bytes, why, location }) => ({
-      ...{ path, sha256, bytes, lies: null },
-      note: location === null ? why : `${why}; it is kept at ${location}`,
+    ...outsideFiles(payload).map((file) => ({
+      ...file,
+      lies: awaited.has(file.path) ? payloadPath(file.path) : null,
     })),
   ];
   const contents: Contents = {

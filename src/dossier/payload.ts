@@ -83,6 +83,31 @@ export async function payloadOf({ snapshot, studies }: DossierContent): Promise<
   return { files: files.sort(byPath), fetched: fetched.sort(byPath), absent: absent.sort(byPath) };
 }
 
+/** A file that no package made here holds, with how it is to be had. */
+export interface OutsideFile {
+  readonly path: string;
+  readonly sha256: string | null;
+  readonly bytes: number | null;
+  readonly note: string;
+}
+
+/** All that a bag names to be fetched or can't hold, in code-unit order of path. */
+export function outsideFiles({ fetched, absent }: Payload): readonly OutsideFile[] {
+  const files = [
+    ...fetched.map(({ path, sha256, bytes, url }) => ({
+      path,
+      sha256,
+      bytes,
+      note: `to be fetched from ${url}`,
+    })),
+    ...absent.map(({ path, sha256, bytes, why, location }) => ({
+      ...{ path, sha256, bytes },
+      note: location === null ? why : `${why}; it is kept at ${location}`,
+    })),
+  ];
+  return files.sort(byPath);
+}
+
 /** A location as an address that anybody can fetch; null for all others, and for one that holds a name or a password. */
 export function fetchUrl(location: string): string | null {
   if (!URL.canParse(location)) return null;

@@ -88,6 +88,10 @@ describe('a bag', () => {
       lies: null,
       note: expect.stringContaining('shelf 3, box 12'),
     });
+    const page = await text('data/dossier.md');
+    expect(page).toMatch(/large\/far\.tif.*Git LFS content was not fetched/);
+    expect(page).toMatch(/radar\/drive\.nc.*shelf 3, box 12/);
+    expect(page).toMatch(/radar\/50% 2001\.nc.*to be fetched from/);
   });
 
   it('names what is to be fetched, with an encoded address and path (2.2.3)', async () => {
