@@ -60,7 +60,13 @@ function causeOf([record, findings]: Group): Cause | null {
     return { key: last, listed: shownStale, why: `rest on ${last}` };
   const [area, name, ...entry] = record.split('.');
   if (only === undefined || entry.length === 0) return null;
-  const what = findings.map(({ rule, file, line, trail }) => `${rule} ${file}:${line} ${trail.length}`);
+  // What rests on the entry's own fellow, as gauge.g1 on inputs.gauge.g1, is alike too.
+  const root = (trail: readonly string[]) =>
+    trail
+      .slice(1)
+      .at(-1)
+      ?.replace(`.${entry.join('.')}`, '');
+  const what = findings.map(({ rule, file, line, trail }) => `${rule} ${file}:${line} ${root(trail)}`);
   return {
     key: `${area}.${name}\0${what.join()}`,
     listed: shownAlike,

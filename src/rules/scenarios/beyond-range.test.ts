@@ -1,5 +1,6 @@
 import { ruleCases } from '../../../tests/harness/rule-cases.ts';
 import { scaled } from '../../../tests/harness/scaled.ts';
+import { soundFiles } from '../../../tests/harness/sound-files.ts';
 import { scenariosBeyondRange } from './beyond-range.ts';
 
 // Calibrated rain of the sound study: 987, 981, 1071 and 1161 mm, mean 1050; the scenario's mean is 1019 mm, its years 987 to 1081.
@@ -18,6 +19,13 @@ ruleCases(scenariosBeyondRange, {
         found: 917.1,
         unit: 'mm',
         message: '917.1 mm, lies outside the calibrated range of 981 to 1 161 mm (-12.7 %)',
+        detail: [
+          '7 of 7 years outside 981 to 1 161 mm: 2044 (894.6), 2045 (896.8), 2046 (932.4), 2047 (972.9), 2048 (900.9), 2049 (888.3) and 1 more',
+          'furthest: 2049 with 888.3 mm, 51.5 % of the range beyond its end',
+          // Percentiles of type 7 of 981, 987, 1071, 1161: 981 + 0.3 x 6, and 1071 + 0.7 x 90
+          'calibrated mean 1 050 mm of 4 years (10th to 90th percentile 982.8 to 1 134); in the scenario 917.1 mm of 7 (-12.7 %)',
+          'single steps: 0 % above the calibrated 99th percentile and 0 % below the 1st (1 % each if nothing changed)',
+        ],
       },
     },
     {
@@ -62,6 +70,39 @@ ruleCases(scenariosBeyondRange, {
         level: 'block',
         message:
           'The mean forest share of scenario dry, 0.5, lies outside the calibrated range of 0.3 to 0.32',
+      },
+    },
+    {
+      name: 'one of many climates that one fragment states',
+      set: {
+        'inputs.climate': {
+          each: ['mild', 'dry'],
+          role: 'precipitation',
+          files: ['data/{each}.csv'],
+          series: { time: 'date', values: 'rain_mm', unit: 'mm/d', step: 'P1D' },
+        },
+        'runs.climate': {
+          each: ['mild', 'dry'],
+          takes: ['inputs.climate.{each}'],
+          simulation: '2041-10-01/2050-09-30',
+        },
+        'scenarios.cases': {
+          climate: {
+            each: ['mild', 'dry'],
+            run: 'climate.{each}',
+            drivers: { annual_rainfall: { input: 'climate.{each}' } },
+          },
+        },
+      },
+      files: {
+        'data/mild.csv': soundFiles()['data/dry-rain.csv'] ?? '',
+        'data/dry.csv': scaled('rain_mm', 0.9)(soundFiles()['data/dry-rain.csv'] ?? ''),
+      },
+      // The warm-up kept out is the study's, which lies in other years: nine years from 2042 to 2050.
+      finds: {
+        record: 'scenarios.climate.dry',
+        field: 'scenarios.cases.climate.drivers.annual_rainfall',
+        message: 'of scenario climate.dry',
       },
     },
     {

@@ -98,7 +98,7 @@ function judge(
               `furthest: ${worst.label} with ${figure(worst.value)}${unit}${isDefined(worst.share) ? `, ${figure(100 * worst.share.value)} % of the range beyond its end` : ''}`,
             ]
           : []),
-        `calibrated mean ${figure(calibrated.value.mean)}${unit} of ${calibrated.value.values.length} ${by}s; in the scenario ${figure(figures.value.mean)}${unit} of ${figures.value.values.length}${changed}`,
+        `calibrated mean ${figure(calibrated.value.mean)}${unit} of ${calibrated.value.values.length} ${by}s (10th to 90th percentile ${figure(calibrated.value.p10)} to ${figure(calibrated.value.p90)}); in the scenario ${figure(figures.value.mean)}${unit} of ${figures.value.values.length}${changed}`,
         ...(isDefined(envelope)
           ? [
               `single steps: ${figure(100 * envelope.value.shareAboveHigh)} % above the calibrated 99th percentile and ${figure(100 * envelope.value.shareBelowLow)} % below the 1st (1 % each if nothing changed)`,
