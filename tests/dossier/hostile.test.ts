@@ -48,6 +48,7 @@ describe('a path that leads out of the package', () => {
     ['data\\..\\..\\x', /backslash/],
     ['data/./x', /no plain path/],
     ['data//x', /no plain path/],
+    ['..', /leads out/],
   ])('%s is named in zip and tar', async (path, message) => {
     const problem = { kind: 'broken', file: path, message: expect.stringMatching(message) };
     const zipped = await verifyZip([...bag, { path, content: 'x' }]);
@@ -156,21 +157,22 @@ describe('what grows', () => {
     );
   });
 
-  it('is stopped in a tar', async () => {
-    const { problems } = await verifyTar(
-      [...asTar, { name: 'data/zeros', content: '\0'.repeat(zeros.length) }],
+  it.each(['file', 'contiguous-file'] as const)('is stopped in a tar, as a %s', async (type) => {
+    const { status, problems } = await verifyTar(
+      [...asTar, { name: 'data/zeros', type, content: '\0'.repeat(zeros.length) }],
       limits,
     );
+    expect(status).toBe('broken');
     expect(problems).toContainEqual(
-      expect.objectContaining({ file: 'data/zeros', message: expect.stringMatching(/grows far beyond/) }),
+      expect.objectContaining({ message: expect.stringMatching(/grows far beyond/) }),
     );
   });
 
-  it('is stopped by the number of its files', async () => {
-    const many = Array.from({ length: 20 }, (_, place) => ({ path: `data/${place}` }));
+  it('is stopped by the number of its files and folders', async () => {
+    const many = Array.from({ length: 20 }, (_, place) => ({ path: `data/${place}/` }));
     const { problems } = await verifyZip([...bag, ...many], { ...ordinaryLimits, entries: 10 });
     expect(problems).toContainEqual(
-      expect.objectContaining({ message: expect.stringMatching(/more than 10 files/) }),
+      expect.objectContaining({ message: expect.stringMatching(/more than 10 files and folders/) }),
     );
   });
 

@@ -36,14 +36,15 @@ export async function takeInventory(
   let left = maximumBytes;
   try {
     for await (const entry of entries) {
-      const path = entry.path.normalize('NFC');
+      const path = entry.path.normalize('NFC').replace(/(?<=.)\/$/, '');
       const unsafe = whyUnsafe(path);
       count += 1;
       if (count > limits.entries) {
-        broken(name, `holds more than ${limits.entries} files; the rest was not read`);
+        broken(name, `holds more than ${limits.entries} files and folders; the rest was not read`);
         break;
       }
       if (unsafe !== null) broken(path, unsafe);
+      else if (entry.kind === 'folder') continue;
       else if (entry.kind === 'link') broken(path, 'is a link; a package holds files only');
       else if (entry.kind === 'other') broken(path, 'is neither a file nor a folder');
       else if (files.has(path)) broken(path, 'is there twice under one name');

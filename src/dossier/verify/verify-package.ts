@@ -53,8 +53,9 @@ async function openPackage(target: string, limits: Limits): Promise<Inventory> {
       'Name one of these.',
     );
   }
-  const entries = form === 'zip' ? readZip(target) : readTar(target);
-  return takeInventory(target, entries, limits, Math.max(limits.grownBytes, found.size * limits.growth));
+  const maximumBytes = Math.max(limits.grownBytes, found.size * limits.growth);
+  const entries = form === 'zip' ? readZip(target) : readTar(target, maximumBytes);
+  return takeInventory(target, entries, limits, maximumBytes);
 }
 
 function hasData({ files }: Inventory): boolean {
