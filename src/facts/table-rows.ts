@@ -15,12 +15,30 @@ export interface TableRow {
 /** No table of single figures is larger. */
 const largestBytes = 16 * 2 ** 20;
 
-/** The rows of a table (path from the top of the repository); a text says why it can't be read. */
-export async function readTable(
+type Layout = Omit<TableFile, 'file'>;
+type RowsOrReason = readonly TableRow[] | string;
+
+const tablesOf = new WeakMap<Snapshot, Map<string, Promise<RowsOrReason>>>();
+
+/**
+ * The rows of a table (path from the top of the repository); a text says why it can't be read. Once for all who ask within a
+ * run, as many records may share a table.
+ */
+export function readTable(path: string, layout: Layout, snapshot: Snapshot): Promise<RowsOrReason> {
+  const { separator, decimal, skip_lines, comment } = layout;
+  const tables = tablesOf.get(snapshot) ?? new Map<string, Promise<RowsOrReason>>();
+  tablesOf.set(snapshot, tables);
+  const key = JSON.stringify([path, separator, decimal, skip_lines, comment]);
+  const table = tables.get(key) ?? read(path, layout, snapshot);
+  tables.set(key, table);
+  return table;
+}
+
+async function read(
   path: string,
-  { separator = 'comma', decimal = 'point', skip_lines = 0, comment }: Omit<TableFile, 'file'>,
+  { separator = 'comma', decimal = 'point', skip_lines = 0, comment }: Layout,
   snapshot: Snapshot,
-): Promise<readonly TableRow[] | string> {
+): Promise<RowsOrReason> {
   const content = await snapshot.read(path, largestBytes);
   if (content === null) return 'no content here';
   const rows = new Rows(separator, comment);
