@@ -1,4 +1,6 @@
 import { createHash } from 'node:crypto';
+import { symlink } from 'node:fs/promises';
+import { join } from 'node:path';
 import { type TemporaryRepository, temporaryRepository } from '../harness/repository.ts';
 
 export const sha256 = (content: string | Uint8Array): string =>
@@ -26,6 +28,9 @@ export const awkwardNames: readonly string[] = [
   'data/empty.csv',
 ];
 
+/** Symbolic links: to a file of the repository, and out of it. */
+const links = { 'data/link.csv': 'rain gauge 50%.csv', 'data/away.csv': '../../away.csv' };
+
 const fetchedFrom = 'https://data.northmere.example/radar 2001.nc';
 export const fetchedUrl = 'https://data.northmere.example/radar%202001.nc';
 
@@ -44,6 +49,8 @@ export async function awkwardRepository(elsewhere = true): Promise<TemporaryRepo
     'model/run.sh': '#!/bin/sh\n',
   });
   await repository.git('update-index', '--chmod=+x', 'model/run.sh');
+  for (const [path, leadsTo] of Object.entries(links)) await symlink(leadsTo, join(repository.folder, path));
+  await repository.git('add', ...Object.keys(links));
   const digest = sha256(largeContent);
   await repository.write(
     `.git/lfs/objects/${digest.slice(0, 2)}/${digest.slice(2, 4)}/${digest}`,

@@ -1,5 +1,5 @@
 import { spawnSync } from 'node:child_process';
-import { mkdtemp, readdir, readFile, realpath, rm, stat } from 'node:fs/promises';
+import { lstat, mkdtemp, readdir, readFile, realpath, rm, stat } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -92,6 +92,17 @@ describe('a bag', () => {
     expect(page).toMatch(/large\/far\.tif.*Git LFS content was not fetched/);
     expect(page).toMatch(/radar\/drive\.nc.*shelf 3, box 12/);
     expect(page).toMatch(/radar\/50% 2001\.nc.*to be fetched from/);
+  });
+
+  it('holds no links: what one leads to lies there as a file, and nothing from outside', async () => {
+    expect((await lstat(join(bag, 'data/repository/data/link.csv'))).isFile()).toBe(true);
+    expect(await text('data/repository/data/link.csv')).toBe('data/rain gauge 50%.csv\n');
+    const { files } = JSON.parse(await text('data/contents.json')) as Contents;
+    expect(files.find(({ path }) => path === 'data/away.csv')).toMatchObject({
+      sha256: null,
+      lies: null,
+      note: 'it is a link that leads out of the repository',
+    });
   });
 
   it('names what is to be fetched, with an encoded address and path (2.2.3)', async () => {
