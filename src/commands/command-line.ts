@@ -6,6 +6,7 @@ import { phases } from '../rules/rule.ts';
 import { checkCommand } from './check.ts';
 import type { Context, ExitStatus } from './command.ts';
 import type { DossierOptions } from './dossier.ts';
+import { hookNames } from './hook/script.ts';
 import { hookAdd, hookList, hookRemove } from './hook.ts';
 import { rulesCommand } from './rules.ts';
 import { sealCommand } from './seal.ts';
@@ -109,6 +110,11 @@ function describe(run: Run): Command {
   hook
     .command('add')
     .description('install them; hooks that are there are kept and run first')
+    .addOption(
+      new Option('--for <hook>', 'one of them only; `pre-receive` for a bare repository on a server').choices(
+        hookNames,
+      ),
+    )
     .action(run(hookAdd));
   hook
     .command('remove')

@@ -3,10 +3,12 @@ import type { Context, ExitStatus } from './command.ts';
 import { addHooks } from './hook/add.ts';
 import { removeHooks } from './hook/remove.ts';
 import { type HookReport, listHooks } from './hook/report.ts';
+import type { HookName } from './hook/script.ts';
 import { describeHooks } from './hook/text.ts';
 
 /** `stoplog hook add`: writes the hooks and says what it did. */
-export const hookAdd = (context: Context) => run(context, addHooks);
+export const hookAdd = (context: Context, { for: hook }: { readonly for?: HookName } = {}) =>
+  run(context, (repository) => addHooks(repository, hook === undefined ? {} : { hooks: [hook] }));
 
 /** `stoplog hook remove`: takes them away and says what is back. */
 export const hookRemove = (context: Context) => run(context, removeHooks);

@@ -16,14 +16,17 @@ export async function touchesGoverned(snapshot: Snapshot, base: Snapshot | null)
     .some((path) => [...folders].some((folder) => within(path, folder)));
 }
 
-/** A manifest may name files above its folder by `..` (or by an escape that stands for it), or through a link. */
+/** `..`, also where YAML writes a dot as an escape or breaks a quoted text between the two. */
+const upwards = /\.\.|\\(?:x2e|u002e|U0000002e|\r?\n)/i;
+
+/** A manifest may name files above its folder by `..`, or through a link. */
 async function mayReachOut(state: Snapshot, path: string, folder: string): Promise<boolean> {
   const linked = [...state.entries.values()].some(
     (entry) => entry.mode === '120000' && within(entry.path, folder),
   );
   if (linked || folder === '') return true;
   const bytes = await state.read(path);
-  return bytes === null || /\.\.|\\/.test(new TextDecoder().decode(bytes));
+  return bytes === null || upwards.test(new TextDecoder().decode(bytes));
 }
 
 function within(path: string, folder: string): boolean {

@@ -174,7 +174,7 @@ function listing(title: string, found: readonly (Finding | Cured)[]): readonly s
   return [
     '',
     title,
-    ...records.slice(0, listedAtMost).flatMap((id) => hanging(`${id}   ${rulesOf(id).join(', ')}`)),
+    ...records.slice(0, listedAtMost).flatMap((id) => hanging(`${id}: ${rulesOf(id).join(', ')}`)),
     ...(rest > 0 ? [`${indent}and those of ${count(rest, 'more record')}`] : []),
   ];
 }

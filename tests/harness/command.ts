@@ -1,6 +1,7 @@
 import { runCommandLine } from '../../src/commands/command-line.ts';
 import { Failure } from '../../src/failure.ts';
 import type { Finding, State, Verdict } from '../../src/verdict/finding.ts';
+import { counts } from '../../src/verdict/judge.ts';
 import { cleanEnvironment } from './repository.ts';
 
 /** What a command line printed and how it ended, as main.ts would end it. */
@@ -45,7 +46,7 @@ export async function stoplog(
 export interface Checked {
   readonly status: number;
   readonly verdict: Verdict;
-  /** `rule record` of every finding that blocks and is not answered for. */
+  /** `rule record` of every finding that blocks: not answered for, and not of the base. */
   readonly blocking: readonly string[];
   /** `rule record` of every finding. */
   readonly found: readonly string[];
@@ -62,11 +63,7 @@ export async function check(folder: string, ...words: readonly string[]): Promis
   return {
     status: ran.status,
     verdict,
-    blocking: named(
-      findings.filter(
-        ({ level, waived, accepted }) => level === 'block' && waived === null && accepted === null,
-      ),
-    ),
+    blocking: named(findings.filter((one) => one.level === 'block' && counts(one, verdict.comparison))),
     found: named(findings),
     finding(rule, record) {
       const found = findings.find((one) => one.rule === rule && one.record === record);

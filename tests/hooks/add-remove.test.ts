@@ -251,10 +251,25 @@ describe('a repository where hooks would not run, or would run elsewhere too', (
   };
   const all = [addHooks, removeHooks, listHooks];
 
-  it('is refused when bare', async () => {
+  it('is refused for work when bare, and for pushes when people work in it', async () => {
     const bare = await temporaryRepository({}, ['--bare']);
     const before = await photograph(bare.folder);
-    expect(await refusal(open(bare.folder), all)).toMatch(/is a bare repository: .* nobody commits in it/);
+    expect(await refusal(open(bare.folder))).toMatch(/is a bare repository: .* nobody commits in it/);
+    expect(await photograph(bare.folder)).toEqual(before);
+    await expect(addHooks(await open(), { hooks: ['pre-receive'] })).rejects.toThrow(/has a work tree/);
+    await bare.remove();
+  });
+
+  it('has one hook for pushes when bare, and is as before when it is taken away', async () => {
+    const bare = await temporaryRepository({}, ['--bare']);
+    const earlier = join(bare.folder, 'hooks/pre-receive');
+    await mkdir(join(bare.folder, 'hooks'), { recursive: true });
+    await writeFile(earlier, '#!/bin/sh\nexit 0\n', { mode: 0o755 });
+    const before = await photograph(bare.folder);
+    const added = await addHooks(await open(bare.folder), { hooks: ['pre-receive'] });
+    expect(added.hooks).toMatchObject([{ hook: 'pre-receive', found: 'ours', done: 'written' }]);
+    expect(foundOf(await listHooks(await open(bare.folder)))).toEqual(['ours']);
+    expect(doneOf(await removeHooks(await open(bare.folder)))).toEqual(['restored']);
     expect(await photograph(bare.folder)).toEqual(before);
     await bare.remove();
   });

@@ -1,11 +1,12 @@
 import { mkdir, rename } from 'node:fs/promises';
 import { dirname, join, relative } from 'node:path';
+import { Failure } from '../../failure.ts';
 import type { Repository } from '../../repository/repository.ts';
 import { type Before, earlierName, withBlock } from './block.ts';
 import { hookHome } from './home.ts';
 import { type HookContent, interpreter, isThere, lookAtHook } from './look.ts';
 import { type Done, type HookReport, reportHooks } from './report.ts';
-import { type HookName, hookNames, scriptForGit, scriptForHusky } from './script.ts';
+import { type HookName, hooksInClone, hooksOnServer, scriptForGit, scriptForHusky } from './script.ts';
 import { change, writeHook } from './write.ts';
 
 /**
@@ -14,8 +15,9 @@ import { change, writeHook } from './write.ts';
  */
 export async function addHooks(
   repository: Repository,
-  { hooks = hookNames }: { readonly hooks?: readonly HookName[] } = {},
+  { hooks = hooksInClone }: { readonly hooks?: readonly HookName[] } = {},
 ): Promise<HookReport> {
+  refuseElsewhere(repository, hooks);
   const home = await hookHome(repository);
   if (home.refusal !== null) throw home.refusal;
   let foldersMade = await makeFolders(home.folder);
@@ -26,6 +28,25 @@ export async function addHooks(
     foldersMade = 0; // The first hook remembers them for all.
   }
   return reportHooks(repository, home, done);
+}
+
+/** Hooks that would never run here. */
+function refuseElsewhere({ bare, cwd }: Repository, hooks: readonly HookName[]): void {
+  const server: readonly HookName[] = hooksOnServer;
+  if (bare && hooks.some((hook) => !server.includes(hook))) {
+    throw new Failure(
+      'usage',
+      `${cwd} is a bare repository: it has no work tree, so nobody commits in it and these hooks would never run.`,
+      'Run `stoplog hook add` in the clones where people work, or `stoplog hook add --for pre-receive` here, to check what is pushed to it.',
+    );
+  }
+  if (!bare && hooks.some((hook) => server.includes(hook))) {
+    throw new Failure(
+      'usage',
+      `${cwd} has a work tree: people work in it, and do not push to it.`,
+      'Run `stoplog hook add --for pre-receive` in the bare repository that they push to; without `--for` the hooks for work are added here.',
+    );
+  }
 }
 
 async function addHook(there: HookContent, foldersMade: number): Promise<Done> {

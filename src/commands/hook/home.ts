@@ -4,6 +4,7 @@ import { basename, dirname, isAbsolute, join, relative, resolve } from 'node:pat
 import { Failure } from '../../failure.ts';
 import { ask, type Question } from '../../repository/git.ts';
 import type { Repository } from '../../repository/repository.ts';
+import { type HookName, hooksInClone, hooksOnServer } from './script.ts';
 
 /** A folder in which hooks lie. */
 export interface HookHome {
@@ -38,11 +39,15 @@ const tracksAnythingIn = (folder: string): Question<boolean> => ({
   parse: (output) => output.length > 0,
 });
 
-/** Where git looks for this repository's hooks now. Throws Failure 'usage', with the reason, where there is no work tree. */
+/** Where git looks for this repository's hooks now. Throws Failure 'usage', with the reason, inside git's own folder of a work tree. */
 export async function hookHome(repository: Repository): Promise<HookHome> {
-  const top = workTree(repository);
   const folder = resolve(repository.hooksFolder);
   const setting = await ask(repository, hooksPath);
+  if (repository.bare) {
+    const refusal = setting === null ? null : refusalOf(repository, setting);
+    return { folder, starter: 'git', inForce: true, refusal, notes: [] };
+  }
+  const top = workTree(repository);
   const within = setting !== null && isInside(folder, top);
   if (within && basename(folder) === '_') {
     return huskyHome(dirname(folder), existsSync(join(folder, 'h')), top);
@@ -64,12 +69,19 @@ export async function hookHome(repository: Repository): Promise<HookHome> {
   return { folder, starter: 'git', inForce: true, refusal, notes };
 }
 
+/** The hooks that git would run in a repository of this kind. */
+export function hooksFor({ bare }: Repository): readonly HookName[] {
+  return bare ? hooksOnServer : hooksInClone;
+}
+
 /** Other folders where hooks of ours may lie since before `core.hooksPath` was set or husky came or went. */
 export function formerHomes(repository: Repository, now: HookHome): readonly HookHome[] {
   const former = { inForce: false, refusal: null, notes: [] };
   const homes: HookHome[] = [
     { ...former, folder: join(repository.commonDirectory, 'hooks'), starter: 'git' },
-    { ...former, folder: join(workTree(repository), '.husky'), starter: 'husky' },
+    ...(repository.top === null
+      ? []
+      : [{ ...former, folder: join(repository.top, '.husky'), starter: 'husky' as const }]),
   ];
   return homes.filter((home) => home.folder !== now.folder);
 }
@@ -92,19 +104,13 @@ async function huskyIsPlanned(top: string): Promise<boolean> {
   return project.includes('husky');
 }
 
-function workTree({ top, bare, cwd }: Repository): string {
+function workTree({ top, cwd }: Repository): string {
   if (top !== null) return top;
-  throw bare
-    ? new Failure(
-        'usage',
-        `${cwd} is a bare repository: it has no work tree, so nobody commits in it and these hooks would never run.`,
-        'Run `stoplog hook add` in the clones where people work.',
-      )
-    : new Failure(
-        'usage',
-        `${cwd} is inside git’s own folder, which has no work tree.`,
-        'Change to the top of the work tree and try again.',
-      );
+  throw new Failure(
+    'usage',
+    `${cwd} is inside git’s own folder, which has no work tree.`,
+    'Change to the top of the work tree and try again.',
+  );
 }
 
 /** Why hooks can't be written to a folder outside the work tree: hooks are switched off, or it serves others too. */

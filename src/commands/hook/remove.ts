@@ -2,10 +2,9 @@ import { rename, rmdir, unlink } from 'node:fs/promises';
 import { dirname } from 'node:path';
 import type { Repository } from '../../repository/repository.ts';
 import type { Block } from './block.ts';
-import { formerHomes, hookHome } from './home.ts';
+import { formerHomes, hookHome, hooksFor } from './home.ts';
 import { type HookContent, lookAtHook } from './look.ts';
 import { type Done, type HookReport, reportHooks } from './report.ts';
-import { hookNames } from './script.ts';
 import { change, writeHook } from './write.ts';
 
 /**
@@ -18,7 +17,7 @@ export async function removeHooks(repository: Repository): Promise<HookReport> {
   const done = new Map<string, Done>();
   for (const one of [home, ...formerHomes(repository, home)]) {
     let foldersMade = 0;
-    for (const hook of hookNames) {
+    for (const hook of hooksFor(repository)) {
       const there = await lookAtHook(one, hook);
       if (there.block === null) continue;
       const left = there.found === 'changed';

@@ -1,7 +1,7 @@
 import type { Repository } from '../../repository/repository.ts';
-import { formerHomes, type HookHome, hookHome } from './home.ts';
+import { formerHomes, type HookHome, hookHome, hooksFor } from './home.ts';
 import { type HookState, lookAtHook } from './look.ts';
-import { hookNames } from './script.ts';
+
 import { findTool, type Tool } from './tool.ts';
 
 /**
@@ -25,7 +25,7 @@ export async function reportHooks(
 ): Promise<HookReport> {
   const hooks: (HookState & { done: Done })[] = [];
   for (const one of [home, ...formerHomes(repository, home)]) {
-    for (const hook of hookNames) {
+    for (const hook of hooksFor(repository)) {
       const { content, mode, block, ...state } = await lookAtHook(one, hook);
       const did = done.get(state.file) ?? 'none';
       if (one === home || block !== null || did !== 'none') hooks.push({ ...state, done: did });

@@ -1,14 +1,17 @@
-/** The hooks that `stoplog hook add` writes, as git names them. */
-export const hookNames = ['pre-commit', 'pre-merge-commit', 'pre-push'] as const;
+/** The hooks that `stoplog hook add` writes, as git names them: where people work, and where pushes arrive. */
+export const hooksInClone = ['pre-commit', 'pre-merge-commit', 'pre-push'] as const;
+export const hooksOnServer = ['pre-receive'] as const;
+export const hookNames = [...hooksInClone, ...hooksOnServer] as const;
 export type HookName = (typeof hookNames)[number];
 
 const holdsBack: Record<HookName, string> = {
   'pre-commit': 'commit',
   'pre-merge-commit': 'merge',
   'pre-push': 'push',
+  'pre-receive': 'push',
 };
 
-/** Where a project keeps a Stoplog of its own, from the top of the work tree, which is where git starts hooks. */
+/** Where a project keeps a Stoplog of its own, from where git starts hooks: the top of the work tree, or a bare repository. */
 export const bundleInProject = 'node_modules/stoplog/dist/stoplog.mjs';
 
 /** The bundle is started with node: going through npx takes ten times as long as a plain commit. */
@@ -46,8 +49,37 @@ done | sort -u) || exit
 if [ -z "$commits" ]; then exit 0; fi
 `;
 
+/**
+ * Each line is `OLD-ID NEW-ID REFERENCE`, with zeros for a reference that is not there. What arrives is still apart from the
+ * repository; the variables by which git finds it there reach every command. Tags are followed; a deletion, or what is no
+ * commit, holds no records.
+ */
+const checkReceived = `# Each commit that arrives, and what it is held against: what its reference held, or the main branch.
+commit_of() { git rev-parse --verify --quiet "$1^{commit}"; }
+main=$(commit_of HEAD) || main=none
+pairs=$(tell_pushed | while read -r old new _; do
+  commit=$(commit_of "$new") || continue
+  echo "$commit $(commit_of "$old" || echo "$main")"
+done | sort -u) || exit
+if [ -z "$pairs" ]; then exit 0; fi
+`;
+
+const checkPairs = `echo "$pairs" | {
+  status=0
+  while read -r commit base; do
+    set -- check --if-touched --at "$commit"
+    if [ "$base" != none ]; then set -- "$@" --base "$base"; fi
+    stoplog "$@" </dev/null || status=1
+  done
+  exit $status; }
+exit
+`;
+
 /** `first` runs what comes before the check; it is given what to put in front of a command that reads the hook's input. */
 function script(hook: HookName, first: (input: string) => string): string {
+  if (hook === 'pre-receive') {
+    return readPushed + first('tell_pushed | ') + checkReceived + findStoplog(hook) + checkPairs;
+  }
   if (hook !== 'pre-push') return `${first('')}${findStoplog(hook)}stoplog check --at index\nexit\n`;
   const check =
     'status=0\nfor commit in $commits; do stoplog check --at "$commit" || status=1; done\nexit $status\n';

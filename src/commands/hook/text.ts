@@ -30,7 +30,7 @@ export function describeHooks({ home, hooks, tool }: HookReport, top: string): s
     ...home.notes,
     ...(home.refusal === null ? [] : [home.refusal.message, home.refusal.next]),
     ...(ours ? toolNotes(tool, show) : []),
-    ...(hooks.some((hook) => hook.done === 'written') ? [limits] : []),
+    ...(hooks.some(({ hook, done }) => done === 'written' && hook !== 'pre-receive') ? [limits] : []),
   ];
   return `${[...lines, ...notes.flatMap((note) => wrap(plain(note), width))].join('\n').trimEnd()}\n`;
 }
