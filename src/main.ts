@@ -3,16 +3,17 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { Context } from './commands/command.ts';
 import { runCommandLine } from './commands/command-line.ts';
+import { withoutCommands } from './commands/without-commands.ts';
 import { Failure } from './failure.ts';
 
-const context: Context = {
+const context: Context = withoutCommands({
   cwd: process.cwd(),
   environment: process.env,
   today: dateOf(process.env.SOURCE_DATE_EPOCH),
   color: wantsColor(),
   write: (text) => void process.stdout.write(text),
   tell: (text) => void process.stderr.write(text),
-};
+});
 
 process.stdout.on('error', (error: NodeJS.ErrnoException) => {
   // A reader that has seen enough (`| head`) is no failure of ours.

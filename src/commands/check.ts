@@ -1,6 +1,11 @@
 import { resolve } from 'node:path';
 import { Failure } from '../failure.ts';
+import { githubReport } from '../reports/github.ts';
+import { gitlabReport } from '../reports/gitlab.ts';
 import { jsonReport } from '../reports/json.ts';
+import { junitReport } from '../reports/junit.ts';
+import { markdownReport } from '../reports/markdown.ts';
+import { sarifReport } from '../reports/sarif.ts';
 import { textReport } from '../reports/text.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
 import { openRepository } from '../repository/repository.ts';
@@ -11,7 +16,9 @@ import { openBase } from './base.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { type Against, examine } from './examine.ts';
 import { stoplogFiles } from './studies.ts';
+import { tellGithub } from './tell-github.ts';
 import { touchesGoverned } from './touched.ts';
+import { version } from './version.ts';
 import { writeFileSafely } from './write-file.ts';
 
 export interface CheckOptions {
@@ -27,7 +34,7 @@ export interface CheckOptions {
   readonly color?: boolean;
 }
 
-const kinds = ['text', 'json'] as const;
+export const kinds = ['text', 'json', 'sarif', 'junit', 'github', 'gitlab', 'markdown'] as const;
 type Kind = (typeof kinds)[number];
 
 interface Report {
@@ -58,8 +65,9 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
     const verdict = await examine(snapshot, { today: context.today, only, phase, against });
     for (const { kind, to } of reports) {
       const text = write(kind, verdict, options, to === '-' && context.color);
-      if (to === '-') context.write(text);
+      if (to === '-') context.write(text, kind === 'github' ? 'command' : undefined);
       else await writeFileSafely(resolve(context.cwd, to), text);
+      if (kind === 'github') await tellGithub(context, verdict);
     }
     return verdict.verdict === 'pass' ? 0 : 1;
   } finally {
@@ -80,8 +88,22 @@ export function readAt(at: string): At {
 }
 
 function write(kind: Kind, verdict: Verdict, options: CheckOptions, color: boolean): string {
-  if (kind === 'json') return jsonReport(verdict);
-  return textReport(verdict, { color: options.color ?? color, quiet: options.quiet ?? false });
+  switch (kind) {
+    case 'text':
+      return textReport(verdict, { color: options.color ?? color, quiet: options.quiet ?? false });
+    case 'json':
+      return jsonReport(verdict);
+    case 'sarif':
+      return sarifReport(verdict, version);
+    case 'junit':
+      return junitReport(verdict);
+    case 'github':
+      return githubReport(verdict);
+    case 'gitlab':
+      return gitlabReport(verdict);
+    case 'markdown':
+      return markdownReport(verdict);
+  }
 }
 
 function readReport(given: string): Report {

@@ -1,13 +1,14 @@
-import { Command, CommanderError, Option } from 'commander';
+import { Argument, Command, CommanderError, Option } from 'commander';
 import { Failure } from '../failure.ts';
 import { caution } from '../reports/caution.ts';
 import { wrap } from '../reports/wrap.ts';
 import { phases } from '../rules/rule.ts';
-import { checkCommand } from './check.ts';
+import { checkCommand, kinds } from './check.ts';
 import type { Context, ExitStatus } from './command.ts';
 import type { DossierOptions } from './dossier.ts';
 import { hookNames } from './hook/script.ts';
 import { hookAdd, hookList, hookRemove } from './hook.ts';
+import { hosts, pipelineCommand } from './pipeline.ts';
 import { rulesCommand } from './rules.ts';
 import { sealCommand } from './seal.ts';
 import { version } from './version.ts';
@@ -63,7 +64,7 @@ function describe(run: Run): Command {
     .option('--if-touched', 'pass at once where nothing that a manifest governs differs from the base')
     .option('--only <what>', 'one record, one area (such as `inputs`), or one manifest’s folder')
     .addOption(new Option('--phase <phase>', 'judge as if the study had come this far').choices(phases))
-    .option('--report <kind=path>', '`text` or `json`, to a file or to `-`; may be repeated', collect)
+    .option('--report <kind=path>', `${kinds.join(', ')}; to a file or to \`-\`; may be repeated`, collect)
     .option('--no-cache', 'read every file anew instead of remembering digests')
     .option('--quiet', 'print only what blocks')
     .option('--color', 'colour the text report also where the output is no terminal')
@@ -103,6 +104,12 @@ function describe(run: Run): Command {
     .description('list every rule, or explain one: when it fires, why, its source, how to clear it')
     .argument('[id]', 'such as `seal.stale`')
     .action(run(rulesCommand));
+
+  program
+    .command('pipeline')
+    .description('print a job file for a CI host, ready to commit')
+    .addArgument(new Argument('<host>', 'which host').choices(hosts))
+    .action(run(pipelineCommand));
 
   const hook = program
     .command('hook')

