@@ -23,7 +23,7 @@ ruleCases(scenariosBeyondRange, {
           '7 of 7 years outside 981 to 1 161 mm: 2044 (894.6), 2045 (896.8), 2046 (932.4), 2047 (972.9), 2048 (900.9), 2049 (888.3) and 1 more',
           'furthest: 2049 with 888.3 mm, 51.5 % of the range beyond its end',
           // Percentiles of type 7 of 981, 987, 1071, 1161: 981 + 0.3 x 6, and 1071 + 0.7 x 90
-          'calibrated mean 1 050 mm of 4 years (10th to 90th percentile 982.8 to 1 134); in the scenario 917.1 mm of 7 (-12.7 %)',
+          'calibrated mean 1 050 mm of 4 years (10th to 90th percentile 982.8 to 1 134 mm); in the scenario 917.1 mm of 7 (-12.7 %)',
           'single steps: 0 % above the calibrated 99th percentile and 0 % below the 1st (1 % each if nothing changed)',
         ],
       },
@@ -52,7 +52,8 @@ ruleCases(scenariosBeyondRange, {
         record: 'scenarios.dry',
         subject: 'annual_rainfall',
         level: 'warn',
-        message: '1 of 7 years of annual rainfall in scenario dry lie outside',
+        message:
+          'lies outside the calibrated range of 981 to 1 161 mm in 1 of 7 years, though its mean does not',
       },
     },
     {

@@ -1,11 +1,11 @@
-import type { Outside } from '../../facts/conditions/reach.ts';
 import type { DriverFigures } from '../../facts/conditions.ts';
 import type { Facts } from '../../facts/facts.ts';
 import { isDefined } from '../../hydrology/paired.ts';
 import type { RecordNode } from '../../records/record.ts';
-import { few, figure } from '../figures.ts';
+import { figure } from '../figures.ts';
 import { type Draft, type Limits, rule } from '../rule.ts';
 import { isAnnualRain } from './annual-rain.ts';
+import { reachInWords } from './reach-in-words.ts';
 
 export const scenariosBeyondRange = rule({
   id: 'scenarios.beyond-range',
@@ -45,74 +45,58 @@ export const scenariosBeyondRange = rule({
 
 function judge(
   name: string,
-  { figures, reach, envelope }: DriverFigures,
+  driver: DriverFigures,
   record: RecordNode<'scenarios'>,
   facts: Facts,
-  limits: Limits,
+  { rain_decrease = 15, rain_increase = 20 }: Limits,
 ): readonly Draft[] {
+  const { figures, reach, envelope } = driver;
   const calibrated = facts.scenarios.conditions.get(name)?.figures;
   if (!isDefined(figures) || !isDefined(reach) || calibrated === undefined || !isDefined(calibrated))
     return [];
   const { mean, outside, changePercent } = reach.value;
-  const change = isDefined(changePercent) ? changePercent.value : null;
-  const { rain_decrease = 15, rain_increase = 20 } = limits;
+  const change = isDefined(changePercent) ? changePercent.value : 0;
   const isRainBeyond =
-    change !== null &&
-    (change < -rain_decrease || change > rain_increase) &&
-    isAnnualRain(name, record, facts);
+    (change < -rain_decrease || change > rain_increase) && isAnnualRain(name, record, facts);
   if (mean === null && !isRainBeyond && outside.length === 0) return [];
-  const { unit: stated, by = 'year' } = facts.manifest.data.scenarios?.conditions?.[name] ?? {};
-  const unit = stated === undefined || stated === '1' ? '' : ` ${stated}`;
-  const what = name.replaceAll('_', ' ');
-  const { lowest, highest } = calibrated.value;
-  const range = `${figure(lowest)} to ${figure(highest)}${unit}`;
-  const worst = outside.reduce<Outside | null>(
-    (so, one) => (so === null || sizeOf(one) > sizeOf(so) ? one : so),
-    null,
-  );
-  const changed = change === null ? '' : ` (${signed(change)} %)`;
-  const means = `The mean ${what} of scenario ${record.name}, ${figure(figures.value.mean)}${unit}, `;
-  const isBeyond = mean !== null || isRainBeyond;
-  const message =
-    mean !== null
-      ? `${means}lies outside the calibrated range of ${range}${changed}.`
-      : isRainBeyond
-        ? `${means}is ${Math.abs(change).toFixed(1)} % ${change < 0 ? 'below' : 'above'} the calibrated ${figure(calibrated.value.mean)}${unit}; a calibration is trusted from -${figure(rain_decrease)} to +${figure(rain_increase)} %.`
-        : `${outside.length} of ${figures.value.values.length} ${by}s of ${what} in scenario ${record.name} lie outside the calibrated range of ${range}, though the mean does not.`;
+
+  const { unit, by = 'year' } = facts.manifest.data.scenarios?.conditions?.[name] ?? {};
+  const words = reachInWords({
+    calibrated: calibrated.value,
+    scenario: figures.value,
+    reach: reach.value,
+    envelope,
+    unit: unit ?? '1',
+    by,
+  });
+  const what = `${name.replaceAll('_', ' ')} of scenario ${record.name}`;
+  const about = {
+    record: record.id,
+    field: [...record.field, 'drivers', name],
+    subject: name,
+    found: Number(figures.value.mean.toPrecision(4)),
+    ...(unit === undefined ? {} : { unit }),
+    detail: words.detail,
+  };
+  if (mean !== null)
+    return [
+      {
+        ...about,
+        message: `The mean ${what}, ${words.scenarioMean}, lies outside the calibrated range of ${words.range}${words.change}.`,
+      },
+    ];
+  if (isRainBeyond)
+    return [
+      {
+        ...about,
+        message: `The mean ${what}, ${words.scenarioMean}, is ${Math.abs(change).toFixed(1)} % ${change < 0 ? 'below' : 'above'} the calibrated ${words.calibratedMean}; a calibration is trusted from -${figure(rain_decrease)} to +${figure(rain_increase)} %.`,
+      },
+    ];
   return [
     {
-      record: record.id,
-      field: [...record.field, 'drivers', name],
-      subject: name,
-      ...(isBeyond ? {} : { from: 'warn' as const }),
-      found: Number(figure(figures.value.mean).replaceAll(' ', '')),
-      ...(stated === undefined ? {} : { unit: stated }),
-      message,
-      detail: [
-        ...(outside.length > 0 && worst !== null
-          ? [
-              `${outside.length} of ${figures.value.values.length} ${by}s outside ${range}: ${few(
-                outside.map(({ label, value }) => `${label} (${figure(value)})`),
-                6,
-              )}`,
-              `furthest: ${worst.label} with ${figure(worst.value)}${unit}${isDefined(worst.share) ? `, ${figure(100 * worst.share.value)} % of the range beyond its end` : ''}`,
-            ]
-          : []),
-        `calibrated mean ${figure(calibrated.value.mean)}${unit} of ${calibrated.value.values.length} ${by}s (10th to 90th percentile ${figure(calibrated.value.p10)} to ${figure(calibrated.value.p90)}); in the scenario ${figure(figures.value.mean)}${unit} of ${figures.value.values.length}${changed}`,
-        ...(isDefined(envelope)
-          ? [
-              `single steps: ${figure(100 * envelope.value.shareAboveHigh)} % above the calibrated 99th percentile and ${figure(100 * envelope.value.shareBelowLow)} % below the 1st (1 % each if nothing changed)`,
-            ]
-          : []),
-      ],
+      ...about,
+      from: 'warn',
+      message: `The ${what} lies outside the calibrated range of ${words.range} in ${outside.length} of ${figures.value.values.length} ${by}s, though its mean does not.`,
     },
   ];
-}
-
-function sizeOf({ share }: Outside): number {
-  return isDefined(share) ? share.value : Number.POSITIVE_INFINITY;
-}
-
-function signed(percent: number): string {
-  return `${percent > 0 ? '+' : ''}${percent.toFixed(1)}`;
 }
