@@ -3,6 +3,7 @@ import { writePackage } from '../dossier/archive/write-package.ts';
 import type { DossierContent } from '../dossier/content.ts';
 import { packageFiles } from '../dossier/package/package-files.ts';
 import { Failure } from '../failure.ts';
+import { plain } from '../reports/escape.ts';
 import { textReport } from '../reports/text.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { type Gathered, gather } from './gather.ts';
@@ -43,8 +44,8 @@ async function make(
   }
   const prepared = await packageFiles(content, bag === true);
   if (prepared.files === null) {
-    context.write(`No dossier was written: these names can’t be unpacked everywhere.\n`);
-    for (const problem of prepared.problems) context.write(`  ${problem}\n`);
+    context.write('No dossier was written: these names can’t be unpacked everywhere.\n');
+    for (const problem of prepared.problems) context.write(`  ${plain(problem)}\n`);
     context.write('Rename the files, or make the dossier without `--bag`.\n');
     return 1;
   }
