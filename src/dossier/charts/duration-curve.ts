@@ -21,7 +21,7 @@ export function durationCurve({ observed, simulated }: Cloud, of: Drawing): Char
     : linear({ from: Math.min(0, extent.from), to: extent.to }, upwards);
   const xScale = linear({ from: 0, to: 100 }, inPlot);
   const path = (ranked: Float64Array) =>
-    ranksDrawn(ranked.length)
+    ranksDrawn(ranked.length, of.columns)
       .map((rank, place) => {
         const x = xScale((100 * (rank + 1)) / (ranked.length + 1));
         return `${place === 0 ? 'M' : 'L'}${short(x)} ${short(yScale(ranked[rank] as number))}`;
@@ -56,16 +56,16 @@ export function durationCurve({ observed, simulated }: Cloud, of: Drawing): Char
   );
 }
 
-/** All ranks of a short list; of a long one the ends, where the curve bends, one by one, and between them a few hundred. */
-function ranksDrawn(count: number): readonly number[] {
-  if (count <= 300) return Array.from({ length: count }, (_, rank) => rank);
+/** All ranks of a short list; of a long one the ends, where the curve bends, one by one, and between them as many as can be told apart. */
+function ranksDrawn(count: number, columns: number): readonly number[] {
   const ends = 25;
-  const between = Array.from(
-    { length: 200 },
-    (_, place) => ends + Math.round(((count - 1 - 2 * ends) * place) / 199),
-  );
-  const [first, last] = [0, count - ends].map((from) =>
-    Array.from({ length: ends }, (_, place) => from + place),
-  );
-  return [...new Set([...(first ?? []), ...between, ...(last ?? [])])];
+  const between = Math.min(200, columns);
+  if (count <= 2 * ends + between) return Array.from({ length: count }, (_, rank) => rank);
+  const stretch = (from: number, to: number, marks: number) =>
+    Array.from({ length: marks }, (_, place) => from + Math.round(((to - from) * place) / (marks - 1)));
+  return [
+    ...stretch(0, ends - 1, ends),
+    ...stretch(ends, count - ends - 1, between),
+    ...stretch(count - ends, count - 1, ends),
+  ];
 }

@@ -17,7 +17,9 @@ export interface RestsOn {
 
 const rowHeight = 20;
 const top = 30;
-const textEnd = 236;
+const textEnd = 252;
+/** Letters of a row, bold ones too, that fit before the arcs. */
+const mostLetters = 31;
 
 /** Records one below the other, each joined by an arc to those that it rests on. Null without records. */
 export function restsOnPicture(
@@ -40,7 +42,8 @@ export function restsOnPicture(
   const drawn = rows.map(({ name, state }, place) => {
     const y = middle(place);
     const isSound = state === 'sound';
-    const text = `${shortened(name, 28)}${isSound ? '' : ` (${state})`}`;
+    const told = isSound ? '' : ` (${state})`;
+    const text = shortened(name, mostLetters - told.length) + told;
     return (
       element('path', {
         class: isSound ? 'node' : 'node unsound',
@@ -49,7 +52,7 @@ export function restsOnPicture(
       label(20, y + 4, text, { class: isSound ? 'key' : 'key unsound' }) +
       element('path', {
         class: 'grid',
-        d: `M${Math.min(textEnd - 4, 26 + text.length * 6.4)} ${y}H${textEnd}`,
+        d: `M${Math.min(textEnd - 4, 28 + text.length * (isSound ? 6.5 : 7.3))} ${y}H${textEnd}`,
       })
     );
   });

@@ -20,7 +20,7 @@ export function scatter(calibration: Cloud | null, validation: Cloud | null, of:
   const marks = (cloud: Cloud | null, mark: (x: number, y: number) => string) =>
     cloud === null
       ? ''
-      : cells(cloud, xScale, yScale)
+      : cells(cloud, xScale, yScale, of.columns < inPlot.to - inPlot.from ? 6 : 3)
           .map(([x, y]) => mark(x, y))
           .join('');
   const count = (cloud: Cloud | null) => figure(cloud?.observed.length ?? 0);
@@ -50,13 +50,12 @@ export function scatter(calibration: Cloud | null, validation: Cloud | null, of:
   );
 }
 
-/** Wide as a mark, so that one mark for each occupied cell hides nothing that could be seen. */
-const cell = 3;
-
+/** Each occupied cell is one mark: cells as wide as a mark hide nothing that could be seen; wider ones keep a long page small. */
 function cells(
   { observed, simulated }: Cloud,
   xScale: Scale,
   yScale: Scale,
+  cell: number,
 ): readonly (readonly [number, number])[] {
   const occupied = new Set<number>();
   for (let place = 0; place < observed.length; place++) {

@@ -19,61 +19,66 @@ export interface Thinning {
 
 /**
  * The path of a line, thinned to the first, lowest, highest and last value of each column of the drawing, in order of time, so
- * that every peak and every trough is drawn. A line with no more values than that is drawn whole. A value between gaps is a dot.
+ * that every peak and every trough is drawn. A line with no more values than that is drawn whole. Gaps are left open where a
+ * drawing can show them: those wider than a column. A value between gaps is a dot.
  * Method: M4, Jugel et al. 2014, Proc. VLDB Endowment 7(10):797-808.
  */
-export function linePath(line: Line, { xScale, yScale, plot, columns, longestStep }: Thinning): string {
+export function linePath(line: Line, how: Thinning): string {
   const { x, y } = line;
+  const { xScale, plot, columns, longestStep } = how;
   const isWhole = x.length <= columns * 2;
+  const columnWidth = (plot.to - plot.from) / columns / (xScale(1) - xScale(0));
+  const widest = isWhole ? longestStep : Math.max(longestStep, columnWidth);
+  let path = '';
+  let run: number[] = [];
+  const finish = () => {
+    path += isWhole ? wholeRun(line, run, how) : thinnedRun(line, run, how);
+    if (run.length === 1) path += 'h0';
+    run = [];
+  };
+  for (let row = 0; row < x.length; row++) {
+    if (!Number.isFinite(y[row])) continue;
+    const before = run.at(-1);
+    if (before !== undefined && (x[row] as number) - (x[before] as number) > widest) finish();
+    run.push(row);
+  }
+  finish();
+  return path;
+}
+
+function wholeRun({ x, y }: Line, rows: readonly number[], { xScale, yScale }: Thinning): string {
+  return rows
+    .map(
+      (row, place) =>
+        `${place === 0 ? 'M' : 'L'}${short(xScale(x[row] as number))} ${short(yScale(y[row] as number))}`,
+    )
+    .join('');
+}
+
+function thinnedRun(
+  { x, y }: Line,
+  rows: readonly number[],
+  { xScale, yScale, plot, columns }: Thinning,
+): string {
   const width = (plot.to - plot.from) / columns;
   const columnOf = (row: number) => Math.floor((xScale(x[row] as number) - plot.from) / width);
   let path = '';
-  let row = 0;
-  while (row < x.length) {
-    if (!Number.isFinite(y[row])) {
-      row++;
-      continue;
+  for (let at = 0; at < rows.length; ) {
+    const first = rows[at] as number;
+    const column = columnOf(first);
+    let [lowest, highest, last] = [first, first, first];
+    for (; at < rows.length && columnOf(rows[at] as number) === column; at++) {
+      last = rows[at] as number;
+      if ((y[last] as number) < (y[lowest] as number)) lowest = last;
+      if ((y[last] as number) > (y[highest] as number)) highest = last;
     }
-    let end = row + 1;
-    while (
-      end < x.length &&
-      Number.isFinite(y[end]) &&
-      (x[end] as number) - (x[end - 1] as number) <= longestStep
-    )
-      end++;
-    path += isWhole ? wholeRun(line, row, end, xScale, yScale) : thinnedRun(row, end);
-    row = end;
+    const inOrder = [first, Math.min(lowest, highest), Math.max(lowest, highest), last];
+    const levels = inOrder.map((row) => short(yScale(y[row] as number)));
+    const [begin = '', ...more] = levels.filter((level, place) => level !== levels[place - 1]);
+    path += `${path === '' ? 'M' : 'L'}${short(plot.from + (column + 0.5) * width)} ${begin}`;
+    path += more.map((level) => `V${level}`).join('');
   }
   return path;
-
-  function thinnedRun(from: number, until: number): string {
-    let run = '';
-    let at = from;
-    while (at < until) {
-      const column = columnOf(at);
-      let [lowest, highest, last] = [at, at, at];
-      for (let next = at + 1; next < until && columnOf(next) === column; next++) {
-        if ((y[next] as number) < (y[lowest] as number)) lowest = next;
-        if ((y[next] as number) > (y[highest] as number)) highest = next;
-        last = next;
-      }
-      const rows = [...new Set([at, Math.min(lowest, highest), Math.max(lowest, highest), last])];
-      const levels = rows.map((one) => short(yScale(y[one] as number)));
-      const distinct = levels.filter((level, place) => place === 0 || level !== levels[place - 1]);
-      const [first = '', ...more] = distinct;
-      run += `${at === from ? 'M' : 'L'}${short(plot.from + (column + 0.5) * width)} ${first}`;
-      run += more.map((level) => `V${level}`).join('');
-      at = last + 1;
-    }
-    return until - from === 1 ? `${run}h0` : run;
-  }
-}
-
-function wholeRun({ x, y }: Line, from: number, end: number, xScale: Scale, yScale: Scale): string {
-  let run = '';
-  for (let row = from; row < end; row++)
-    run += `${row === from ? 'M' : 'L'}${short(xScale(x[row] as number))} ${short(yScale(y[row] as number))}`;
-  return end - from === 1 ? `${run}h0` : run;
 }
 
 /** The area between two lines of the same times, thinned to the widest of each column. */

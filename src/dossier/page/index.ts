@@ -52,7 +52,7 @@ async function studyBlocks(content: DossierContent): Promise<readonly Block[]> {
 
 /** Fewer where there are many targets, so that a hundred of them stay below 5 MB. */
 function columnsFor(targets: number): number {
-  return targets <= 12 ? manyColumns : 173;
+  return targets <= 12 ? manyColumns : Math.max(40, Math.min(170, Math.round(10_000 / targets)));
 }
 
 async function sectionsOf(subject: Subject): Promise<readonly Block[]> {
