@@ -20,7 +20,7 @@ ruleCases(scenariosBeyondRange, {
         unit: 'mm',
         message: '917.1 mm, lies outside the calibrated range of 981 to 1 161 mm (-12.7 %)',
         detail: [
-          '7 of 7 years outside 981 to 1 161 mm: 2044 (894.6), 2045 (896.8), 2046 (932.4), 2047 (972.9), 2048 (900.9), 2049 (888.3) and 1 more',
+          'years outside (7 of 7): 2044 (894.6), 2045 (896.8), 2046 (932.4), 2047 (972.9), 2048 (900.9), 2049 (888.3) and 1 more',
           'furthest: 2049 with 888.3 mm, 51.5 % of the range beyond its end',
           // Percentiles of type 7 of 981, 987, 1071, 1161: 981 + 0.3 x 6, and 1071 + 0.7 x 90
           'calibrated mean 1 050 mm of 4 years (10th to 90th percentile 982.8 to 1 134 mm); in the scenario 917.1 mm of 7 (-12.7 %)',

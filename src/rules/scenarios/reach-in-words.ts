@@ -35,7 +35,7 @@ export function reachInWords({ calibrated, scenario, reach, envelope, unit, by }
     const all = outside.map(({ label, value }) => `${label} (${figure(value)})`);
     const { label, value, share } = furthest;
     const size = isDefined(share) ? `, ${figure(100 * share.value)} % of the range beyond its end` : '';
-    detail.push(`${outside.length} of ${scenario.values.length} ${by}s outside ${range}: ${few(all, 6)}`);
+    detail.push(`${by}s outside (${outside.length} of ${scenario.values.length}): ${few(all, 6)}`);
     detail.push(`furthest: ${label} with ${amount(value)}${size}`);
   }
   detail.push(
