@@ -57,7 +57,8 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
     if (asked !== undefined) {
       against = { asked, strict, ...(await openBase(repository, asked, snapshot, cache)) };
     }
-    if (options.ifTouched && !(await touchesGoverned(snapshot, against?.base ?? null))) {
+    const comparable = against === undefined || against.base !== null;
+    if (options.ifTouched && comparable && !(await touchesGoverned(snapshot, against?.base ?? null))) {
       if (!options.quiet) context.write(untouched(snapshot, against?.base ?? null));
       return 0;
     }

@@ -183,7 +183,11 @@ describe('a push that touches no model', () => {
     await project.git('checkout', '--quiet', '--orphan', 'pages');
     await project.git('rm', '--quiet', '-r', '--cached', 'models');
     await project.git('commit', '--quiet', '-m', 'Pages');
-    // The main branch has a manifest and this one shares no commit with it, so there is nothing to compare and nothing to check.
+    // A new history of its own holds no model; put in the place of one that does, it takes the model away.
+    expect(await push('--force', 'pages:main')).toMatchObject({
+      accepted: false,
+      words: expect.stringContaining('there is no stoplog.yaml'),
+    });
     expect(await push('pages')).toMatchObject({
       accepted: true,
       words: expect.stringContaining('holds no manifest'),

@@ -54,12 +54,12 @@ if [ -z "$commits" ]; then exit 0; fi
  * repository; the variables by which git finds it there reach every command. Tags are followed; a deletion, or what is no
  * commit, holds no records.
  */
-const checkReceived = `# Each commit that arrives, and what it is held against: what its reference held, or the main branch.
+const checkReceived = `# Each commit that arrives, and what it is held against: what its reference held; for a new
+# reference, where it left the main branch.
 commit_of() { git rev-parse --verify --quiet "$1^{commit}"; }
-main=$(commit_of HEAD) || main=none
 pairs=$(tell_pushed | while read -r old new _; do
   commit=$(commit_of "$new") || continue
-  echo "$commit $(commit_of "$old" || echo "$main")"
+  echo "$commit $(commit_of "$old" || git merge-base HEAD "$commit" 2>/dev/null || echo none)"
 done | sort -u) || exit
 if [ -z "$pairs" ]; then exit 0; fi
 `;
