@@ -1,23 +1,16 @@
-import type { Comparison, Finding, Level, Verdict } from '../verdict/finding.ts';
+import type { Comparison, Finding, Verdict } from '../verdict/finding.ts';
 import { fingerprint } from '../verdict/fingerprint.ts';
 import { counts, passes } from '../verdict/judge.ts';
 import { plain } from './escape.ts';
 
 /** How a finding counts here, worst first: open ones by their level, then what the base had, then what somebody answers for. */
-export const weights = ['block', 'warn', 'note', 'standing', 'answered'] as const;
+const weights = ['block', 'warn', 'note', 'standing', 'answered'] as const;
 export type Weight = (typeof weights)[number];
 
-export function weightOf(finding: Finding, comparison: Comparison | null): Weight {
+function weightOf(finding: Finding, comparison: Comparison | null): Weight {
   if (passes(finding) !== null) return 'answered';
   return counts(finding, comparison) ? finding.level : 'standing';
 }
-
-/** A level as people and hosts call it. */
-export const severities: Readonly<Record<Level, 'error' | 'warning' | 'note'>> = {
-  block: 'error',
-  warn: 'warning',
-  note: 'note',
-};
 
 /** The longest texts that a report carries of one finding: what was found, and the next step. */
 const longest = { found: 3000, step: 1000 };
@@ -25,7 +18,9 @@ const longest = { found: 3000, step: 1000 };
 /** All that a report says of a finding, a line each; safe to print, and bounded. */
 export function explain(finding: Finding): readonly string[] {
   const { message, detail, clear, standing, waived, accepted } = finding;
-  const found = [plain(message), ...comparison(finding), ...detail.map(plain), ...way(finding)].join('\n');
+  const found = [plain(message), ...statedAndFound(finding), ...detail.map(plain), ...way(finding)].join(
+    '\n',
+  );
   return [
     ...clip(found, longest.found).split('\n'),
     ...(standing ? ['Standing: the base revision had it already.'] : []),
@@ -36,7 +31,7 @@ export function explain(finding: Finding): readonly string[] {
 }
 
 /** What was stated and what was found, where both are there. */
-export function comparison({ stated, found, unit }: Finding): readonly string[] {
+export function statedAndFound({ stated, found, unit }: Finding): readonly string[] {
   if (stated === null || found === null) return [];
   return [plain(`stated ${stated}, found ${found}${unit === null ? '' : ` ${unit}`}`)];
 }

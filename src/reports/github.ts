@@ -1,6 +1,7 @@
 import type { Verdict } from '../verdict/finding.ts';
 import { plain } from './escape.ts';
 import { clip, everyFinding, explain, type Told, type Weight } from './explain.ts';
+import { remarks } from './remarks.ts';
 import { tally } from './tally.ts';
 
 const commands = ['error', 'warning', 'notice'] as const;
@@ -20,10 +21,12 @@ const shownOfEach = 10;
 /** The verdict as annotations that GitHub Actions reads from a step's output, worst first, and a last line with the tally. */
 export function githubReport(verdict: Verdict): string {
   const told = everyFinding(verdict);
+  const about = remarks(verdict).map(plain).join('\n');
   const lines = commands.flatMap((command) =>
     annotations(
       command,
       told.filter(({ weight }) => commandOf[weight] === command),
+      command === 'warning' ? clip(about, 3000) : '',
     ),
   );
   return [...lines, `stoplog: ${tally(verdict)}`, ''].join('\n');
@@ -36,14 +39,16 @@ export function githubOutputs({ verdict, totals }: Verdict): string {
     .join('');
 }
 
-function annotations(command: Command, told: readonly Told[]): readonly string[] {
-  const shown = told.length > shownOfEach ? told.slice(0, shownOfEach - 1) : told;
+/** `about` is said first and takes one of the places, where it is not empty. */
+function annotations(command: Command, told: readonly Told[], about: string): readonly string[] {
+  const places = shownOfEach - (about === '' ? 0 : 1);
+  const shown = told.length > places ? told.slice(0, places - 1) : told;
   const left = told.length - shown.length;
+  const own = (text: string) => `::${command} title=stoplog::${data(text)}`;
   return [
+    ...(about === '' ? [] : [own(about)]),
     ...shown.map((one) => annotation(command, one)),
-    ...(left === 0
-      ? []
-      : [`::${command} title=stoplog::${data(`... and ${left} more; the job summary lists them.`)}`]),
+    ...(left === 0 ? [] : [own(`... and ${left} more; the job summary lists them.`)]),
   ];
 }
 

@@ -1,4 +1,5 @@
 import type { Verdict } from '../verdict/finding.ts';
+import { plain } from './escape.ts';
 import { everyFinding, explain, type Told, type Weight } from './explain.ts';
 import { jsonText } from './json.ts';
 
@@ -18,7 +19,7 @@ export function gitlabReport(verdict: Verdict): string {
 
 function entry({ finding, weight, identity }: Told) {
   return {
-    description: `${finding.record}: ${explain(finding).join(' ')}`,
+    description: `${plain(finding.record)}: ${explain(finding).join(' ')}`,
     check_name: finding.rule,
     fingerprint: identity,
     severity: severities[weight],

@@ -1,5 +1,6 @@
 import type { ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { clip, everyFinding, explain, type Told } from './explain.ts';
+import { remarks } from './remarks.ts';
 import { withinLimit } from './within-limit.ts';
 
 /** GitLab reads 30 MB of one file. */
@@ -10,10 +11,12 @@ const bytesRead = 30_000_000;
  * was found. What blocks is a failure; what passes by somebody's word or was there before is skipped with the reason.
  */
 export function junitReport(verdict: Verdict): string {
+  const about = remarks(verdict);
   const render = (shown: readonly Told[], left: number): string => {
     const suites = verdict.manifests.map((manifest) =>
       suite(
         manifest,
+        about,
         shown.filter((one) => one.manifest === manifest.path),
       ),
     );
@@ -30,7 +33,7 @@ export function junitReport(verdict: Verdict): string {
   return withinLimit(everyFinding(verdict), render, bytesRead);
 }
 
-function suite(manifest: ManifestVerdict, told: readonly Told[]) {
+function suite(manifest: ManifestVerdict, about: readonly string[], told: readonly Told[]) {
   const spoken = new Set(manifest.findings.map(({ record }) => record));
   const silent = manifest.records.filter(({ id }) => !spoken.has(id));
   const names = new Map<string, number>();
@@ -45,6 +48,7 @@ function suite(manifest: ManifestVerdict, told: readonly Told[]) {
   const skipped = told.filter(({ weight }) => weight === 'standing' || weight === 'answered').length;
   const properties = [
     ['phase', manifest.phase] as const,
+    ...about.map((remark) => ['comparison', remark] as const),
     ...manifest.departures.map(
       ({ of, now, because }) => ['departure', `${of} now ${now}: ${because}`] as const,
     ),

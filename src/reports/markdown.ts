@@ -1,7 +1,16 @@
 import type { Finding, ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { caution } from './caution.ts';
 import { plain } from './escape.ts';
-import { clip, comparison, everyFinding, explain, isLoosening, type Told, type Weight } from './explain.ts';
+import {
+  clip,
+  everyFinding,
+  explain,
+  isLoosening,
+  statedAndFound,
+  type Told,
+  type Weight,
+} from './explain.ts';
+import { remarks } from './remarks.ts';
 import { tally } from './tally.ts';
 import { count } from './text.ts';
 import { withinLimit } from './within-limit.ts';
@@ -49,15 +58,14 @@ export function markdownReport(verdict: Verdict, bytes = commentBytes): string {
 }
 
 function opening(verdict: Verdict): readonly string[] {
-  const { at, base, comparison, manifests } = verdict;
-  const remarks = [comparison?.unavailable ?? null, ...(comparison?.notes ?? [])].filter(
-    (one) => one !== null,
-  );
+  const { at, base, manifests } = verdict;
   return [
     `## Stoplog: ${verdict.verdict}`,
     '',
     `${tally(verdict)}. Checked: ${literal(at)}${base === null ? '' : `, against ${literal(base)}`}.`,
-    ...remarks.slice(0, listed).flatMap((remark) => ['', `**${literal(remark)}**`]),
+    ...remarks(verdict)
+      .slice(0, listed)
+      .flatMap((remark) => ['', `**${literal(remark)}**`]),
     '',
     ...manifests.slice(0, listed).map(study),
     ...manifests.flatMap(departures).slice(0, listed),
@@ -85,7 +93,7 @@ function cured({ manifests }: Verdict): readonly string[] {
 /** Data that differ from what was sealed, and figures that are not those of the files, at a glance. */
 function changes(told: readonly Told[]): readonly string[] {
   const rows = told.flatMap(({ finding, weight }) => {
-    const what = [...comparison(finding), ...finding.detail.slice(0, 1)];
+    const what = [...statedAndFound(finding), ...finding.detail.slice(0, 1)];
     const open = weight !== 'standing' && weight !== 'answered';
     return open && what.length > 0 ? [`| ${short(finding.record)} | ${what.map(short).join('; ')} |`] : [];
   });

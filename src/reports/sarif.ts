@@ -3,11 +3,12 @@ import { settingsAddress } from '../records/field.ts';
 import { rules } from '../rules/index.ts';
 import { levelInWords } from '../rules/level-in-words.ts';
 import type { Rule } from '../rules/rule.ts';
-import type { Finding, ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import type { ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { passes } from '../verdict/judge.ts';
 import { plain } from './escape.ts';
-import { clip, everyFinding, explain, severities, type Told } from './explain.ts';
+import { clip, everyFinding, explain, type Told } from './explain.ts';
 import { jsonText } from './json.ts';
+import { remarks } from './remarks.ts';
 import { withinLimit } from './within-limit.ts';
 
 const schema = 'https://docs.oasis-open.org/sarif/sarif/v2.1.0/errata01/os/schemas/sarif-schema-2.1.0.json';
@@ -15,6 +16,8 @@ const schema = 'https://docs.oasis-open.org/sarif/sarif/v2.1.0/errata01/os/schem
 /** What a code scanning host takes: 25 000 results, 10 MB compressed; anything over is refused whole. */
 const resultsTaken = 25_000;
 const bytesTaken = 10_000_000;
+
+const levels = { block: 'error', warn: 'warning', note: 'note' } as const;
 
 /** SARIF 2.1.0 (OASIS, Errata 01) with every rule's reason and remedy; the same verdict gives the same bytes. */
 export function sarifReport(verdict: Verdict, version: string): string {
@@ -33,6 +36,10 @@ function compressed(report: string): number {
 function log(verdict: Verdict, version: string, told: readonly Told[], left: number) {
   const records = new Set(verdict.manifests.flatMap((manifest) => manifest.records.map(({ id }) => id)));
   const compared = verdict.base !== null;
+  const notices = [
+    ...remarks(verdict),
+    ...(left === 0 ? [] : [`${left} further findings are left out: a host would refuse the file.`]),
+  ];
   return {
     $schema: schema,
     version: '2.1.0',
@@ -42,9 +49,7 @@ function log(verdict: Verdict, version: string, told: readonly Told[], left: num
         automationDetails: { id: 'stoplog/' },
         originalUriBaseIds: { SRCROOT: { description: { text: 'The top of the repository' } } },
         columnKind: 'utf16CodeUnits',
-        invocations: [
-          { executionSuccessful: true, toolExecutionNotifications: left === 0 ? [] : [leftOut(left)] },
-        ],
+        invocations: [{ executionSuccessful: true, toolExecutionNotifications: notices.map(notification) }],
         results: told.map((one) => result(one, records, compared)),
         properties: { verdict: verdict.verdict, studies: verdict.manifests.map(study) },
       },
@@ -56,11 +61,8 @@ function study({ path, phase, departures }: ManifestVerdict) {
   return { path, phase, departures };
 }
 
-function leftOut(left: number) {
-  return {
-    level: 'warning',
-    message: { text: `${left} further findings are left out: a host would refuse the file.` },
-  };
+function notification(text: string) {
+  return { level: 'warning', message: { text: noLink(clip(plain(text), 3000)) } };
 }
 
 const placeOf = new Map(rules.map(({ id }, index) => [id, index]));
@@ -86,8 +88,8 @@ function result({ finding, identity }: Told, records: ReadonlySet<string>, compa
     ruleId: rule,
     ruleIndex: placeOf.get(rule),
     // Hosts pay no heed to suppressions, so what somebody answers for must not weigh as an error.
-    level: answered === null ? severities[level] : 'note',
-    message: { text: messageOf(finding) },
+    level: answered === null ? levels[level] : 'note',
+    message: { text: noLink(`${plain(finding.record)}: ${explain(finding).join('\n')}`) },
     locations: [location(file, { startLine: line, startColumn: column })],
     relatedLocations: isFile ? [location(root)] : undefined,
     partialFingerprints: { primaryLocationLineHash: `${identity}:1`, 'stoplog/v1': identity },
@@ -109,8 +111,8 @@ function location(path: string, region?: object) {
 }
 
 /** SARIF 3.11.6 makes links of `[text](target)`; a stranger's text must make none. */
-function messageOf(finding: Finding): string {
-  return `${finding.record}: ${explain(finding).join('\n')}`.replaceAll('](', '] (');
+function noLink(text: string): string {
+  return text.replaceAll('](', '] (');
 }
 
 /** RFC 3986: a relative reference, every other byte percent-encoded. */

@@ -3,7 +3,9 @@ import type { Cured, Finding, Level, ManifestVerdict, Verdict } from '../verdict
 import { counts, passes } from '../verdict/judge.ts';
 import { caution } from './caution.ts';
 import { plain } from './escape.ts';
+import { statedAndFound, way } from './explain.ts';
 import { fold, type Group, groupByRecord } from './fold.ts';
+import { remarks } from './remarks.ts';
 import { wrap } from './wrap.ts';
 
 export interface TextOptions {
@@ -31,7 +33,7 @@ export function textReport(verdict: Verdict, { color, quiet }: TextOptions): str
   const compared = verdict.base === null ? '' : `; ${stood} standing, ${gone} cured`;
   const tally = `${count(block, 'finding')} to clear, ${count(warn, 'warning')}, ${count(note, 'note')}${compared}`;
   const pass = verdict.verdict === 'pass';
-  lines.push(...aboutBase(verdict));
+  lines.push(...remarks(verdict).flatMap((remark) => ['', ...wrap(plain(remark), width)]));
   lines.push('', `${pass ? paint.green.bold('PASS') : paint.red.bold('BLOCKED')}   ${tally}`);
   if (pass) lines.push('', ...wrap(caution, width).map((line) => paint.dim(line)));
   return `${lines.join('\n')}\n`;
@@ -131,24 +133,14 @@ function findingLines(finding: Finding, placeOfRecord: string, paint: ChalkInsta
   const [step = '', ...more] = wrap(plain(finding.clear), width - hanging.length);
   return [
     ...wrap(plain(finding.message), width - indent.length).map((line) => indent + line),
-    ...comparison(finding),
+    ...statedAndFound(finding).map((line) => indent + line),
     ...finding.detail.map((line) => indent + plain(line)),
-    ...(finding.trail.length > 1 && !finding.message.includes(finding.trail.at(-1) ?? '')
-      ? wrap(`rests on ${finding.trail.slice(1).map(plain).join(' <- ')}`, width - indent.length).map(
-          (line) => indent + line,
-        )
-      : []),
+    ...way(finding).flatMap((line) => wrap(line, width - indent.length).map((part) => indent + part)),
     ...(place === placeOfRecord ? [] : [indent + paint.dim(`at ${place}`)]),
     `${indent}${paint.cyan('to clear')}   ${step}`,
     ...more.map((line) => hanging + line),
     paint.dim(`${hanging}(${finding.rule})`),
   ];
-}
-
-function comparison({ stated, found, unit }: Finding): readonly string[] {
-  if (stated === null || found === null) return [];
-  const shown = (value: string | number) => plain(String(value));
-  return [`${indent}stated ${shown(stated)}, found ${shown(found)}${unit === null ? '' : ` ${plain(unit)}`}`];
 }
 
 const listedAtMost = 12;
@@ -181,19 +173,6 @@ function listing(title: string, found: readonly (Finding | Cured)[]): readonly s
 
 function hanging(line: string): readonly string[] {
   return wrap(plain(line), width - 2).map((part, index) => (index === 0 ? `  ${part}` : indent + part));
-}
-
-/** Why nothing was compared, or what to know of the comparison. */
-function aboutBase({ comparison }: Verdict): readonly string[] {
-  if (comparison === null) return [];
-  const { asked, unavailable, notes } = comparison;
-  const said =
-    unavailable === null
-      ? notes
-      : [
-          `Not compared with ${asked}: ${unavailable} All of this content was checked instead, and everything found counts as new.`,
-        ];
-  return said.flatMap((sentence) => ['', ...wrap(plain(sentence), width)]);
 }
 
 /** Findings that pass by somebody's signed word, and departures from the default levels: always said. */

@@ -68,6 +68,25 @@ describe('annotations', () => {
   });
 });
 
+describe('what to know of the base', () => {
+  it('is the first warning, within the ten', () => {
+    const comparison = { asked: 'main', strict: false, unavailable: 'The history is too short.', notes: [] };
+    const many = Array.from({ length: 30 }, (_, index) =>
+      finding({ level: 'warn', fingerprint: `${index}` }),
+    );
+    const told = { ...verdictOf(many, {}, comparison), base: null };
+    const warnings = obeyedIn(githubReport(told));
+    expect(warnings).toHaveLength(10);
+    expect(warnings[0]).toMatchObject({
+      command: 'warning',
+      data: expect.stringMatching(/^Not compared with main: /),
+    });
+    expect(warnings[9]?.data).toBe('... and 22 more; the job summary lists them.');
+    for (const report of [junitReport(told), markdownReport(told), sarifReport(told, '1.2.3')])
+      expect(report).toContain('The history is too short.');
+  });
+});
+
 describe('escaping, by GitHub’s own toolkit', () => {
   const toolkit = outsidePackage('@actions/core');
 
