@@ -1,8 +1,6 @@
 import { isDefined, type Statistic } from '../../hydrology/paired.ts';
 import type { PrintedNumber } from '../../hydrology/stated/printed-number.ts';
-import { type FieldPath, fieldName } from '../../manifest/manifest.ts';
 import { figure } from '../../rules/figures.ts';
-import type { Text } from './document.ts';
 
 export const notStated = 'not stated';
 
@@ -35,10 +33,6 @@ export function words(name: string): string {
 /** First letter as at the start of a sentence. */
 export function capital(text: string): string {
   return text.charAt(0).toUpperCase() + text.slice(1);
-}
-
-export function nameOf(field: FieldPath): Text {
-  return { code: fieldName(field) };
 }
 
 /** `1 record`, `12 records`. */

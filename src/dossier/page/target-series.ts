@@ -23,8 +23,6 @@ export interface TargetSeries {
   readonly validation: Paired | null;
   /** Both windows; all pairs of the simulation where no window is stated. */
   readonly all: Paired | null;
-  /** Longest way between two values that a line crosses, in days. */
-  readonly longestStep: number;
 }
 
 /** Undefined where a file's content is not here, or the two series can't be compared. */
@@ -43,39 +41,25 @@ export async function targetSeries(
   const over = (window: 'calibration' | 'validation') => pairsIn(pairsOf(pairable.value, window));
   const [calibration, validation] = [over('calibration'), over('validation')];
   const { windows } = pairable.value;
-  const whole = () =>
-    pairsIn(pairedOver(pairable.value, simulatedDays(sides.value), daysOf(windows, 'warm-up')));
+  const stated = [...daysOf(windows, 'calibration'), ...daysOf(windows, 'validation')];
+  const days = stated.length === 0 ? simulatedDays(sides.value) : stated;
   const band = bands.find((one) => one.target === target.name);
   const longestStep = longestStepOf(simulated.step);
-  const stated =
+  const lines =
     band === undefined
       ? null
       : await bandLines(band.fragment, observed.unit, areaKm2Of(records.manifest.data), records, snapshot);
   return defined({
     unit: observed.unit,
-    overTime: { observed: lineOf(observed), simulated: lineOf(simulated), band: stated, longestStep },
+    overTime: { observed: lineOf(observed), simulated: lineOf(simulated), band: lines, longestStep },
     calibration,
     validation,
-    all: calibration === null && validation === null ? whole() : joined(calibration, validation),
-    longestStep,
+    all: pairsIn(pairedOver(pairable.value, days, daysOf(windows, 'warm-up'))),
   });
 }
 
 function pairsIn(paired: Statistic<Paired>): Paired | null {
   return isDefined(paired) && paired.value.observed.length > 0 ? paired.value : null;
-}
-
-/** Both windows in order of time. */
-function joined(one: Paired | null, other: Paired | null): Paired | null {
-  if (one === null || other === null) return one ?? other;
-  const count = one.times.length + other.times.length;
-  const order = Array.from({ length: count }, (_, place) => place);
-  const at = (key: 'times' | 'observed' | 'simulated') => (place: number) =>
-    (place < one.times.length ? one[key][place] : other[key][place - one.times.length]) as number;
-  const time = at('times');
-  order.sort((a, b) => time(a) - time(b));
-  const inOrder = (key: 'times' | 'observed' | 'simulated') => Float64Array.from(order, at(key));
-  return { ...one, times: inOrder('times'), observed: inOrder('observed'), simulated: inOrder('simulated') };
 }
 
 function lineOf({ timeSeconds, values }: Series): Line {

@@ -66,7 +66,7 @@ async function pictures(
 ): Promise<readonly Block[]> {
   const series = await targetSeries(target, computed, content.snapshot);
   if (!isDefined(series)) return [paragraph(`No figures can be drawn: ${series.undefined}.`)];
-  const { unit, overTime, calibration, validation, all, longestStep } = series.value;
+  const { unit, overTime, calibration, validation, all } = series.value;
   const { observed, simulated, variable = 'other' } = target.fragment;
   const of = {
     name: target.name ?? target.id,
@@ -80,7 +80,7 @@ async function pictures(
     hydrograph(overTime, of, 'logarithmic'),
     ...(all === null ? [] : closer(all, overTime, of, computed)),
     scatter(calibration, validation, paired),
-    ...(all === null ? [] : ofPairs(all, longestStep, paired)),
+    ...(all === null ? [] : ofPairs(all, overTime.longestStep, paired)),
   );
 }
 
