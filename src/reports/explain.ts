@@ -18,7 +18,7 @@ const longest = { found: 3000, step: 1000 };
 /** All that a report says of a finding, a line each; safe to print, and bounded. */
 export function explain(finding: Finding): readonly string[] {
   const { message, detail, clear, standing, waived, accepted } = finding;
-  const found = [plain(message), ...statedAndFound(finding), ...detail.map(plain), ...way(finding)].join(
+  const found = [plain(message), ...statedAndFound(finding), ...way(finding), ...detail.map(plain)].join(
     '\n',
   );
   return [

@@ -29,7 +29,7 @@ export function githubReport(verdict: Verdict): string {
       command === 'warning' ? clip(about, 3000) : '',
     ),
   );
-  return [...lines, `stoplog: ${tally(verdict)}`, ''].join('\n');
+  return [...lines, `stoplog: ${verdict.verdict}: ${tally(verdict)}`, ''].join('\n');
 }
 
 /** What a later step can ask of this one, as lines of the file that GITHUB_OUTPUT names: the verdict and every total. */

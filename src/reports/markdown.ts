@@ -11,8 +11,7 @@ import {
   type Weight,
 } from './explain.ts';
 import { remarks } from './remarks.ts';
-import { tally } from './tally.ts';
-import { count } from './text.ts';
+import { count, tally } from './tally.ts';
 import { withinLimit } from './within-limit.ts';
 
 /** A comment on GitHub holds 65 536 characters. */
@@ -93,7 +92,7 @@ function cured({ manifests }: Verdict): readonly string[] {
 /** Data that differ from what was sealed, and figures that are not those of the files, at a glance. */
 function changes(told: readonly Told[]): readonly string[] {
   const rows = told.flatMap(({ finding, weight }) => {
-    const what = [...statedAndFound(finding), ...finding.detail.slice(0, 1)];
+    const what = [...statedAndFound(finding), ...dataDifference(finding)];
     const open = weight !== 'standing' && weight !== 'answered';
     return open && what.length > 0 ? [`| ${short(finding.record)} | ${what.map(short).join('; ')} |`] : [];
   });
@@ -108,6 +107,11 @@ function changes(told: readonly Told[]): readonly string[] {
     ...rows.slice(0, listed),
     ...(left > 0 ? [`| ... | and ${left} more |`] : []),
   ];
+}
+
+/** The first line of what differs, where a record's own files changed. */
+function dataDifference({ rule, trail, detail }: Finding): readonly string[] {
+  return rule === 'seal.stale' && trail.length === 2 ? detail.slice(0, 1) : [];
 }
 
 function open(heading: string, told: readonly Told[]): readonly string[] {

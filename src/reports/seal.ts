@@ -2,7 +2,7 @@ import type { FollowedMoves } from '../records/follow-moves.ts';
 import type { HealedRecord } from '../records/heal.ts';
 import type { Sealed, SealPlan } from '../records/make-seals.ts';
 import { plain } from './escape.ts';
-import { count } from './text.ts';
+import { count } from './tally.ts';
 import { wrap } from './wrap.ts';
 
 export interface WrittenFigure {

@@ -1,19 +1,16 @@
 import type { Verdict } from '../verdict/finding.ts';
-import { count } from './text.ts';
 
-/** The verdict and its counts in a line. */
-export function tally({ verdict, totals }: Verdict): string {
+/** A verdict's counts in a line. */
+export function tally({ base, totals }: Verdict): string {
   const { block, warn, note, standing, waived, accepted, cured } = totals;
-  const more: readonly (readonly [number, string])[] = [
-    [standing, 'standing from before'],
-    [waived, 'waived'],
-    [accepted, 'accepted'],
-    [cured, 'cured by this change'],
-  ];
   return [
-    `${verdict}: ${count(block, 'finding')} to clear`,
-    count(warn, 'warning'),
-    count(note, 'note'),
-    ...more.filter(([number]) => number > 0).map(([number, what]) => `${number} ${what}`),
-  ].join(', ');
+    `${count(block, 'finding')} to clear, ${count(warn, 'warning')}, ${count(note, 'note')}`,
+    ...(base === null ? [] : [`${standing} standing, ${cured} cured`]),
+    ...(waived + accepted === 0 ? [] : [`${waived} waived, ${accepted} accepted`]),
+  ].join('; ');
+}
+
+/** `1 record`, `12 records`. */
+export function count(number: number, noun: string): string {
+  return `${number} ${noun}${number === 1 ? '' : 's'}`;
 }

@@ -6,6 +6,7 @@ import { plain } from './escape.ts';
 import { statedAndFound, way } from './explain.ts';
 import { fold, type Group, groupByRecord } from './fold.ts';
 import { remarks } from './remarks.ts';
+import { count, tally } from './tally.ts';
 import { wrap } from './wrap.ts';
 
 export interface TextOptions {
@@ -29,12 +30,9 @@ export function textReport(verdict: Verdict, { color, quiet }: TextOptions): str
     ...sections(verdict, manifest, levels, paint),
     ...(quiet ? [] : [...standing(verdict, manifest), ...cured(verdict, manifest), ...answered(manifest)]),
   ]);
-  const { block, warn, note, standing: stood, cured: gone } = verdict.totals;
-  const compared = verdict.base === null ? '' : `; ${stood} standing, ${gone} cured`;
-  const tally = `${count(block, 'finding')} to clear, ${count(warn, 'warning')}, ${count(note, 'note')}${compared}`;
   const pass = verdict.verdict === 'pass';
   lines.push(...remarks(verdict).flatMap((remark) => ['', ...wrap(plain(remark), width)]));
-  lines.push('', `${pass ? paint.green.bold('PASS') : paint.red.bold('BLOCKED')}   ${tally}`);
+  lines.push('', `${pass ? paint.green.bold('PASS') : paint.red.bold('BLOCKED')}   ${tally(verdict)}`);
   if (pass) lines.push('', ...wrap(caution, width).map((line) => paint.dim(line)));
   return `${lines.join('\n')}\n`;
 }
@@ -57,51 +55,40 @@ function sections(
   levels: readonly Level[],
   paint: ChalkInstance,
 ): readonly string[] {
-  const shown = manifest.findings.filter((finding) => counts(finding, comparison));
-  const loosens = ({ rule }: Finding) => rule === 'manifest.loosened';
-  return levels.flatMap((level, place) => [
-    ...(place > 0
-      ? []
-      : loosened(
-          shown.filter((one) => loosens(one) && levels.includes(one.level)),
-          manifest,
-          paint,
-        )),
+  const tints = { block: paint.red.bold, warn: paint.yellow.bold, note: paint.bold };
+  const shown = manifest.findings.filter((one) => levels.includes(one.level) && counts(one, comparison));
+  const loosens = ({ rule }: Finding): boolean => rule === 'manifest.loosened';
+  const less = shown.filter(loosens);
+  return [
     ...section(
+      less,
+      () => paint.yellow.bold(`ASKS FOR LESS   ${count(less.length, 'change')}`),
       manifest,
-      level,
-      shown.filter((one) => one.level === level && !loosens(one)),
       paint,
     ),
-  ]);
-}
-
-function loosened(
-  findings: readonly Finding[],
-  manifest: ManifestVerdict,
-  paint: ChalkInstance,
-): readonly string[] {
-  if (findings.length === 0) return [];
-  return [
-    '',
-    paint.yellow.bold(`ASKS FOR LESS   ${count(findings.length, 'change')}`),
-    ...groupByRecord(findings).flatMap((group) => recordLines(group, manifest, paint)),
+    ...levels.flatMap((level) =>
+      section(
+        shown.filter((one) => one.level === level && !loosens(one)),
+        (records) => tints[level](`${headings[level]}   ${count(records, 'record')}`),
+        manifest,
+        paint,
+      ),
+    ),
   ];
 }
 
 function section(
-  manifest: ManifestVerdict,
-  level: Level,
   findings: readonly Finding[],
+  title: (records: number) => string,
+  manifest: ManifestVerdict,
   paint: ChalkInstance,
 ): readonly string[] {
   const groups = groupByRecord(findings);
   if (groups.length === 0) return [];
-  const tint = { block: paint.red.bold, warn: paint.yellow.bold, note: paint.bold }[level];
   const { shown, folded } = fold(groups);
   return [
     '',
-    tint(`${headings[level]}   ${count(groups.length, 'record')}`),
+    title(groups.length),
     ...shown.flatMap((group) => recordLines(group, manifest, paint)),
     ...folded.flatMap(({ records, why }) => [
       '',
@@ -134,8 +121,8 @@ function findingLines(finding: Finding, placeOfRecord: string, paint: ChalkInsta
   return [
     ...wrap(plain(finding.message), width - indent.length).map((line) => indent + line),
     ...statedAndFound(finding).map((line) => indent + line),
-    ...finding.detail.map((line) => indent + plain(line)),
     ...way(finding).flatMap((line) => wrap(line, width - indent.length).map((part) => indent + part)),
+    ...finding.detail.map((line) => indent + plain(line)),
     ...(place === placeOfRecord ? [] : [indent + paint.dim(`at ${place}`)]),
     `${indent}${paint.cyan('to clear')}   ${step}`,
     ...more.map((line) => hanging + line),
@@ -190,9 +177,4 @@ function answered(manifest: ManifestVerdict): readonly string[] {
   ];
   if (lines.length === 0) return [];
   return ['', 'BY SOMEBODY’S WORD', ...lines.flatMap(hanging)];
-}
-
-/** `1 record`, `12 records`. */
-export function count(number: number, noun: string): string {
-  return `${number} ${noun}${number === 1 ? '' : 's'}`;
 }
