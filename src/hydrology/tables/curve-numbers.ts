@@ -32,7 +32,7 @@ type Row = readonly [
 ];
 
 /**
- * Read in two public transcriptions of TR-55 Table 2-2; the desert rows in one. Older printings (NEH-4) have 25 for good woods on
+ * Read in two public copies of TR-55 Table 2-2; the desert rows in one. Older printings (NEH-4) have 25 for good woods on
  * group A.
  */
 const rows: readonly Row[] = [

@@ -20,7 +20,7 @@ type Row = readonly [
 ];
 
 /**
- * Rows with three numbers read in two public transcriptions of Chow's table, its dashes from memory. "Same as above" is
+ * Rows with three numbers read in two public copies of Chow's table, its dashes from memory. "Same as above" is
  * written out. Overland flow stands in other tables.
  */
 const rows: readonly Row[] = [

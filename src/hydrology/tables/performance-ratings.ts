@@ -34,7 +34,7 @@ export interface RatingTable {
 const inTable4 = 'Table 4, every limit read in the article';
 const allSteps = ['daily', 'monthly', 'annual'] as const;
 const satisfactoryOnly = 'limit of satisfactory read in the abstract; the two above it from memory';
-const flowOf2015 = 'all limits read in two transcriptions of the table, satisfactory also in the abstract';
+const flowOf2015 = 'all limits read in two copies of the table, satisfactory also in the abstract';
 const closedIn2015 = (at: number) => ({
   at,
   because: `the abstract of the article counts exactly ${at} % as satisfactory, its table does not; the table is followed`,

@@ -12,7 +12,7 @@ export const conductivitySource =
 
 type Row = readonly [texture: string, rawlsMmPerHour: number | null, carselCmPerDay: number];
 
-/** Read in one (Rawls) and three (Carsel) public transcriptions; from coarse to fine. */
+/** Read in one (Rawls) and three (Carsel) public copies; from coarse to fine. */
 const rows: readonly Row[] = [
   ['sand', 210.0, 712.8],
   ['loamy sand', 61.1, 350.2],
