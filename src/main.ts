@@ -5,6 +5,7 @@ import type { Context } from './commands/command.ts';
 import { runCommandLine } from './commands/command-line.ts';
 import { withoutCommands } from './commands/without-commands.ts';
 import { Failure } from './failure.ts';
+import { plain } from './reports/escape.ts';
 
 const context: Context = withoutCommands({
   cwd: process.cwd(),
@@ -25,7 +26,9 @@ try {
 } catch (error) {
   process.exitCode = 2;
   const failure = error instanceof Failure ? error : internal(error);
-  context.tell(`stoplog could not do this: ${failure.message}\n${failure.next}\n`);
+  // Names of files and words of git are a stranger's.
+  const words = `stoplog could not do this: ${failure.message}\n${failure.next}`;
+  context.tell(`${words.split('\n').map(plain).join('\n')}\n`);
 }
 
 /** Today's date here, or that of SOURCE_DATE_EPOCH where a reproducible run sets it. */

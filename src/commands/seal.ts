@@ -1,4 +1,5 @@
-import { join } from 'node:path';
+import { lstat, realpath } from 'node:fs/promises';
+import { dirname, join, relative } from 'node:path';
 import { evidenceFor } from '../facts/evidence.ts';
 import { Failure } from '../failure.ts';
 import { makeSeals } from '../records/make-seals.ts';
@@ -50,22 +51,40 @@ export async function sealCommand(
       today: context.today,
       evidence: await evidenceFor(study, snapshot),
     });
+    // Of a seals file that can't be read in whole, entries would be lost.
+    const lossless = plan.refused.every(({ reason }) => reason !== 'unreadable-seals');
     const files: readonly (readonly [path: string, text: string])[] = [
       [study.manifest.path, study.manifest.text],
       [study.sealsFile.path, writeSealsFile(plan.seals)],
     ];
-    const written: string[] = [];
-    for (const [path, text] of files) {
-      if (text === (await textOf(snapshot, path))) continue;
-      await writeFileSafely(join(top, path), text);
-      written.push(path);
-    }
+    const changed: { readonly target: string; readonly text: string }[] = [];
+    for (const [path, text] of lossless ? files : [])
+      if (text !== (await textOf(snapshot, path))) changed.push({ target: await ownPath(top, path), text });
+    for (const { target, text } of changed) await writeFileSafely(target, text);
+    const here = await realpath(context.cwd);
+    const written = changed.map(({ target }) => relative(here, target));
     const { today } = context;
     context.write(sealReport({ plan, healed, moved, figures: newFigures, written, person, today }));
     return plan.refused.length > 0 ? 1 : 0;
   } finally {
     await snapshot.close();
   }
+}
+
+/** Where a file of ours lies, if it does not lead elsewhere: a link in a stranger's branch must not aim what we write. */
+async function ownPath(top: string, path: string): Promise<string> {
+  const target = join(top, path);
+  const folder = await realpath(dirname(target));
+  const isLink = await lstat(target).then(
+    (found) => found.isSymbolicLink(),
+    () => false,
+  );
+  if (!isLink && folder === dirname(target)) return target;
+  throw new Failure(
+    'cannot-seal',
+    `${path} is reached through a symbolic link, so what is written there would land elsewhere.`,
+    'Put the file itself in its place, then seal again. Nothing was written.',
+  );
 }
 
 async function textOf(snapshot: Snapshot, path: string): Promise<string> {

@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { open, realpath, rename, rm, stat } from 'node:fs/promises';
+import { open, realpath, rename, rm, stat, writeFile } from 'node:fs/promises';
 import { Failure } from '../failure.ts';
 
 /**
@@ -8,12 +8,12 @@ import { Failure } from '../failure.ts';
  */
 export async function writeFileSafely(path: string, content: string | Uint8Array): Promise<void> {
   const target = await realpath(path).catch(() => path);
+  const there = await stat(target).catch(() => null);
+  // A device or a pipe (`/dev/null`, `/dev/stdout`) is written to, never replaced by a file.
+  if (there !== null && !there.isFile() && !there.isDirectory()) return writeFile(target, content);
   const temporary = `${target}.${randomBytes(6).toString('hex')}.tmp`;
   try {
-    const mode = await stat(target).then(
-      (found) => found.mode & 0o777,
-      () => 0o666,
-    );
+    const mode = there === null ? 0o666 : there.mode & 0o777;
     const file = await open(temporary, 'wx', mode);
     try {
       // The mask of new files does not apply to one that was there.

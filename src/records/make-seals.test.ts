@@ -143,7 +143,7 @@ describe('refusals', () => {
     expect(plan.refused[1]).toMatchObject({ root: 'runs.dry', next: 'Clear runs.dry first.' });
     expect(plan.refused[0]).toMatchObject({
       message: expect.stringContaining('inputs.future changed since runs.dry was sealed'),
-      next: expect.stringContaining('stoplog rerun dry --seal'),
+      next: expect.stringContaining('Repeat the run'),
     });
   });
 

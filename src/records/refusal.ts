@@ -71,7 +71,7 @@ export function unmovedRefusal(record: RecordNode, below: readonly string[]): Re
     record: record.id,
     reason: 'unmoved',
     message: `${below.join(', ')} changed since ${record.id} was sealed, but ${isRun ? 'its outputs' : 'the calibrated values'} did not: ${isRun ? 'the model was perhaps not run again' : 'the calibration was perhaps not repeated'}.`,
-    next: `${isRun ? `Repeat the run: stoplog rerun ${record.name} --seal. ` : 'Repeat the calibration. '}Or say why nothing should change: stoplog seal ${record.id} --because "..."`,
+    next: `${isRun ? `Repeat the run, look at its outputs, then seal it. ` : 'Repeat the calibration. '}Or say why nothing should change: stoplog seal ${record.id} --because "..."`,
   };
 }
 

@@ -44,7 +44,7 @@ export function sealReport(outcome: SealOutcome): string {
     ),
     ...titled(`SEALED by ${person} on ${today}`, plan.sealed.flatMap(sealedLines)),
     ...titled(
-      'DROPPED, since their records are gone',
+      'DROPPED, since their records are gone or their entries could not be read',
       plan.dropped.map((record) => record),
     ),
     ...titled(

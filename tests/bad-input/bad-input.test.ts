@@ -1,5 +1,6 @@
+import { execFileSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
-import { mkdir, mkdtemp, readdir, readFile, readlink, rm, symlink, writeFile } from 'node:fs/promises';
+import { mkdir, mkdtemp, readdir, readFile, readlink, rm, stat, symlink, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, describe, expect, it } from 'vitest';
@@ -235,6 +236,43 @@ describe('what could not be done is a failure that says what to do', () => {
     expect(failure?.next).toMatch(next);
     expect(`${failure?.message}${failure?.next}`).not.toMatch(/\n {4}at /);
     expect(await contentOf(project.folder)).toEqual(before);
+  });
+
+  it.each([
+    ['cut short', (text: string) => text.slice(0, 2000)],
+    ['of a later Stoplog', (text: string) => text.replaceAll('"scheme": 1', '"scheme": 99')],
+  ])('a seals file %s is left as it is by a seal', async (_, spoil) => {
+    project = await soundRepository();
+    await project.edit('stoplog.seals.json', spoil);
+    const before = await contentOf(project.folder);
+    const { status, text } = await stoplog(project.folder, ['seal', '--all', '--figures']);
+    expect(status).toBe(1);
+    expect(text).toContain('NOT SEALED');
+    expect(text).not.toContain('To stage');
+    expect(await contentOf(project.folder)).toEqual(before);
+  });
+
+  it('a seals file that is a link is not written through', async () => {
+    project = await soundRepository();
+    const folder = await mkdtemp(join(tmpdir(), 'stoplog-elsewhere-'));
+    folders.push(folder);
+    await writeFile(join(folder, 'precious.txt'), 'mine\n');
+    await rm(join(project.folder, 'stoplog.seals.json'));
+    await symlink(join(folder, 'precious.txt'), join(project.folder, 'stoplog.seals.json'));
+    const { failure } = await stoplog(project.folder, ['seal', '--all']);
+    expect(failure?.code).toBe('cannot-seal');
+    expect(failure?.message).toContain('symbolic link');
+    expect(await readFile(join(folder, 'precious.txt'), 'utf8')).toBe('mine\n');
+  });
+
+  it('a report into a pipe is written to it, and the pipe stays', async () => {
+    project = await soundRepository();
+    const pipe = join(project.folder, '.git', 'pipe');
+    execFileSync('mkfifo', [pipe]);
+    const read = readFile(pipe, 'utf8');
+    await stoplog(project.folder, ['check', '--report', `json=${pipe}`]);
+    expect(await read).toContain('stoplog-findings/1');
+    expect((await stat(pipe)).isFIFO()).toBe(true);
   });
 
   it('a folder in no repository', async () => {

@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { open, readdir, rename, rm, rmdir } from 'node:fs/promises';
+import { lstat, open, readdir, rename, rm, rmdir } from 'node:fs/promises';
 import { Failure } from '../../failure.ts';
 import type { PackedFile } from '../package/packed-file.ts';
 import { writeFolder } from './folder.ts';
@@ -66,7 +66,12 @@ async function whatIsThere(target: string): Promise<'nothing' | 'empty folder' |
     const names = await readdir(target);
     return names.length === 0 && formOf(target) === 'folder' ? 'empty folder' : 'something';
   } catch (error) {
-    return (error as NodeJS.ErrnoException).code === 'ENOENT' ? 'nothing' : 'something';
+    if ((error as NodeJS.ErrnoException).code !== 'ENOENT') return 'something';
+    // A link that leads nowhere is something too.
+    return lstat(target).then(
+      () => 'something',
+      () => 'nothing',
+    );
   }
 }
 
