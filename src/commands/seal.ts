@@ -53,9 +53,10 @@ export async function sealCommand(
     });
     // Of a seals file that can't be read in whole, entries would be lost.
     const lossless = plan.refused.every(({ reason }) => reason !== 'unreadable-seals');
+    const hasSeals = plan.seals.size > 0 || study.sealsFile.exists;
     const files: readonly (readonly [path: string, text: string])[] = [
       [study.manifest.path, study.manifest.text],
-      [study.sealsFile.path, writeSealsFile(plan.seals)],
+      ...(hasSeals ? [[study.sealsFile.path, writeSealsFile(plan.seals)] as const] : []),
     ];
     const changed: { readonly target: string; readonly text: string }[] = [];
     for (const [path, text] of lossless ? files : [])

@@ -9,3 +9,8 @@ export function fromFolder(folder: string, path: string): string {
 export function fromTop(folder: string, path: string): string {
   return posix.join(folder, path);
 }
+
+/** A path as a shell takes it. */
+export function shellPath(path: string): string {
+  return /^[\w./-]+$/.test(path) ? path : `'${path.replaceAll("'", "'\\''")}'`;
+}

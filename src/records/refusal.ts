@@ -1,4 +1,5 @@
 import { nearestName } from '../manifest/nearest.ts';
+import { shellPath } from './paths.ts';
 import type { RecordNode, Records } from './record.ts';
 import type { SealsFile, Standing } from './seal.ts';
 
@@ -47,7 +48,7 @@ export function faultOf(record: RecordNode, records: Records): Refusal | null {
         : `\`${pattern}\` names no file that git tracks, so there is nothing to fingerprint.`,
     next:
       untracked.length > 0
-        ? `git add ${untracked.join(' ')}`
+        ? `git add ${untracked.map(shellPath).join(' ')}`
         : 'Correct the path, or bring the file into git.',
   };
 }

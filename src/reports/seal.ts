@@ -1,6 +1,7 @@
 import type { FollowedMoves } from '../records/follow-moves.ts';
 import type { HealedRecord } from '../records/heal.ts';
 import type { Sealed, SealPlan } from '../records/make-seals.ts';
+import { shellPath } from '../records/paths.ts';
 import { plain } from './escape.ts';
 import { count } from './tally.ts';
 import { wrap } from './wrap.ts';
@@ -57,7 +58,7 @@ export function sealReport(outcome: SealOutcome): string {
     ),
   ];
   if (lines.length === 0) return 'Nothing to do: what was asked for is sealed, and unchanged since.\n';
-  if (written.length > 0) lines.push('', `To stage   git add ${written.map(quoted).join(' ')}`);
+  if (written.length > 0) lines.push('', `To stage   git add ${written.map(shellPath).join(' ')}`);
   return `${lines.slice(lines[0] === '' ? 1 : 0).join('\n')}\n`;
 }
 
@@ -80,9 +81,4 @@ function healedLine({ record, kept, fits, rerunDropped }: HealedRecord): string 
   const side = { ours: 'this branch’s', theirs: 'the other branch’s', base: 'the older', both: 'the' }[kept];
   const state = fits ? 'fits what is merged' : 'does not fit what is merged, so the record is stale';
   return `${record}   ${side} seal is kept: it ${state}${rerunDropped ? '; it no longer proves a rerun' : ''}`;
-}
-
-/** A path as a shell takes it. */
-function quoted(path: string): string {
-  return /^[\w./-]+$/.test(path) ? path : `'${path.replaceAll("'", "'\\''")}'`;
 }

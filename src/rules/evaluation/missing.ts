@@ -62,5 +62,6 @@ function withoutScores(
       subject: window,
       from: window,
       message: `No ${window} scores are stated for ${name}.`,
+      clear: `\`stoplog seal --figures ${id}\` computes and writes them; or state them under scores.${window}.`,
     }));
 }

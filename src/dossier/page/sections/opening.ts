@@ -70,13 +70,25 @@ function holding(study: DossierStudy, several: boolean): Block {
     ({ level, waived, accepted }) => level === 'block' && waived === null && accepted === null,
   );
   const answered = findings.filter(({ waived, accepted }) => waived !== null || accepted !== null);
-  const isGood = blocking.length === 0;
+  const unsound = (['contradicted', 'stale', 'missing', 'incomplete', 'unsealed'] as const).flatMap((one) => {
+    const number = records.filter(({ state }) => state === one).length;
+    return number === 0 ? [] : `${number} ${one}`;
+  });
+  const isGood = blocking.length === 0 && unsound.length === 0;
   const whose = several ? ` of ${titleOfStudy(study)}` : '';
   const text: Text = [
-    { strong: isGood ? `The records${whose} hold.` : `The records${whose} do not hold.` },
-    ` ${sound} of ${count(records.length, 'record')} ${sound === 1 ? 'is' : 'are'} sound: sealed by a named person and in agreement with the files now. `,
+    { strong: headline(whose, blocking.length, isGood, study.verdict.phase) },
+    ` ${sound} of ${count(records.length, 'record')} ${sound === 1 ? 'is' : 'are'} sound: sealed by a named person and in agreement with the files now${unsound.length === 0 ? '' : `; ${unsound.join(', ')}`}. `,
     `${count(blocking.length, 'finding')} to clear`,
     answered.length === 0 ? '.' : `; ${count(answered.length, 'finding')} passed by somebody’s signed word.`,
   ];
   return { kind: 'paragraph', tone: isGood ? 'good' : 'bad', text };
+}
+
+/** A young study may be let pass with records that are missing or stale; that is no reason to say that they hold. */
+function headline(whose: string, blocking: number, isGood: boolean, phase: string): string {
+  if (isGood) return `The records${whose} hold.`;
+  return blocking > 0
+    ? `The records${whose} do not hold.`
+    : `Not all records${whose} hold, though nothing blocks in phase ${phase}.`;
 }
