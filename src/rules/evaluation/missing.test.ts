@@ -17,6 +17,11 @@ ruleCases(evaluationMissing, {
       },
     },
     {
+      name: 'a target that does not say which variable it compares',
+      remove: [`${target}.variable`],
+      finds: { record: 'evaluation', subject: 'streamflow', clear: 'write `variable: streamflow` there' },
+    },
+    {
       name: 'nothing is evaluated, and no need is stated',
       remove: ['evaluation', 'study.needs'],
       finds: { record: 'evaluation', message: 'Nothing that the model simulates' },

@@ -42,11 +42,24 @@ export const evaluationMissing = rule({
           field: ['evaluation'],
           subject: variable,
           message: `The purpose needs ${variable.replaceAll('_', ' ')}, but no target compares it with observations.`,
+          ...unnamed(targets, variable),
         })),
       ...targets.flatMap((target) => withoutScores(target, facts)),
     ];
   },
 });
+
+/** A target that names no variable may be the one that is looked for. */
+function unnamed(
+  targets: readonly RecordNode<'evaluation'>[],
+  variable: string,
+): { readonly clear: string } | Record<string, never> {
+  const first = targets.find(({ fragment }) => fragment.variable === undefined);
+  if (first === undefined) return {};
+  return {
+    clear: `${first.id} does not say which variable it compares: write \`variable: ${variable}\` there if it is this one; else add a target for it.`,
+  };
+}
 
 function withoutScores(
   { id, name, field, fragment }: RecordNode<'evaluation'>,
