@@ -28,7 +28,7 @@ export const balanceDiffers = rule({
       'Follows from the words: totals over the window, storage from the end of the step before it to the end of its last.',
   },
   clear:
-    'Find out which figure is wrong. If the run is the right one, `stoplog seal --figures` writes the recomputed figures.',
+    'Find out which figure is wrong. If the run is the right one, `stoplog seal --all --figures` writes the recomputed figures.',
   check: (record, { balances }) => {
     const figures = balances.get(record.name ?? '');
     if (figures === undefined) return [];

@@ -17,7 +17,7 @@ export const evaluationIdentityBroken = rule({
       'Algebra on Moriasi, D. N. et al. (2007) Trans. ASABE 50(3):885-900, eqs. 1-3, and on Gupta, H. V. et al. (2009) J. Hydrol. 377:80-91',
   },
   clear:
-    'Compute the scores of the window anew, all from the same pairs; `stoplog seal --figures` writes them.',
+    'Compute the scores of the window anew, all from the same pairs; `stoplog seal --all --figures` writes them.',
   check: ({ id, name }, { scores }) =>
     scoredWindows.flatMap((window) => {
       const stated = (scores.get(name ?? '')?.stated ?? []).filter((score) => score.window === window);

@@ -21,7 +21,7 @@ export const evaluationScoreDiffers = rule({
       'Follows from the words: a score is that of the stated series over the stated windows. Formulas: Moriasi et al. (2007) Trans. ASABE 50(3):885-900; Gupta et al. (2009) J. Hydrol. 377:80-91',
   },
   clear:
-    'Find out which figure is wrong. If the run is the right one, `stoplog seal --figures` writes the recomputed scores; then look at the graph.',
+    'Find out which figure is wrong. If the run is the right one, `stoplog seal --all --figures` writes the recomputed scores; then look at the graph.',
   check: (record, { scores }) => {
     const figures = scores.get(record.name ?? '');
     if (figures === undefined) return [];

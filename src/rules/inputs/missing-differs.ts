@@ -15,7 +15,8 @@ export const inputsMissingDiffers = rule({
     citation:
       'Follows from the words: values with a declared code and steps without a row, over all steps from first to last row.',
   },
-  clear: 'Write the counted share (`stoplog seal --figures` does), or mend the files or `series.missing`.',
+  clear:
+    'Write the counted share (`stoplog seal --all --figures` does), or mend the files or `series.missing`.',
   check: (record, { profiles, manifest }) => {
     const { id, name, field, fragment } = record;
     const profile = profiles.get(name ?? '');

@@ -17,7 +17,7 @@ export const scenariosConditionsDiffer = rule({
     citation: 'Follows from the words: a stated condition is that of the named file over its window.',
   },
   clear:
-    'Find out which is wrong, the figure or the file, window or months that it names; `stoplog seal --figures` writes the recomputed figures.',
+    'Find out which is wrong, the figure or the file, window or months that it names; `stoplog seal --all --figures` writes the recomputed figures.',
   check: (record, facts) => {
     const conditions = statedConditions(facts).filter(
       ({ name }) => firstCase(name, facts.records) === record.id,

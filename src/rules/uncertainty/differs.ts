@@ -23,7 +23,7 @@ export const uncertaintyDiffers = rule({
       'Follows from the words. Formulas: Abbaspour et al. (2004) Vadose Zone J. 3:1340-1352 (standard deviation with n - 1, our choice); Gneiting & Raftery (2007) J. Am. Stat. Assoc. 102:359-378, eq. 43',
   },
   clear:
-    'Find out which figure is wrong. If the band is the right one, `stoplog seal --figures` writes the recomputed figures.',
+    'Find out which figure is wrong. If the band is the right one, `stoplog seal --all --figures` writes the recomputed figures.',
   check: ({ id }, { bands }) =>
     bands.flatMap(({ target, over, stated, fragment }) =>
       stated.flatMap(({ name, field, printed, recomputed, agrees, windows }) => {
