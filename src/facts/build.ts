@@ -11,6 +11,7 @@ import { parametersOf } from './parameters.ts';
 import { profilesOf } from './profiles.ts';
 import { rainYearsOf } from './rain-years.ts';
 import { takeReadings } from './readings.ts';
+import { restatedOf } from './restated.ts';
 import { scoresOf } from './scores.ts';
 import { seasonsOf } from './seasons.ts';
 import { storesOf } from './store-drift.ts';
@@ -33,13 +34,14 @@ export interface Given extends Pick<Facts, GivenFacts> {
 
 /** Computes all that rules may ask about a manifest; reads only files that a rule needs. */
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
-  const { records, standings, sealsFile } = given;
+  const { records, standings, sealsFile, before } = given;
   const rain = rainYearsOf(records, snapshot);
   const [
     sealsBefore,
     beside,
     readings,
     differences,
+    restated,
     profiles,
     scores,
     rainYears,
@@ -54,6 +56,7 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
     filesBeside(records, snapshot),
     takeReadings(records, snapshot),
     differencesOf(records, standings, snapshot),
+    restatedOf(records, standings, before, snapshot),
     profilesOf(records, snapshot),
     scoresOf(records, snapshot),
     rain,
@@ -70,6 +73,7 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
     beside,
     readings,
     differences,
+    restated,
     profiles,
     scores,
     rainYears,

@@ -11,6 +11,7 @@ import type { ParameterFacts } from './parameters.ts';
 import type { InputProfile } from './profiles.ts';
 import type { RainYears } from './rain-years.ts';
 import type { Reading } from './readings.ts';
+import type { RestatedField } from './restated.ts';
 import type { TargetFigures } from './scores.ts';
 import type { SeasonFigures } from './seasons.ts';
 import type { RunStores } from './store-drift.ts';
@@ -49,6 +50,8 @@ export interface Facts {
   readonly readings: readonly Reading[];
   /** For each changed file of a stale record that reads as a series: what changed, in the data's own terms. */
   readonly differences: ReadonlyMap<string, SeriesDifference>;
+  /** By record id: what changed in the record's own statement, where its sealed statement is that of the commit before. */
+  readonly restated: ReadonlyMap<string, readonly RestatedField[]>;
   /** By the name of the input: what its series' files hold. */
   readonly profiles: ReadonlyMap<string, InputProfile>;
   /** By the name of the evaluation target: what its files give, and what is stated. */

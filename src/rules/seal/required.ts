@@ -8,6 +8,6 @@ import type { Draft } from '../rule.ts';
 const early: ReadonlySet<Area> = new Set(['study', 'catchment', 'model', 'inputs', 'periods']);
 
 /** From which phase a fault of a record's seal blocks, where that is not the calibration. */
-export function fromPhase(area: Area): Pick<Draft, 'from' | 'before'> {
-  return early.has(area) ? {} : { from: 'validation', before: 'warn' };
+export function fromPhase(area: Area): Pick<Draft, 'from'> {
+  return early.has(area) ? {} : { from: 'validation' };
 }

@@ -73,7 +73,7 @@ ruleCases(sealStale, {
       finds: [
         {
           record: 'inputs.temperature',
-          level: 'note',
+          level: 'warn',
           detail: [
             expect.stringMatching(
               /^1 of 3 287 values differ; sum of values .* degC \(\+.* %\), on 2001-10-01$/,
@@ -94,7 +94,62 @@ ruleCases(sealStale, {
       name: 'a statement',
       seals: 'sound',
       set: { 'catchment.area.value': 51 },
-      finds: { record: 'catchment', message: 'What this record states was changed', trail: ['catchment'] },
+      finds: {
+        record: 'catchment',
+        message: 'What this record states was changed',
+        trail: ['catchment'],
+        detail: [],
+      },
+    },
+    {
+      name: 'a statement, where the commit before has it as it was sealed',
+      seals: 'sound',
+      before: {},
+      set: { 'catchment.area.value': 51 },
+      finds: { record: 'catchment', detail: ['area.value: 50 -> 51'] },
+    },
+    {
+      name: 'a statement that the commit before has neither as it is nor as it was sealed',
+      seals: 'sound',
+      before: { set: { 'catchment.area.value': 49 } },
+      set: { 'catchment.area.value': 51 },
+      finds: { record: 'catchment', detail: [] },
+    },
+    {
+      name: 'fields added and taken away, in a list of names and in what stands beside the record',
+      seals: 'sound',
+      before: {},
+      remove: ['interventions.0.default'],
+      set: {
+        'interventions.1.represented': true,
+        'interventions.2': { kind: 'weir', name: 'old weir' },
+        'seasons.0.variable': 'irrigation',
+      },
+      finds: {
+        record: 'interventions',
+        detail: [
+          'mill pond.default: false -> nothing',
+          'water meadows.represented: false -> true',
+          'old weir: nothing -> {"kind":"weir","name":"old weir"}',
+          'seasons[0].variable: leaf_area -> irrigation',
+        ],
+      },
+    },
+    {
+      name: 'many fields',
+      seals: 'sound',
+      before: {},
+      set: {
+        'model.name': 'another',
+        'model.version': '9',
+        'model.release': '9.1',
+        'model.released': '2020-01-01',
+        'model.source': { doi: '10.5555/a', url: 'https://a.example' },
+      },
+      finds: [
+        { record: 'model', detail: expect.arrayContaining(['version: 2.1 -> 9', 'and 2 more fields']) },
+        ...Array(8).fill({}),
+      ],
     },
     {
       name: 'a file gone, one changed, one new',

@@ -5,13 +5,16 @@ import { few } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
 import { type FileChange, fileChange } from './file-change.ts';
 import { fromPhase } from './required.ts';
+import { restatement } from './restatement.ts';
 
 export const sealStale = rule({
   id: 'seal.stale',
   scope: 'manifest',
   from: 'calibration',
+  before: 'warn',
   means: 'stale',
-  statement: 'What a record states, its files or what it rests on changed since it was sealed.',
+  statement:
+    'What a record states, its files or what it rests on changed since it was sealed; of all but study, catchment, model, inputs and periods it blocks from the validation on.',
   why: 'A score, a balance or a scenario is true of the data and the parameters that it was computed from. When one of these changes, what was reviewed is no longer what is there.',
   source: { basis: 'definition', citation: 'A seal is the fingerprint of what was reviewed.' },
   clear: 'Check what changed, repeat what rests on it, then: stoplog seal RECORD',
@@ -37,6 +40,7 @@ function stale(record: RecordNode, { changes, trails }: Standing, seal: Seal, fa
         : `What this rests on has changed since it was sealed on ${seal.sealed_on}.`,
     ...(first === undefined ? {} : { trail: first }),
     detail: [
+      ...restatement(facts.restated.get(record.id) ?? []),
       ...files.slice(0, shownAtMost).flatMap((change) => fileChange(change, files.length > 1, record, facts)),
       ...others
         .filter((trail) => trail.length > 2)
