@@ -31,7 +31,7 @@ describe('openRepository', () => {
           shallow: false,
           objectFormat: 'sha1',
         },
-        ...{ gitDirectory: git, commonDirectory: git, hooksFolder: join(git, 'hooks') },
+        ...{ gitDirectory: git, commonDirectory: git },
         ...{ objectsFolder: join(git, 'objects'), indexFile: join(git, 'index') },
       });
     }
@@ -40,13 +40,6 @@ describe('openRepository', () => {
   it('finds the top through a link into the repository', async () => {
     await symlink(join(repository.folder, 'sub'), join(folder, 'link'));
     expect((await open(join(folder, 'link'))).top).toBe(repository.folder);
-  });
-
-  it('heeds core.hooksPath, which counts from the top', async () => {
-    await repository.git('config', 'core.hooksPath', '.husky/_');
-    expect((await open(join(repository.folder, 'sub'))).hooksFolder).toBe(
-      join(repository.folder, '.husky/_'),
-    );
   });
 
   it('makes paths absolute that git gave relative to a hook', async () => {
@@ -67,7 +60,7 @@ describe('openRepository', () => {
     const git = join(repository.folder, '.git');
     expect(await open(tree)).toMatchObject({
       ...{ top: tree, gitDirectory: join(git, 'worktrees/tree'), commonDirectory: git },
-      ...{ hooksFolder: join(git, 'hooks'), indexFile: join(git, 'worktrees/tree/index') },
+      indexFile: join(git, 'worktrees/tree/index'),
     });
   });
 
@@ -84,7 +77,6 @@ describe('openRepository', () => {
     const git = join(repository.folder, '.git/modules/inner');
     expect(await open(join(repository.folder, 'inner/sub'))).toMatchObject({
       ...{ top: join(repository.folder, 'inner'), gitDirectory: git, commonDirectory: git },
-      hooksFolder: join(git, 'hooks'),
     });
   });
 
@@ -95,7 +87,6 @@ describe('openRepository', () => {
       top: null,
       bare: true,
       cwd: bare,
-      hooksFolder: join(bare, 'hooks'),
     });
     const inside = join(repository.folder, '.git');
     expect(await open(inside)).toMatchObject({ top: null, bare: false, cwd: inside });
@@ -130,17 +121,7 @@ describe('openRepository', () => {
   );
 
   it('refuses a description of the repository that it cannot tell apart', () => {
-    const lines = [
-      'false',
-      'false',
-      'sha1',
-      '/a\n/b/.git',
-      '/a\n/b/.git',
-      '/a\n/b/.git/hooks',
-      '/x',
-      '/y',
-      '',
-    ];
+    const lines = ['false', 'false', 'sha1', '/a\n/b/.git', '/a\n/b/.git', '/x', '/y', ''];
     expect(() => layout.parse(Buffer.from(`${lines.join('\n')}\n`), 0)).toThrow(/could not be read/);
     // git 2.30 hands back an option that it does not know.
     expect(() =>

@@ -15,8 +15,6 @@ export interface Repository extends Place {
   readonly gitDirectory: string;
   /** The git directory that all linked work trees share. */
   readonly commonDirectory: string;
-  /** Where git looks for hooks, `core.hooksPath` heeded. */
-  readonly hooksFolder: string;
   /** Where objects are written: in a hook of a receiving repository, the quarantine. */
   readonly objectsFolder: string;
   /** The index in force: a temporary one in the hooks of `git commit -a` and `git commit PATH`. */
@@ -35,7 +33,7 @@ interface Layout {
   readonly bare: boolean;
   readonly shallow: boolean;
   readonly objectFormat: ObjectFormat;
-  readonly folders: readonly [git: string, common: string, hooks: string, objects: string, index: string];
+  readonly folders: readonly [git: string, common: string, objects: string, index: string];
   /** From the folder that asked up to the top; null without a work tree there. */
   readonly up: string | null;
 }
@@ -45,16 +43,16 @@ export const layout: Question<Layout> = {
   args: [
     ...['rev-parse', '--path-format=absolute'],
     ...['--is-bare-repository', '--is-shallow-repository', '--show-object-format'],
-    ...['--absolute-git-dir', '--git-common-dir', '--git-path', 'hooks', '--git-path', 'objects'],
-    ...['--git-path', 'index', '--show-cdup'],
+    ...['--absolute-git-dir', '--git-common-dir', '--git-path', 'objects', '--git-path', 'index'],
+    '--show-cdup',
   ],
   parse(output) {
     const lines = output.toString('utf8').split('\n');
-    const [bare, shallow, format, git, common, hooks, objects, index, up] = lines;
+    const [bare, shallow, format, git, common, objects, index, up] = lines;
     const known = index !== undefined && (format === 'sha1' || format === 'sha256');
     // Without a work tree git prints no last line; the text then ends after the index.
     const lineCount = lines.length - 1;
-    if (!known || !git || !common || !hooks || !objects || lineCount < 8 || lineCount > 9) {
+    if (!known || !git || !common || !objects || lineCount < 7 || lineCount > 8) {
       throw new Failure(
         'git-failed',
         `git described the repository in a way that could not be read: ${JSON.stringify(lines)}.`,
@@ -65,8 +63,8 @@ export const layout: Question<Layout> = {
       bare: bare === 'true',
       shallow: shallow === 'true',
       objectFormat: format,
-      folders: [git, common, hooks, objects, index],
-      up: lineCount === 9 && up !== undefined ? up : null,
+      folders: [git, common, objects, index],
+      up: lineCount === 8 && up !== undefined ? up : null,
     };
   },
 };
@@ -94,7 +92,7 @@ const committer: Question<string | null> = {
 export async function openRepository(cwd: string, environment: NodeJS.ProcessEnv): Promise<Repository> {
   const asked = { cwd, environment: gitEnvironment(environment) };
   const { bare, shallow, objectFormat, folders, up } = await ask(asked, layout);
-  const [gitDirectory, commonDirectory, hooksFolder, objectsFolder, indexFile] = folders;
+  const [gitDirectory, commonDirectory, objectsFolder, indexFile] = folders;
   const top = up === null ? null : resolve(physical(asked), up);
   const absolute = {
     GIT_DIR: gitDirectory,
@@ -111,7 +109,7 @@ export async function openRepository(cwd: string, environment: NodeJS.ProcessEnv
   return Object.freeze({
     ...place,
     ...{ top, bare, shallow, objectFormat },
-    ...{ gitDirectory, commonDirectory, hooksFolder, objectsFolder, indexFile },
+    ...{ gitDirectory, commonDirectory, objectsFolder, indexFile },
     async identity() {
       const person = await ask(place, committer);
       if (person !== null) return person;

@@ -278,9 +278,15 @@ describe('a repository where hooks would not run, or would run elsewhere too', (
     expect(await refusal(open(at('.git')), all)).toMatch(/inside git’s own folder/);
   });
 
-  it('is refused when hooks are switched off', async () => {
-    await repository.git('config', 'core.hooksPath', '/dev/null');
-    expect(await refusal(open())).toMatch(/core\.hooksPath is \/dev\/null, which is no folder/);
+  it.each([
+    ['/dev/null', '/dev/null, which is no folder'],
+    // git then looks for /pre-commit, and can't answer where it looks.
+    ['', 'set to an empty text'],
+  ])('is refused when hooks are switched off by core.hooksPath "%s"', async (value, words) => {
+    await repository.git('config', 'core.hooksPath', value);
+    expect(await refusal(open())).toBe(`core.hooksPath is ${words}, so git runs no hooks here.`);
+    await repository.git('config', 'core.hooksPath', at('.git/hooks'));
+    expect(doneOf(await addHooks(await open()))).toEqual(['written', 'written', 'written']);
   });
 
   it('is refused when the folder is everybody’s, until it has hooks of its own', async () => {
@@ -293,16 +299,19 @@ describe('a repository where hooks would not run, or would run elsewhere too', (
     expect((await addHooks(await open(repository.folder, more))).home.folder).toBe(at('.git/hooks'));
   });
 
-  it('is still told what is there, and rid of hooks from before', async () => {
-    const before = await photograph(at('.git/hooks'));
-    await addHooks(await open());
-    await repository.git('config', 'core.hooksPath', '/dev/null');
-    const listed = await listHooks(await open());
-    expect(listed.home.refusal?.message).toMatch(/git runs no hooks here/);
-    expect(foundOf(listed)).toEqual(['nothing', 'nothing', 'nothing', 'ours', 'ours', 'ours']);
-    await removeHooks(await open());
-    expect(await photograph(at('.git/hooks'))).toEqual(before);
-  });
+  it.each(['/dev/null', ''])(
+    'is still told what is there, and rid of hooks from before, with "%s"',
+    async (value) => {
+      const before = await photograph(at('.git/hooks'));
+      await addHooks(await open());
+      await repository.git('config', 'core.hooksPath', value);
+      const listed = await listHooks(await open());
+      expect(listed.home.refusal?.message).toMatch(/git runs no hooks here/);
+      expect(foundOf(listed)).toEqual(['nothing', 'nothing', 'nothing', 'ours', 'ours', 'ours']);
+      await removeHooks(await open());
+      expect(await photograph(at('.git/hooks'))).toEqual(before);
+    },
+  );
 
   it('is served when everybody’s setting leads to a folder of each work tree', async () => {
     await repository.write('.git/global', '[core]\n\thooksPath = .hooks\n');

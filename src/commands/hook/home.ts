@@ -34,6 +34,12 @@ const hooksPath: Question<HooksPath | null> = {
   },
 };
 
+/** Where git looks for hooks, `core.hooksPath` heeded. */
+const hooksFolder: Question<string> = {
+  args: ['rev-parse', '--path-format=absolute', '--git-path', 'hooks'],
+  parse: (output) => output.toString('utf8').replace(/\n$/, ''),
+};
+
 const tracksAnythingIn = (folder: string): Question<boolean> => ({
   args: ['ls-files', '-z', '--', folder],
   parse: (output) => output.length > 0,
@@ -41,10 +47,11 @@ const tracksAnythingIn = (folder: string): Question<boolean> => ({
 
 /** Where git looks for this repository's hooks now. Throws Failure 'usage', with the reason, inside git's own folder of a work tree. */
 export async function hookHome(repository: Repository): Promise<HookHome> {
-  const folder = resolve(repository.hooksFolder);
   const setting = await ask(repository, hooksPath);
+  // git takes an empty text as it stands and looks for /pre-commit, but can't say so.
+  const folder = resolve(setting?.value === '' ? '/' : await ask(repository, hooksFolder));
   if (repository.bare) {
-    const refusal = setting === null ? null : refusalOf(repository, setting);
+    const refusal = setting === null ? null : refusalOf(repository, setting, folder);
     return { folder, starter: 'git', inForce: true, refusal, notes: [] };
   }
   const top = workTree(repository);
@@ -65,7 +72,7 @@ export async function hookHome(repository: Repository): Promise<HookHome> {
   } else if (repository.gitDirectory !== repository.commonDirectory) {
     notes.push('These hooks serve every work tree of this repository.');
   }
-  const refusal = setting === null || within ? null : refusalOf(repository, setting);
+  const refusal = setting === null || within ? null : refusalOf(repository, setting, folder);
   return { folder, starter: 'git', inForce: true, refusal, notes };
 }
 
@@ -114,17 +121,21 @@ function workTree({ top, cwd }: Repository): string {
 }
 
 /** Why hooks can't be written to a folder outside the work tree: hooks are switched off, or it serves others too. */
-function refusalOf(repository: Repository, { scope, value }: HooksPath): Failure | null {
-  const { hooksFolder, commonDirectory } = repository;
+function refusalOf(
+  { commonDirectory }: Repository,
+  { scope, value }: HooksPath,
+  folder: string,
+): Failure | null {
   const own = `git config core.hooksPath '${join(commonDirectory, 'hooks')}'`;
-  if (existsSync(hooksFolder) && !statSync(hooksFolder).isDirectory()) {
+  if (value === '' || (existsSync(folder) && !statSync(folder).isDirectory())) {
+    const what = value === '' ? 'set to an empty text' : `${value}, which is no folder`;
     return new Failure(
       'usage',
-      `core.hooksPath is ${value}, which is no folder, so git runs no hooks here.`,
+      `core.hooksPath is ${what}, so git runs no hooks here.`,
       `Give this repository hooks again: ${own}`,
     );
   }
-  if ((scope === 'global' || scope === 'system') && !isInside(hooksFolder, commonDirectory)) {
+  if ((scope === 'global' || scope === 'system') && !isInside(folder, commonDirectory)) {
     return new Failure(
       'usage',
       `core.hooksPath is ${value} in your ${scope} git settings: all your repositories share that folder, and a hook there would hold back commits in each of them.`,
