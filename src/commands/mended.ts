@@ -1,9 +1,13 @@
 import { takeVersions, type Versions } from '../records/conflict.ts';
 import { type FollowedMoves, followMoves } from '../records/follow-moves.ts';
-import { type HealedRecord, healSeals } from '../records/heal.ts';
-import type { Seal } from '../records/seal.ts';
+import { type HealedRecord, healSeals, recoverSeals } from '../records/heal.ts';
+import type { SealsFile } from '../records/seal.ts';
+import { readSealsFile } from '../records/seals-file.ts';
 import { judgeStandings } from '../records/standing.ts';
 import { conflictSides } from '../repository/conflict-sides.ts';
+import { ask } from '../repository/git.ts';
+import { treeEntries } from '../repository/listing.ts';
+import { mergedCommits } from '../repository/merged-commits.ts';
 import type { Repository } from '../repository/repository.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import type { Study } from './studies.ts';
@@ -24,22 +28,33 @@ export async function mended(
   repository: Repository,
   snapshot: Snapshot,
 ): Promise<Mended> {
-  const versions = study.sealsFile.faults.some(({ kind }) => kind === 'conflict')
-    ? await versionsOf(study.sealsFile.path, repository, snapshot)
+  const { path, faults } = study.sealsFile;
+  const versions = faults.some(({ kind }) => kind === 'conflict')
+    ? await versionsOf(path, repository, snapshot)
     : null;
   const healed = versions === null ? null : healSeals(versions, study.records);
-  const whole = healed === null ? study : withSeals(study, healed.seals);
-  const moved = followRenames ? followMoves(whole.records, whole.sealsFile) : nothingMoved;
+  const whole = healed === null ? study : withSeals(study, healed);
+  const recovered = await recovery(whole, repository, snapshot);
+  const complete =
+    recovered.length === 0
+      ? whole
+      : withSeals(whole, {
+          seals: new Map([
+            ...whole.sealsFile.seals,
+            ...recovered.map(({ record, seal }) => [record, seal] as const),
+          ]),
+        });
+  const moved = followRenames ? followMoves(complete.records, complete.sealsFile) : nothingMoved;
   return {
-    study: followRenames ? withSeals(whole, moved.seals) : whole,
-    healed: healed?.records ?? [],
+    study: followRenames ? withSeals(complete, moved) : complete,
+    healed: [...(healed?.records ?? []), ...recovered],
     moved,
   };
 }
 
-function withSeals(study: Study, seals: ReadonlyMap<string, Seal>): Study {
-  const faults = study.sealsFile.faults.filter(({ kind }) => kind !== 'conflict');
-  const sealsFile = { ...study.sealsFile, seals, faults };
+function withSeals(study: Study, changed: Pick<SealsFile, 'seals'> & Partial<SealsFile>): Study {
+  const { seals, unreadable, faults } = { ...study.sealsFile, ...changed };
+  const sealsFile = { ...study.sealsFile, seals, unreadable, faults };
   return { ...study, sealsFile, standings: judgeStandings(study.records, sealsFile) };
 }
 
@@ -49,11 +64,30 @@ async function versionsOf(
   repository: Repository,
   snapshot: Snapshot,
 ): Promise<Versions | null> {
-  const text = (bytes: Uint8Array | null): string | null =>
-    bytes === null ? null : new TextDecoder().decode(bytes);
   const sides = await conflictSides(repository, path, snapshot);
-  const ours = text(sides?.ours ?? null);
-  const theirs = text(sides?.theirs ?? null);
-  if (ours !== null && theirs !== null) return { base: text(sides?.base ?? null), ours, theirs };
-  return takeVersions(text(await snapshot.read(path)) ?? '');
+  const ours = textOf(sides?.ours ?? null);
+  const theirs = textOf(sides?.theirs ?? null);
+  if (ours !== null && theirs !== null) return { base: textOf(sides?.base ?? null), ours, theirs };
+  return takeVersions(textOf(await snapshot.read(path)) ?? '');
+}
+
+/** Where a conflict was settled by taking one side of the file, the seals of the other are still in its commit. */
+async function recovery(
+  { sealsFile, standings, records }: Study,
+  repository: Repository,
+  snapshot: Snapshot,
+): Promise<readonly HealedRecord[]> {
+  if ([...standings.values()].every(({ state }) => state === 'sealed')) return [];
+  const sides: ['ours' | 'theirs', SealsFile['seals']][] = [];
+  for (const [place, commit] of (await mergedCommits(repository)).entries()) {
+    // A clone may lack the trees of older commits.
+    const [entry] = await ask(repository, { ...treeEntries(commit, [sealsFile.path]), statuses: [128] });
+    const text = entry === undefined ? null : textOf(await snapshot.readBlob(entry.blob));
+    sides.push([place === 0 ? 'ours' : 'theirs', readSealsFile(sealsFile.path, text).seals]);
+  }
+  return recoverSeals(sides, sealsFile, records);
+}
+
+function textOf(bytes: Uint8Array | null): string | null {
+  return bytes === null ? null : new TextDecoder().decode(bytes);
 }

@@ -56,7 +56,7 @@ export async function sealCommand(
     const hasSeals = plan.seals.size > 0 || study.sealsFile.exists;
     const files: readonly (readonly [path: string, text: string])[] = [
       [study.manifest.path, study.manifest.text],
-      ...(hasSeals ? [[study.sealsFile.path, writeSealsFile(plan.seals)] as const] : []),
+      ...(hasSeals ? [[study.sealsFile.path, writeSealsFile(plan.seals, plan.unreadable)] as const] : []),
     ];
     const changed: { readonly target: string; readonly text: string }[] = [];
     for (const [path, text] of lossless ? files : [])

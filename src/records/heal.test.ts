@@ -6,7 +6,7 @@ import { describe, expect, it } from 'vitest';
 import { recordsOf, sealing, sealsFileOf } from '../../tests/records/in-memory.ts';
 import { smallFiles, smallStudy } from '../../tests/records/small-study.ts';
 import { takeVersions, type Versions } from './conflict.ts';
-import { healSeals } from './heal.ts';
+import { healSeals, recoverSeals } from './heal.ts';
 import type { Seal } from './seal.ts';
 import { withChecksum } from './seal-entry.ts';
 import { writeSealsFile } from './seals-file.ts';
@@ -98,7 +98,13 @@ describe('healing seals after a merge', () => {
     const added = sealing(records, base).seals;
     const healed = healSeals(versions(added, base), records);
     expect(healed.records).toEqual([
-      { record: 'inputs.snow', kept: 'ours', fits: true, rerunDropped: false },
+      {
+        record: 'inputs.snow',
+        kept: 'ours',
+        seal: added.get('inputs.snow'),
+        fits: true,
+        rerunDropped: false,
+      },
     ]);
     expect(healSeals({ base: null, ours: null, theirs: writeSealsFile(added) }, records).seals).toEqual(
       added,
@@ -109,7 +115,7 @@ describe('healing seals after a merge', () => {
     const { checksum: _, ...seal } = base.get('runs.calibrated') as Seal;
     const rerun = new Map(base).set('runs.calibrated', withChecksum({ ...seal, grade: 'rerun' }));
     const healed = healSeals(versions(rerun, rerun, rerun), merged);
-    expect(healed.records).toEqual([
+    expect(healed.records).toMatchObject([
       { record: 'runs.calibrated', kept: 'both', fits: false, rerunDropped: true },
     ]);
     expect(healed.seals.get('runs.calibrated')).toEqual(base.get('runs.calibrated'));
@@ -125,8 +131,42 @@ describe('healing seals after a merge', () => {
 
   it('says what it could not read of a side', () => {
     const { faults, seals } = healSeals({ ...versions(ada.seals, ben.seals), theirs: '{' }, merged);
-    expect(faults).toMatchObject([{ side: 'theirs', kind: 'not-json' }]);
+    expect(faults).toMatchObject([
+      { kind: 'not-json', message: expect.stringMatching(/^On the other side of the merge/) },
+    ]);
     expect(seals).toEqual(ada.seals);
+  });
+});
+
+describe('an entry that can’t be read, in a merge', () => {
+  const spoilt = (seals: ReadonlyMap<string, Seal>): string =>
+    writeSealsFile(new Map([...seals].filter(([id]) => id !== 'model')), new Map([['model', 'by hand']]));
+
+  it('gives way to the seal that the other side has', () => {
+    const healed = healSeals({ ...versions(ada.seals, ben.seals), theirs: spoilt(ben.seals) }, merged);
+    expect(healed.seals.get('model')).toEqual(base.get('model'));
+    expect([...healed.unreadable]).toEqual([]);
+  });
+
+  it('stays as it is where neither side has a seal', () => {
+    const healed = healSeals({ base: null, ours: spoilt(ada.seals), theirs: spoilt(ben.seals) }, merged);
+    expect([...healed.unreadable]).toEqual([['model', 'by hand']]);
+    expect(healed.seals.has('model')).toBe(false);
+  });
+});
+
+describe('seals of a side that was not taken', () => {
+  it('are found again where they fit, and only for records whose own seal does not', () => {
+    const sides = [
+      ['ours', ada.seals],
+      ['theirs', ben.seals],
+    ] as const;
+    const found = recoverSeals(sides, { seals: ada.seals }, merged);
+    expect(found.map(({ record, kept, seal }) => [record, kept, seal.sealed_by])).toEqual([
+      ['inputs.check', 'theirs', 'Ben Leat <ben@northmere.example>'],
+    ]);
+    const whole = healSeals(versions(ada.seals, ben.seals), merged).seals;
+    expect(recoverSeals(sides, { seals: whole }, merged)).toEqual([]);
   });
 });
 

@@ -1,7 +1,7 @@
 import type { Versions } from './conflict.ts';
 import type { Records } from './record.ts';
 import { schemes as known, newest, type Schemes } from './schemes.ts';
-import { grades, type Seal, type SealsFault } from './seal.ts';
+import { grades, type Seal, type SealsFault, type SealsFile } from './seal.ts';
 import { withChecksum } from './seal-entry.ts';
 import { readSealsFile } from './seals-file.ts';
 import { linksOf } from './standing.ts';
@@ -12,47 +12,79 @@ type Side = keyof Versions;
 export interface HealedRecord {
   readonly record: string;
   readonly kept: Side | 'both';
+  readonly seal: Seal;
   /** Whether the kept seal fits the merged content; where not, the record is stale. */
   readonly fits: boolean;
   /** The kept seal came from a rerun that is not of this content. */
   readonly rerunDropped: boolean;
 }
 
-export interface Healed {
-  readonly seals: ReadonlyMap<string, Seal>;
+export interface Healed extends Pick<SealsFile, 'seals' | 'unreadable'> {
   readonly records: readonly HealedRecord[];
-  /** What could not be read of a side, and so is not in the outcome. */
-  readonly faults: readonly (SealsFault & { readonly side: Side })[];
+  /** What could not be read of a side, and on which. */
+  readonly faults: readonly SealsFault[];
 }
 
 /**
  * Makes one seals file of the versions that a merge left. For each record the seal stays that fits the content as it is
  * merged now; where both do, the one of the better grade, then the later; where none does, the base's, or without a
- * base the better. A record that is sealed on one side only stays sealed. `records` are those of the merged content.
+ * base the better. A record that is sealed on one side only stays sealed. An entry that can't be read stays as it is
+ * where no side has a seal to put in its place. `records` are those of the merged content.
  */
 export function healSeals(versions: Versions, records: Records, schemes: Schemes = known): Healed {
-  const faults: (SealsFault & { side: Side })[] = [];
-  const read = (side: Side): ReadonlyMap<string, Seal> => {
-    const file = readSealsFile('', versions[side], newest(schemes).number);
-    // What is wrong in the base was so before the merge, or is torn by the markers.
-    if (side !== 'base') faults.push(...file.faults.map((fault) => ({ ...fault, side })));
-    return file.seals;
-  };
-  const [base, ours, theirs] = [read('base'), read('ours'), read('theirs')];
-  const linksBy = linksOf(records, schemes);
+  const read = (side: Side): SealsFile => readSealsFile('', versions[side], newest(schemes).number);
+  // What is wrong in the base was so before the merge, or is torn by the markers.
+  const [base, ours, theirs] = [read('base').seals, read('ours'), read('theirs')];
+  const fitsOf = fitting(records, schemes);
   const seals = new Map<string, Seal>();
   const healed: HealedRecord[] = [];
-  for (const record of [...new Set([...ours.keys(), ...theirs.keys()])].sort()) {
-    const fits = (seal: Seal): boolean => linksBy(seal.scheme).digests.get(record) === seal.digest;
-    const chosen = choose(base.get(record), ours.get(record), theirs.get(record), fits);
+  for (const record of [...new Set([...ours.seals.keys(), ...theirs.seals.keys()])].sort()) {
+    const isFit = fitsOf(record);
+    const chosen = choose(base.get(record), ours.seals.get(record), theirs.seals.get(record), isFit);
     if (chosen === null) continue;
-    const { kept, seal } = chosen;
-    const rerunDropped = seal.grade === 'rerun' && !fits(seal);
-    seals.set(record, rerunDropped ? withoutRerun(seal) : seal);
-    if (kept !== 'both' || rerunDropped) healed.push({ record, kept, fits: fits(seal), rerunDropped });
+    const { kept } = chosen;
+    const fits = isFit(chosen.seal);
+    const rerunDropped = chosen.seal.grade === 'rerun' && !fits;
+    const seal = rerunDropped ? withoutRerun(chosen.seal) : chosen.seal;
+    seals.set(record, seal);
+    if (kept !== 'both' || rerunDropped) healed.push({ record, kept, seal, fits, rerunDropped });
   }
-  return { seals, records: healed, faults };
+  const unreadable = new Map([...theirs.unreadable, ...ours.unreadable].filter(([id]) => !seals.has(id)));
+  const faults = Object.entries({ 'this side': ours, 'the other side': theirs }).flatMap(([side, file]) =>
+    file.faults.map((fault) => ({ ...fault, message: `On ${side} of the merge: ${fault.message}` })),
+  );
+  return { seals, unreadable, records: healed, faults };
 }
+
+/**
+ * Of the seals that the sides of a merge have, those that fit the content as it is now, for the records whose own seal does
+ * not: what was reviewed on either side stays reviewed, however the conflict in the seals file was settled.
+ */
+export function recoverSeals(
+  sides: readonly (readonly [kept: 'ours' | 'theirs', seals: ReadonlyMap<string, Seal>])[],
+  { seals }: Pick<SealsFile, 'seals'>,
+  records: Records,
+  schemes: Schemes = known,
+): readonly HealedRecord[] {
+  const fitsOf = fitting(records, schemes);
+  return [...records.nodes.keys()].flatMap((record) => {
+    const fits = fitsOf(record);
+    const own = seals.get(record);
+    if (own !== undefined && fits(own)) return [];
+    const [best] = sides
+      .flatMap(([kept, of]) => ({ kept, seal: of.get(record) }))
+      .flatMap(({ kept, seal }) => (seal !== undefined && fits(seal) ? { kept, seal } : []))
+      .sort((a, b) => better(a.seal, b.seal));
+    return best === undefined ? [] : { record, ...best, fits: true, rerunDropped: false };
+  });
+}
+
+/** Whether a seal fits a record as it is now, by the scheme that the seal was made with. */
+function fitting(records: Records, schemes: Schemes): (record: string) => (seal: Seal) => boolean {
+  const linksBy = linksOf(records, schemes);
+  return (record) => (seal) => linksBy(seal.scheme).digests.get(record) === seal.digest;
+}
+
 function choose(
   base: Seal | undefined,
   ours: Seal | undefined,
@@ -64,9 +96,9 @@ function choose(
     ...(theirs === undefined ? [] : [{ kept: 'theirs' as const, seal: theirs }]),
   ];
   if (ours?.checksum === theirs?.checksum && ours !== undefined) return { kept: 'both', seal: ours };
-  const fitting = sides.filter(({ seal }) => fits(seal));
-  if (fitting.length === 0 && sides.length === 2 && base !== undefined) return { kept: 'base', seal: base };
-  return (fitting.length > 0 ? fitting : sides).sort((a, b) => better(a.seal, b.seal))[0] ?? null;
+  const suited = sides.filter(({ seal }) => fits(seal));
+  if (suited.length === 0 && sides.length === 2 && base !== undefined) return { kept: 'base', seal: base };
+  return (suited.length > 0 ? suited : sides).sort((a, b) => better(a.seal, b.seal))[0] ?? null;
 }
 
 /** The better grade first, then the later day; the checksum decides between equals, so that both sides heal alike. */

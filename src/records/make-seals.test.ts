@@ -291,13 +291,27 @@ describe('an entry that was edited by hand', () => {
     expect(judgeStandings(records, edited).get('runs.dry')?.state).toBe('unsealed');
   });
 
-  it('is made anew, or said to be dropped', () => {
+  it('is made anew, or stays as it is until it is', () => {
     const request = { sealsFile: edited, standings: judgeStandings(records, edited) };
     expect(sealing(records, new Map(), { ...request, wanted: ['runs.dry'] })).toMatchObject({
       dropped: [],
       sealed: [{ record: 'runs.dry' }],
     });
-    expect(sealing(records, new Map(), { ...request, wanted: ['study'] }).dropped).toEqual(['runs.dry']);
-    expect(sealsFileOf(edited.seals).seals.has('runs.dry')).toBe(false);
+    const other = sealing(records, new Map(), { ...request, wanted: ['study'] });
+    expect(other).toMatchObject({ dropped: [], unreadable: edited.unreadable });
+    expect([...other.unreadable.keys()]).toEqual(['runs.dry']);
+  });
+
+  it('goes with the others where its record is gone and all is sealed', async () => {
+    const without = smallStudy
+      .replace(/ {2}future: .*\n/, '')
+      .replaceAll(/inputs\.future, |rain: \{input: future\}, /g, '');
+    const now = await recordsOf(without, smallFiles);
+    const sealsFile = { ...sealsFileOf(seals), unreadable: new Map([['inputs.future', 1]]) };
+    const standings = judgeStandings(now, sealsFile);
+    const plan = (wanted: 'all' | string[]) =>
+      sealing(now, new Map(), { sealsFile, standings, wanted, because: 'It was left out.' });
+    expect([...plan('all').unreadable]).toEqual([]);
+    expect(plan(['study']).dropped).toEqual([]);
   });
 });

@@ -43,6 +43,8 @@ export interface Sealed {
   readonly seal: Seal;
   /** The seal that it replaces. */
   readonly before: Seal | null;
+  /** The entry that it replaces could not be read. */
+  readonly replacesUnreadable: boolean;
   /** Not asked for: a wanted record rests on it. */
   readonly along: boolean;
   /** Paths whose content could not be verified. */
@@ -52,10 +54,12 @@ export interface Sealed {
 export interface SealPlan {
   /** All seals as they will be; those that need not change are the very entries of before. */
   readonly seals: ReadonlyMap<string, Seal>;
+  /** Entries at fault that stay in the file as they are, since their records are not sealed anew. */
+  readonly unreadable: SealsFile['unreadable'];
   /** In the order of sealing: what others rest on comes first. */
   readonly sealed: readonly Sealed[];
   readonly refused: readonly Refusal[];
-  /** Entries that will be gone: unreadable ones that are not made anew and, where all is sealed, those without a record. */
+  /** Entries that will be gone: where all is sealed, those without a record. */
   readonly dropped: readonly string[];
 }
 
@@ -65,8 +69,9 @@ export interface SealPlan {
  */
 export function makeSeals(request: SealRequest, schemes: Schemes = known): SealPlan {
   const { records, sealsFile, standings, wanted } = request;
-  const unreadable = unreadableSeals(sealsFile);
-  if (unreadable !== null) return { seals: sealsFile.seals, sealed: [], refused: [unreadable], dropped: [] };
+  const { unreadable } = sealsFile;
+  const fault = unreadableSeals(sealsFile);
+  if (fault !== null) return { ...sealsFile, sealed: [], refused: [fault], dropped: [] };
 
   const links = linksOf(records, schemes)(newest(schemes).number);
   const { asked, refused } = askedRecords(wanted, records);
@@ -102,14 +107,20 @@ export function makeSeals(request: SealRequest, schemes: Schemes = known): SealP
     const seal = withChecksum({ ...content, ...proof, sealed_by: request.person, sealed_on: request.today });
     const unverified = [...record.claims.values()].filter(({ identity }) => identity.kind === 'unavailable');
     seals.set(id, seal);
-    sealed.push({ record: id, seal, before, along, unverified: unverified.map(({ path }) => path) });
+    sealed.push({
+      record: id,
+      seal,
+      before,
+      replacesUnreadable: unreadable.has(id),
+      along,
+      unverified: unverified.map(({ path }) => path),
+    });
   }
-  const orphans = wanted === 'all' ? [...seals.keys()].filter((id) => !records.nodes.has(id)) : [];
-  for (const id of orphans) seals.delete(id);
-  const lost = sealsFile.faults.flatMap(({ record }) =>
-    record === null || seals.has(record) ? [] : [record],
-  );
-  return { seals, sealed, refused: [...refused.values()], dropped: [...orphans, ...lost] };
+  const kept = new Map([...unreadable].filter(([id]) => !seals.has(id)));
+  const orphans =
+    wanted === 'all' ? [...seals.keys(), ...kept.keys()].filter((id) => !records.nodes.has(id)) : [];
+  for (const id of orphans) for (const entries of [seals, kept]) entries.delete(id);
+  return { seals, unreadable: kept, sealed, refused: [...refused.values()], dropped: orphans };
 }
 
 type Proof = Pick<Seal, 'facts' | 'grade' | 'unmoved' | 'because'>;

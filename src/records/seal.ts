@@ -52,6 +52,8 @@ export interface SealsFile {
   readonly path: string;
   readonly exists: boolean;
   readonly seals: ReadonlyMap<string, Seal>;
+  /** By record: entries at fault as they stand, so that sealing other records keeps them. */
+  readonly unreadable: ReadonlyMap<string, unknown>;
   /** Broken JSON, conflict markers, an entry that was edited by hand (its checksum fails). */
   readonly faults: readonly SealsFault[];
 }

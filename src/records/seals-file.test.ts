@@ -31,7 +31,13 @@ describe('the text of a seals file', () => {
   });
 
   it('is read back as it was written', () => {
-    expect(readSealsFile(path, text)).toEqual({ path, exists: true, seals, faults: [] });
+    expect(readSealsFile(path, text)).toEqual({
+      path,
+      exists: true,
+      seals,
+      unreadable: new Map(),
+      faults: [],
+    });
     expect(writeSealsFile(readSealsFile(path, text).seals)).toBe(text);
     expect(readSealsFile(path, writeSealsFile(new Map())).faults).toEqual([]);
   });
@@ -45,7 +51,13 @@ describe('the text of a seals file', () => {
 
 describe('faults of a seals file', () => {
   it('are none where there is no file', () => {
-    expect(readSealsFile(path, null)).toEqual({ path, exists: false, seals: new Map(), faults: [] });
+    expect(readSealsFile(path, null)).toEqual({
+      path,
+      exists: false,
+      seals: new Map(),
+      unreadable: new Map(),
+      faults: [],
+    });
   });
 
   it.each<[string, string, number]>([
@@ -70,6 +82,7 @@ describe('faults of a seals file', () => {
     const file = readSealsFile(path, edited);
     expect(file.faults).toMatchObject([{ kind: 'edited', record: 'balance.catchment', line: 4 }]);
     expect(file.seals.size).toBe(seals.size - 1);
+    expect(writeSealsFile(file.seals, file.unreadable)).toBe(edited);
   });
 
   it('name the field of an entry that no seal has so', () => {

@@ -5,10 +5,9 @@ import { newest, schemes } from './schemes.ts';
 import type { Seal, SealsFault, SealsFile } from './seal.ts';
 import { checksumOf, faultyField, isMap } from './seal-entry.ts';
 
-interface Read {
-  readonly seals: ReadonlyMap<string, Seal>;
-  readonly faults: readonly SealsFault[];
-}
+type Read = Pick<SealsFile, 'seals' | 'unreadable' | 'faults'>;
+
+const nothing: Omit<Read, 'faults'> = { seals: new Map(), unreadable: new Map() };
 
 /**
  * Reads a seals file; `text` is null where there is none. A fault hides only the entry that it is about: of a
@@ -19,7 +18,7 @@ export function readSealsFile(
   text: string | null,
   newestScheme = newest(schemes).number,
 ): SealsFile {
-  if (text === null) return { path, exists: false, seals: new Map(), faults: [] };
+  if (text === null) return { path, exists: false, ...nothing, faults: [] };
   const line = conflictLine(text);
   return {
     path,
@@ -35,25 +34,30 @@ function readConflict(text: string, line: number, newestScheme: number): Read {
   const alike = [...ours].filter(([id, seal]) => theirs.get(id)?.checksum === seal.checksum);
   const message =
     'Git left a merge conflict in the seals, so where its sides differ nobody can tell what was reviewed.';
-  return { seals: new Map(alike), faults: [{ kind: 'conflict', record: null, line, message }] };
+  return { ...nothing, seals: new Map(alike), faults: [{ kind: 'conflict', record: null, line, message }] };
 }
 
 function readText(text: string, newestScheme: number): Read {
   const { value, fault } = parseJson(text);
-  if (fault !== null) return { seals: new Map(), faults: [fault] };
+  if (fault !== null) return { ...nothing, faults: [fault] };
   if (!isMap(value) || !isMap(value.records)) {
     const message =
       'Expected a map with `scheme` and `records`, as `stoplog seal` writes it; none of it can be read.';
-    return { seals: new Map(), faults: [{ kind: 'shape', record: null, line: 1, message }] };
+    return { ...nothing, faults: [{ kind: 'shape', record: null, line: 1, message }] };
   }
   const seals = new Map<string, Seal>();
+  const unreadable = new Map<string, unknown>();
   const faults: SealsFault[] = [];
   for (const [record, entry] of Object.entries(value.records)) {
     const wrong = faultOf(entry, newestScheme);
-    if (wrong === null) seals.set(record, entry as Seal);
-    else faults.push({ ...wrong, record, line: lineOf(record, text) });
+    if (wrong === null) {
+      seals.set(record, entry as Seal);
+      continue;
+    }
+    unreadable.set(record, entry);
+    faults.push({ ...wrong, record, line: lineOf(record, text) });
   }
-  return { seals, faults };
+  return { seals, unreadable, faults };
 }
 
 function faultOf(entry: unknown, newestScheme: number): Pick<SealsFault, 'kind' | 'message'> | null {
@@ -99,9 +103,12 @@ function lineOf(record: string, text: string): number {
   return Math.max(1, line + 1);
 }
 
-/** A seals file's text: the newest scheme in it first, then one record after another, all keys sorted. */
-export function writeSealsFile(seals: ReadonlyMap<string, Seal>): string {
+/** A seals file's text: the newest scheme in it first, then one record after another, all keys sorted; entries at fault keep what they say. */
+export function writeSealsFile(
+  seals: ReadonlyMap<string, Seal>,
+  unreadable: SealsFile['unreadable'] = nothing.unreadable,
+): string {
   const scheme = Math.max(1, ...[...seals.values()].map((seal) => seal.scheme));
-  const records: unknown = JSON.parse(canonicalJson(Object.fromEntries(seals)));
+  const records: unknown = JSON.parse(canonicalJson(Object.fromEntries([...unreadable, ...seals])));
   return `${JSON.stringify({ scheme, records }, null, 2)}\n`;
 }

@@ -44,9 +44,10 @@ export function sealReport(outcome: SealOutcome): string {
       figures.map(({ field, before, after }) => `${field}   ${before} -> ${after}`),
     ),
     ...titled(`SEALED by ${person} on ${today}`, plan.sealed.flatMap(sealedLines)),
+    ...titled('DROPPED, since their records are gone', plan.dropped),
     ...titled(
-      'DROPPED, since their records are gone or their entries could not be read',
-      plan.dropped.map((record) => record),
+      'LEFT AS THEY ARE, though these entries can’t be read: look at each record and seal it by name',
+      [...plan.unreadable.keys()],
     ),
     ...titled(
       'NOT SEALED',
@@ -66,8 +67,9 @@ function titled(title: string, items: readonly string[]): readonly string[] {
   return items.length === 0 ? [] : ['', plain(title), ...items.map((item) => `  ${plain(item)}`)];
 }
 
-function sealedLines({ record, seal, before, along, unverified }: Sealed): readonly string[] {
-  const how = before === null ? 'first seal' : before.digest === seal.digest ? 'sealed again' : 'was stale';
+function sealedLines(sealed: Sealed): readonly string[] {
+  const { record, seal, along, unverified } = sealed;
+  const how = howSealed(sealed);
   return [
     `${record}   ${how}${along ? ', since what was asked for rests on it' : ''}`,
     ...(seal.because === null ? [] : [`   though it did not change: ${seal.because}`]),
@@ -77,8 +79,14 @@ function sealedLines({ record, seal, before, along, unverified }: Sealed): reado
   ];
 }
 
-function healedLine({ record, kept, fits, rerunDropped }: HealedRecord): string {
+function howSealed({ seal, before, replacesUnreadable }: Sealed): string {
+  if (replacesUnreadable) return 'its entry could not be read';
+  if (before === null) return 'first seal';
+  return before.digest === seal.digest ? 'sealed again' : 'was stale';
+}
+
+function healedLine({ record, kept, seal, fits, rerunDropped }: HealedRecord): string {
   const side = { ours: 'this branch’s', theirs: 'the other branch’s', base: 'the older', both: 'the' }[kept];
   const state = fits ? 'fits what is merged' : 'does not fit what is merged, so the record is stale';
-  return `${record}   ${side} seal is kept: it ${state}${rerunDropped ? '; it no longer proves a rerun' : ''}`;
+  return `${record}   ${side} seal is kept (${seal.sealed_by}, ${seal.sealed_on}): it ${state}${rerunDropped ? '; it no longer proves a rerun' : ''}`;
 }

@@ -32,7 +32,7 @@ export function recordsFromData(
 }
 
 export function sealsFileOf(seals: ReadonlyMap<string, Seal>): SealsFile {
-  return { path: 'stoplog.seals.json', exists: true, seals, faults: [] };
+  return { path: 'stoplog.seals.json', exists: true, seals, unreadable: new Map(), faults: [] };
 }
 
 /** Plans to seal records over earlier seals, by an invented person. */

@@ -12,12 +12,17 @@ ruleCases(sealUnreadable, {
     {
       name: 'a merge conflict',
       byHand: (seals) => `<<<<<<< HEAD\n${seals}=======\n${seals}>>>>>>> other\n`,
-      finds: { subject: 'conflict', line: 1, clear: 'stoplog seal --all' },
+      finds: { subject: 'conflict', line: 1, clear: 'After a merge: `stoplog seal`' },
     },
     {
       name: 'another reviewer written in',
       byHand: (seals) => seals.replace('Test Reviewer', 'Somebody Else'),
       finds: { record: 'balance.catchment', subject: 'edited' },
+    },
+    {
+      name: 'an entry of a record that is gone',
+      byHand: (seals) => seals.replace('"records": {', '"records": { "inputs.gone": 1,'),
+      finds: { subject: 'shape', clear: 'stoplog seal --all drops it' },
     },
     {
       name: 'written by a newer Stoplog',

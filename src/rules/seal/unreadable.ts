@@ -10,8 +10,8 @@ export const sealUnreadable = rule({
   why: 'Seals say who reviewed what. One that can’t be read, or that was changed by hand, proves nothing.',
   source: { basis: 'definition', citation: 'A seal counts only as Stoplog wrote it.' },
   clear:
-    'After a merge: stoplog seal --all heals the file. Otherwise take it back from git, or seal the record anew.',
-  check: (_, { sealsFile }) =>
+    'After a merge: `stoplog seal` puts both sides together. Otherwise take the file back from git, or seal the record anew.',
+  check: (_, { records, sealsFile }) =>
     sealsFile.faults.map(({ kind, record, line, message }) => ({
       record: record ?? 'manifest',
       file: sealsFile.path,
@@ -22,6 +22,10 @@ export const sealUnreadable = rule({
         ? { clear: 'Install the version of Stoplog that wrote it, or a newer one.' }
         : record === null
           ? {}
-          : { clear: `Take the entry back from git, or look at the record and: stoplog seal ${record}` }),
+          : {
+              clear: records.nodes.has(record)
+                ? `Take the entry back from git, or look at the record and: stoplog seal ${record}`
+                : 'Its record is gone: stoplog seal --all drops it.',
+            }),
     })),
 });
