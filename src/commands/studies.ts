@@ -3,6 +3,7 @@ import { discoverManifests, manifestName } from '../manifest/discover.ts';
 import type { Manifest, Problem } from '../manifest/manifest.ts';
 import { readManifest } from '../manifest/read.ts';
 import { buildRecords } from '../records/build.ts';
+import { gitPath } from '../records/paths.ts';
 import type { Records } from '../records/record.ts';
 import type { SealsFile, Standing } from '../records/seal.ts';
 import { readSealsFile } from '../records/seals-file.ts';
@@ -66,7 +67,7 @@ function noManifest(snapshot: Snapshot): Failure {
     ? new Failure(
         'no-manifest',
         `${untracked.join(', ')} is not tracked by git, so what is ${snapshot.label} holds no ${manifestName}.`,
-        `Stage it first: git add ${untracked.join(' ')}`,
+        `Stage it first: git add ${untracked.map(gitPath).join(' ')}`,
       )
     : new Failure(
         'no-manifest',

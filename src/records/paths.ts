@@ -10,7 +10,12 @@ export function fromTop(folder: string, path: string): string {
   return posix.join(folder, path);
 }
 
+/** A path from the top of the repository, for a git command that is typed in any folder of it. */
+export function gitPath(path: string): string {
+  return shellPath(`:/${path}`);
+}
+
 /** A path as a shell takes it. */
 export function shellPath(path: string): string {
-  return /^[\w./-]+$/.test(path) ? path : `'${path.replaceAll("'", "'\\''")}'`;
+  return /^:?[\w./-]+$/.test(path) ? path : `'${path.replaceAll("'", "'\\''")}'`;
 }

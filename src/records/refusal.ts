@@ -1,5 +1,5 @@
 import { nearestName } from '../manifest/nearest.ts';
-import { shellPath } from './paths.ts';
+import { gitPath } from './paths.ts';
 import type { RecordNode, Records } from './record.ts';
 import type { SealsFile, Standing } from './seal.ts';
 
@@ -48,7 +48,7 @@ export function faultOf(record: RecordNode, records: Records): Refusal | null {
         : `\`${pattern}\` names no file that git tracks, so there is nothing to fingerprint.`,
     next:
       untracked.length > 0
-        ? `git add ${untracked.map(shellPath).join(' ')}`
+        ? `git add ${untracked.map(gitPath).join(' ')}`
         : 'Correct the path, or bring the file into git.',
   };
 }
@@ -109,6 +109,6 @@ export function unreadableSeals({ path, faults }: SealsFile): Refusal | null {
     next:
       fault.kind === 'newer-scheme'
         ? 'Seal with a version of Stoplog that is at least as new.'
-        : 'Take the file from the last commit (git checkout HEAD -- FILE) or delete it, then seal again.',
+        : `Put a whole version in its place, then seal again: git checkout HEAD -- ${gitPath(path)} takes that of the last commit; in a merge, git checkout --ours or --theirs that of one side.`,
   };
 }

@@ -298,7 +298,7 @@ describe('what could not be done is a failure that says what to do', () => {
     expect((await stoplog(folder, ['check'])).status).toBe(1);
     const { failure } = await stoplog(folder, ['check', '--at', 'index']);
     expect(failure?.code).toBe('no-manifest');
-    expect(failure?.next).toContain('git add stoplog.yaml');
+    expect(failure?.next).toContain('git add :/stoplog.yaml');
   });
 
   it('nobody to sign a seal', async () => {

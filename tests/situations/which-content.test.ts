@@ -42,7 +42,7 @@ describe('which content is checked', () => {
     expect(finding.clear).toContain('git add');
     const refused = await stoplog(project.folder, ['seal', 'inputs.rainfall']);
     expect(refused.status).toBe(1);
-    expect(refused.text).toContain('git add data/rain.csv');
+    expect(refused.text).toContain('git add :/data/rain.csv');
   });
 
   it('says of a claimed file that git is told to ignore it', async () => {

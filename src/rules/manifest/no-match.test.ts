@@ -23,7 +23,7 @@ ruleCases(manifestNoMatch, {
       name: 'a file that only lies on disk',
       set: { 'inputs.rainfall.files': ['data/new.csv'] },
       untracked: ['data/new.csv'],
-      finds: { message: 'data/new.csv on disk, which git does not track', clear: 'git add data/new.csv' },
+      finds: { message: 'data/new.csv on disk, which git does not track', clear: 'git add :/data/new.csv' },
     },
     {
       name: 'outputs before the first run',

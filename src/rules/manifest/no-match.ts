@@ -1,4 +1,4 @@
-import { shellPath } from '../../records/paths.ts';
+import { gitPath } from '../../records/paths.ts';
 import type { Unmatched } from '../../records/record.ts';
 import { few } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
@@ -32,7 +32,7 @@ function told(
   if (untracked.length > 0)
     return {
       message: `\`${pattern}\` names ${few(untracked)} on disk, which git does not track: a clone would not have it.`,
-      clear: `git add ${untracked.slice(0, 3).map(shellPath).join(' ')}`,
+      clear: `git add ${untracked.slice(0, 3).map(gitPath).join(' ')}`,
     };
   if (ignored.length > 0)
     return {
