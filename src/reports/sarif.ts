@@ -83,7 +83,7 @@ function result({ finding, identity }: Told, records: ReadonlySet<string>, compa
   const { rule, level, file, line, column, standing, trail } = finding;
   const answered = passes(finding);
   const root = trail.at(-1);
-  const isFile = root !== undefined && root !== file && root !== settingsAddress && !records.has(root);
+  const isOtherFile = root !== undefined && root !== file && root !== settingsAddress && !records.has(root);
   return {
     ruleId: rule,
     ruleIndex: placeOf.get(rule),
@@ -91,7 +91,7 @@ function result({ finding, identity }: Told, records: ReadonlySet<string>, compa
     level: answered === null ? levels[level] : 'note',
     message: { text: noLink(`${plain(finding.record)}: ${explain(finding).join('\n')}`) },
     locations: [location(file, { startLine: line, startColumn: column })],
-    relatedLocations: isFile ? [location(root)] : undefined,
+    relatedLocations: isOtherFile && !leavesTop.test(root) ? [location(root)] : undefined,
     partialFingerprints: { primaryLocationLineHash: `${identity}:1`, 'stoplog/v1': identity },
     baselineState: compared ? (standing ? 'unchanged' : 'new') : undefined,
     suppressions:
@@ -100,6 +100,9 @@ function result({ finding, identity }: Told, records: ReadonlySet<string>, compa
         : [{ kind: 'external', status: 'accepted', justification: clip(plain(answered), 1000) }],
   };
 }
+
+/** A seals file that somebody wrote by hand may name such a path. */
+const leavesTop = /^\/|(?:^|\/)\.\.(?:\/|$)/;
 
 function location(path: string, region?: object) {
   return {

@@ -8,6 +8,7 @@ import { describe, expect, it } from 'vitest';
 import { sarifReport } from '../../src/reports/sarif.ts';
 import type { Verdict } from '../../src/verdict/finding.ts';
 import { outsidePackage } from '../harness/outside.ts';
+import { multitool, saidByMultitool } from './multitool.ts';
 import { everyVerdict, finding, hostile, large, verdictOf } from './verdicts.ts';
 
 /** What the tests ask of a log. */
@@ -77,6 +78,54 @@ describe('the SARIF schema 2.1.0 (release candidate 5 as Microsoft ships it)', (
       expect(valid(JSON.parse(bad))).toBe(false);
     }
   });
+});
+
+describe('the rules by which GitHub takes files in, as Microsoft’s program has them', () => {
+  const because = multitool.reason;
+  // The project has no address of its own to name.
+  const homeless = 'SARIF2005 Warning_ProvideToolnformationUri runs[0].tool.driver stoplog';
+
+  it.skipIf(!multitool.available).each(verdicts)(
+    `pass %s ${because}`,
+    { timeout: 300_000 },
+    async (_, verdict) => {
+      expect(await saidByMultitool(sarifReport(verdict, '1.2.3'))).toEqual([homeless]);
+    },
+  );
+
+  it.skipIf(!multitool.available)(
+    `find every fault that is put in ${because}`,
+    { timeout: 300_000 },
+    async () => {
+      const findings = ['a', 'b', 'c', 'd', 'e'].map((fingerprint) => finding({ fingerprint }));
+      const log = JSON.parse(sarifReport(verdictOf(findings), '1.2.3'));
+      const [{ results, tool }] = log.runs;
+      const [first, ...others] = tool.driver.rules;
+      for (const part of ['shortDescription', 'fullDescription', 'help']) delete first[part];
+      tool.driver.rules = [first, ...others];
+      const uri = (index: number, given: string) => {
+        results[index].locations[0].physicalLocation.artifactLocation.uri = given;
+      };
+      results[0].locations = [];
+      results[1].ruleIndex = 5000;
+      uri(2, '/data/rain.csv');
+      uri(3, 'data/rain gauge.csv');
+      uri(4, 'data\\rain.csv');
+      const said = (await saidByMultitool(JSON.stringify(log))).join('\n');
+      for (const fault of [
+        /GH1015 .*results\[0\]/,
+        /GH2012 Error_MissingShortDescription .*rules\[0\]/,
+        /GH2012 Error_MissingFullDescription .*rules\[0\]/,
+        /GH2012 Error_MissingHelp .*rules\[0\]/,
+        /SARIF1009 .*results\[1\] /,
+        /SARIF1004 .*results\[2\]/,
+        /SARIF1002 .*results\[3\]/,
+        /SARIF1002 .*results\[4\]/,
+      ]) {
+        expect.soft(said).toMatch(fault);
+      }
+    },
+  );
 });
 
 describe('what a code scanning host asks beyond the schema', () => {
@@ -167,6 +216,12 @@ describe('a result', () => {
     expect(one?.relatedLocations).toMatchObject([
       { physicalLocation: { artifactLocation: { uri: 'data/rain/upper.csv' } } },
     ]);
+  });
+
+  it.each(['/etc/hosts', '../rain.csv', 'data/../../rain.csv'])('names no file outside: %s', (path) => {
+    const [one] = resultsOf(verdictOf([finding({ trail: ['inputs.rainfall', path] })]));
+    expect(one).toBeDefined();
+    expect(one).not.toHaveProperty('relatedLocations');
   });
 
   it('makes no link of a stranger’s text', () => {
