@@ -5,3 +5,11 @@ const unsafe = /[\p{Cc}\p{Cf}\p{Zl}\p{Zp}\p{Cs}]/gu;
 export function plain(text: string): string {
   return text.replace(unsafe, (character) => `\\u{${(character.codePointAt(0) ?? 0).toString(16)}}`);
 }
+
+/**
+ * Text in which no CI host finds a command, wherever it is printed: `::` where a line begins, after blanks too, appears as `\u{3a}:`,
+ * and `##[` or `##name[` as `\u{23}#[`.
+ */
+export function inert(text: string): string {
+  return text.replace(/((?:^|\u0085)[\s\u0085]*):(?=:)/gm, '$1\\u{3a}').replace(/#(?=#\w*\[)/g, '\\u{23}');
+}

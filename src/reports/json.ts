@@ -6,12 +6,12 @@ export function jsonReport(verdict: Verdict): string {
 }
 
 /**
- * JSON with two-space indent and a final newline. Signs that end a line to some readers, and the `##[` that CI hosts obey
- * wherever it stands in a printed line, are written as escapes; what is read is the same.
+ * JSON with two-space indent and a final newline. Signs that end a line to some readers, and the `##[` and `##name[` that CI hosts
+ * obey wherever they stand in a printed line, are written as escapes; what is read is the same.
  */
 export function jsonText(value: unknown): string {
   const text = JSON.stringify(value, null, 2)
-    .replaceAll('##[', '#\\u0023[')
+    .replace(/##(?=\w*\[)/g, '#\\u0023')
     .replace(/[\u0085\u2028\u2029]/g, (sign) => `\\u${sign.charCodeAt(0).toString(16).padStart(4, '0')}`);
   return `${text}\n`;
 }

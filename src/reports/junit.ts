@@ -1,4 +1,5 @@
 import type { ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import { plain } from './escape.ts';
 import { clip, everyFinding, explain, type Told } from './explain.ts';
 import { remarks } from './remarks.ts';
 import { withinLimit } from './within-limit.ts';
@@ -52,16 +53,19 @@ function suite(manifest: ManifestVerdict, about: readonly string[], told: readon
     ...manifest.departures.map(
       ({ of, now, because }) => ['departure', `${of} now ${now}: ${because}`] as const,
     ),
+    ...manifest.cured.map(
+      ({ rule, record, message }) => ['cured', `${record}: ${rule}: ${clip(message, 300)}`] as const,
+    ),
   ];
   const lines = [
     `  <testsuite name="${xml(manifest.path)}" tests="${tests}" failures="${failures}" errors="0" skipped="${skipped}">`,
     '    <properties>',
-    ...properties.map(([name, value]) => `      <property name="${name}" value="${xml(value)}"/>`),
+    ...properties.map(([name, value]) => `      <property name="${name}" value="${xml(plain(value))}"/>`),
     '    </properties>',
     ...cases,
     ...silent.map(
       ({ id }) =>
-        `    <testcase classname="${xml(manifest.path)}" name="${xml(id)}" file="${xml(manifest.path)}"/>`,
+        `    <testcase classname="${xml(manifest.path)}" name="${xml(plain(id))}" file="${xml(manifest.path)}"/>`,
     ),
     '  </testsuite>',
   ];
@@ -69,14 +73,14 @@ function suite(manifest: ManifestVerdict, about: readonly string[], told: readon
 }
 
 function testCase({ finding, manifest, weight }: Told, name: string): string {
-  const text = xml([...explain(finding), `At ${finding.file}:${finding.line}`].join('\n'));
+  const text = xml([...explain(finding), `At ${plain(finding.file)}:${finding.line}`].join('\n'));
   const inside =
     weight === 'block'
-      ? `<failure type="${xml(finding.rule)}" message="${xml(clip(finding.message, 300))}">${text}</failure>`
+      ? `<failure type="${xml(finding.rule)}" message="${xml(clip(plain(finding.message), 300))}">${text}</failure>`
       : weight === 'standing' || weight === 'answered'
         ? `<skipped>${text}</skipped>`
         : `<system-out>${text}</system-out>`;
-  return `    <testcase classname="${xml(manifest)}" name="${xml(name)}" file="${xml(finding.file)}">${inside}</testcase>`;
+  return `    <testcase classname="${xml(manifest)}" name="${xml(plain(name))}" file="${xml(finding.file)}">${inside}</testcase>`;
 }
 
 const entities: Readonly<Record<string, string>> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;' };
@@ -90,5 +94,5 @@ function xml(text: string): string {
     )
     .replace(/[&<>"]/g, (sign) => entities[sign] ?? sign)
     .replace(/^(\s*):/gm, '$1&#58;')
-    .replaceAll('##[', '##&#91;');
+    .replace(/##(?=\w*\[)/g, '#&#35;');
 }

@@ -64,7 +64,7 @@ function opening(verdict: Verdict): readonly string[] {
     `${tally(verdict)}. Checked: ${literal(at)}${base === null ? '' : `, against ${literal(base)}`}.`,
     ...remarks(verdict)
       .slice(0, listed)
-      .flatMap((remark) => ['', `**${literal(remark)}**`]),
+      .flatMap((remark) => ['', `**${literal(clip(remark, 600))}**`]),
     '',
     ...manifests.slice(0, listed).map(study),
     ...manifests.flatMap(departures).slice(0, listed),

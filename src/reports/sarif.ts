@@ -57,8 +57,8 @@ function log(verdict: Verdict, version: string, told: readonly Told[], left: num
   };
 }
 
-function study({ path, phase, departures }: ManifestVerdict) {
-  return { path, phase, departures };
+function study({ path, phase, departures, cured }: ManifestVerdict) {
+  return { path, phase, departures, cured };
 }
 
 function notification(text: string) {

@@ -2,7 +2,7 @@ import { Chalk, type ChalkInstance } from 'chalk';
 import type { Cured, Finding, Level, ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { counts, passes } from '../verdict/judge.ts';
 import { caution } from './caution.ts';
-import { plain } from './escape.ts';
+import { inert, plain } from './escape.ts';
 import { statedAndFound, way } from './explain.ts';
 import { fold, type Group, groupByRecord } from './fold.ts';
 import { remarks } from './remarks.ts';
@@ -34,17 +34,17 @@ export function textReport(verdict: Verdict, { color, quiet }: TextOptions): str
   lines.push(...remarks(verdict).flatMap((remark) => ['', ...wrap(plain(remark), width)]));
   lines.push('', `${pass ? paint.green.bold('PASS') : paint.red.bold('BLOCKED')}   ${tally(verdict)}`);
   if (pass) lines.push('', ...wrap(caution, width).map((line) => paint.dim(line)));
-  return `${lines.join('\n')}\n`;
+  return inert(`${lines.join('\n')}\n`);
 }
 
 function opening(verdict: Verdict, manifest: ManifestVerdict, name: string): readonly string[] {
   const sound = manifest.records.filter((record) => record.state === 'sound').length;
   const study = plain(manifest.study ?? manifest.path);
-  const column = Math.max(study.length, 28) + 4;
+  const column = Math.min(Math.max(study.length, 28), width / 2);
   const where = verdict.base === null ? verdict.at : `${verdict.at}, against ${verdict.base}`;
   return [
-    `${name}   ${study.padEnd(column)}${plain(where)}`,
-    `${' '.repeat(10)}${`phase ${manifest.phase}`.padEnd(column)}${sound} of ${count(manifest.records.length, 'record')} sound`,
+    `${name}   ${study.padEnd(column)}    ${plain(where)}`,
+    `${' '.repeat(10)}${`phase ${manifest.phase}`.padEnd(column)}    ${sound} of ${count(manifest.records.length, 'record')} sound`,
   ];
 }
 

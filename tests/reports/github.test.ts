@@ -6,6 +6,7 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { Context } from '../../src/commands/command.ts';
 import { tellGithub } from '../../src/commands/tell-github.ts';
 import { withoutCommands } from '../../src/commands/without-commands.ts';
+import { inert } from '../../src/reports/escape.ts';
 import { explain } from '../../src/reports/explain.ts';
 import { githubOutputs, githubReport } from '../../src/reports/github.ts';
 import { gitlabReport } from '../../src/reports/gitlab.ts';
@@ -116,13 +117,10 @@ describe('escaping, by GitHub’s own toolkit', () => {
 });
 
 describe('a stranger’s words in other output', () => {
-  const spoken = (verdict: typeof hostile) => textReport(verdict, { color: false, quiet: false });
-
-  /** What reaches the log when a command prints its words under GitHub Actions. */
+  /** What reaches the log when a command prints its words. */
   function logged(text: string, may?: 'command'): string {
     let log = '';
     const context = withoutCommands({
-      environment: { GITHUB_ACTIONS: 'true' },
       write: (words: string) => {
         log += words;
       },
@@ -136,33 +134,28 @@ describe('a stranger’s words in other output', () => {
   }
 
   it.each(hostileTexts)('%j would be obeyed at the start of a line, and is not', (text) => {
-    expect(obeyedIn(logged(text))).toEqual([]);
-    expect(obeyedIn(logged(`  ${text}\n`))).toEqual([]);
+    for (const words of [text, `  ${text}\n`, `\n\u0085 ${text}`])
+      expect(obeyedIn(logged(words))).toEqual([]);
   });
 
-  it('is seen to be obeyed without those marks', () => {
-    expect(obeyedIn('::error::mine\n  ##[add-mask]a').map(({ command }) => command)).toEqual([
-      'error',
-      'add-mask',
-    ]);
-    expect(obeyedIn(spoken(hostile))).not.toEqual([]);
-    expect(obeyedIn(logged(spoken(hostile)))).toEqual([]);
+  it('would be obeyed as it is', () => {
+    expect(
+      obeyedIn('::error::mine\n  ##[add-mask]a\nb ##vso[task.x y]c').map(({ command }) => command),
+    ).toEqual(['error', 'add-mask', 'task.x']);
+    expect(hostileTexts.flatMap(obeyedIn).length).toBeGreaterThan(5);
   });
 
-  it('is ended by a word that nobody could foresee', () => {
-    const words = [1, 2].map(() => logged('::error::mine').match(/^::stop-commands::(\S+)\n/)?.[1]);
-    expect(words[0]).toMatch(/^[0-9a-f-]{36}$/);
-    expect(words[0]).not.toBe(words[1]);
+  it('can be told from what was written', () => {
+    expect(inert('a\n  ::error::mine ##[b]')).toBe('a\n  \\u{3a}:error::mine \\u{23}#[b]');
   });
 
   it('leaves our annotations and harmless output as they are', () => {
     expect(logged('::error::ours\n', 'command')).toBe('::error::ours\n');
-    expect(logged('a::b\n')).toBe('a::b\na::b\n');
-    const outside = { environment: {} } as Context;
-    expect(withoutCommands(outside)).toBe(outside);
+    expect(inert('a::b # [c] ## [d]\n : :e\n')).toBe('a::b # [c] ## [d]\n : :e\n');
   });
 
   it.each([
+    ['text', textReport(hostile, { color: false, quiet: false })],
     ['json', jsonReport(hostile)],
     ['sarif', sarifReport(hostile, '1.2.3')],
     ['junit', junitReport(hostile)],
@@ -170,6 +163,7 @@ describe('a stranger’s words in other output', () => {
     ['markdown', markdownReport(hostile)],
   ])('is never obeyed when a file with the %s report is printed', (_kind, report) => {
     expect(obeyedIn(report)).toEqual([]);
+    expect(inert(report)).toBe(report);
     // Read by a program, nothing of it is lost.
     if (report.startsWith('{')) expect(report).toContain('#\\u0023[error]mine');
   });
@@ -200,7 +194,7 @@ describe('summary and outputs', () => {
     const lines = githubOutputs(hostile).trimEnd().split('\n');
     expect(lines[0]).toBe('verdict=blocked');
     expect(lines.slice(1).every((line) => /^[a-z]+=\d+$/.test(line))).toBe(true);
-    expect(lines).toContain('block=15');
+    expect(lines).toContain(`block=${hostileTexts.length}`);
   });
 
   it('are left alone where there is no runner, and a file that can’t be written is said', async () => {

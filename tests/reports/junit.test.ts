@@ -69,7 +69,10 @@ describe('a JUnit report', () => {
           finding({ standing: true, record: 'setup', fingerprint: 'c' }),
           finding({ waived: 'gauge moved (A, until 2030-01-01)', record: 'runs.a', fingerprint: 'd' }),
         ],
-        { departures: [{ of: 'seal.stale', now: 'warn', because: 'a <reason>', loosens: true }] },
+        {
+          departures: [{ of: 'seal.stale', now: 'warn', because: 'a <reason>', loosens: true }],
+          cured: [{ rule: 'seal.stale', record: 'model', message: 'Was stale.', fingerprint: 'e' }],
+        },
         { asked: 'main', strict: false, unavailable: null, notes: [] },
       ),
     );
@@ -83,6 +86,7 @@ describe('a JUnit report', () => {
     expect(report).toMatch(/name="model" file="stoplog.yaml"\/>/);
     expect(report).toContain('Waived: gauge moved (A, until 2030-01-01)');
     expect(report).toContain('value="seal.stale now warn: a &lt;reason&gt;"');
+    expect(report).toContain('name="cured" value="model: seal.stale: Was stale."');
   });
 
   it('fails what stands, too, where that was asked for', () => {
@@ -98,6 +102,12 @@ describe('a JUnit report', () => {
       'To clear: Check the new data, then: stoplog seal inputs.rainfall',
       'At stoplog.yaml:41',
     ]);
+  });
+
+  it('shows no sign that hides or reorders text, but in the path that a host looks up', () => {
+    const shown = junitReport(hostile).replace(/ (?:file|classname)="[^"]*"/g, '');
+    expect(shown.match(/[\p{Cf}\p{Zl}\p{Zp}]/gu)).toBeNull();
+    expect(shown).toContain('\\u{202e}back');
   });
 
   it('is the same for the same verdict', () => {

@@ -13,8 +13,8 @@ const decode = (text: string, more: readonly (readonly [string, string])[] = [])
 
 /**
  * What a runner would obey in a step's output: `::command a=b::data` at the start of a line after blanks, and the older
- * `##[command]data` anywhere in one; nothing between `::stop-commands::word` and `::word::`. Written anew from the
- * documentation of workflow commands, and from memory of the runner's own reading for blanks and the older form.
+ * `##[command]data` anywhere in one, as other hosts read `##name[command]`; nothing between `::stop-commands::word` and `::word::`.
+ * Written anew from the documentation of workflow commands, and from memory of the runner's own reading for blanks and the older form.
  */
 export function obeyedIn(output: string): readonly Obeyed[] {
   const obeyed: Obeyed[] = [];
@@ -46,6 +46,6 @@ function readLine(line: string): Obeyed | null {
       });
     return { command, properties: Object.fromEntries(properties), data: decode(data) };
   }
-  const [, older, rest = ''] = line.match(/##\[([^\s\]]+)[^\]]*\](.*)$/) ?? [];
+  const [, older, rest = ''] = line.match(/##\w*\[([^\s\]]+)[^\]]*\](.*)$/) ?? [];
   return older === undefined ? null : { command: older, properties: {}, data: rest };
 }

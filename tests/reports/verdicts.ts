@@ -91,6 +91,7 @@ export const hostileTexts: readonly string[] = [
   'first\r::add-mask::a',
   'first\u0085::warning::b\u2028::error::c',
   '##[error]mine',
+  'see ###[error]mine or ##vso[task.setvariable variable=x]mine',
   'a,file=x:y%0A%25::b',
   '<script>alert(1)</script> & "quoted" \'so\'',
   ']]> --> <!-- <?xml?>',
@@ -98,6 +99,7 @@ export const hostileTexts: readonly string[] = [
   '@everyone #1 !2 ~3 $x$',
   '/close\n/merge',
   '\u001b[2Jgone\u0000\u0001\ufffe\ud800 alone \u202eback',
+  'section_start:1:mine\r\u001b[0K \u2066left\u2069',
   '降水量/観測 grün 50%.csv',
   '{0} {{1}}',
 ];
