@@ -58,8 +58,9 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
       against = { asked, strict, ...(await openBase(repository, asked, snapshot, cache)) };
     }
     const comparable = against === undefined || against.base !== null;
-    if (options.ifTouched && comparable && !(await touchesGoverned(snapshot, against?.base ?? null))) {
-      if (!options.quiet) context.write(untouched(snapshot, against?.base ?? null));
+    const base = against?.base ?? null;
+    if (options.ifTouched && comparable && !(await touchesGoverned(repository, snapshot, base))) {
+      if (!options.quiet) context.write(untouched(snapshot, base));
       return 0;
     }
     const { only, phase } = options;
@@ -77,9 +78,9 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
   }
 }
 
-function untouched({ label }: Snapshot, base: Snapshot | null): string {
+function untouched({ at, label }: Snapshot, base: Snapshot | null): string {
   return base === null
-    ? `stoplog   ${label} holds no manifest, so there is nothing to check\n`
+    ? `stoplog   ${at.kind === 'index' ? 'what is ' : ''}${label} holds no manifest, so there is nothing to check\n`
     : `stoplog   nothing that a manifest governs differs between ${base.label} and ${label}\n`;
 }
 

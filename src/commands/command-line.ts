@@ -61,7 +61,10 @@ function describe(run: Run): Command {
       'only what is new since this content left that revision blocks; the rest is listed',
     )
     .option('--strict', 'what the base had already blocks too')
-    .option('--if-touched', 'pass at once where nothing that a manifest governs differs from the base')
+    .option(
+      '--if-touched',
+      'pass at once where there is no manifest, or nothing that one governs differs from the base',
+    )
     .option('--only <what>', 'one record, one area (such as `inputs`), or one manifest’s folder')
     .addOption(new Option('--phase <phase>', 'judge as if the study had come this far').choices(phases))
     .option('--report <kind=path>', `${kinds.join(', ')}; to a file or to \`-\`; may be repeated`, collect)

@@ -1,4 +1,4 @@
-import { chmod, copyFile, mkdir, readFile, writeFile } from 'node:fs/promises';
+import { chmod, copyFile, mkdir, readFile, symlink, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
@@ -34,7 +34,7 @@ const add = async (folder = repository.folder) =>
   addHooks(await openRepository(folder, cleanEnvironment(stoplog.everyday)));
 const commitOf = async (revision: string) => (await git('rev-parse', `${revision}^{commit}`)).trim();
 const treeOf = async (revision: string) => (await git('rev-parse', `${revision}^{tree}`)).trim();
-const index = ['check', '--at', 'index'];
+const index = ['check', '--if-touched', '--at', 'index'];
 
 describe('git commit', () => {
   beforeEach(() => add());
@@ -125,7 +125,9 @@ describe('git push', () => {
   };
   const words = async () => (await stoplog.calls()).map((call) => call.words);
   const at = async (...revisions: string[]) =>
-    (await Promise.all(revisions.map(commitOf))).sort().map((commit) => ['check', '--at', commit]);
+    (await Promise.all(revisions.map(commitOf)))
+      .sort()
+      .map((commit) => ['check', '--if-touched', '--at', commit]);
 
   it('checks each commit that a reference comes to, once, tags followed', async () => {
     await git('branch', 'same');
@@ -175,7 +177,7 @@ describe('git push', () => {
     await push('push', longRemote.folder, 'main', 'main:gone');
     const id = (await long.git('rev-parse', 'main')).trim();
     expect(id).toHaveLength(64);
-    expect(await words()).toEqual([['check', '--at', id]]);
+    expect(await words()).toEqual([['check', '--if-touched', '--at', id]]);
     await push('push', longRemote.folder, ':gone');
     expect(await words()).toEqual([]);
     await Promise.all([long.remove(), longRemote.remove()]);
@@ -305,6 +307,51 @@ describe('which Stoplog is started', () => {
       /the project’s own speaks/,
     );
     await expect(commitWith(stoplog.withNode, stoplog.withTools)).rejects.toThrow(/the project’s own speaks/);
+  });
+
+  describe('where a stranger’s branch brings one along', () => {
+    /** Commits, on a branch of its own, a program that would let everything pass, at this place or behind this link. */
+    const strangers = async (folder: string, link?: string) => {
+      await git('checkout', '-q', '-b', 'stranger');
+      const program = `#!/bin/sh\n':' //; touch "$STAND_IN/stranger"\nprocess.exitCode = 0;\n`;
+      for (const name of ['stoplog/dist/stoplog.mjs', '.bin/stoplog']) {
+        await repository.write(`${folder}/${name}`, program);
+        await chmod(join(repository.folder, folder, name), 0o755);
+      }
+      if (link !== undefined) await symlink(folder, join(repository.folder, link));
+      await git('add', '-f', '.');
+      await git('commit', '--no-verify', '-q', '-m', 'Helpful');
+    };
+    const tracked: [what: string, folder: string, link?: string][] = [
+      ['as files', 'node_modules'],
+      ['behind a link', 'payload', 'node_modules'],
+    ];
+
+    it.each(tracked)(
+      '%s, it is not started, neither on that branch nor in a merge of it',
+      async (_, ...where) => {
+        await strangers(...where);
+        await git('checkout', '-q', 'main');
+        await git('commit', '--allow-empty', '--no-verify', '-m', 'y');
+        await git('merge', '-m', 'x', 'stranger');
+        await stoplog.endWith(1);
+        const bin = join(repository.folder, 'node_modules/.bin');
+        for (const first of [bin, 'node_modules/.bin']) {
+          await expect(
+            commitWith(first, stoplog.withStoplog, stoplog.withNode, stoplog.withTools),
+          ).rejects.toThrow(
+            /node_modules\/stoplog is not started, since git tracks[\s\S]*the stand-in speaks/,
+          );
+          await expect(commitWith(first, stoplog.withNode, stoplog.withTools)).rejects.toThrow(/nor on PATH/);
+        }
+        expect(await stoplog.calls()).toHaveLength(3);
+        await expect(readFile(join(stoplog.withNode, '../stranger'))).rejects.toThrow(/ENOENT/);
+        expect((await add()).tool).toMatchObject({
+          stoplog: join(stoplog.withStoplog, 'stoplog'),
+          leftAside: true,
+        });
+      },
+    );
   });
 
   it('without one, the commit is held back and the way to install it is said', async () => {

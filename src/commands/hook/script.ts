@@ -14,6 +14,42 @@ const holdsBack: Record<HookName, string> = {
 /** Where a project keeps a Stoplog of its own, from where git starts hooks: the top of the work tree, or a bare repository. */
 export const bundleInProject = 'node_modules/stoplog/dist/stoplog.mjs';
 
+/** Said where a Stoplog of the project's is left aside. */
+export const notStarted =
+  'node_modules/stoplog is not started, since git tracks node_modules: any branch could replace it.';
+
+/**
+ * What git tracks comes with a branch, a stranger's too. Any letter case counts, since some disks make no difference.
+ * npm and husky put a folder in node_modules on PATH; where git tracks it, it is left out there too.
+ */
+const chooseInClone = `# What is checked must not bring along the program that checks it.
+if [ -e node_modules ]; then
+  tracked=$(git --icase-pathspecs ls-files -- node_modules) || exit
+  if [ -n "$tracked" ]; then
+    if [ -f ${bundleInProject} ]; then
+      echo "${notStarted}" >&2
+    fi
+    rest=$PATH: path=
+    while [ -n "$rest" ]; do
+      case $rest in
+        node_modules/* | "$PWD"/node_modules/* | "$(pwd -P)"/node_modules/*) ;;
+        *) path=\${path:+$path:}\${rest%%:*} ;;
+      esac
+      rest=\${rest#*:}
+    done
+    PATH=$path
+  elif [ -f ${bundleInProject} ]; then
+    stoplog() { node ${bundleInProject} "$@"; }
+  fi
+fi
+`;
+
+/** Where pushes arrive no branch is checked out, and what lies there is the keeper's. */
+const chooseOnServer = `if [ -f ${bundleInProject} ]; then
+  stoplog() { node ${bundleInProject} "$@"; }
+fi
+`;
+
 /** The bundle is started with node: going through npx takes ten times as long as a plain commit. */
 const findStoplog = (hook: HookName) => `held() {
   echo "This ${holdsBack[hook]} is held back, since Stoplog could not check the records of the model." >&2
@@ -22,13 +58,10 @@ const findStoplog = (hook: HookName) => `held() {
 }
 # No network is used, and reading certificates would slow the start.
 unset NODE_EXTRA_CA_CERTS
-command -v node >/dev/null || held \\
+${hook === 'pre-receive' ? chooseOnServer : chooseInClone}command -v node >/dev/null || held \\
   "Node.js was not found on PATH ($PATH)." \\
   "Install Node.js 20.19 or later. If it is installed and a graphical program runs git for you," \\
   "start that program from a terminal in which 'node --version' answers."
-if [ -f ${bundleInProject} ]; then
-  stoplog() { node ${bundleInProject} "$@"; }
-fi
 command -v stoplog >/dev/null || held \\
   "Stoplog was found neither in $PWD/node_modules nor on PATH." \\
   "Install it for yourself:                     npm install --global stoplog" \\
@@ -80,9 +113,10 @@ function script(hook: HookName, first: (input: string) => string): string {
   if (hook === 'pre-receive') {
     return readPushed + first('tell_pushed | ') + checkReceived + findStoplog(hook) + checkPairs;
   }
-  if (hook !== 'pre-push') return `${first('')}${findStoplog(hook)}stoplog check --at index\nexit\n`;
+  if (hook !== 'pre-push')
+    return `${first('')}${findStoplog(hook)}stoplog check --if-touched --at index\nexit\n`;
   const check =
-    'status=0\nfor commit in $commits; do stoplog check --at "$commit" || status=1; done\nexit $status\n';
+    'status=0\nfor commit in $commits; do stoplog check --if-touched --at "$commit" || status=1; done\nexit $status\n';
   return readPushed + first('tell_pushed | ') + findCommits + findStoplog(hook) + check;
 }
 

@@ -4,7 +4,7 @@ import { wrap } from '../../reports/wrap.ts';
 import type { HookHome } from './home.ts';
 import type { HookState } from './look.ts';
 import type { Done, HookReport } from './report.ts';
-import { hookNames } from './script.ts';
+import { hookNames, notStarted } from './script.ts';
 import type { Tool } from './tool.ts';
 
 type Hook = HookState & { readonly done: Done };
@@ -96,7 +96,8 @@ function details(
   return details;
 }
 
-function toolNotes({ node, stoplog }: Tool, show: Show): readonly string[] {
+function toolNotes({ node, stoplog, leftAside }: Tool, show: Show): readonly string[] {
+  const aside = leftAside ? [notStarted] : [];
   const missing: string[] = [];
   if (node === null)
     missing.push('Node.js is not on PATH: until it is, these hooks hold back every commit and push.');
@@ -106,5 +107,5 @@ function toolNotes({ node, stoplog }: Tool, show: Show): readonly string[] {
         'Install it with `npm install --global stoplog`, or with `npm install --save-dev stoplog` where the project has a package.json.',
     );
   }
-  return missing.length > 0 ? missing : [`They start ${show(stoplog ?? '')}.`];
+  return [...aside, ...(missing.length > 0 ? missing : [`They start ${show(stoplog ?? '')}.`])];
 }

@@ -1,6 +1,8 @@
 import { constants } from 'node:fs';
 import { access, stat } from 'node:fs/promises';
 import { delimiter, join } from 'node:path';
+import { ask, type Question } from '../../repository/git.ts';
+import { namesFromOutput } from '../../repository/names.ts';
 import type { Repository } from '../../repository/repository.ts';
 import { bundleInProject } from './script.ts';
 
@@ -8,7 +10,14 @@ import { bundleInProject } from './script.ts';
 export interface Tool {
   readonly node: string | null;
   readonly stoplog: string | null;
+  /** Whether the project's own is left aside, because git tracks it. */
+  readonly leftAside: boolean;
 }
+
+const tracksNodeModules: Question<boolean> = {
+  args: ['ls-files', '-z'],
+  parse: (output) => namesFromOutput(output).some((path) => /^node_modules(\/|$)/i.test(path)),
+};
 
 /**
  * `PATH` is the one of this run, which a hook of a graphical program need not share. Folders `node_modules/.bin`
@@ -27,9 +36,12 @@ export async function findTool(repository: Repository): Promise<Tool> {
     }
     return null;
   };
+  const own = await isFile(bundle, constants.R_OK);
+  const leftAside = own && !repository.bare && (await ask(repository, tracksNodeModules));
   return {
     node: await onPath('node'),
-    stoplog: (await isFile(bundle, constants.R_OK)) ? bundle : await onPath('stoplog'),
+    stoplog: own && !leftAside ? bundle : await onPath('stoplog'),
+    leftAside,
   };
 }
 
