@@ -1,6 +1,6 @@
 import { Failure } from '../failure.ts';
 import { partingFrom } from '../repository/merge-base.ts';
-import { openSnapshot } from '../repository/open-snapshot.ts';
+import { openSnapshot, type SnapshotOptions } from '../repository/open-snapshot.ts';
 import type { Repository } from '../repository/repository.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import type { Against } from './examine.ts';
@@ -10,13 +10,13 @@ export async function openBase(
   repository: Repository,
   asked: string,
   snapshot: Snapshot,
-  remember: boolean,
+  opening: Pick<SnapshotOptions, 'remember' | 'sharing'>,
 ): Promise<Pick<Against, 'base' | 'unavailable'>> {
   const parting = await partingFrom(repository, asked, snapshot.commit);
   if ('unavailable' in parting) return { base: null, unavailable: parting.unavailable };
   try {
     const at = { kind: 'revision', revision: parting.commit } as const;
-    return { base: await openSnapshot(repository, at, { remember }), unavailable: null };
+    return { base: await openSnapshot(repository, at, opening), unavailable: null };
   } catch (error) {
     if (!(error instanceof Failure)) throw error;
     const whole = 'A clone that lacks older content needs it fetched: git fetch --refetch --no-filter.';

@@ -7,7 +7,9 @@ import { junitReport } from '../reports/junit.ts';
 import { markdownReport } from '../reports/markdown.ts';
 import { sarifReport } from '../reports/sarif.ts';
 import { textReport } from '../reports/text.ts';
+import type { Sharing } from '../repository/memory-folders.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
+import { type Part, partName } from '../repository/part.ts';
 import { openRepository } from '../repository/repository.ts';
 import type { At, Snapshot } from '../repository/snapshot.ts';
 import type { Phase } from '../rules/rule.ts';
@@ -15,6 +17,7 @@ import type { Verdict } from '../verdict/finding.ts';
 import { openBase } from './base.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { type Against, examine } from './examine.ts';
+import { missingParts, readPart, workOnPart } from './part.ts';
 import { stoplogFiles } from './studies.ts';
 import { tellGithub } from './tell-github.ts';
 import { touchesGoverned } from './touched.ts';
@@ -28,6 +31,8 @@ export interface CheckOptions {
   readonly ifTouched?: boolean;
   readonly only?: string;
   readonly phase?: Phase;
+  readonly part?: string;
+  readonly gather?: boolean;
   readonly report?: readonly string[];
   readonly cache: boolean;
   readonly quiet?: boolean;
@@ -46,16 +51,18 @@ interface Report {
 /** `stoplog check`: 0 when nothing blocks, 1 when something does. */
 export async function checkCommand(context: Context, options: CheckOptions): Promise<ExitStatus> {
   const reports = (options.report ?? ['text']).map(readReport);
+  const sharing = readSharing(options);
   const repository = await openRepository(context.cwd, context.environment);
+  const opening = { remember: options.cache, sharing };
   const snapshot = await openSnapshot(repository, readAt(options.at), {
+    ...opening,
     alsoUntracked: stoplogFiles,
-    remember: options.cache,
   });
   let against: Against | undefined;
   try {
-    const { base: asked, strict = false, cache } = options;
+    const { base: asked, strict = false } = options;
     if (asked !== undefined) {
-      against = { asked, strict, ...(await openBase(repository, asked, snapshot, cache)) };
+      against = { asked, strict, ...(await openBase(repository, asked, snapshot, opening)) };
     }
     const comparable = against === undefined || against.base !== null;
     const base = against?.base ?? null;
@@ -63,7 +70,14 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
       if (!options.quiet) context.write(untouched(snapshot, base));
       return 0;
     }
-    const { only, phase } = options;
+    const { only, phase, quiet = false } = options;
+    if (typeof sharing === 'object') {
+      await workOnPart([snapshot, ...(against?.base ? [against.base] : [])], only);
+      if (!quiet) context.write(partDone(sharing.part, snapshot));
+      return 0;
+    }
+    const missing = sharing === 'gather' ? await missingParts(repository.commonDirectory) : null;
+    if (missing !== null && !quiet) context.tell(`${missing}\n`);
     const verdict = await examine(snapshot, { today: context.today, only, phase, against });
     for (const { kind, to } of reports) {
       const text = write(kind, verdict, options, to === '-' && context.color);
@@ -82,6 +96,29 @@ function untouched({ at, label }: Snapshot, base: Snapshot | null): string {
   return base === null
     ? `stoplog   ${at.kind === 'index' ? 'what is ' : ''}${label} holds no manifest, so there is nothing to check\n`
     : `stoplog   nothing that a manifest governs differs between ${base.label} and ${label}\n`;
+}
+
+/** Reads `--part` and `--gather`. */
+function readSharing({ part, gather = false, report, cache }: CheckOptions): Sharing | undefined {
+  if (part === undefined) {
+    if (gather && !cache) throw unlikely('--gather', '--no-cache', 'what the parts left is a memory');
+    return gather ? 'gather' : undefined;
+  }
+  if (gather) throw unlikely('--part', '--gather', 'the parts come first, in runs of their own');
+  if (report !== undefined) throw unlikely('--part', '--report', 'one part alone gives no verdict');
+  return { part: readPart(part) };
+}
+
+function unlikely(one: string, other: string, why: string): Failure {
+  return new Failure(
+    'usage',
+    `\`${one}\` and \`${other}\` do not go together: ${why}.`,
+    'Run `stoplog check --part 1of8`, `--part 2of8` and so on, each with the same `--at`, `--base` and `--only`; when all are done, `stoplog check --gather` with these and with `--report`.',
+  );
+}
+
+function partDone(part: Part, { label }: Snapshot): string {
+  return `stoplog   part ${part.number} of ${part.of} of the work on ${label} is done; stoplog/parts/${partName(part)} below the git directory holds it for \`stoplog check --gather\`\n`;
 }
 
 /** `worktree`, `index`, or anything else as a revision. */

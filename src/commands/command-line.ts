@@ -68,6 +68,11 @@ function describe(run: Run): Command {
     .option('--only <what>', 'one record, one area (such as `inputs`), or one manifest’s folder')
     .addOption(new Option('--phase <phase>', 'judge as if the study had come this far').choices(phases))
     .option('--report <kind=path>', `${kinds.join(', ')}; to a file or to \`-\`; may be repeated`, collect)
+    .option(
+      '--part <part>',
+      'do one part of the work, such as `2of8`, and leave it for `--gather`; gives no verdict',
+    )
+    .option('--gather', 'check with what the parts left: the same verdict and reports as one run of its own')
     .option('--no-cache', 'read every file anew instead of remembering digests')
     .option('--quiet', 'print only what blocks')
     .option('--color', 'colour the text report also where the output is no terminal')

@@ -2,19 +2,12 @@ import type { Records } from '../records/record.ts';
 import type { SealsFile } from '../records/seal.ts';
 import { readSealsFile } from '../records/seals-file.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
-import { balancesOf } from './balances.ts';
-import { bandsOf } from './bands.ts';
-import { scenariosOf } from './conditions.ts';
 import { differencesOf } from './differences.ts';
 import type { Facts } from './facts.ts';
 import { parametersOf } from './parameters.ts';
-import { profilesOf } from './profiles.ts';
-import { rainYearsOf } from './rain-years.ts';
 import { takeReadings } from './readings.ts';
 import { restatedOf } from './restated.ts';
-import { scoresOf } from './scores.ts';
-import { seasonsOf } from './seasons.ts';
-import { storesOf } from './store-drift.ts';
+import { workOut } from './work-out.ts';
 
 type GivenFacts =
   | 'manifest'
@@ -35,37 +28,14 @@ export interface Given extends Pick<Facts, GivenFacts> {
 /** Computes all that rules may ask about a manifest; reads only files that a rule needs. */
 export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> {
   const { records, standings, sealsFile, before } = given;
-  const rain = rainYearsOf(records, snapshot);
-  const [
-    sealsBefore,
-    beside,
-    readings,
-    differences,
-    restated,
-    profiles,
-    scores,
-    rainYears,
-    stores,
-    seasons,
-    balances,
-    parameters,
-    bands,
-    scenarios,
-  ] = await Promise.all([
+  const [sealsBefore, beside, readings, differences, restated, parameters, figures] = await Promise.all([
     sealsOfBefore(sealsFile, snapshot),
     filesBeside(records, snapshot),
     takeReadings(records, snapshot),
     differencesOf(records, standings, snapshot),
     restatedOf(records, standings, before, snapshot),
-    profilesOf(records, snapshot),
-    scoresOf(records, snapshot),
-    rain,
-    rain.then((years) => storesOf(records, years, snapshot)),
-    seasonsOf(records, snapshot),
-    balancesOf(records, snapshot),
     parametersOf(records, snapshot),
-    bandsOf(records, snapshot),
-    scenariosOf(records, snapshot),
+    workOut(records, snapshot),
   ]);
   return Object.freeze({
     ...given,
@@ -74,15 +44,8 @@ export async function buildFacts({ snapshot, ...given }: Given): Promise<Facts> 
     readings,
     differences,
     restated,
-    profiles,
-    scores,
-    rainYears,
-    stores,
-    seasons,
-    balances,
     parameters,
-    bands,
-    scenarios,
+    ...figures,
     found: [],
     record: (id: string) => records.nodes.get(id),
   });

@@ -143,15 +143,11 @@ async function caseFigures(
     const days = daysOfDriver(driver, fragment.run, records);
     const measured = await measure(driver, condition, days, records, snapshot);
     const { figures, isHere } = measured;
+    const envelope = await envelopeOf(calibrated, measured, snapshot);
     if (isDefined(figures) && isDefined(calibrated.figures)) {
       const sides = { calibrated: calibrated.figures.value, scenario: figures.value };
       const reach = { value: reachOf(sides.calibrated, sides.scenario) };
-      drivers.set(name, {
-        figures,
-        isHere,
-        reach,
-        envelope: await envelopeOf(calibrated, measured, snapshot),
-      });
+      drivers.set(name, { figures, isHere, reach, envelope });
       if ((condition.by ?? 'year') === 'year') yearly.set(name, sides);
     } else {
       const why = isDefined(figures) ? calibrated.figures : figures;

@@ -1,6 +1,6 @@
 import { defined, isDefined, type Statistic } from '../hydrology/paired.ts';
 import type { InputReference } from '../manifest/data.generated.ts';
-import { type Records, sha256Of } from '../records/record.ts';
+import type { Records } from '../records/record.ts';
 import type { FileIdentity, Snapshot } from '../repository/snapshot.ts';
 import type { Series } from '../series/series.ts';
 import { inputsNamed, layoutOf, seriesFilesOf, seriesOfInput } from './series-of.ts';
@@ -9,7 +9,7 @@ import { withStep } from './step-found.ts';
 /** The series of an input that something refers to, and all that it depends on. */
 export interface InputSeries {
   readonly reference: InputReference;
-  /** Layouts, files and their digests; JSON. */
+  /** Layouts, files and their blobs; JSON. */
   readonly from: unknown;
   /** Whether the input says its step. */
   readonly hasStep: boolean;
@@ -36,7 +36,7 @@ export function findInput(
     id: holder.id,
     layout: layoutOf(holder.fragment.series ?? {}),
     combine: holder.fragment.combine,
-    files: seriesFilesOf(holder).map(({ path, identity }) => [path, sha256Of(identity)]),
+    files: seriesFilesOf(holder).map(({ path, identity }) => [path, identity.blob]),
   }));
   const files = holders.flatMap(seriesFilesOf);
   const away = files.find(({ identity }) => !isContentHere(identity));

@@ -1,6 +1,6 @@
 import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
 import { resolvePattern } from '../records/find-paths.ts';
-import { type Records, sha256Of } from '../records/record.ts';
+import type { Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import type { SeriesLayout } from '../series/layout.ts';
 import { columnOf, type Series } from '../series/series.ts';
@@ -18,7 +18,7 @@ export interface Output extends SeriesLayout {
 export interface OutputFile {
   /** From the top of the repository. */
   readonly path: string;
-  readonly sha256: string;
+  readonly blob: string;
   readonly layout: SeriesLayout;
 }
 
@@ -33,9 +33,9 @@ export async function findOutput(
   if (place === null) return { undefined: `${output.file} lies outside the repository`, isAway: false };
   const path = place.root + place.rest;
   const identity = (await snapshot.identify([path])).get(path);
-  const sha256 = identity === undefined || !isContentHere(identity) ? null : sha256Of(identity);
-  if (sha256 === null) return contentAway(path);
-  return defined({ path, sha256, layout: layoutOf(output) });
+  const blob = identity === undefined || !isContentHere(identity) ? null : identity.blob;
+  if (blob === null) return contentAway(path);
+  return defined({ path, blob, layout: layoutOf(output) });
 }
 
 /**

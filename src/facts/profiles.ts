@@ -1,5 +1,6 @@
+import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
 import { fromFolder } from '../records/paths.ts';
-import { type RecordNode, type Records, sha256Of } from '../records/record.ts';
+import type { RecordNode, Records } from '../records/record.ts';
 import type { FileIdentity, Snapshot } from '../repository/snapshot.ts';
 import type { Window } from '../series/calendar.ts';
 import { parseStep, type Step } from '../series/step.ts';
@@ -64,12 +65,15 @@ async function profileOf(input: InputRecord, records: Records, snapshot: Snapsho
   const { data } = records.manifest;
   const step = stepOf(input);
   const claims = seriesFilesOf(input);
+  const here = claims
+    .filter(({ identity }) => isContentHere(identity))
+    .map((claim) => ({ ...claim, name: fromFolder(records.manifest.folder, claim.path) }));
   const files: ProfiledFile[] = [];
-  for (const { path, identity } of claims) {
-    const profile = isContentHere(identity) ? await fileProfileOf(path, identity, input, snapshot) : null;
-    if (profile === null) continue;
-    const name = fromFolder(records.manifest.folder, path);
-    files.push({ ...profile, path, name, days: coveredDays(profile, step, yearBeginsOf(data)) });
+  for (const { path, name, identity } of here) {
+    const profile = await fileProfileOf(path, identity, input, snapshot);
+    if (!isDefined(profile)) continue;
+    const days = coveredDays(profile.value, step, yearBeginsOf(data));
+    files.push({ ...profile.value, path, name, days });
   }
   const days = coveredTogether(
     files.flatMap((file) => file.days ?? []),
@@ -84,7 +88,7 @@ async function profileOf(input: InputRecord, records: Records, snapshot: Snapsho
     annualMm: annualMmOf(files, input, areaKm2Of(data)),
     comparisons: await comparisonsOf(
       input,
-      files.map((file) => file.name),
+      here.map(({ name }) => name),
       records,
       snapshot,
     ),
@@ -101,13 +105,13 @@ function fileProfileOf(
   identity: FileIdentity,
   { fragment: { role, series } }: InputRecord,
   snapshot: Snapshot,
-): Promise<FileProfile | null> {
+): Promise<Statistic<FileProfile>> {
   const layout = layoutOf(series ?? {});
   const isRain = role === 'precipitation';
-  const from = { sha256: sha256Of(identity), layout, isRain };
+  const from = { blob: identity.blob, layout, isRain };
   return remembered(snapshot, { what: 'file profile', version: fileProfileVersion, from }, async () => {
     const table = await seriesOfFile(path, layout, snapshot);
-    return table === null ? null : fileProfile(table, isRain);
+    return table === null ? undefinedBecause('its content is not here') : defined(fileProfile(table, isRain));
   });
 }
 

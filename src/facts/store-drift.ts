@@ -4,17 +4,13 @@ import { type MannKendall, mannKendall } from '../hydrology/trend/mann-kendall.t
 import { type StoreDrift, storeDrift } from '../hydrology/warm-up/store-drift.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
-import { aggregate } from '../series/aggregate.ts';
-import { secondsOfDay } from '../series/calendar.ts';
-import { daysOfYear, type YearBegins, yearOf } from '../series/hydrological-year.ts';
-import type { Series } from '../series/series.ts';
-import { conversion } from '../series/units/conversion.ts';
+import { yearOf } from '../series/hydrological-year.ts';
 import { yearBeginsOf } from './catchment.ts';
 import { nodesIn } from './nodes-in.ts';
-import { findOutput, readOutput } from './output.ts';
+import { findOutput } from './output.ts';
 import { type RainYears, rainOfRun } from './rain-years.ts';
-import { remembered } from './remembered.ts';
 import { daysOf } from './scores/pairings.ts';
+import { type StoreYears, storeYears, type YearlyStorage } from './store-years.ts';
 import { windowsOfRun } from './windows.ts';
 
 /** How one store of a run moves from year to year after warm-up. */
@@ -40,8 +36,6 @@ export interface RunStores {
   /** Whether the rain of the same years rises or falls; undefined where it is not known. */
   readonly rainTrend: Statistic<MannKendall>;
 }
-
-const version = 1;
 
 /** By run: its stores after warm-up; runs without stated stores or without a warm-up are left out. */
 export async function storesOf(
@@ -71,16 +65,10 @@ async function storesOfRun(
     years.length < 5 ? undefinedBecause('the rain of too few years is known') : mannKendall(years);
   const output = await findOutput(run.fragment.stores ?? {}, records, snapshot);
   if ('undefined' in output) return { stores: output, rainTrend };
+  const yearly = await storeYears(output.value, firstDay, yearBegins, snapshot);
+  if (!isDefined(yearly)) return { stores: yearly, rainTrend };
   const rainMm = years.length === 0 ? 0 : mean(years);
-  const from = { output: output.value, firstDay, yearBegins, rainMm };
-  const stores = await remembered(snapshot, { what: 'drift of stores', version, from }, async () => {
-    const columns = await readOutput(output.value, snapshot);
-    if (!isDefined(columns)) return columns;
-    return defined(
-      [...columns.value].map(([store, series]) => figuresOf(store, series, firstDay, yearBegins, rainMm)),
-    );
-  });
-  return { stores, rainTrend };
+  return { stores: defined(yearly.value.map((store) => figuresOf(store, rainMm))), rainTrend };
 }
 
 /** Yearly rain in mm from a year on, of the first input of rain that the run takes. */
@@ -98,56 +86,10 @@ function rainAfter(
   return totalsMm.filter((_, place) => (years[place] ?? 0) >= firstYear);
 }
 
-function figuresOf(
-  store: string,
-  series: Series,
-  firstDay: number,
-  yearBegins: YearBegins,
-  rainMm: number,
-): StoreFigures {
-  const toMm = conversion({ from: series.unit, to: 'mm' });
-  const factor = isDefined(toMm) ? toMm.value.factor : 1;
-  const annualRainfallMm = isDefined(toMm) ? rainMm : 0;
-  const drift = (yearly: readonly Yearly[]): Statistic<Drift> => {
-    const found = storeDrift({
-      years: yearly.map(({ year }) => year),
-      storageMm: yearly.map(({ value }) => value * factor),
-      annualRainfallMm,
-    });
-    return isDefined(found) ? defined({ ...found.value, years: yearly.length }) : found;
+function figuresOf({ store, isDepth, sameDate, annualMean }: StoreYears, rainMm: number): StoreFigures {
+  const drift = ({ years, storage }: YearlyStorage): Statistic<Drift> => {
+    const found = storeDrift({ years, storageMm: storage, annualRainfallMm: isDepth ? rainMm : 0 });
+    return isDefined(found) ? defined({ ...found.value, years: years.length }) : found;
   };
-  const rows = series.timeSeconds.filter((time) => time < firstDay * secondsOfDay).length;
-  const after = {
-    ...series,
-    timeSeconds: series.timeSeconds.subarray(rows),
-    values: series.values.subarray(rows),
-  };
-  return {
-    store,
-    isDepth: isDefined(toMm),
-    sameDate: drift(onSameDate(series, firstDay, yearBegins)),
-    annualMean: drift(
-      aggregate(after, { by: 'year', how: 'mean', completeness: 'every-step', yearBegins }).flatMap(
-        ({ label, value }) => (isDefined(value) ? [{ year: Number(label), value: value.value }] : []),
-      ),
-    ),
-  };
-}
-
-interface Yearly {
-  readonly year: number;
-  readonly value: number;
-}
-
-/** The last value of each day on which a hydrological year ends, from the end of the warm-up on. */
-function onSameDate(series: Series, firstDay: number, yearBegins: YearBegins): readonly Yearly[] {
-  const found = new Map<number, number>();
-  for (const [row, time] of series.timeSeconds.entries()) {
-    const day = Math.floor(time / secondsOfDay);
-    if (day < firstDay - 1) continue;
-    const year = yearOf(day, yearBegins);
-    const value = series.values[row] ?? Number.NaN;
-    if (day === daysOfYear(year, yearBegins).lastDay && !Number.isNaN(value)) found.set(year, value);
-  }
-  return [...found].map(([year, value]) => ({ year, value }));
+  return { store, isDepth, sameDate: drift(sameDate), annualMean: drift(annualMean) };
 }

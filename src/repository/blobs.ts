@@ -5,6 +5,8 @@ export interface Blobs {
     ids: readonly string[],
     visitor: (id: string, blob: FoundBlob | null) => Promise<void>,
   ): Promise<void>;
+  /** The bytes of each blob that is there, nothing of it read. */
+  sizes(ids: readonly string[]): Promise<ReadonlyMap<string, number>>;
   /** One blob, to be read at the reader's pace; null where there is no such blob. */
   open(id: string): Promise<FoundBlob | null>;
   close(): Promise<void>;

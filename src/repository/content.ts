@@ -5,6 +5,7 @@ import type { BlobDigest, DigestMemory } from './digest-memory.ts';
 import type { FindLarge } from './large-files.ts';
 import type { Listing } from './listing.ts';
 import { type Located, locator } from './locate.ts';
+import { blobsOfOthers, type Part } from './part.ts';
 import { parsePointer, pointerBytesBelow } from './pointer.ts';
 import type { FileIdentity, Snapshot, Unavailable } from './snapshot.ts';
 
@@ -15,21 +16,31 @@ const defaultLimitBytes = 256 * 1024 * 1024;
 /** Up to here one call on the whole is faster than a hash fed in chunks. */
 const hashedWholeBytes = 256 * 1024;
 
+/** In place of a digest that another part works out; nothing that comes of it is ever shown. */
+const ofAnotherPart = 'of another part';
+
 /** Answers a snapshot's questions about content, from its listing and the places where content is kept. */
 export function contentOf(
   listing: Listing,
   blobs: Blobs,
   findLarge: FindLarge,
   memory: DigestMemory,
+  part?: Part,
 ): Content {
   const locate = locator(listing, blobs);
+  /** What other parts are to read, with its bytes. */
+  const left = new Map<string, number>();
 
   async function digestAll(located: Iterable<Located>): Promise<void> {
-    const unknown = new Set<string>();
-    for (const found of located) {
-      if ('mode' in found && memory.get(found.blob) === undefined) unknown.add(found.blob);
-    }
+    const asked = new Set<string>();
+    for (const found of located) if ('mode' in found && !left.has(found.blob)) asked.add(found.blob);
+    const unknown = new Set([...asked].filter((blob) => memory.get(blob) === undefined));
     if (unknown.size === 0) return;
+    if (part !== undefined) {
+      // By all that is asked about: how the work is shared must not depend on what one of the runs remembers.
+      for (const [blob, bytes] of await blobsOfOthers([...asked], part, blobs))
+        if (unknown.delete(blob)) left.set(blob, bytes);
+    }
     await blobs.visit([...unknown], async (id, blob) => {
       if (blob !== null) memory.set(id, await digestOf(blob));
     });
@@ -38,6 +49,8 @@ export function contentOf(
   function identityOf(found: Located): FileIdentity | Promise<FileIdentity> {
     if (!('mode' in found)) return { kind: 'unavailable', ...found };
     const { blob } = found;
+    const bytesLeft = left.get(blob);
+    if (bytesLeft !== undefined) return { kind: 'file', sha256: ofAnotherPart, bytes: bytesLeft, blob };
     const known = memory.get(blob);
     if (known === undefined) return { kind: 'unavailable', why: 'not-fetched', blob };
     const { kind, sha256, bytes } = known;

@@ -40,6 +40,8 @@ describe('the text of a memory', () => {
   });
 });
 
+const at = (folder: string) => ({ own: join(folder, 'stoplog'), others: [] });
+
 describe('openDigestMemory', () => {
   let folder: string;
   beforeEach(async () => {
@@ -51,30 +53,30 @@ describe('openDigestMemory', () => {
   });
 
   it('keeps what it was given, in one file', async () => {
-    const memory = await openDigestMemory(folder);
+    const memory = await openDigestMemory(at(folder));
     memory.set(one, digest);
     await memory.save();
-    expect((await openDigestMemory(folder)).get(one)).toEqual(digest);
+    expect((await openDigestMemory(at(folder))).get(one)).toEqual(digest);
     expect(await readdir(join(folder, 'stoplog'))).toEqual(['digests']);
   });
 
   it('writes nothing when nothing is new', async () => {
-    await (await openDigestMemory(folder)).save();
+    await (await openDigestMemory(at(folder))).save();
     expect(await readdir(folder)).toEqual([]);
   });
 
   it('keeps what two runs found at once', async () => {
-    const runs = await Promise.all(Array.from({ length: 8 }, () => openDigestMemory(folder)));
+    const runs = await Promise.all(Array.from({ length: 8 }, () => openDigestMemory(at(folder))));
     for (const [place, run] of runs.entries()) {
       run.set(`${place}`.repeat(40), digest);
       await run.save();
     }
-    const after = await openDigestMemory(folder);
+    const after = await openDigestMemory(at(folder));
     expect(runs.map((_, place) => after.get(`${place}`.repeat(40)))).toEqual(runs.map(() => digest));
   });
 
   it('leaves a whole file when runs save in the same moment', async () => {
-    const runs = await Promise.all(Array.from({ length: 8 }, () => openDigestMemory(folder)));
+    const runs = await Promise.all(Array.from({ length: 8 }, () => openDigestMemory(at(folder))));
     await Promise.all(
       runs.map((run, place) => {
         run.set(`${place}`.repeat(40), digest);
@@ -86,20 +88,34 @@ describe('openDigestMemory', () => {
     expect(kept.size).toBeGreaterThanOrEqual(1);
   });
 
+  it('keeps in its own folder what it found in others, once asked for', async () => {
+    const other = { own: join(folder, 'other'), others: [] };
+    const before = await openDigestMemory(other);
+    before.set(one, digest);
+    before.set(two, pointer);
+    await before.save();
+    const memory = await openDigestMemory({ ...at(folder), others: [join(folder, 'none'), other.own] });
+    expect(memory.get(two)).toEqual(pointer);
+    expect(memory.get('3'.repeat(40))).toBeUndefined();
+    await memory.save();
+    const after = await openDigestMemory(at(folder));
+    expect([after.get(one), after.get(two)]).toEqual([undefined, pointer]);
+  });
+
   it('begins anew from a broken file', async () => {
     await mkdir(join(folder, 'stoplog'));
     await writeFile(join(folder, 'stoplog', 'digests'), 'stoplog digests 1\nrubbish');
-    const memory = await openDigestMemory(folder);
+    const memory = await openDigestMemory(at(folder));
     expect(memory.get(one)).toBeUndefined();
     memory.set(one, digest);
     await memory.save();
-    expect((await openDigestMemory(folder)).get(one)).toEqual(digest);
+    expect((await openDigestMemory(at(folder))).get(one)).toEqual(digest);
   });
 
   it('does without where the folder cannot be made', async () => {
     // A file in its place refuses everybody, the administrator too.
     await writeFile(join(folder, 'stoplog'), '');
-    const memory = await openDigestMemory(folder);
+    const memory = await openDigestMemory(at(folder));
     memory.set(one, digest);
     await memory.save();
     expect(memory.get(one)).toEqual(digest);

@@ -1,5 +1,6 @@
 import { join } from 'node:path';
 import { keptText, linesOfKept, loadLines, saveLines } from './kept-lines.ts';
+import type { MemoryFolders } from './memory-folders.ts';
 
 /** What a blob turned out to be. For a Git LFS pointer: digest and size of the content it names. */
 export interface BlobDigest {
@@ -20,18 +21,25 @@ const firstLine = 'stoplog digests 1';
 /** Above this the oldest entries go. */
 const mostEntries = 200_000;
 
-/** The memory of a repository, in `stoplog/digests` below its common git directory. */
-export async function openDigestMemory(commonDirectory: string): Promise<DigestMemory> {
-  const file = join(commonDirectory, 'stoplog', 'digests');
-  const known = fromLines(await loadLines(file, firstLine));
+/** The memory of a repository: the file `digests` in each of the folders. */
+export async function openDigestMemory(folders: MemoryFolders): Promise<DigestMemory> {
+  const [file = '', ...others] = [folders.own, ...folders.others].map((folder) => join(folder, 'digests'));
+  const load = async (from: string) => fromLines(await loadLines(from, firstLine));
+  const known = await load(file);
+  const elsewhere = await Promise.all(others.map(load));
   const fresh = new Map<string, BlobDigest>();
+  const fetch = (blob: string) => {
+    const digest = elsewhere.find((one) => one.has(blob))?.get(blob);
+    if (digest !== undefined) fresh.set(blob, digest);
+    return digest;
+  };
   return {
-    get: (blob) => fresh.get(blob) ?? known.get(blob),
+    get: (blob) => fresh.get(blob) ?? known.get(blob) ?? fetch(blob),
     set: (blob, digest) => fresh.set(blob, digest),
     async save() {
       if (fresh.size === 0) return;
       // Another run may have saved meanwhile; what it found is as true as ours.
-      const all = new Map([...fromLines(await loadLines(file, firstLine)), ...fresh]);
+      const all = new Map([...(await load(file)), ...fresh]);
       await saveLines(file, firstLine, toLines(all));
     },
   };

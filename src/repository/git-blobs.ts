@@ -1,5 +1,5 @@
 import { type Blobs, blobFrom, blobOf, type FoundBlob } from './blobs.ts';
-import type { Place } from './git.ts';
+import { ask, type Place, type Question } from './git.ts';
 import { isObjectId, type ObjectFormat } from './object-id.ts';
 import { ObjectReader } from './object-reader.ts';
 
@@ -64,6 +64,7 @@ export function gitBlobs(place: Place, objectFormat: ObjectFormat): Blobs {
         await end(reader);
       }
     },
+    sizes: (ids) => ask(place, blobSizes(ids)),
     open: async (id) =>
       isObjectId(id, objectFormat)
         ? inTurn(async (reader) => {
@@ -77,5 +78,21 @@ export function gitBlobs(place: Place, objectFormat: ObjectFormat): Blobs {
     async close() {
       await Promise.all([...living].map(end));
     },
+  };
+}
+
+/** The bytes of those objects that are there and are blobs. */
+export function blobSizes(ids: readonly string[]): Question<ReadonlyMap<string, number>> {
+  return {
+    args: ['cat-file', '--batch-check', '--buffer'],
+    input: Buffer.from(ids.map((id) => `${id}\n`).join('')),
+    parse: (output) =>
+      new Map(
+        output
+          .toString('latin1')
+          .split('\n')
+          .map((line) => line.split(' '))
+          .flatMap(([id = '', type, size]) => (type === 'blob' ? [[id, Number(size)] as const] : [])),
+      ),
   };
 }

@@ -51,6 +51,9 @@ function blobsOf(contents: ReadonlyMap<string, Uint8Array>): Blobs {
     async visit(ids, visitor) {
       for (const id of ids) await visitor(id, open(id));
     },
+    async sizes(ids) {
+      return new Map(ids.flatMap((id) => (contents.has(id) ? [[id, contents.get(id)?.length ?? 0]] : [])));
+    },
     open: async (id) => open(id),
     close: async () => {},
   };

@@ -7,6 +7,7 @@ import { ask, type Place } from './git.ts';
 import { gitBlobs } from './git-blobs.ts';
 import { largeFilesIn } from './large-files.ts';
 import { byPath, type Listing, listCommit, listIndex, treeEntries, untrackedFiles } from './listing.ts';
+import { memoryFolders, type Sharing } from './memory-folders.ts';
 import { nameFromBytes } from './names.ts';
 import { onDisk } from './on-disk.ts';
 import { commitOf, type Repository } from './repository.ts';
@@ -19,6 +20,8 @@ export interface SnapshotOptions {
   readonly alsoUntracked?: readonly string[];
   /** False to hash and compute everything anew and keep nothing under the git directory. */
   readonly remember?: boolean;
+  /** How the work is shared with other runs; without it this run does all of it. */
+  readonly sharing?: Sharing | undefined;
 }
 
 /** What a state holds, and where its objects are. */
@@ -42,10 +45,14 @@ export async function openSnapshot(
     const { listing, objects, ...state } = await stateOf(repository, at, aside, options.alsoUntracked ?? []);
     const { objectFormat, commonDirectory } = repository;
     const blobs = gitBlobs(await objectsOnly(aside, { ...objects, objectFormat }), objectFormat);
-    const keeps = options.remember !== false;
-    const memory = keeps ? await openDigestMemory(commonDirectory) : forgetfulMemory();
-    const values = keeps ? openValueMemory(commonDirectory) : forgetfulValues();
-    const contentIn = (listed: Listing) => contentOf(listed, blobs, largeFilesIn(commonDirectory), memory);
+    const { sharing, remember = true } = options;
+    const part = typeof sharing === 'object' ? sharing.part : undefined;
+    const keeps = remember || sharing !== undefined;
+    const folders = await memoryFolders(commonDirectory, sharing, remember);
+    const memory = keeps ? await openDigestMemory(folders) : forgetfulMemory();
+    const values = keeps ? openValueMemory(folders, part) : forgetfulValues();
+    const contentIn = (listed: Listing) =>
+      contentOf(listed, blobs, largeFilesIn(commonDirectory), memory, part);
     return Object.freeze({
       at,
       ...state,

@@ -2,10 +2,13 @@ import { mkdtemp, readdir, readFile, rm, stat, writeFile } from 'node:fs/promise
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
+import { OfAnotherPart } from './part.ts';
 import { forgetfulValues, openValueMemory } from './value-memory.ts';
 
 const one = '1'.repeat(64);
 const two = '2'.repeat(64);
+
+const at = (folder: string) => ({ own: join(folder, 'stoplog'), others: [] });
 
 describe('values kept between runs', () => {
   let folder: string;
@@ -18,7 +21,7 @@ describe('values kept between runs', () => {
 
   /** What a run answers, and whether it had to compute. */
   async function ask(key: string, value: unknown) {
-    const memory = openValueMemory(folder);
+    const memory = openValueMemory(at(folder));
     let computed = 0;
     const answer = await memory.remember(key, async () => {
       computed++;
@@ -49,14 +52,14 @@ describe('values kept between runs', () => {
   });
 
   it('of two runs at once are all kept', async () => {
-    const runs = [one, two].map((key) => ({ key, memory: openValueMemory(folder) }));
+    const runs = [one, two].map((key) => ({ key, memory: openValueMemory(at(folder)) }));
     for (const { key, memory } of runs) await memory.remember(key, async () => key);
     for (const { memory } of runs) await memory.save();
     expect([(await ask(one, '')).computed, (await ask(two, '')).computed]).toEqual([0, 0]);
   });
 
   it('leave a whole file when runs save in the same moment', async () => {
-    const runs = Array.from({ length: 8 }, () => openValueMemory(folder));
+    const runs = Array.from({ length: 8 }, () => openValueMemory(at(folder)));
     for (const [place, { remember }] of runs.entries())
       await remember(`${place}`.repeat(64), async () => place);
     await Promise.all(runs.map((run) => run.save()));
@@ -81,7 +84,7 @@ describe('values kept between runs', () => {
     const large = 'x'.repeat(6 * 2 ** 20);
     await ask(one, large);
     await ask(two, large);
-    const memory = openValueMemory(folder);
+    const memory = openValueMemory(at(folder));
     await memory.remember(one, async () => 'not asked');
     await memory.remember('3'.repeat(64), async () => large);
     await memory.save();
@@ -90,8 +93,32 @@ describe('values kept between runs', () => {
     expect((await ask(two, '')).computed).toBe(1);
   });
 
+  it('of other folders are taken over, once asked for', async () => {
+    await ask(one, 'rain');
+    const mine = { own: join(folder, 'mine'), others: [join(folder, 'none'), join(folder, 'stoplog')] };
+    const memory = openValueMemory(mine);
+    expect(await memory.remember(one, async () => 'computed')).toBe('rain');
+    await memory.save();
+    const again = openValueMemory({ ...mine, others: [] });
+    expect(await again.remember(one, async () => 'computed')).toBe('rain');
+  });
+
+  it('of a part are its own, and those that were kept before', async () => {
+    await ask(one, 'rain');
+    const parts = [1, 2].map((number) =>
+      openValueMemory(
+        { own: join(folder, `${number}`), others: [join(folder, 'stoplog')] },
+        { number, of: 2 },
+      ),
+    );
+    for (const { remember } of parts) expect(await remember(one, async () => 'computed')).toBe('rain');
+    const answers = await Promise.allSettled(parts.map(({ remember }) => remember(two, async () => 'flow')));
+    expect(answers.map(({ status }) => status).sort()).toEqual(['fulfilled', 'rejected']);
+    expect(answers).toContainEqual({ status: 'rejected', reason: expect.any(OfAnotherPart) });
+  });
+
   it('that could not be computed are no value', async () => {
-    const memory = openValueMemory(folder);
+    const memory = openValueMemory(at(folder));
     const failed = memory.remember(one, async () => {
       throw new Error('unreadable');
     });

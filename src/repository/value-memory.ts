@@ -1,5 +1,7 @@
 import { join } from 'node:path';
 import { loadLines, saveLines } from './kept-lines.ts';
+import type { MemoryFolders } from './memory-folders.ts';
+import { isKeyOfPart, OfAnotherPart, type Part } from './part.ts';
 import type { Snapshot } from './snapshot.ts';
 
 /** Values by key, kept between runs so that unchanged content is not read again. */
@@ -13,17 +15,20 @@ const firstLine = 'stoplog values 1';
 /** Above this those go that were not asked for longest. */
 const mostCharacters = 16 * 2 ** 20;
 
-/** The memory of a repository, in `stoplog/values` below its common git directory; read when first asked. */
-export function openValueMemory(commonDirectory: string): ValueMemory {
-  const file = join(commonDirectory, 'stoplog', 'values');
-  const load = async () => textsFromLines(await loadLines(file, firstLine));
-  const { remember, asked, fresh } = valuesOver(load);
+/**
+ * The memory of a repository: the file `values` in each of the folders, read when first asked. A run that does a part of
+ * the work computes what is its own, and throws OfAnotherPart for what is neither that nor kept.
+ */
+export function openValueMemory({ own, others }: MemoryFolders, part?: Part): ValueMemory {
+  const [file, ...more] = [own, ...others].map((folder) => join(folder, 'values')) as [string, ...string[]];
+  const load = (from: string) => loadLines(from, firstLine).then(textsFromLines);
+  const { remember, asked, fresh } = valuesOver(() => Promise.all([file, ...more].map(load)), part);
   return {
     remember,
     async save() {
       if (fresh.size === 0) return;
       // Another run may have saved meanwhile; what it computed is as true as ours.
-      const all = await load();
+      const all = await load(file);
       for (const key of asked) {
         const text = fresh.get(key) ?? all.get(key);
         all.delete(key);
@@ -36,23 +41,31 @@ export function openValueMemory(commonDirectory: string): ValueMemory {
 
 /** A memory that forgets at the end of the run. */
 export function forgetfulValues(): ValueMemory {
-  const { remember } = valuesOver(async () => new Map());
+  const { remember } = valuesOver(async () => []);
   return { remember, save: async () => {} };
 }
 
-/** The values of one run over those kept before; `fresh` holds the JSON of those computed in it, `asked` the keys in order. */
-function valuesOver(load: () => Promise<ReadonlyMap<string, string>>) {
+/**
+ * The values of one run over those kept before, in its own folder and in others; `fresh` holds the JSON of those that are
+ * to be kept in its own, `asked` the keys in order.
+ */
+function valuesOver(load: () => Promise<readonly ReadonlyMap<string, string>[]>, part?: Part) {
   const inRun = new Map<string, Promise<unknown>>();
   const fresh = new Map<string, string>();
-  let kept: Promise<ReadonlyMap<string, string>> | undefined;
+  let kept: Promise<readonly ReadonlyMap<string, string>[]> | undefined;
   async function answer(key: string, compute: () => Promise<unknown>): Promise<unknown> {
     kept ??= load();
-    let text = (await kept).get(key);
+    const [own, ...others] = await kept;
+    let text = own?.get(key);
     if (text === undefined) {
-      text = JSON.stringify((await compute()) ?? null);
+      text = others.find((one) => one.has(key))?.get(key) ?? (await computed(key, compute));
       fresh.set(key, text);
     }
     return JSON.parse(text);
+  }
+  async function computed(key: string, compute: () => Promise<unknown>): Promise<string> {
+    if (part !== undefined && !isKeyOfPart(key, part)) throw new OfAnotherPart();
+    return JSON.stringify((await compute()) ?? null);
   }
   return {
     fresh,

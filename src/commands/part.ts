@@ -1,0 +1,41 @@
+import { workOut } from '../facts/work-out.ts';
+import { Failure } from '../failure.ts';
+import { partsIn } from '../repository/memory-folders.ts';
+import { type Part, parsePart, partName } from '../repository/part.ts';
+import type { Snapshot } from '../repository/snapshot.ts';
+import { choose } from './only.ts';
+import { readStudies } from './studies.ts';
+
+/** Reads `--part`. */
+export function readPart(given: string): Part {
+  const part = parsePart(given);
+  if (part !== null) return part;
+  throw new Failure(
+    'usage',
+    `\`--part ${given}\` is no part of a whole.`,
+    'Write which part, and of how many: `--part 2of8` is the second of eight; there may be up to 256.',
+  );
+}
+
+/** Works out one part of what a check of these states takes; closing them keeps it. Nothing is judged. */
+export async function workOnPart(states: readonly Snapshot[], only: string | undefined): Promise<void> {
+  for (const snapshot of states) {
+    for (const study of choose(await readStudies(snapshot), only).studies) {
+      if (!('problems' in study)) await workOut(study.records, snapshot);
+    }
+  }
+}
+
+/** What `--gather` says where parts are missing: their work is done anew, so the verdict is the same. Null where none is. */
+export async function missingParts(commonDirectory: string): Promise<string | null> {
+  const parts = await partsIn(commonDirectory);
+  const [first] = parts;
+  if (first === undefined)
+    return 'no part of the work was left here, so all of it is done now. `stoplog check --part 1of2` and so on leave it in stoplog/parts below the git directory.';
+  const all = Array.from({ length: first.of }, (_, place) => ({ number: place + 1, of: first.of }));
+  const names = new Set(parts.map(partName));
+  const missing = all.map(partName).filter((name) => !names.has(name));
+  return missing.length === 0
+    ? null
+    : `${missing.join(', ')} left no work here, so that part of it is done now.`;
+}
