@@ -1,8 +1,10 @@
+import { posix } from 'node:path';
 import { takeVersions, type Versions } from '../records/conflict.ts';
 import { type FollowedMoves, followMoves } from '../records/follow-moves.ts';
 import { type HealedRecord, healSeals, recoverSeals } from '../records/heal.ts';
 import type { SealsFile } from '../records/seal.ts';
 import { readSealsFile } from '../records/seals-file.ts';
+import { sealsName } from '../records/seals-path.ts';
 import { judgeStandings } from '../records/standing.ts';
 import { conflictSides } from '../repository/conflict-sides.ts';
 import { ask } from '../repository/git.ts';
@@ -78,13 +80,19 @@ async function recovery(
   snapshot: Snapshot,
 ): Promise<readonly HealedRecord[]> {
   if ([...standings.values()].every(({ state }) => state === 'sealed')) return [];
-  const sides: ['ours' | 'theirs', SealsFile['seals']][] = [];
-  for (const [place, commit] of (await mergedCommits(repository)).entries()) {
-    // A clone may lack the trees of older commits.
-    const [entry] = await ask(repository, { ...treeEntries(commit, [sealsFile.path]), statuses: [128] });
-    const text = entry === undefined ? null : textOf(await snapshot.readBlob(entry.blob));
-    sides.push([place === 0 ? 'ours' : 'theirs', readSealsFile(sealsFile.path, text).seals]);
-  }
+  const sides: ['ours' | 'theirs', SealsFile][] = [];
+  const merged = await mergedCommits(repository);
+  for (const side of ['ours', 'theirs'] as const)
+    for (const commit of merged[side]) {
+      // A clone may lack the trees of older commits.
+      const files = (await ask(repository, { ...treeEntries(commit), statuses: [128] })).filter(
+        ({ path }) => posix.basename(path) === sealsName,
+      );
+      // Where a side has none at the path, its folder had another name there.
+      const same = files.filter(({ path }) => path === sealsFile.path);
+      for (const { path, blob } of same.length > 0 ? same : files)
+        sides.push([side, readSealsFile(path, textOf(await snapshot.readBlob(blob)))]);
+    }
   return recoverSeals(sides, sealsFile, records);
 }
 

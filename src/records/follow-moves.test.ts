@@ -142,6 +142,15 @@ describe('records that were renamed', () => {
     expect(stale).toEqual([]);
   });
 
+  it('are followed where a record names them that comes before', async () => {
+    const text = smallStudy
+      .replace('  check: {role', '  second: {role')
+      .replaceAll('{input: check}', '{input: second}');
+    const { records, stale } = await follow(text, smallFiles);
+    expect(records).toEqual([{ from: 'inputs.check', to: 'inputs.second' }]);
+    expect(stale).toEqual([]);
+  });
+
   it('are followed together with their files', async () => {
     const text = smallStudy
       .replace('  calibrated:\n', '  base:\n')

@@ -33,10 +33,20 @@ export interface FollowedMoves {
  * record where one seal without a record and one record without a seal state the same. Seals of records above follow
  * what they rest on. Anything else that changed stays stale.
  */
-export function followMoves(records: Records, { seals: before }: Pick<SealsFile, 'seals'>): FollowedMoves {
+export function followMoves(records: Records, { seals }: Pick<SealsFile, 'seals'>): FollowedMoves {
+  const renames = new Renames();
+  for (;;) {
+    const known = renames.size;
+    const followed = follow(records, seals, renames);
+    // A statement may name what comes after it, as an input does the one that it is compared with.
+    if (renames.size === known) return followed;
+  }
+}
+
+/** Follows once, with the renames that are known; adds those that it finds. */
+function follow(records: Records, before: ReadonlyMap<string, Seal>, renames: Renames): FollowedMoves {
   const { manifest, nodes } = records;
   const seals = new Map(before);
-  const renames = new Renames();
   const redigested = new Map<string, { readonly was: string; readonly now: string }>();
   const files: MovedFile[] = [];
   const renamed: { from: string; to: string }[] = [];

@@ -6,6 +6,7 @@ import { describe, expect, it } from 'vitest';
 import { recordsOf, sealing, sealsFileOf } from '../../tests/records/in-memory.ts';
 import { smallFiles, smallStudy } from '../../tests/records/small-study.ts';
 import { takeVersions, type Versions } from './conflict.ts';
+import { followMoves } from './follow-moves.ts';
 import { healSeals, recoverSeals } from './heal.ts';
 import type { Seal } from './seal.ts';
 import { withChecksum } from './seal-entry.ts';
@@ -67,6 +68,32 @@ describe('healing seals after a merge', () => {
     expect(
       [...standings.values()].filter(({ state }) => state !== 'sealed').map(({ record }) => record),
     ).toEqual(['interventions']);
+  });
+
+  it.each([
+    ['a file', 'data/rain/high.csv', 'data/rain/upper.csv', text],
+    [
+      'a record',
+      '',
+      '',
+      text.replace('  future: {', '  storyline: {').replaceAll(/\bfuture\b(?!\.csv)/g, 'storyline'),
+    ],
+  ])('keeps what one side sealed while the other renamed %s', async (_, from, to, renamed) => {
+    const files = (rain: string) => {
+      const { [from]: moved, ...others } = { ...smallFiles, 'data/rain/high.csv': rain } as Record<
+        string,
+        string
+      >;
+      return moved === undefined ? others : { ...others, [to]: moved };
+    };
+    const there = await recordsOf(renamed, files(smallFiles['data/rain/high.csv'] ?? ''));
+    const followed = followMoves(there, { seals: base }).seals;
+    const both = await recordsOf(renamed, files('rain 5'));
+    const healed = healSeals(versions(ada.seals, followed), both);
+    const standings = judgeStandings(both, sealsFileOf(healed.seals));
+    expect([...standings.values()].filter(({ state }) => state !== 'sealed')).toEqual([]);
+    expect(healed.seals.get('inputs.rainfall')?.sealed_by).toBe('Ada Weir <ada@northmere.example>');
+    expect([...healed.seals.keys()].sort()).toEqual([...there.nodes.keys()].sort());
   });
 
   it('comes to the same from either side', () => {
@@ -158,8 +185,8 @@ describe('an entry that can’t be read, in a merge', () => {
 describe('seals of a side that was not taken', () => {
   it('are found again where they fit, and only for records whose own seal does not', () => {
     const sides = [
-      ['ours', ada.seals],
-      ['theirs', ben.seals],
+      ['ours', { seals: ada.seals }],
+      ['theirs', { seals: ben.seals }],
     ] as const;
     const found = recoverSeals(sides, { seals: ada.seals }, merged);
     expect(found.map(({ record, kept, seal }) => [record, kept, seal.sealed_by])).toEqual([

@@ -11,6 +11,11 @@ export class Renames {
     this.#ids = new Map(ids);
   }
 
+  /** How many names are known. */
+  get size(): number {
+    return this.#paths.size + this.#ids.size;
+  }
+
   copy(): Renames {
     return new Renames(this.#paths, this.#ids);
   }

@@ -10,18 +10,29 @@ const parentsOfHead: Question<readonly string[]> = {
   parse: (output, status) => (status === 0 ? output.toString('latin1').trim().split(' ').slice(1) : []),
 };
 
+/** Revisions that are put together; `ours` as git calls them. */
+export interface MergedCommits {
+  readonly ours: readonly string[];
+  readonly theirs: readonly string[];
+}
+
 /**
- * The commits that are being put together (by a merge, a rebase or a cherry-pick that is not finished), else those that the
- * commit checked out has put together; first the side that git calls "ours". None where nothing was merged.
+ * The commits that a merge, a rebase or a cherry-pick is putting together, and those that the commit checked out has put
+ * together. None where nothing was merged. A rebase leaves its last commit named when it is done.
  */
-export async function mergedCommits(repository: Repository): Promise<readonly string[]> {
+export async function mergedCommits(repository: Repository): Promise<MergedCommits> {
   // `MERGE_HEAD` as a revision is the first of several.
   const merging = await readFile(join(repository.gitDirectory, 'MERGE_HEAD'), 'latin1').catch(() => '');
   const picked = await Promise.all(
     ['CHERRY_PICK_HEAD', 'REBASE_HEAD'].map((name) => ask(repository, commitOf(name))),
   );
-  const others = [...merging.split('\n'), ...picked].flatMap((commit) => commit || []);
-  if (others.length > 0) return ['HEAD', ...others];
-  const parents = await ask(repository, parentsOfHead);
-  return parents.length > 1 ? parents : [];
+  const coming = [...merging.split('\n'), ...picked].flatMap((commit) => commit || []);
+  const [first, ...others] = await ask(repository, parentsOfHead);
+  return {
+    ours: [
+      ...(coming.length > 0 ? ['HEAD'] : []),
+      ...(others.length > 0 && first !== undefined ? [first] : []),
+    ],
+    theirs: [...coming, ...others],
+  };
 }

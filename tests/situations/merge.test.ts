@@ -1,6 +1,6 @@
 import { afterEach, describe, expect, it } from 'vitest';
 import { check, stoplog } from '../harness/command.ts';
-import { type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
+import { moreRain, type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
 
 let project: SoundRepository;
 afterEach(() => project.remove());
@@ -60,6 +60,87 @@ describe('two branches that both sealed are merged', () => {
     expect(healed.text).toMatch(new RegExp(`HEALED after a merge\n {2}${left} {3}.*2021-03-01`));
     expect(healed.text).not.toContain('SEALED by');
     expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+  });
+
+  it('follows a file that one branch renamed while the other sealed a new version of it', async () => {
+    project = await soundRepository();
+    await project.git('switch', '--quiet', '--create', 'renamed');
+    await project.git('mv', 'data/check.csv', 'data/gauge.csv');
+    await project.edit('stoplog.yaml', (text) => text.replaceAll('data/check.csv', 'data/gauge.csv'));
+    await stoplog(project.folder, ['seal', '--moved']);
+    await project.commit();
+    await project.git('switch', '--quiet', 'main');
+    await project.edit('data/check.csv', moreRain('2005-01-01'));
+    await stoplog(project.folder, ['seal', '--all'], '2021-03-05');
+    await project.commit();
+    await expect(project.git('merge', '--no-edit', 'renamed')).rejects.toThrow(/CONFLICT.*seals/);
+
+    const { text } = await stoplog(project.folder, ['seal']);
+    expect(text).toMatch(/inputs\.check-gauge {3}this branch’s seal is kept \(.*2021-03-05\): it fits/);
+    expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+  });
+
+  it('heals a criss-cross, where what both sides come from is itself in conflict', async () => {
+    project = await soundRepository();
+    await project.git('config', 'merge.conflictStyle', 'diff3');
+    await sealOnBranch('one', newArea);
+    await sealOnBranch('two', (text) => text.replace('latitude: 52.5', 'latitude: 52.52'));
+    const [one, two] = [await project.git('rev-parse', 'one'), await project.git('rev-parse', 'two')];
+    for (const [branch, other] of [
+      ['one', two],
+      ['two', one],
+    ] as const) {
+      await project.git('switch', '--quiet', branch);
+      await expect(project.git('merge', '--no-edit', other.trim())).rejects.toThrow(/CONFLICT/);
+      await project.git('checkout', '--ours', 'stoplog.yaml');
+      await stoplog(project.folder, ['seal']);
+      await project.commit('Crossed');
+    }
+    await project.edit('data/check.csv', moreRain('2005-01-01'));
+    await stoplog(project.folder, ['seal', '--all'], '2021-03-05');
+    await project.commit();
+    await expect(project.git('merge', '--no-edit', 'one')).rejects.toThrow(/CONFLICT.*seals/);
+    await project.git('checkout', '--theirs', 'stoplog.yaml');
+
+    const { text } = await stoplog(project.folder, ['seal']);
+    expect(text).toMatch(/catchment {3}the other branch’s seal is kept/);
+    const seals = await project.read('stoplog.seals.json');
+    expect(seals).toContain('"sealed_on": "2021-03-05"');
+    expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+  });
+
+  it('finds again in a rebase what git checkout --ours left out', async () => {
+    project = await soundRepository();
+    await sealOnBranch('upstream', newArea);
+    await sealOnBranch('work', (text) => newDecision(text.replace('latitude: 52.5', 'latitude: 52.52')));
+    await project.edit('data/check.csv', moreRain('2005-01-01'));
+    await stoplog(project.folder, ['seal', '--all'], '2021-03-05');
+    await project.git('commit', '--quiet', '--all', '--amend', '--no-edit');
+    await expect(project.git('rebase', 'upstream')).rejects.toThrow(/CONFLICT/);
+    await project.git('checkout', '--theirs', 'stoplog.yaml');
+    await project.git('checkout', '--ours', 'stoplog.seals.json');
+    await project.git('add', '--all');
+
+    const { text } = await stoplog(project.folder, ['seal']);
+    expect(text).toMatch(/study {3}the other branch’s seal is kept/);
+    expect(text).toMatch(/inputs\.check-gauge {3}the other branch’s seal is kept/);
+    expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+  });
+
+  it('finds again what any branch of an octopus sealed', async () => {
+    project = await soundRepository();
+    await sealOnBranch('area', newArea);
+    await sealOnBranch('decision', newDecision);
+    await project.git('switch', '--quiet', 'main');
+    await project.edit('data/check.csv', moreRain('2005-01-01'));
+    await stoplog(project.folder, ['seal', '--all']);
+    await project.commit();
+    await project.git('merge', '--quiet', '--no-commit', 'area', 'decision');
+    expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+    await project.git('checkout', 'main', '--', 'stoplog.seals.json');
+    const { text } = await stoplog(project.folder, ['seal']);
+    expect(text).toMatch(/study {3}the other branch’s seal is kept/);
+    expect(text).toMatch(/catchment {3}the other branch’s seal is kept/);
   });
 
   it('leaves a record stale where neither side’s seal fits', async () => {
