@@ -125,11 +125,16 @@ describe('a push over file://', () => {
   it('follows tags, lets deletions pass, and judges a force push from where the histories part', async () => {
     await serve();
     const start = (await project.git('rev-parse', 'HEAD')).trim();
+    await project.git('tag', '-a', '-m', 'note', 'v0');
     await commitFault();
     await project.git('tag', '-a', '-m', 'note', 'v1');
     await project.git('tag', 'note', 'HEAD:stoplog.yaml');
+    await project.git('tag', '-a', '-m', 'note', 'tree', 'HEAD^{tree}');
     expect(await push('v1')).toMatchObject({ accepted: false, words: expect.stringMatching(faulty) });
-    expect((await push('note')).accepted).toBe(true);
+    // A commit that was here already, and what is no commit: nothing to check, and nothing to say.
+    const silent = await push('v0', 'note', 'tree');
+    expect(silent.words).not.toContain('remote:');
+    expect(silent.accepted).toBe(true);
     expect((await push(':refs/tags/note')).accepted).toBe(true);
 
     await project.git('reset', '--quiet', '--hard', start);

@@ -77,7 +77,7 @@ tell_pushed() { if [ -n "$pushed" ]; then printf '%s\\n' "$pushed"; fi; }
 const findCommits = `# The commits that are pushed, each once, tags followed to theirs; the zeros of a deletion name none.
 commits=$(tell_pushed | while IFS= read -r line; do
   line=\${line% * *}
-  git rev-parse --verify --quiet "\${line##* }^{commit}" || :
+  git rev-parse --verify --quiet "\${line##* }^{commit}" 2>/dev/null || :
 done | sort -u) || exit
 if [ -z "$commits" ]; then exit 0; fi
 `;
@@ -88,11 +88,12 @@ if [ -z "$commits" ]; then exit 0; fi
  * commit, holds no records.
  */
 const checkReceived = `# Each commit that arrives, and what it is held against: what its reference held; for a new
-# reference, where it left the main branch.
-commit_of() { git rev-parse --verify --quiet "$1^{commit}"; }
+# reference, where it left the main branch. What was here already, such as a tagged commit, brings nothing.
+commit_of() { git rev-parse --verify --quiet "$1^{commit}" 2>/dev/null; }
 pairs=$(tell_pushed | while read -r old new _; do
   commit=$(commit_of "$new") || continue
-  echo "$commit $(commit_of "$old" || git merge-base HEAD "$commit" 2>/dev/null || echo none)"
+  base=$(commit_of "$old" || git merge-base HEAD "$commit" 2>/dev/null || echo none)
+  if [ "$commit" != "$base" ]; then echo "$commit $base"; fi
 done | sort -u) || exit
 if [ -z "$pairs" ]; then exit 0; fi
 `;
