@@ -2,6 +2,7 @@ import { isDefined } from '../hydrology/paired.ts';
 import type { RecordNode } from '../records/record.ts';
 import type { Facts } from './facts.ts';
 import type { Figure } from './figures.ts';
+import { flowTargets, isScored, neededRegimes, scoresOfRegime, unscoredRegimes } from './scores/needs.ts';
 import { type ScoredWindow, type StatedName, scoredWindows } from './scores/stated.ts';
 import { recomputedScore, type TargetFigures } from './scores.ts';
 
@@ -12,26 +13,38 @@ const usualDecimals = 2;
 const usualScores: readonly StatedName[] = ['nse', 'pbias', 'r2', 'kge'];
 
 /**
- * Scores that are not what the files give, and those of windows that have none. Scores in a table, and of a fragment that stands
- * for many records, are left alone: the manifest has no place for them.
+ * Scores that are not what the files give, those of windows that have none, and of streamflow those that tell of a regime which
+ * the purpose needs. Scores in a table, and of a fragment that stands for many records, are left alone: the manifest has no place
+ * for them.
  */
-export function scoreFigures({ records, scores }: Pick<Facts, 'records' | 'scores'>): readonly Figure[] {
+export function scoreFigures(facts: Pick<Facts, 'manifest' | 'records' | 'scores'>): readonly Figure[] {
+  const { manifest, records, scores } = facts;
+  const flows = flowTargets(facts);
+  const unscored = unscoredRegimes(facts);
   return [...scores].flatMap(([name, figures]) => {
     const record = records.nodes.get(`evaluation.${name}`) as RecordNode<'evaluation'>;
     if (record.fragment.scores?.table !== undefined || record.field.at(-1) !== name) return [];
-    return scoredWindows.flatMap((window) => figuresOver(window, figures, record));
+    return scoredWindows.flatMap((window) => {
+      const isEmpty = !figures.stated.some((score) => score.window === window);
+      const regimes = !flows.includes(record) ? [] : isEmpty ? neededRegimes(manifest) : unscored;
+      const needed = regimes
+        .filter((regime) => !isScored(regime, window, figures.stated))
+        .map((regime) => scoresOfRegime[regime][0]);
+      return figuresOver(window, [...(isEmpty ? usualScores : []), ...needed], figures, record);
+    });
   });
 }
 
 function figuresOver(
   window: ScoredWindow,
-  figures: TargetFigures,
+  missing: readonly StatedName[],
+  { stated, recomputed }: TargetFigures,
   { id, field }: RecordNode,
 ): readonly Figure[] {
-  const stated = figures.stated.filter((score) => score.window === window);
-  const missing = stated.length > 0 ? [] : usualScores.map((score) => ({ score, printed: null }));
-  return [...stated.filter(({ agrees }) => !agrees), ...missing].flatMap(({ score, printed }) => {
-    const found = recomputedScore(figures.recomputed, window, score);
+  const wrong = stated.filter((score) => score.window === window && !score.agrees);
+  const added = missing.map((score) => ({ score, printed: null }));
+  return [...wrong, ...added].flatMap(({ score, printed }) => {
+    const found = recomputedScore(recomputed, window, score);
     if (!isDefined(found)) return [];
     // One decimal would make an NSE of 0.97 perfect.
     const fewest = Math.abs(found.value) < 2 ? usualDecimals : 0;

@@ -30,3 +30,23 @@ it('writes the figures of balance and band that a new run gives, and is content 
   expect(manifest).toMatch(/stated: \{ coverage: 0\.\d\d, relative_width: 0\.\d\d \}/);
   expect((await check(project.folder)).blocking.filter((one) => one.includes('.differs'))).toEqual([]);
 });
+
+it('writes the score that tells of the low flows which the purpose needs', async () => {
+  project = await soundRepository();
+  await project.edit('stoplog.yaml', (text) => text.replaceAll(/, log_nse: [0-9.]+/g, ''));
+  expect((await check(project.folder)).blocking).toContain('evaluation.need-unscored evaluation.outlet-flow');
+  const { text } = await stoplog(project.folder, ['seal', 'evaluation.outlet-flow', '--figures']);
+  expect(text).toMatch(/evaluation\.outlet-flow\.scores\.validation\.log_nse {3}nothing -> 0\.\d\d/);
+  expect((await check(project.folder)).found).not.toContain(
+    'evaluation.need-unscored evaluation.outlet-flow',
+  );
+
+  // Windows without any score get it among the usual ones.
+  await project.edit('stoplog.yaml', (text) =>
+    text.replace(/^( {4}scores:)\n {6}calibration:.*\n {6}validation:.*\n/m, ''),
+  );
+  await stoplog(project.folder, ['seal', 'evaluation.outlet-flow', '--figures']);
+  expect((await check(project.folder)).found).not.toContain(
+    'evaluation.need-unscored evaluation.outlet-flow',
+  );
+});

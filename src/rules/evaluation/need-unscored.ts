@@ -1,21 +1,17 @@
-import type { Facts } from '../../facts/facts.ts';
-import { nodesIn } from '../../facts/nodes-in.ts';
-import type { StatedName } from '../../facts/scores/stated.ts';
+import { flowTargets, type Regime, unscoredRegimes } from '../../facts/scores/needs.ts';
 import { rule } from '../rule.ts';
 
-/** The regimes that ask for scores of their own, and the scores that answer. */
-const asked = {
+/** What tells of a regime, and why other scores do not. */
+const told: Readonly<Record<Regime, { readonly words: string; readonly because: string }>> = {
   low: {
-    by: ['log_nse', 'flv'],
     words: 'log-NSE (`log_nse`) or the bias of the low flows (`flv`)',
     because: 'NSE and KGE are decided by the largest flows',
   },
   high: {
-    by: ['peaks_hit'],
     words: 'the share of peaks hit (`peaks_hit`, with `peaks` saying what counts as one)',
     because: 'a good NSE can go with every peak missed by a day',
   },
-} as const satisfies Readonly<Record<string, { by: readonly StatedName[]; words: string; because: string }>>;
+};
 
 export const evaluationNeedUnscored = rule({
   id: 'evaluation.need-unscored',
@@ -31,33 +27,13 @@ export const evaluationNeedUnscored = rule({
   },
   clear: 'Add the score to each window of the target; `stoplog seal --figures` computes it.',
   check: (_, facts) => {
-    const regimes = new Set(
-      (facts.manifest.data.study?.needs ?? [])
-        .filter(({ variable = 'streamflow' }) => variable === 'streamflow')
-        .flatMap(({ regime }) => (regime === 'low' || regime === 'high' ? [regime] : [])),
-    );
-    const targets = nodesIn(facts.records.nodes, 'evaluation').filter(
-      ({ fragment }) => fragment.variable === 'streamflow' && fragment.none_because === undefined,
-    );
-    return [...regimes].flatMap((regime) => {
-      const { by, words, because } = asked[regime];
-      const [first] = targets;
-      if (first === undefined || targets.some(({ name }) => isScored(name ?? '', by, facts))) return [];
-      return {
-        record: first.id,
-        field: [...first.field, 'scores'],
-        subject: regime,
-        message: `The purpose needs ${regime} flows, but no score of ${first.name} tells of them, and ${because}. What tells is ${words}.`,
-      };
-    });
+    const [first] = flowTargets(facts);
+    if (first === undefined) return [];
+    return unscoredRegimes(facts).map((regime) => ({
+      record: first.id,
+      field: [...first.field, 'scores'],
+      subject: regime,
+      message: `The purpose needs ${regime} flows, but no score of ${first.name} tells of them, and ${told[regime].because}. What tells is ${told[regime].words}.`,
+    }));
   },
 });
-
-/** Whether each window that has scores has one of these. */
-function isScored(target: string, by: readonly StatedName[], { scores }: Facts): boolean {
-  const stated = scores.get(target)?.stated ?? [];
-  const windows = new Set(stated.map(({ window }) => window));
-  return [...windows].every((window) =>
-    stated.some((score) => score.window === window && by.includes(score.score)),
-  );
-}
