@@ -190,6 +190,15 @@ describe('summary and outputs', () => {
     expect(await readFile(output, 'utf8')).toBe(githubOutputs(verdict));
   });
 
+  it('keep within what GitHub takes of a step, however often it checks', async () => {
+    const summary = join(folder, 'summary');
+    for (let turn = 0; turn < 3; turn++)
+      await tellGithub({ environment: { GITHUB_STEP_SUMMARY: summary } } as unknown as Context, large);
+    const text = await readFile(summary, 'utf8');
+    expect(Buffer.byteLength(text)).toBeLessThanOrEqual(1024 * 1024);
+    expect(text.match(/^## Stoplog: blocked$/gm)?.length).toBeGreaterThan(1);
+  });
+
   it('are the verdict and its counts, one line each', () => {
     const lines = githubOutputs(hostile).trimEnd().split('\n');
     expect(lines[0]).toBe('verdict=blocked');
