@@ -1,4 +1,5 @@
 import { buildFacts } from '../facts/build.ts';
+import type { Facts } from '../facts/facts.ts';
 import { figuresToWrite } from '../facts/figures.ts';
 import { Failure } from '../failure.ts';
 import { replaceScalars } from '../manifest/edit.ts';
@@ -9,12 +10,19 @@ import { judgeStandings } from '../records/standing.ts';
 import type { WrittenFigure } from '../reports/seal.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { knownRules } from '../rules/index.ts';
+import type { Phase } from '../rules/rule.ts';
 import type { Study } from './studies.ts';
 
 export interface WithFigures {
   /** The study as it reads with the new figures. */
   readonly study: Study;
   readonly written: readonly WrittenFigure[];
+}
+
+/** The facts of one study on its own. */
+export function factsOf(study: Study, snapshot: Snapshot, today: string, phase: Phase): Promise<Facts> {
+  const alone = { before: null, claimedElsewhere: new Map() };
+  return buildFacts({ ...study, ...alone, snapshot, today, phase, known: knownRules() });
 }
 
 /** Replaces stated figures of the asked records by recomputed ones, in the manifest's text only; nothing is written yet. */
@@ -24,15 +32,7 @@ export async function withFigures(
   snapshot: Snapshot,
   today: string,
 ): Promise<WithFigures> {
-  const facts = await buildFacts({
-    ...study,
-    snapshot,
-    today,
-    phase: 'archive',
-    known: knownRules(),
-    before: null,
-    claimedElsewhere: new Map(),
-  });
+  const facts = await factsOf(study, snapshot, today, 'archive');
   const figures = figuresToWrite(facts).filter(({ record }) => asked(record));
   if (figures.length === 0) return { study, written: [] };
   const text = replaceScalars(

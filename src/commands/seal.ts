@@ -9,6 +9,7 @@ import { openSnapshot } from '../repository/open-snapshot.ts';
 import { openRepository, type Repository } from '../repository/repository.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import type { Context, ExitStatus } from './command.ts';
+import { contradictionsIn } from './contradictions.ts';
 import { withFigures } from './figures.ts';
 import { mended } from './mended.ts';
 import { choose, pathOf } from './only.ts';
@@ -65,7 +66,10 @@ export async function sealCommand(
     const here = await realpath(context.cwd);
     const written = changed.map(({ target }) => relative(here, target));
     const { today } = context;
-    context.write(sealReport({ plan, healed, moved, figures: newFigures, written, person, today }));
+    const sealed = plan.sealed.map(({ record }) => record);
+    const contradictions = await contradictionsIn(sealed, study, snapshot, today);
+    const outcome = { plan, healed, moved, figures: newFigures, contradictions, written, person, today };
+    context.write(sealReport(outcome));
     return plan.refused.length > 0 ? 1 : 0;
   } finally {
     await snapshot.close();

@@ -12,11 +12,23 @@ export interface WrittenFigure {
   readonly after: string;
 }
 
+/** What a sealed record states and the files do not bear out. */
+export interface Contradiction {
+  readonly record: string;
+  /** The first one, in words. */
+  readonly message: string;
+  /** How many there are besides. */
+  readonly others: number;
+  /** Whether `--figures` would write what the files give. */
+  readonly writable: boolean;
+}
+
 export interface SealOutcome {
   readonly plan: SealPlan;
   readonly healed: readonly HealedRecord[];
   readonly moved: FollowedMoves;
   readonly figures: readonly WrittenFigure[];
+  readonly contradictions: readonly Contradiction[];
   /** Paths that were written, from the top of the repository. */
   readonly written: readonly string[];
   readonly person: string;
@@ -28,7 +40,7 @@ const indent = ' '.repeat(5);
 
 /** What a `seal` did, what it refused and why, and what to stage. */
 export function sealReport(outcome: SealOutcome): string {
-  const { plan, healed, moved, figures, written, person, today } = outcome;
+  const { plan, healed, moved, figures, contradictions, written, person, today } = outcome;
   const lines = [
     ...titled('HEALED after a merge', healed.map(healedLine)),
     ...titled('MOVED, with who sealed it and when', [
@@ -44,6 +56,10 @@ export function sealReport(outcome: SealOutcome): string {
       figures.map(({ field, before, after }) => `${field}   ${before} -> ${after}`),
     ),
     ...titled(`SEALED by ${person} on ${today}`, plan.sealed.flatMap(sealedLines)),
+    ...titled(
+      'SEALED, BUT what is stated and what the files hold do not agree',
+      contradictions.flatMap(contradictionLines),
+    ),
     ...titled('DROPPED, since their records are gone', plan.dropped),
     ...titled(
       'LEFT AS THEY ARE, though these entries can’t be read: look at each record and seal it by name',
@@ -51,11 +67,7 @@ export function sealReport(outcome: SealOutcome): string {
     ),
     ...titled(
       'NOT SEALED',
-      plan.refused.flatMap(({ record, message, next }) => [
-        record,
-        ...wrap(message, width - indent.length).map((line) => `   ${line}`),
-        ...wrap(next, width - indent.length).map((line) => `   ${line}`),
-      ]),
+      plan.refused.flatMap(({ record, message, next }) => [record, ...indented(message), ...indented(next)]),
     ),
   ];
   if (lines.length === 0) return 'Nothing to do: what was asked for is sealed, and unchanged since.\n';
@@ -83,6 +95,21 @@ function howSealed({ seal, before, replacesUnreadable }: Sealed): string {
   if (replacesUnreadable) return 'its entry could not be read';
   if (before === null) return 'first seal';
   return before.digest === seal.digest ? 'sealed again' : 'was stale';
+}
+
+function contradictionLines({ record, message, others, writable }: Contradiction): readonly string[] {
+  const more = others === 0 ? '' : ` And ${others} more, which \`stoplog check\` lists.`;
+  return [
+    record,
+    ...indented(`${message}${more}`),
+    ...(writable
+      ? ['   Correct the file; or, to state what it gives:', `   stoplog seal --figures ${record}`]
+      : ['   Correct what is wrong, the statement or the file, and seal again.']),
+  ];
+}
+
+function indented(text: string): readonly string[] {
+  return wrap(text, width - indent.length).map((line) => `   ${line}`);
 }
 
 function healedLine({ record, kept, seal, fits, rerunDropped }: HealedRecord): string {

@@ -22,3 +22,28 @@ it('keeps an entry that was edited by hand as it stands until its own record is 
   expect(await project.read('stoplog.seals.json')).not.toContain(spoilt);
   expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.unreadable'))).toEqual([]);
 });
+
+it('says that a sealed record states what its files do not bear out', async () => {
+  await project.edit('stoplog.yaml', (text) => text.replace('nse: 0.967', 'nse: 0.97'));
+  await project.edit('stoplog.yaml', (text) => text.replace('pbias: 7.90', 'pbias: 1.25'));
+  const sealed = await stoplog(project.folder, ['seal', 'evaluation.outlet-flow']);
+  expect(sealed.status).toBe(0);
+  expect(sealed.text).toMatch(
+    /SEALED, BUT what is stated.*\n {2}evaluation\.outlet-flow\n {5}.*stated as 1\.25; the files give 7\.89/,
+  );
+  expect(sealed.text).toContain('stoplog seal --figures evaluation.outlet-flow');
+
+  const corrected = await stoplog(project.folder, ['seal', '--figures', 'evaluation.outlet-flow']);
+  expect(corrected.text).toContain('1.25 -> 7.9');
+  expect(corrected.text).not.toContain('SEALED, BUT');
+});
+
+it('says so also where no figure can be written', async () => {
+  await project.edit('stoplog.yaml', (text) =>
+    text.replace('warm_up: 2001-10-01/2003-09-30', 'warm_up: 2001-10-01/2002-09-30'),
+  );
+  const { text } = await stoplog(project.folder, ['seal', 'periods']);
+  expect(text).toMatch(
+    /SEALED, BUT .*\n {2}periods\n(.+\n)+ {5}Correct what is wrong, the statement or the file/,
+  );
+});
