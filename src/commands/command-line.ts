@@ -117,6 +117,7 @@ function describe(run: Run): Command {
     .command('pipeline')
     .description('print a job file for a CI host, ready to commit')
     .addArgument(new Argument('<host>', 'which host').choices(hosts))
+    .option('--parts <number>', 'share the work on a large repository among so many machines', '1')
     .action(run(pipelineCommand));
 
   const hook = program
