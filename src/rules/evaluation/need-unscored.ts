@@ -1,4 +1,5 @@
-import { flowTargets, type Regime, unscoredRegimes } from '../../facts/scores/needs.ts';
+import { flowTargets, isScored, type Regime, unscoredRegimes } from '../../facts/scores/needs.ts';
+import { scoredWindows } from '../../facts/scores/stated.ts';
 import { rule } from '../rule.ts';
 
 /** What tells of a regime, and why other scores do not. */
@@ -29,11 +30,16 @@ export const evaluationNeedUnscored = rule({
   check: (_, facts) => {
     const [first] = flowTargets(facts);
     if (first === undefined) return [];
+    const stated = facts.scores.get(first.name ?? '')?.stated ?? [];
+    const unscored = (regime: Regime) =>
+      scoredWindows.filter(
+        (window) => stated.some((one) => one.window === window) && !isScored(regime, window, stated),
+      );
     return unscoredRegimes(facts).map((regime) => ({
       record: first.id,
       field: [...first.field, 'scores'],
       subject: regime,
-      message: `The purpose needs ${regime} flows, but no score of ${first.name} tells of them, and ${told[regime].because}. What tells is ${told[regime].words}.`,
+      message: `The purpose needs ${regime} flows, but no ${unscored(regime).join(' or ')} score of ${first.name} tells of them, and ${told[regime].because}. What tells is ${told[regime].words}.`,
     }));
   },
 });

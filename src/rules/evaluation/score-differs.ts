@@ -1,9 +1,11 @@
+import type { ScoredWindow } from '../../facts/scores/stated.ts';
 import type { ComparedScore, TargetFigures } from '../../facts/scores.ts';
 import { isDefined } from '../../hydrology/paired.ts';
 import type { RecordNode } from '../../records/record.ts';
 import { figure } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
 import { causesInWords } from './causes-in-words.ts';
+import { type DifferingTogether, differingTogether } from './differing-together.ts';
 import { recomputedOver } from './over.ts';
 import { asPrinted, scoreNames, unitOf } from './score-names.ts';
 
@@ -37,7 +39,7 @@ export const evaluationScoreDiffers = rule({
     if (whole !== null) return [...unread, whole];
     return [
       ...unread,
-      ...figures.stated.filter(({ agrees }) => !agrees).map((score) => differing(record, score, figures)),
+      ...differingTogether(figures.stated).map((scores) => differing(record, scores, figures)),
     ];
   },
 });
@@ -60,11 +62,40 @@ function asAWhole({ id, name, field }: RecordNode, figures: TargetFigures): Draf
   };
 }
 
-function differing({ id, name }: RecordNode, score: ComparedScore, figures: TargetFigures): Draft {
+function differing(record: RecordNode, scores: DifferingTogether, figures: TargetFigures): Draft {
+  const [first, ...others] = scores;
+  if (others.length === 0) return differingAlone(record, first, figures);
+  const { window, at, field, recomputed, causes } = first;
+  const about = {
+    record: record.id,
+    field: at === null ? field.slice(0, -1) : field,
+    ...(at ?? {}),
+    subject: window,
+  };
+  const what = `${scores.map(({ score }) => scoreNames[score]).join(', ')} of ${record.name} over ${window}`;
+  if (!isDefined(recomputed))
+    return { ...about, message: `The ${what} can’t be recomputed: ${recomputed.undefined}.` };
+  const cause =
+    causes.length === 0
+      ? 'Where no score of a window agrees, it is rather another run, column or window that was scored.'
+      : `Each stated figure is ${causesInWords(causes)}.`;
+  return {
+    ...about,
+    message: `The ${what} are not what the files give. ${cause}`,
+    detail: [
+      ...scores.map(
+        (score) => `${scoreNames[score.score]}: stated ${asPrinted(score.printed)}, found ${foundFor(score)}`,
+      ),
+      ...recomputedFrom(figures, window),
+    ],
+  };
+}
+
+function differingAlone({ id, name }: RecordNode, score: ComparedScore, figures: TargetFigures): Draft {
   const { window, printed, recomputed, causes, field, at } = score;
   const unit = unitOf(score.score, isDefined(figures.recomputed) ? figures.recomputed.value.unit : '1');
   const what = `${scoreNames[score.score]} of ${name} over ${window}`;
-  const common = {
+  const about = {
     record: id,
     field,
     ...(at ?? {}),
@@ -73,20 +104,26 @@ function differing({ id, name }: RecordNode, score: ComparedScore, figures: Targ
     ...(unit === null ? {} : { unit }),
   };
   if (!isDefined(recomputed))
-    return { ...common, message: `The ${what} can’t be recomputed: ${recomputed.undefined}.` };
-  const found = Number(asPrinted({ value: recomputed.value, decimals: printed.decimals + 2 }));
+    return { ...about, message: `The ${what} can’t be recomputed: ${recomputed.undefined}.` };
+  const found = foundFor(score);
   const cause = causes.length === 0 ? '' : ` The stated figure is ${causesInWords(causes)}.`;
-  const over = recomputedOver(figures, window);
   return {
-    ...common,
-    found,
+    ...about,
+    found: Number(found),
     message: `The ${what} is stated as ${asPrinted(printed)}; the files give ${found}.${cause}`,
-    ...(over === null
-      ? {}
-      : {
-          detail: [
-            `recomputed over ${over.periods.join(', ')}: ${figure(over.pairs)} of ${figure(over.windowSteps)} steps paired`,
-          ],
-        }),
+    detail: recomputedFrom(figures, window),
   };
+}
+
+/** The recomputed figure with two decimals more than the stated one has. */
+function foundFor({ printed, recomputed }: ComparedScore): string {
+  if (!isDefined(recomputed)) return recomputed.undefined;
+  return String(Number(asPrinted({ value: recomputed.value, decimals: printed.decimals + 2 })));
+}
+
+function recomputedFrom(figures: TargetFigures, window: ScoredWindow): readonly string[] {
+  const over = recomputedOver(figures, window);
+  if (over === null) return [];
+  const { periods, pairs, windowSteps } = over;
+  return [`recomputed over ${periods.join(', ')}: ${figure(pairs)} of ${figure(windowSteps)} steps paired`];
 }

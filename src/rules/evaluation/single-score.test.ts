@@ -11,7 +11,6 @@ ruleCases(evaluationSingleScore, {
       finds: {
         record: 'evaluation.outlet-flow',
         field: `${scores}.calibration`,
-        subject: 'calibration',
         level: 'block',
         message: /\(NSE\) say nothing of bias .*, nor of agreement in time/,
       },
@@ -19,7 +18,27 @@ ruleCases(evaluationSingleScore, {
     {
       name: 'no bias; that of high flows is none of the whole',
       set: { [`${scores}.validation`]: { nse: 0.967, r2: 0.995, fhv: -7.2 } },
-      finds: { subject: 'validation', message: 'say nothing of bias (such as PBIAS).' },
+      finds: { field: `${scores}.validation`, message: 'say nothing of bias (such as PBIAS).' },
+    },
+    {
+      name: 'one kind lacking in both windows',
+      set: {
+        [`${scores}.calibration`]: { nse: 0.966, r2: 0.995 },
+        [`${scores}.validation`]: { nse: 0.967, kge: 0.9 },
+      },
+      finds: {
+        field: `${scores}.calibration`,
+        message:
+          'The calibration and validation scores of outlet-flow (NSE, R2, KGE) say nothing of bias (such as PBIAS).',
+      },
+    },
+    {
+      name: 'one kind lacking in one window, another in the other',
+      set: {
+        [`${scores}.calibration`]: { nse: 0.966, r2: 0.995 },
+        [`${scores}.validation`]: { pbias: 7.9, kge: 0.9 },
+      },
+      finds: { message: /The calibration scores .* bias .*\. The validation scores .* size of errors .*\.$/ },
     },
     {
       name: 'in a table',

@@ -19,21 +19,23 @@ export const evaluationSingleScore = rule({
   why: 'One statistic hides what another shows: a simulation that is always a third too low can have an r2 of 1.',
   source: moriasi2007,
   clear: 'State at least one score of each kind, such as nse, pbias and r2.',
-  check: ({ id, name, field }, { scores }) =>
-    scoredWindows.flatMap((window) => {
-      const stated = (scores.get(name ?? '')?.stated ?? [])
-        .filter((score) => score.window === window)
-        .map(({ score }) => score);
-      const told = new Set(stated.flatMap((score) => scoreKinds[score]));
-      const untold = (Object.keys(kinds) as (keyof typeof kinds)[]).filter((kind) => !told.has(kind));
-      if (stated.length === 0 || untold.length === 0) return [];
-      return [
-        {
-          record: id,
-          field: [...field, 'scores', window],
-          subject: window,
-          message: `The ${window} scores of ${name} (${stated.map((score) => scoreNames[score]).join(', ')}) say nothing of ${untold.map((kind) => kinds[kind]).join(', nor of ')}.`,
-        },
-      ];
-    }),
+  check: ({ id, name, field }, { scores }) => {
+    const stated = scores.get(name ?? '')?.stated ?? [];
+    const lacking = scoredWindows.flatMap((window) => {
+      const here = stated.flatMap((score) => (score.window === window ? score.score : []));
+      const told = new Set<string>(here.flatMap((score) => scoreKinds[score]));
+      const untold = Object.entries(kinds).flatMap(([kind, words]) => (told.has(kind) ? [] : words));
+      return here.length === 0 || untold.length === 0
+        ? []
+        : [{ window, here, untold: untold.join(', nor of ') }];
+    });
+    const [first] = lacking;
+    if (first === undefined) return [];
+    const sentences = [...new Set(lacking.map(({ untold }) => untold))].map((untold) => {
+      const alike = lacking.filter((one) => one.untold === untold);
+      const names = new Set(alike.flatMap(({ here }) => here.map((score) => scoreNames[score])));
+      return `The ${alike.map(({ window }) => window).join(' and ')} scores of ${name} (${[...names].join(', ')}) say nothing of ${untold}.`;
+    });
+    return [{ record: id, field: [...field, 'scores', first.window], message: sentences.join(' ') }];
+  },
 });
