@@ -36,6 +36,7 @@ export interface CheckOptions {
   readonly report?: readonly string[];
   readonly cache: boolean;
   readonly quiet?: boolean;
+  readonly brief?: boolean;
   readonly color?: boolean;
 }
 
@@ -129,7 +130,11 @@ export function readAt(at: string): At {
 function write(kind: Kind, verdict: Verdict, options: CheckOptions, color: boolean): string {
   switch (kind) {
     case 'text':
-      return textReport(verdict, { color: options.color ?? color, quiet: options.quiet ?? false });
+      return textReport(verdict, {
+        color: options.color ?? color,
+        quiet: options.quiet ?? false,
+        brief: options.brief ?? false,
+      });
     case 'json':
       return jsonReport(verdict);
     case 'sarif':

@@ -75,6 +75,7 @@ function describe(run: Run): Command {
     .option('--gather', 'check with what the parts left: the same verdict and reports as one run of its own')
     .option('--no-cache', 'read every file anew instead of remembering digests')
     .option('--quiet', 'print only what blocks')
+    .option('--brief', 'print only what blocks, a line for each record that warns, and the tally (in hooks)')
     .option('--color', 'colour the text report also where the output is no terminal')
     .option('--no-color', 'never colour it')
     .action(run(checkCommand));

@@ -1,4 +1,5 @@
 import type { ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import { isUnread } from '../verdict/judge.ts';
 import { plain } from './escape.ts';
 import { clip, everyFinding, explain, type Told } from './explain.ts';
 import { remarks } from './remarks.ts';
@@ -48,7 +49,7 @@ function suite(manifest: ManifestVerdict, about: readonly string[], told: readon
   const failures = told.filter(({ weight }) => weight === 'block').length;
   const skipped = told.filter(({ weight }) => weight === 'standing' || weight === 'answered').length;
   const properties = [
-    ['phase', manifest.phase] as const,
+    ...(isUnread(manifest) ? [] : [['phase', manifest.phase] as const]),
     ...about.map((remark) => ['comparison', remark] as const),
     ...manifest.departures.map(
       ({ of, now, because }) => ['departure', `${of} now ${now}: ${because}`] as const,

@@ -1,4 +1,5 @@
 import type { Finding, ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import { isUnread } from '../verdict/judge.ts';
 import { caution } from './caution.ts';
 import { plain } from './escape.ts';
 import {
@@ -11,7 +12,7 @@ import {
   type Weight,
 } from './explain.ts';
 import { remarks } from './remarks.ts';
-import { count, tally } from './tally.ts';
+import { count, soundOf, tally, unread } from './tally.ts';
 import { withinLimit } from './within-limit.ts';
 
 /** A comment on GitHub holds 65 536 characters. */
@@ -71,9 +72,10 @@ function opening(verdict: Verdict): readonly string[] {
   ];
 }
 
-function study({ path, study, phase, records }: ManifestVerdict): string {
-  const sound = records.filter(({ state }) => state === 'sound').length;
-  return `- **${short(study ?? path)}** (${short(path)}), phase ${short(phase)}: ${sound} of ${count(records.length, 'record')} sound`;
+function study(manifest: ManifestVerdict): string {
+  const { path, study, phase } = manifest;
+  const about = isUnread(manifest) ? unread : `phase ${short(phase)}: ${soundOf(manifest)}`;
+  return `- **${short(study ?? path)}** (${short(path)}), ${about}`;
 }
 
 function departures(manifest: ManifestVerdict): readonly string[] {
@@ -109,9 +111,10 @@ function changes(told: readonly Told[]): readonly string[] {
   ];
 }
 
-/** The first line of what differs, where a record's own files changed. */
+/** The first line of what differs, where a record's own statement or files changed; and scores that are told together. */
 function dataDifference({ rule, trail, detail }: Finding): readonly string[] {
-  return rule === 'seal.stale' && trail.length === 2 ? detail.slice(0, 1) : [];
+  if (rule === 'seal.stale') return trail.length <= 2 ? detail.slice(0, 1) : [];
+  return rule === 'evaluation.score-differs' ? detail.filter((line) => line.includes(': stated ')) : [];
 }
 
 function open(heading: string, told: readonly Told[]): readonly string[] {

@@ -4,7 +4,7 @@ import { concludeVerdict } from '../verdict/judge.ts';
 import { jsonReport } from './json.ts';
 import { textReport } from './text.ts';
 
-const plainText = { color: false, quiet: false };
+const plainText = { color: false, quiet: false, brief: false };
 
 function finding(over: Partial<Finding> = {}): Finding {
   return {
@@ -78,11 +78,42 @@ BLOCKED   1 finding to clear, 0 warnings, 0 notes
   });
 
   it('is silent on a quiet pass and shows only what blocks on a quiet hold', () => {
-    const quiet = { color: false, quiet: true };
+    const quiet = { ...plainText, quiet: true };
     expect(textReport(verdictOf([finding({ level: 'warn' })]), quiet)).toBe('');
     const text = textReport(verdictOf([finding(), finding({ level: 'note', record: 'study' })]), quiet);
     expect(text).toContain('inputs.rainfall');
     expect(text).not.toContain('study');
+  });
+
+  it('is brief where it is read at every commit: what blocks or asks for less, else a line and the tally', () => {
+    const brief = { ...plainText, brief: true };
+    const doubts = [
+      finding({ level: 'warn' }),
+      finding({ level: 'warn', rule: 'inputs.day-unstated' }),
+      finding({ level: 'note', record: 'study', rule: 'study.contact-missing' }),
+    ];
+    const passed = textReport(verdictOf(doubts), brief);
+    expect(passed.split('\n').slice(3, 9)).toEqual([
+      'WARNED   2 findings',
+      '  inputs.rainfall: seal.stale, inputs.day-unstated',
+      '',
+      'PASS   0 findings to clear, 2 warnings, 1 note',
+      '`stoplog check` prints warnings and notes in full.',
+      '',
+    ]);
+    const less = finding({ level: 'warn', rule: 'manifest.loosened', record: 'manifest', message: 'Less.' });
+    const held = textReport(verdictOf([finding(), less]), brief);
+    expect(held).toContain('ASKS FOR LESS   1 change');
+    expect(held).toContain('14 of 5 113 values differ');
+    expect(held).not.toContain('WARNED');
+    expect(textReport(verdictOf([]), brief)).not.toContain('in full');
+  });
+
+  it('says of a manifest that could not be read neither phase nor records', () => {
+    const fault = finding({ rule: 'manifest.unreadable', record: 'manifest', trail: [], detail: [] });
+    const text = textReport(verdictOf([fault], { study: null, phase: 'setup', records: [] }), plainText);
+    expect(text.split('\n')[1]?.trim()).toBe('the manifest could not be read, so no record was checked');
+    expect(text).not.toContain('phase');
   });
 
   it('names the cause once for many records that rest on it', () => {
@@ -126,7 +157,7 @@ BLOCKED   1 finding to clear, 0 warnings, 0 notes
   it('colours only when asked', () => {
     const controlSequence = '\u001b[';
     expect(textReport(verdictOf([finding()]), plainText)).not.toContain(controlSequence);
-    expect(textReport(verdictOf([finding()]), { color: true, quiet: false })).toContain(controlSequence);
+    expect(textReport(verdictOf([finding()]), { ...plainText, color: true })).toContain(controlSequence);
   });
 });
 

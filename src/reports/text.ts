@@ -1,18 +1,20 @@
 import { Chalk, type ChalkInstance } from 'chalk';
 import type { Cured, Finding, Level, ManifestVerdict, Verdict } from '../verdict/finding.ts';
-import { counts, passes } from '../verdict/judge.ts';
+import { counts, isUnread, passes } from '../verdict/judge.ts';
 import { caution } from './caution.ts';
 import { inert, plain } from './escape.ts';
 import { statedAndFound, way } from './explain.ts';
 import { fold, type Group, groupByRecord } from './fold.ts';
 import { remarks } from './remarks.ts';
-import { count, tally } from './tally.ts';
+import { count, soundOf, tally, unread } from './tally.ts';
 import { wrap } from './wrap.ts';
 
 export interface TextOptions {
   readonly color: boolean;
   /** Only what blocks, and nothing at all on a pass. */
   readonly quiet: boolean;
+  /** In full only what blocks or asks for less; a line for each record that warns, and notes are counted. */
+  readonly brief: boolean;
 }
 
 const width = 100;
@@ -20,44 +22,50 @@ const indent = ' '.repeat(5);
 const headings: Readonly<Record<Level, string>> = { block: 'BLOCKED', warn: 'WARNED', note: 'NOTED' };
 
 /** The verdict for a terminal: what is held back and why, what to do, then the tally. */
-export function textReport(verdict: Verdict, { color, quiet }: TextOptions): string {
+export function textReport(verdict: Verdict, { color, quiet, brief }: TextOptions): string {
   if (quiet && verdict.verdict === 'pass') return '';
   const paint = new Chalk({ level: color ? 1 : 0 });
-  const levels: readonly Level[] = quiet ? ['block'] : ['block', 'warn', 'note'];
+  const isShown = (one: Finding): boolean => one.level === 'block' || (!quiet && (!brief || loosens(one)));
   const lines = verdict.manifests.flatMap((manifest, index) => [
     ...(index > 0 ? [''] : []),
     ...opening(verdict, manifest, index === 0 ? paint.bold('stoplog') : ' '.repeat(7)),
-    ...sections(verdict, manifest, levels, paint),
+    ...sections(verdict, manifest, isShown, paint),
+    ...(brief && !quiet ? warned(verdict, manifest) : []),
     ...(quiet ? [] : [...standing(verdict, manifest), ...cured(verdict, manifest), ...answered(manifest)]),
   ]);
   const pass = verdict.verdict === 'pass';
   lines.push(...remarks(verdict).flatMap((remark) => ['', ...wrap(plain(remark), width)]));
   lines.push('', `${pass ? paint.green.bold('PASS') : paint.red.bold('BLOCKED')}   ${tally(verdict)}`);
+  const { warn, note } = verdict.totals;
+  if (brief && !quiet && warn + note > 0) lines.push('`stoplog check` prints warnings and notes in full.');
   if (pass) lines.push('', ...wrap(caution, width).map((line) => paint.dim(line)));
   return inert(`${lines.join('\n')}\n`);
 }
 
 function opening(verdict: Verdict, manifest: ManifestVerdict, name: string): readonly string[] {
-  const sound = manifest.records.filter((record) => record.state === 'sound').length;
   const study = plain(manifest.study ?? manifest.path);
   const column = Math.min(Math.max(study.length, 28), width / 2);
   const where = verdict.base === null ? verdict.at : `${verdict.at}, against ${verdict.base}`;
   return [
     `${name}   ${study.padEnd(column)}    ${plain(where)}`,
-    `${' '.repeat(10)}${`phase ${manifest.phase}`.padEnd(column)}    ${sound} of ${count(manifest.records.length, 'record')} sound`,
+    ' '.repeat(10) +
+      (isUnread(manifest) ? unread : `${`phase ${manifest.phase}`.padEnd(column)}    ${soundOf(manifest)}`),
   ];
+}
+
+function loosens({ rule }: Finding): boolean {
+  return rule === 'manifest.loosened';
 }
 
 /** What the change asks less for comes first, then the levels. */
 function sections(
   { comparison }: Verdict,
   manifest: ManifestVerdict,
-  levels: readonly Level[],
+  isShown: (finding: Finding) => boolean,
   paint: ChalkInstance,
 ): readonly string[] {
   const tints = { block: paint.red.bold, warn: paint.yellow.bold, note: paint.bold };
-  const shown = manifest.findings.filter((one) => levels.includes(one.level) && counts(one, comparison));
-  const loosens = ({ rule }: Finding): boolean => rule === 'manifest.loosened';
+  const shown = manifest.findings.filter((one) => isShown(one) && counts(one, comparison));
   const less = shown.filter(loosens);
   return [
     ...section(
@@ -66,7 +74,7 @@ function sections(
       manifest,
       paint,
     ),
-    ...levels.flatMap((level) =>
+    ...(['block', 'warn', 'note'] as const).flatMap((level) =>
       section(
         shown.filter((one) => one.level === level && !loosens(one)),
         (records) => tints[level](`${headings[level]}   ${count(records, 'record')}`),
@@ -131,6 +139,12 @@ function findingLines(finding: Finding, placeOfRecord: string, paint: ChalkInsta
 }
 
 const listedAtMost = 12;
+
+/** What warns, in a line for each record. */
+function warned({ comparison }: Verdict, { findings }: ManifestVerdict): readonly string[] {
+  const open = findings.filter((one) => one.level === 'warn' && counts(one, comparison) && !loosens(one));
+  return listing(`WARNED   ${count(open.length, 'finding')}`, open);
+}
 
 /** What the base had already, in a line for each record. */
 function standing({ base, comparison }: Verdict, { findings }: ManifestVerdict): readonly string[] {

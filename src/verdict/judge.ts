@@ -72,6 +72,11 @@ export function judgeUnread(raised: readonly Raised[], path: string): ManifestVe
   };
 }
 
+/** Whether nothing of a manifest could be read, so that neither its phase nor its records are known. */
+export function isUnread({ findings }: ManifestVerdict): boolean {
+  return findings.some(({ rule }) => rule === 'manifest.unreadable');
+}
+
 /** One verdict over all manifests. */
 export function concludeVerdict(
   at: string,

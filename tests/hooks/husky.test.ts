@@ -50,7 +50,7 @@ it('is the project’s scripts, and not the folder that husky makes', async () =
   );
   await commit();
   expect(await stoplog.calls()).toMatchObject([
-    { words: ['check', '--if-touched', '--at', 'index'], cwd: repository.folder },
+    { words: ['check', '--brief', '--if-touched', '--at', 'index'], cwd: repository.folder },
   ]);
   await stoplog.endWith(1);
   await expect(commit()).rejects.toThrow(/the stand-in speaks/);
@@ -88,7 +88,7 @@ it('gives the project’s pre-push lines the words and the input of git, and its
     `${remote.folder} ${remote.folder}\nrefs/heads/main ${id} refs/heads/main ${'0'.repeat(40)}\n`,
   );
   expect(seen).not.toContain('STOPLOG_BELOW');
-  expect(await stoplog.calls()).toMatchObject([{ words: ['check', '--if-touched', '--at', id] }]);
+  expect(await stoplog.calls()).toMatchObject([{ words: ['check', '--brief', '--if-touched', '--at', id] }]);
   await remote.remove();
 });
 

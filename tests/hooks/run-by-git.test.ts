@@ -34,7 +34,7 @@ const add = async (folder = repository.folder) =>
   addHooks(await openRepository(folder, cleanEnvironment(stoplog.everyday)));
 const commitOf = async (revision: string) => (await git('rev-parse', `${revision}^{commit}`)).trim();
 const treeOf = async (revision: string) => (await git('rev-parse', `${revision}^{tree}`)).trim();
-const index = ['check', '--if-touched', '--at', 'index'];
+const index = ['check', '--brief', '--if-touched', '--at', 'index'];
 
 describe('git commit', () => {
   beforeEach(() => add());
@@ -127,7 +127,7 @@ describe('git push', () => {
   const at = async (...revisions: string[]) =>
     (await Promise.all(revisions.map(commitOf)))
       .sort()
-      .map((commit) => ['check', '--if-touched', '--at', commit]);
+      .map((commit) => ['check', '--brief', '--if-touched', '--at', commit]);
 
   it('checks each commit that a reference comes to, once, tags followed', async () => {
     await git('branch', 'same');
@@ -177,7 +177,7 @@ describe('git push', () => {
     await push('push', longRemote.folder, 'main', 'main:gone');
     const id = (await long.git('rev-parse', 'main')).trim();
     expect(id).toHaveLength(64);
-    expect(await words()).toEqual([['check', '--if-touched', '--at', id]]);
+    expect(await words()).toEqual([['check', '--brief', '--if-touched', '--at', id]]);
     await push('push', longRemote.folder, ':gone');
     expect(await words()).toEqual([]);
     await Promise.all([long.remove(), longRemote.remove()]);

@@ -45,7 +45,7 @@ const faults: readonly PlantedFault[] = [
     move: -1,
     rule: 'evaluation.score-differs',
     record: 'evaluation.warmth',
-    says: 'stated as 0.8587; the files give 1.',
+    says: 'NSE, R2, PBIAS, KGE, RMSE, RSR of warmth over calibration are not what the files give. Each stated figure is what comes out with the simulated series moved a day later',
   },
   {
     fault: 'a period of another year',

@@ -117,7 +117,7 @@ async function sealed(files: FilesInMemory): Promise<FilesInMemory> {
 }
 
 const check = async (files: FilesInMemory) => examine(snapshotFromMemory(files), { today });
-const quietly = { color: false, quiet: false };
+const quietly = { color: false, quiet: false, brief: false };
 
 describe('three hundred gauges', () => {
   let files: FilesInMemory;

@@ -101,7 +101,7 @@ if [ -z "$pairs" ]; then exit 0; fi
 const checkPairs = `echo "$pairs" | {
   status=0
   while read -r commit base; do
-    set -- check --if-touched --at "$commit"
+    set -- check --brief --if-touched --at "$commit"
     if [ "$base" != none ]; then set -- "$@" --base "$base"; fi
     stoplog "$@" </dev/null || status=1
   done
@@ -115,9 +115,9 @@ function script(hook: HookName, first: (input: string) => string): string {
     return readPushed + first('tell_pushed | ') + checkReceived + findStoplog(hook) + checkPairs;
   }
   if (hook !== 'pre-push')
-    return `${first('')}${findStoplog(hook)}stoplog check --if-touched --at index\nexit\n`;
+    return `${first('')}${findStoplog(hook)}stoplog check --brief --if-touched --at index\nexit\n`;
   const check =
-    'status=0\nfor commit in $commits; do stoplog check --if-touched --at "$commit" || status=1; done\nexit $status\n';
+    'status=0\nfor commit in $commits; do stoplog check --brief --if-touched --at "$commit" || status=1; done\nexit $status\n';
   return readPushed + first('tell_pushed | ') + findCommits + findStoplog(hook) + check;
 }
 
