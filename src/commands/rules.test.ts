@@ -35,7 +35,7 @@ describe('stoplog rules', () => {
   });
 
   it('tells from when a rule blocks, and what kind of source it has', async () => {
-    expect(await said('seal.stale')).toContain('blocks from calibration, is a note before');
+    expect(await said('seal.stale')).toContain('blocks from calibration, warns before');
     expect(await said('seal.stale')).toContain('Follows from the words.');
     expect(await said('waiver.unused')).toContain('warns');
     expect(await said('study.purpose-missing')).toContain('EPA QA/G-5M');

@@ -3,6 +3,7 @@ import { isScalar } from 'yaml';
 import { type Fault, quoted, shown } from './fault.ts';
 import type { Locate } from './locate.ts';
 import { type FieldPath, fieldName } from './manifest.ts';
+import { meantValues, type Wanted } from './meant.ts';
 import { nearestName } from './nearest.ts';
 
 /** A place in the data that breaks the schema. */
@@ -45,7 +46,11 @@ function unknownKey({ field, error, nearest }: Breach, locate: Locate): Fault {
   const key = String(error.params.additionalProperty);
   const parent = field.length === 1 ? 'a manifest' : `\`${fieldName(field.slice(0, -1))}\``;
   const known = Object.keys(error.parentSchema?.properties ?? {}).join(', ');
-  const hint = nearest === undefined ? `it knows ${known}` : `perhaps \`${nearest}\` is meant`;
+  const hint = /^\d+$/.test(key)
+    ? 'a decimal point is a point, as in 0.83, and no comma'
+    : nearest === undefined
+      ? `it knows ${known}`
+      : `perhaps \`${nearest}\` is meant`;
   return {
     offset: keyOffset(field, locate),
     field,
@@ -73,9 +78,24 @@ function unfitValue({ field, error }: Breach, locate: Locate): Fault {
     return { ...at, found: `${written} without quotes`, message };
   }
   const found = written ?? shown(data);
-  const meant = typeof data === 'string' ? nearestName(data, error.params.allowedValues ?? []) : undefined;
-  const hint = meant === undefined ? '' : ` Perhaps \`${meant}\` is meant.`;
-  return { ...at, found, message: `${name} is ${found}; expected ${expected}.${hint}` };
+  return { ...at, found, message: `${name} is ${found}; expected ${expected}.${perhaps(error)}` };
+}
+
+/** What was probably meant, as a sentence with a blank before it; nothing where nothing suggests itself. */
+function perhaps({ data, params, parentSchema = {} }: ErrorObject): string {
+  const near = typeof data === 'string' ? nearestName(data, params.allowedValues ?? []) : undefined;
+  const meant = meantValues(data, parentSchema as Wanted);
+  const [only] = meant;
+  if (typeof only === 'number' && String(only) === data) return ' Write it without quotes.';
+  const words = meant.length === 0 && near !== undefined ? [near] : meant;
+  if (words.length === 0) return '';
+  return ` Perhaps ${words.map((word) => `\`${asYaml(word)}\``).join(' or ')} is meant.`;
+}
+
+/** A value as it is written in a manifest: quotes only where YAML would take a text for something else. */
+function asYaml(value: unknown): string {
+  if (Array.isArray(value)) return `[${value.map(asYaml).join(', ')}]`;
+  return typeof value === 'string' && /^[+\d][\d:]*$/.test(value) ? `"${value}"` : String(value);
 }
 
 /** Whether a number, true or false would do as a text, as a version does. */
@@ -95,8 +115,10 @@ function expectation({ keyword, params, parentSchema = {} }: ErrorObject): strin
     exclusiveMinimum !== undefined && `above ${exclusiveMinimum}`,
     exclusiveMaximum !== undefined && `and below ${exclusiveMaximum}`,
     minItems !== undefined && `of at least ${minItems} ${minItems === 1 ? 'entry' : 'entries'}`,
-  ].filter(Boolean);
-  return [typeWords(type), ...limits].join(' ');
+  ];
+  const keys = type === 'object' ? Object.keys(parentSchema.properties ?? {}).slice(0, 3) : [];
+  const example = keys.length > 0 && `such as {${keys.map((key) => `${key}: ...`).join(', ')}}`;
+  return [typeWords(type), ...limits, example].filter(Boolean).join(' ');
 }
 
 function typeWords(type: string | readonly string[]): string {

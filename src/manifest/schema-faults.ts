@@ -4,6 +4,7 @@ import type { Fault } from './fault.ts';
 import type { Locate } from './locate.ts';
 import type { FieldPath } from './manifest.ts';
 import { nearestName } from './nearest.ts';
+import { wordsMeantBy } from './other-words.ts';
 import * as validators from './validate-manifest.generated.js';
 
 type Validator = typeof validators.ManifestData;
@@ -60,7 +61,11 @@ function toBreach(error: ErrorObject, data: unknown, base: FieldPath): Breach {
   const unknown: unknown = error.params.additionalProperty ?? error.propertyName;
   if (typeof unknown !== 'string') return { field, error };
   const known = Object.keys(error.parentSchema?.properties ?? {});
-  return { field: [...field, unknown], error, nearest: nearestName(unknown, known) };
+  return { field: [...field, unknown], error, nearest: nearestKey(unknown, known) };
+}
+
+function nearestKey(unknown: string, known: readonly string[]): string | undefined {
+  return wordsMeantBy(unknown).find((word) => known.includes(word)) ?? nearestName(unknown, known);
 }
 
 /** The first fault of each field, and no missing key where an unknown one seems to be that key mistyped. */

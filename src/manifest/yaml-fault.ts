@@ -37,7 +37,12 @@ const openQuote: Words = { message: 'This quote is not closed', expected: 'a quo
 
 /** The faults of a document's syntax. Those at the very end of the text only follow from one before, if there is one. */
 export function yamlFaults(document: Document.Parsed, text: string): Fault[] {
-  const faults = document.errors.map((error) => yamlFault(error, document, text));
+  const tab = document.errors.find(({ code }) => code === 'TAB_AS_INDENT');
+  // What stands below a tab is misread because of it.
+  const errors = document.errors.filter(
+    ({ code, pos: [at] }) => tab === undefined || at < tab.pos[0] || code === 'TAB_AS_INDENT',
+  );
+  const faults = errors.map((error) => yamlFault(error, document, text));
   const end = text.trimEnd().length;
   const before = faults.filter(({ offset }) => offset < end);
   return before.length > 0 ? before : faults;

@@ -195,7 +195,7 @@ export const schema: readonly Case[] = [
     'a text for a figure',
     'stoplog: 1\nevaluation: {a: {scores: {validation: {nse: "0.7"}}}}\n',
     '2:45 evaluation.a.scores.validation.nse',
-    '`evaluation.a.scores.validation.nse` is "0.7"; expected a number.',
+    '`evaluation.a.scores.validation.nse` is "0.7"; expected a number. Write it without quotes.',
   ],
   [
     'a figure that is not finite',
@@ -207,13 +207,13 @@ export const schema: readonly Case[] = [
     'a text for true or false',
     'stoplog: 1\nsetup: {choices: [{default: yes}]}\n',
     '2:29 setup.choices[0].default',
-    '`setup.choices[0].default` is "yes"; expected true or false.',
+    '`setup.choices[0].default` is "yes"; expected true or false. Perhaps `true` is meant.',
   ],
   [
     'a list for a map',
     'stoplog: 1\nstudy: []\n',
     '2:8 study',
-    '`study` is an empty list; expected a map of keys.',
+    '`study` is an empty list; expected a map of keys such as {id: ..., title: ..., purpose: ...}.',
   ],
   [
     'a text for a list',
@@ -261,7 +261,7 @@ export const schema: readonly Case[] = [
     'a period where a list belongs',
     'stoplog: 1\nperiods: {calibration: 2003-10-01/2009-09-30}\n',
     '2:24 periods.calibration',
-    '`periods.calibration` is "2003-10-01/2009-09-30"; expected a list of periods such as [2003-10-01/2009-09-30].',
+    '`periods.calibration` is "2003-10-01/2009-09-30"; expected a list of periods such as [2003-10-01/2009-09-30]. Perhaps `[2003-10-01/2009-09-30]` is meant.',
   ],
   [
     'a warm-up in years',
@@ -273,19 +273,19 @@ export const schema: readonly Case[] = [
     'an hour without quotes or zero',
     'stoplog: 1\ninputs: {a: {series: {day_ends: 9:00}}}\n',
     '2:33 inputs.a.series.day_ends',
-    '`inputs.a.series.day_ends` is "9:00"; expected an hour such as "09:00" or "24:00".',
+    '`inputs.a.series.day_ends` is "9:00"; expected an hour such as "09:00" or "24:00". Perhaps `"09:00"` is meant.',
   ],
   [
     'a share in percent',
     'stoplog: 1\ninputs: {a: {missing_share: 1.3}}\n',
     '2:29 inputs.a.missing_share',
-    '`inputs.a.missing_share` is 1.3; expected a share from 0 to 1, {per_file: {...}} or {table: path}.',
+    '`inputs.a.missing_share` is 1.3; expected a share from 0 to 1, {per_file: {...}} or {table: path}. Perhaps `0.013` is meant.',
   ],
   [
     'a level in percent',
     'stoplog: 1\nuncertainty: {bands: {q: {level: 95}}}\n',
     '2:34 uncertainty.bands.q.level',
-    '`uncertainty.bands.q.level` is 95; expected a number above 0 and below 1.',
+    '`uncertainty.bands.q.level` is 95; expected a number above 0 and below 1. Perhaps `0.95` is meant.',
   ],
   [
     'a range with one end',
