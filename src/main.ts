@@ -3,17 +3,27 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { Context } from './commands/command.ts';
 import { runCommandLine } from './commands/command-line.ts';
+import { progressLine } from './commands/progress-line.ts';
 import { withoutCommands } from './commands/without-commands.ts';
 import { Failure } from './failure.ts';
 import { plain } from './reports/escape.ts';
+
+const line = process.stderr.isTTY ? progressLine((text) => process.stderr.write(text), Date.now) : null;
 
 const context: Context = withoutCommands({
   cwd: process.cwd(),
   environment: process.env,
   today: dateOf(process.env.SOURCE_DATE_EPOCH),
   color: wantsColor(),
-  write: (text) => void process.stdout.write(text),
-  tell: (text) => void process.stderr.write(text),
+  write(text) {
+    line?.clear();
+    process.stdout.write(text);
+  },
+  tell(text) {
+    line?.clear();
+    process.stderr.write(text);
+  },
+  progress: (text) => line?.show(text),
 });
 
 process.stdout.on('error', (error: NodeJS.ErrnoException) => {
@@ -23,6 +33,7 @@ process.stdout.on('error', (error: NodeJS.ErrnoException) => {
 
 try {
   process.exitCode = await runCommandLine(process.argv.slice(2), context);
+  line?.clear();
 } catch (error) {
   process.exitCode = 2;
   const failure = error instanceof Failure ? error : internal(error);

@@ -10,6 +10,8 @@ export interface Context {
   write(text: string, may?: 'command'): void;
   /** Standard error: what goes beside it. */
   tell(text: string): void;
+  /** Says how far long work has come, on a terminal only; each takes the place of the one before. */
+  progress(text: string): void;
 }
 
 /** 0 pass, 1 blocked, 2 could not check (thrown as a Failure). */

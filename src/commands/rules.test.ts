@@ -13,6 +13,7 @@ async function said(id?: string): Promise<string> {
     color: false,
     write: (text) => void written.push(text),
     tell: () => {},
+    progress: () => {},
   };
   expect(await rulesCommand(context, id)).toBe(0);
   return written.join('');

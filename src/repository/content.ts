@@ -16,6 +16,14 @@ const defaultLimitBytes = 256 * 1024 * 1024;
 /** Up to here one call on the whole is faster than a hash fed in chunks. */
 const hashedWholeBytes = 256 * 1024;
 
+/** How content is read. */
+interface Reading {
+  /** The share of the files that this run digests. */
+  readonly part?: Part | undefined;
+  /** Told how far it has come. */
+  readonly progress?: ((text: string) => void) | undefined;
+}
+
 /** In place of a digest that another part works out; nothing that comes of it is ever shown. */
 const ofAnotherPart = 'of another part';
 
@@ -25,7 +33,7 @@ export function contentOf(
   blobs: Blobs,
   findLarge: FindLarge,
   memory: DigestMemory,
-  part?: Part,
+  { part, progress = () => {} }: Reading = {},
 ): Content {
   const locate = locator(listing, blobs);
   /** What other parts are to read, with its bytes. */
@@ -41,7 +49,9 @@ export function contentOf(
       for (const [blob, bytes] of await blobsOfOthers([...asked], part, blobs))
         if (unknown.delete(blob)) left.set(blob, bytes);
     }
+    let read = 0;
     await blobs.visit([...unknown], async (id, blob) => {
+      progress(`reading files: ${read++} of ${unknown.size}`);
       if (blob !== null) memory.set(id, await digestOf(blob));
     });
   }

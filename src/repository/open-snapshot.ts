@@ -22,6 +22,8 @@ export interface SnapshotOptions {
   readonly remember?: boolean;
   /** How the work is shared with other runs; without it this run does all of it. */
   readonly sharing?: Sharing | undefined;
+  /** Told how far long work has come. */
+  readonly progress?: ((text: string) => void) | undefined;
 }
 
 /** What a state holds, and where its objects are. */
@@ -45,14 +47,14 @@ export async function openSnapshot(
     const { listing, objects, ...state } = await stateOf(repository, at, aside, options.alsoUntracked ?? []);
     const { objectFormat, commonDirectory } = repository;
     const blobs = gitBlobs(await objectsOnly(aside, { ...objects, objectFormat }), objectFormat);
-    const { sharing, remember = true } = options;
+    const { sharing, remember = true, progress = () => {} } = options;
     const part = typeof sharing === 'object' ? sharing.part : undefined;
     const keeps = remember || sharing !== undefined;
     const folders = await memoryFolders(commonDirectory, sharing, remember);
     const memory = keeps ? await openDigestMemory(folders) : forgetfulMemory();
-    const values = keeps ? openValueMemory(folders, part) : forgetfulValues();
+    const values = keeps ? openValueMemory(folders, { part, progress }) : forgetfulValues(progress);
     const contentIn = (listed: Listing) =>
-      contentOf(listed, blobs, largeFilesIn(commonDirectory), memory, part);
+      contentOf(listed, blobs, largeFilesIn(commonDirectory), memory, { part, progress });
     return Object.freeze({
       at,
       ...state,

@@ -108,7 +108,7 @@ describe('values kept between runs', () => {
     const parts = [1, 2].map((number) =>
       openValueMemory(
         { own: join(folder, `${number}`), others: [join(folder, 'stoplog')] },
-        { number, of: 2 },
+        { part: { number, of: 2 } },
       ),
     );
     for (const { remember } of parts) expect(await remember(one, async () => 'computed')).toBe('rain');

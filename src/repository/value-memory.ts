@@ -11,6 +11,14 @@ export interface ValueMemory {
   save(): Promise<void>;
 }
 
+/** How values are computed. */
+interface Computing {
+  /** The share of the values that this run computes; without it, all. */
+  readonly part?: Part | undefined;
+  /** Told how far it has come. */
+  readonly progress?: ((text: string) => void) | undefined;
+}
+
 const firstLine = 'stoplog values 1';
 /** Above this those go that were not asked for longest. */
 const mostCharacters = 16 * 2 ** 20;
@@ -19,10 +27,10 @@ const mostCharacters = 16 * 2 ** 20;
  * The memory of a repository: the file `values` in each of the folders, read when first asked. A run that does a part of
  * the work computes what is its own, and throws OfAnotherPart for what is neither that nor kept.
  */
-export function openValueMemory({ own, others }: MemoryFolders, part?: Part): ValueMemory {
+export function openValueMemory({ own, others }: MemoryFolders, computing: Computing = {}): ValueMemory {
   const [file, ...more] = [own, ...others].map((folder) => join(folder, 'values')) as [string, ...string[]];
   const load = (from: string) => loadLines(from, firstLine).then(textsFromLines);
-  const { remember, asked, fresh } = valuesOver(() => Promise.all([file, ...more].map(load)), part);
+  const { remember, asked, fresh } = valuesOver(() => Promise.all([file, ...more].map(load)), computing);
   return {
     remember,
     async save() {
@@ -40,8 +48,8 @@ export function openValueMemory({ own, others }: MemoryFolders, part?: Part): Va
 }
 
 /** A memory that forgets at the end of the run. */
-export function forgetfulValues(): ValueMemory {
-  const { remember } = valuesOver(async () => []);
+export function forgetfulValues(progress?: Computing['progress']): ValueMemory {
+  const { remember } = valuesOver(async () => [], { progress });
   return { remember, save: async () => {} };
 }
 
@@ -49,7 +57,11 @@ export function forgetfulValues(): ValueMemory {
  * The values of one run over those kept before, in its own folder and in others; `fresh` holds the JSON of those that are
  * to be kept in its own, `asked` the keys in order.
  */
-function valuesOver(load: () => Promise<readonly ReadonlyMap<string, string>[]>, part?: Part) {
+function valuesOver(
+  load: () => Promise<readonly ReadonlyMap<string, string>[]>,
+  { part, progress = () => {} }: Computing,
+) {
+  let count = 0;
   const inRun = new Map<string, Promise<unknown>>();
   const fresh = new Map<string, string>();
   let kept: Promise<readonly ReadonlyMap<string, string>[]> | undefined;
@@ -65,6 +77,7 @@ function valuesOver(load: () => Promise<readonly ReadonlyMap<string, string>[]>,
   }
   async function computed(key: string, compute: () => Promise<unknown>): Promise<string> {
     if (part !== undefined && !isKeyOfPart(key, part)) throw new OfAnotherPart();
+    progress(`working out figures: ${count++} done`);
     return JSON.stringify((await compute()) ?? null);
   }
   return {

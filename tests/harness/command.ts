@@ -33,6 +33,7 @@ export async function stoplog(
     tell: (more: string) => {
       text += more;
     },
+    progress: () => {},
   };
   try {
     return { status: await runCommandLine(words, context), text, failure: null };

@@ -31,6 +31,7 @@ async function said(
       text += more;
     },
     tell: () => {},
+    progress: () => {},
   });
   expect(status).toBe(0);
   return text;

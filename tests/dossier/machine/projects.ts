@@ -34,6 +34,7 @@ async function projectOf(repository: TemporaryRepository): Promise<Project> {
     color: false,
     write: () => {},
     tell: () => {},
+    progress: () => {},
   };
   return gather(context, 'HEAD', async ({ content }) => {
     if (content === null) throw new Error('a manifest can’t be read');

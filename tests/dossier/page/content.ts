@@ -42,6 +42,7 @@ export function withContent<Result>(
     color: false,
     write: () => {},
     tell: () => {},
+    progress: () => {},
   };
   return gather(context, 'HEAD', ({ content }) => {
     if (content === null) throw new Error('the manifest can’t be read');
