@@ -17,6 +17,7 @@ import type { Verdict } from '../verdict/finding.ts';
 import { openBase } from './base.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { type Against, examine } from './examine.ts';
+import { onlyFromTop } from './only.ts';
 import { missingParts, readPart, workOnPart } from './part.ts';
 import { stoplogFiles } from './studies.ts';
 import { tellGithub } from './tell-github.ts';
@@ -71,7 +72,8 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
       if (!options.quiet) context.write(untouched(snapshot, base));
       return 0;
     }
-    const { only, phase, quiet = false } = options;
+    const { phase, quiet = false } = options;
+    const only = onlyFromTop(options.only, repository.here, snapshot);
     if (typeof sharing === 'object') {
       await workOnPart([snapshot, ...(against?.base ? [against.base] : [])], only);
       if (!quiet) context.write(partDone(sharing.part, snapshot));

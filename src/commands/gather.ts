@@ -10,6 +10,7 @@ import type { Snapshot } from '../repository/snapshot.ts';
 import type { Verdict } from '../verdict/finding.ts';
 import type { Context } from './command.ts';
 import { examineWithFacts } from './examine.ts';
+import { onlyFromTop } from './only.ts';
 import { version } from './version.ts';
 
 export interface Gathered {
@@ -35,7 +36,7 @@ export async function gather<Result>(
   try {
     const { studies, verdict } = await examineWithFacts(snapshot, {
       today: committedAt.slice(0, 10),
-      only: only === undefined ? undefined : folderOf(only, snapshot),
+      only: only === undefined ? undefined : folderOf(only, repository.here, snapshot),
     });
     const read: DossierStudy[] = [];
     for (const { facts, verdict } of studies) {
@@ -51,9 +52,9 @@ export async function gather<Result>(
 }
 
 /** A dossier is of whole studies, never of single records. */
-function folderOf(only: string, { entries }: Snapshot): string {
-  const folder = only.replace(/^\.\//, '').replace(/\/+$/, '');
-  const folders = discoverManifests(entries.keys()).map((manifest) => manifest.folder || '.');
+function folderOf(only: string, here: string, snapshot: Snapshot): string {
+  const folder = onlyFromTop(only, here, snapshot);
+  const folders = discoverManifests(snapshot.entries.keys()).map((manifest) => manifest.folder || '.');
   if (folders.includes(folder)) return folder;
   throw new Failure(
     'usage',

@@ -2,6 +2,7 @@ import { lstat, realpath } from 'node:fs/promises';
 import { dirname, join, relative } from 'node:path';
 import { evidenceFor } from '../facts/evidence.ts';
 import { Failure } from '../failure.ts';
+import { discoverManifests, governing } from '../manifest/discover.ts';
 import { makeSeals } from '../records/make-seals.ts';
 import { writeSealsFile } from '../records/seals-file.ts';
 import { sealReport } from '../reports/seal.ts';
@@ -12,8 +13,8 @@ import type { Context, ExitStatus } from './command.ts';
 import { contradictionsIn } from './contradictions.ts';
 import { withFigures } from './figures.ts';
 import { mended } from './mended.ts';
-import { choose, pathOf } from './only.ts';
-import { readStudies, type Study, stoplogFiles } from './studies.ts';
+import { choose, onlyFromTop, pathOf } from './only.ts';
+import { readStudies, type Study, stoplogFiles, type Unread } from './studies.ts';
 import { writeFileSafely } from './write-file.ts';
 
 export interface SealOptions {
@@ -35,7 +36,9 @@ export async function sealCommand(
   const person = await repository.identity();
   const snapshot = await openSnapshot(repository, { kind: 'worktree' }, { alsoUntracked: stoplogFiles });
   try {
-    const read = await readOne(snapshot, names, options.only);
+    const every = await readStudies(snapshot);
+    const { studies } = choose(every, onlyFromTop(options.only, repository.here, snapshot));
+    const read = theOne(studies, names, repository.here);
     const { all = false, figures = false, moved: follow = false } = options;
     const asked = (record: string): boolean =>
       all || names.some((name) => record === name || record.startsWith(`${name}.`));
@@ -68,7 +71,8 @@ export async function sealCommand(
     const { today } = context;
     const sealed = plan.sealed.map(({ record }) => record);
     const contradictions = await contradictionsIn(sealed, study, snapshot, today);
-    const outcome = { plan, healed, moved, figures: newFigures, contradictions, written, person, today };
+    const of = every.length > 1 ? study.manifest.path : null;
+    const outcome = { of, plan, healed, moved, figures: newFigures, contradictions, written, person, today };
     context.write(sealReport(outcome));
     return plan.refused.length > 0 ? 1 : 0;
   } finally {
@@ -106,14 +110,8 @@ function topOf({ top, gitDirectory }: Repository): string {
   );
 }
 
-/** The one manifest that is meant. Several need `--only`, unless the names fit one of them alone. */
-async function readOne(
-  snapshot: Snapshot,
-  names: readonly string[],
-  only: string | undefined,
-): Promise<Study> {
-  const all = await readStudies(snapshot);
-  const { studies } = choose(all, only);
+/** The one manifest that is meant: whose records the names fit and, of several such, the one that governs the folder `here`. */
+function theOne(studies: readonly (Study | Unread)[], names: readonly string[], here: string): Study {
   const fitting = studies.filter(
     (study) =>
       'problems' in study ||
@@ -122,12 +120,14 @@ async function readOne(
         [...study.records.nodes.keys()].some((id) => id === name || id.startsWith(`${name}.`)),
       ),
   );
-  const [study] = fitting.length === 1 ? fitting : studies;
-  if (study === undefined || (fitting.length !== 1 && studies.length > 1)) {
+  const meant = fitting.length > 0 ? fitting : studies;
+  const governor = governing(`${here}/`, discoverManifests(studies.map(pathOf)));
+  const study = meant.length === 1 ? meant[0] : meant.find((one) => pathOf(one) === governor?.path);
+  if (study === undefined) {
     throw new Failure(
       'usage',
       'this repository holds several manifests, and it is not plain whose records are meant.',
-      `Add --only with the folder of one of them: ${studies.map(pathOf).join(', ')}.`,
+      `Go into the folder of one of them, or add --only with it: ${studies.map(pathOf).join(', ')}.`,
     );
   }
   if ('problems' in study) {

@@ -24,6 +24,8 @@ export interface Contradiction {
 }
 
 export interface SealOutcome {
+  /** The manifest, where the repository holds others too. */
+  readonly of: string | null;
   readonly plan: SealPlan;
   readonly healed: readonly HealedRecord[];
   readonly moved: FollowedMoves;
@@ -40,7 +42,7 @@ const indent = ' '.repeat(5);
 
 /** What a `seal` did, what it refused and why, and what to stage. */
 export function sealReport(outcome: SealOutcome): string {
-  const { plan, healed, moved, figures, contradictions, written, person, today } = outcome;
+  const { of, plan, healed, moved, figures, contradictions, written, person, today } = outcome;
   const lines = [
     ...titled('HEALED after a merge', healed.map(healedLine)),
     ...titled('MOVED, with who sealed it and when', [
@@ -70,9 +72,10 @@ export function sealReport(outcome: SealOutcome): string {
       plan.refused.flatMap(({ record, message, next }) => [record, ...indented(message), ...indented(next)]),
     ),
   ];
-  if (lines.length === 0) return 'Nothing to do: what was asked for is sealed, and unchanged since.\n';
+  const head = of === null ? '' : `Records of ${plain(of)}\n\n`;
+  if (lines.length === 0) return `${head}Nothing to do: what was asked for is sealed, and unchanged since.\n`;
   if (written.length > 0) lines.push('', `To stage   git add ${written.map(shellPath).join(' ')}`);
-  return `${lines.slice(lines[0] === '' ? 1 : 0).join('\n')}\n`;
+  return `${head}${lines.slice(lines[0] === '' ? 1 : 0).join('\n')}\n`;
 }
 
 function titled(title: string, items: readonly string[]): readonly string[] {

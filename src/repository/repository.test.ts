@@ -22,8 +22,9 @@ const open = (cwd: string, more: NodeJS.ProcessEnv = {}) =>
 describe('openRepository', () => {
   it('finds the top and the git directory from any folder below', async () => {
     const git = join(repository.folder, '.git');
-    for (const cwd of [repository.folder, join(repository.folder, 'sub')]) {
-      expect(await open(cwd)).toMatchObject({
+    for (const here of ['', 'sub']) {
+      expect(await open(join(repository.folder, here))).toMatchObject({
+        here,
         ...{
           cwd: repository.folder,
           top: repository.folder,
@@ -39,7 +40,7 @@ describe('openRepository', () => {
 
   it('finds the top through a link into the repository', async () => {
     await symlink(join(repository.folder, 'sub'), join(folder, 'link'));
-    expect((await open(join(folder, 'link'))).top).toBe(repository.folder);
+    expect(await open(join(folder, 'link'))).toMatchObject({ top: repository.folder, here: 'sub' });
   });
 
   it('makes paths absolute that git gave relative to a hook', async () => {
@@ -85,6 +86,7 @@ describe('openRepository', () => {
     const bare = join(folder, 'bare.git');
     expect(await open(bare)).toMatchObject({
       top: null,
+      here: '',
       bare: true,
       cwd: bare,
     });

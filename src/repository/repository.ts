@@ -1,5 +1,5 @@
 import { realpathSync } from 'node:fs';
-import { resolve } from 'node:path';
+import { relative, resolve, sep } from 'node:path';
 import { Failure } from '../failure.ts';
 import { ask, gitEnvironment, type Place, type Question, startFailure } from './git.ts';
 import type { ObjectFormat } from './object-id.ts';
@@ -8,6 +8,8 @@ import type { ObjectFormat } from './object-id.ts';
 export interface Repository extends Place {
   /** Top of the work tree; null in a bare repository, or inside the git directory. */
   readonly top: string | null;
+  /** The folder that asked, from the top with `/`; empty at the top, and where there is none. */
+  readonly here: string;
   readonly bare: boolean;
   /** Cut-off history: `git clone --depth`. */
   readonly shallow: boolean;
@@ -93,7 +95,9 @@ export async function openRepository(cwd: string, environment: NodeJS.ProcessEnv
   const asked = { cwd, environment: gitEnvironment(environment) };
   const { bare, shallow, objectFormat, folders, up } = await ask(asked, layout);
   const [gitDirectory, commonDirectory, objectsFolder, indexFile] = folders;
-  const top = up === null ? null : resolve(physical(asked), up);
+  const folder = physical(asked);
+  const top = up === null ? null : resolve(folder, up);
+  const here = top === null ? '' : relative(top, folder).replaceAll(sep, '/');
   const absolute = {
     GIT_DIR: gitDirectory,
     GIT_COMMON_DIR: commonDirectory,
@@ -108,7 +112,7 @@ export async function openRepository(cwd: string, environment: NodeJS.ProcessEnv
   };
   return Object.freeze({
     ...place,
-    ...{ top, bare, shallow, objectFormat },
+    ...{ top, here, bare, shallow, objectFormat },
     ...{ gitDirectory, commonDirectory, objectsFolder, indexFile },
     async identity() {
       const person = await ask(place, committer);

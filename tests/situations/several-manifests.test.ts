@@ -2,6 +2,7 @@ import { cp, mkdir } from 'node:fs/promises';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { check, stoplog } from '../harness/command.ts';
+import { gitIn } from '../harness/repository.ts';
 import { moreRain, type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
 
 let project: SoundRepository;
@@ -105,6 +106,55 @@ describe('two models in one repository', () => {
     const { blocks } = await byManifest();
     expect(blocks[`${lower}/stoplog.yaml`]).not.toContain('seal.stale inputs.check-gauge');
     expect(blocks[`${upper}/stoplog.yaml`]).toContain('seal.stale inputs.check-gauge');
+  });
+
+  it('are sealed where somebody stands, and said so', async () => {
+    await project.edit(`${upper}/data/check.csv`, moreRain('2005-01-01'));
+    await project.edit(`${lower}/data/check.csv`, moreRain('2005-01-01'));
+    const within = join(project.folder, lower, 'data');
+    const sealed = await stoplog(within, ['seal', 'inputs.check-gauge']);
+    expect(sealed.text).toMatch(/^Records of models\/lower\/stoplog\.yaml\n\nSEALED by/);
+    expect(sealed.text).toContain('To stage   git add ../stoplog.seals.json');
+    const { blocks } = await byManifest();
+    expect(blocks[`${lower}/stoplog.yaml`]).not.toContain('seal.stale inputs.check-gauge');
+    expect(blocks[`${upper}/stoplog.yaml`]).toContain('seal.stale inputs.check-gauge');
+    // A record that only the other one has.
+    await project.edit(`${upper}/stoplog.yaml`, (text) => text.replaceAll('check-gauge', 'upper-gauge'));
+    const other = await stoplog(within, ['seal', 'inputs.upper-gauge']);
+    expect(other.text).toMatch(/^Records of models\/upper\/stoplog\.yaml\n/);
+  });
+
+  it('are named from where somebody stands, or from the top; the report is the same', async () => {
+    const json = async (at: string, only: string) =>
+      (await stoplog(join(project.folder, at), ['check', '--report', 'json', '--only', only])).text;
+    await project.edit(`${lower}/data/check.csv`, moreRain('2005-01-01'));
+    const expected = await json('', lower);
+    expect(JSON.parse(expected).manifests).toHaveLength(1);
+    for (const [at, only] of [
+      [lower, '.'],
+      [`${lower}/data`, '.'],
+      [`${lower}/data`, '..'],
+      ['models', 'lower'],
+      [upper, '../lower/'],
+      [upper, lower],
+      [lower, 'stoplog.yaml'],
+    ] as const)
+      expect([at, only, await json(at, only)]).toEqual([at, only, expected]);
+    expect(JSON.parse(await json('', '.')).manifests).toHaveLength(2);
+    expect(JSON.parse(await json(lower, 'inputs')).manifests).toHaveLength(2);
+    for (const only of ['../../..', '']) {
+      const outside = await stoplog(join(project.folder, lower), ['check', '--only', only]);
+      expect(outside.failure).toMatchObject({ code: 'usage' });
+    }
+  });
+
+  it('a command to type for git works in a folder below', async () => {
+    await project.git('rm', '--quiet', '--cached', `${lower}/data/check.csv`);
+    const within = join(project.folder, lower, 'data');
+    const { text } = await stoplog(within, ['check', '--only', '.']);
+    const [, ...words] = /to clear +(git add \S+)/.exec(text)?.[1]?.split(' ') ?? [];
+    await gitIn(within)(...words);
+    expect(await project.git('ls-files', lower)).toContain(`${lower}/data/check.csv`);
   });
 
   it('one that a change takes away is missed', async () => {
