@@ -55,7 +55,7 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
   const reports = (options.report ?? ['text']).map(readReport);
   const sharing = readSharing(options);
   const repository = await openRepository(context.cwd, context.environment);
-  const opening = { remember: options.cache, sharing };
+  const opening = { remember: options.cache, sharing, progress: context.progress };
   const snapshot = await openSnapshot(repository, readAt(options.at), {
     ...opening,
     alsoUntracked: stoplogFiles,

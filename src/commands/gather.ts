@@ -32,7 +32,8 @@ export async function gather<Result>(
   const repository = await openRepository(context.cwd, context.environment);
   const commit = await repository.resolve(revision);
   const committedAt = await ask(repository, commitDate(commit));
-  const snapshot = await openSnapshot(repository, { kind: 'revision', revision: commit });
+  const at = { kind: 'revision', revision: commit } as const;
+  const snapshot = await openSnapshot(repository, at, { progress: context.progress });
   try {
     const { studies, verdict } = await examineWithFacts(snapshot, {
       today: committedAt.slice(0, 10),

@@ -34,7 +34,11 @@ export async function sealCommand(
   const repository = await openRepository(context.cwd, context.environment);
   const top = topOf(repository);
   const person = await repository.identity();
-  const snapshot = await openSnapshot(repository, { kind: 'worktree' }, { alsoUntracked: stoplogFiles });
+  const snapshot = await openSnapshot(
+    repository,
+    { kind: 'worktree' },
+    { alsoUntracked: stoplogFiles, progress: context.progress },
+  );
   try {
     const every = await readStudies(snapshot);
     const { studies } = choose(every, onlyFromTop(options.only, repository.here, snapshot));
