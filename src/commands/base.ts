@@ -11,15 +11,20 @@ export async function openBase(
   asked: string,
   snapshot: Snapshot,
   opening: Pick<SnapshotOptions, 'remember' | 'sharing'>,
-): Promise<Pick<Against, 'base' | 'unavailable'>> {
+): Promise<Omit<Against, 'asked' | 'strict'>> {
   const parting = await partingFrom(repository, asked, snapshot.commit);
-  if ('unavailable' in parting) return { base: null, unavailable: parting.unavailable };
+  if ('unavailable' in parting) return { base: null, crossed: false, unavailable: parting.unavailable };
   try {
-    const at = { kind: 'revision', revision: parting.commit } as const;
-    return { base: await openSnapshot(repository, at, opening), unavailable: null };
+    const { commit, crossed } = parting;
+    const base = await openSnapshot(repository, { kind: 'revision', revision: commit }, opening);
+    return { base, crossed, unavailable: null };
   } catch (error) {
     if (!(error instanceof Failure)) throw error;
     const whole = 'A clone that lacks older content needs it fetched: git fetch --refetch --no-filter.';
-    return { base: null, unavailable: `The base could not be read: ${error.message} ${whole}` };
+    return {
+      base: null,
+      crossed: false,
+      unavailable: `The base could not be read: ${error.message} ${whole}`,
+    };
   }
 }

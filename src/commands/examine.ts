@@ -10,6 +10,7 @@ import { runFileRules, runRules } from '../rules/run.ts';
 import { againstBase, type Judged } from '../verdict/against-base.ts';
 import type { Comparison, ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { concludeVerdict, judgeManifest, judgeUnread } from '../verdict/judge.ts';
+import { formerly, formerPaths } from './former.ts';
 import { type Chosen, choose, pathOf } from './only.ts';
 import { readStudies, type Study, type Unread } from './studies.ts';
 
@@ -25,6 +26,8 @@ export interface ExamineOptions {
 export interface Against extends Pick<Comparison, 'asked' | 'strict' | 'unavailable'> {
   /** The state of the base; null where there is none to be had. */
   readonly base: Snapshot | null;
+  /** Whether it is one of several from which the two histories could be said to part. */
+  readonly crossed: boolean;
 }
 
 const known: KnownRules = knownRules();
@@ -52,15 +55,24 @@ export async function examineWithFacts(snapshot: Snapshot, options: ExamineOptio
   const chosen = choose(all, only);
   const base = against?.base ?? null;
   const before = base === null ? [] : await examineBase(base, options);
-  // What this state is compared with takes the place of the commit that it follows.
-  const seen = base === null ? snapshot : { ...snapshot, readBefore: (path: string) => base.read(path) };
+  const former = formerPaths(
+    new Map(all.map((study) => [pathOf(study), 'problems' in study ? null : study.manifest])),
+    before.flatMap(({ facts }) => facts?.manifest ?? []),
+  );
   const studies: ExaminedStudy[] = [];
   for (const study of chosen.studies) {
+    const path = pathOf(study);
+    const was = former.get(path) ?? path;
+    // What this state is compared with takes the place of the commit that it follows.
+    const seen =
+      base === null
+        ? snapshot
+        : { ...snapshot, readBefore: (file: string) => base.read(formerly(file, path, was)) };
     const examined =
       'problems' in study
         ? { facts: null, verdict: judgeUnread(runFileRules(rules, study), study.path) }
         : await examineStudy(study, all, seen, chosen, options);
-    const same = before.find(({ verdict }) => verdict.path === examined.verdict.path);
+    const same = before.find(({ verdict }) => verdict.path === was);
     studies.push(
       same === undefined
         ? examined
@@ -68,7 +80,7 @@ export async function examineWithFacts(snapshot: Snapshot, options: ExamineOptio
     );
   }
   const comparison =
-    against === undefined ? null : compared(against, before, only === undefined ? all : null);
+    against === undefined ? null : compared(against, before, only === undefined ? all : null, former);
   const manifests = studies.map(({ verdict }) => verdict);
   return { studies, verdict: concludeVerdict(snapshot.label, base?.label ?? null, manifests, comparison) };
 }
@@ -93,19 +105,27 @@ function judged({ facts, verdict }: ExaminedStudy): Judged {
 
 /** `all` is null where only some of what is there was asked about. */
 function compared(
-  { asked, strict, unavailable, base }: Against,
+  { asked, strict, unavailable, base, crossed }: Against,
   before: readonly ExaminedStudy[],
   all: readonly (Study | Unread)[] | null,
+  former: ReadonlyMap<string, string>,
 ): Comparison {
+  const moved = [...former].map(([path, was]) => `${path} is compared with ${was} of ${base?.label}.`);
+  const others = crossed
+    ? [
+        `${asked} and this were merged crosswise and have several newest commits in common. This is compared with ${base?.label} alone; what only another of them brought counts as new. Merge ${asked} into this to have one again.`,
+      ]
+    : [];
+  const followed = new Set(former.values());
   const notes = before.flatMap(({ facts, verdict: { path } }) => [
-    ...(all === null || all.some((study) => pathOf(study) === path)
+    ...(all === null || followed.has(path) || all.some((study) => pathOf(study) === path)
       ? []
       : [`${path} is gone since ${base?.label}: the model that it governed is no longer checked.`]),
     ...(facts === null
       ? [`${path} could not be read in ${base?.label}, so all that is found in it counts as new.`]
       : []),
   ]);
-  return { asked, strict, unavailable, notes };
+  return { asked, strict, unavailable, notes: [...others, ...moved, ...notes] };
 }
 
 async function examineStudy(

@@ -3,14 +3,20 @@ import { ask, type Question } from './git.ts';
 import type { Repository } from './repository.ts';
 
 /** The commit at which two histories parted, or why none was found and what to do; whole sentences. */
-export type Parting = { readonly commit: string } | { readonly unavailable: string };
+export type Parting =
+  | {
+      readonly commit: string;
+      /** Whether it is one of several, since the histories were merged crosswise. */
+      readonly crossed: boolean;
+    }
+  | { readonly unavailable: string };
 
-/** The newest commit that both have, the first of them where a criss-cross of merges has several; null where they share none. */
-export function mergeBase(one: string, other: string): Question<string | null> {
+/** The newest commits that both have: one, several after a criss-cross of merges, or none. */
+export function mergeBases(one: string, other: string): Question<readonly string[]> {
   return {
-    args: ['merge-base', one, other],
+    args: ['merge-base', '--all', one, other],
     statuses: [1],
-    parse: (output, status) => (status === 0 ? output.toString('latin1').trim() : null),
+    parse: (output) => output.toString('latin1').split('\n').slice(0, -1),
   };
 }
 
@@ -29,8 +35,8 @@ export async function partingFrom(
   });
   if (named instanceof Failure) return { unavailable: `${named.message} ${named.next}` };
   if (commit === null) return { unavailable: 'There is no commit here yet that could have left the base.' };
-  const found = await ask(repository, mergeBase(named, commit));
-  if (found !== null) return { commit: found };
+  const [first, ...more] = await ask(repository, mergeBases(named, commit));
+  if (first !== undefined) return { commit: first, crossed: more.length > 0 };
   return {
     unavailable: repository.shallow
       ? `Where this left ${base} lies beyond the newest commits, and only those were fetched. Fetch the rest (git fetch --unshallow; in CI, fetch depth 0) and try again.`

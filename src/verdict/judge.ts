@@ -27,7 +27,7 @@ export function judgeManifest(
   const findings = raised.map(({ rule, draft }): Finding => {
     const position = facts.manifest.position(draft.field ?? facts.record(draft.record)?.field ?? []);
     return {
-      ...common({ rule, draft }),
+      ...common({ rule, draft }, facts.manifest.folder),
       level: levelOf(rule, draft, phase, departed.get(rule.id)),
       file: draft.file ?? facts.manifest.path,
       line: draft.file === undefined ? position.line : (draft.line ?? 1),
@@ -57,7 +57,7 @@ export function judgeManifest(
 export function judgeUnread(raised: readonly Raised[], path: string): ManifestVerdict {
   const findings = raised.map(
     ({ rule, draft }): Finding => ({
-      ...common({ rule, draft }),
+      ...common({ rule, draft }, ''),
       level: 'block',
       file: path,
       line: draft.line ?? 1,
@@ -121,7 +121,7 @@ export function counts(finding: Finding, comparison: Comparison | null): boolean
 
 type Placed = 'level' | 'file' | 'line' | 'column' | 'waived' | 'accepted';
 
-function common({ rule, draft }: Raised): Omit<Finding, Placed> {
+function common({ rule, draft }: Raised, folder: string): Omit<Finding, Placed> {
   return {
     rule: rule.id,
     record: draft.record,
@@ -134,8 +134,13 @@ function common({ rule, draft }: Raised): Omit<Finding, Placed> {
     source: rule.source.citation,
     clear: draft.clear ?? rule.clear,
     standing: false,
-    fingerprint: fingerprint(rule.id, draft.record, draft.subject ?? ''),
+    fingerprint: fingerprint(rule.id, draft.record, fromFolder(folder, draft.subject ?? '')),
   };
+}
+
+/** Files in a subject are named from the manifest's folder, so that findings of a model that moves stay the same. */
+function fromFolder(folder: string, subject: string): string {
+  return folder === '' ? subject : ` ${subject}`.replaceAll(` ${folder}/`, ' ').slice(1);
 }
 
 const levels: readonly Level[] = ['block', 'warn', 'note'];

@@ -1,4 +1,4 @@
-import { mkdtemp, realpath, rm } from 'node:fs/promises';
+import { mkdir, mkdtemp, realpath, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, describe, expect, it } from 'vitest';
@@ -183,6 +183,93 @@ describe('what a change answers for', () => {
     const begun = await check(project.folder, '--at', 'HEAD', '--base', 'empty');
     expect(begun.status).toBe(1);
     expect(begun.verdict).toMatchObject({ base: expect.any(String), totals: { standing: 0, cured: 0 } });
+  });
+});
+
+describe('a base that is less simple', () => {
+  const commits = (...words: string[]) => project.git('commit', '--quiet', '--all', ...words);
+  const faultIn = async (table: string) => {
+    await project.edit(`data/${table}.csv`, moreRain('2005-01-01'));
+    await commits('-m', table);
+  };
+
+  it('is the same state: all stands', async () => {
+    await legacyRepository();
+    const compared = await check(project.folder, ...againstMain);
+    expect(compared.status).toBe(0);
+    expect(compared.verdict.totals).toMatchObject({ block: 0, warn: 0, note: 0, cured: 0 });
+  });
+
+  it('is the target of a pull request, and what is checked is the merge that the host made of both', async () => {
+    await legacyRepository();
+    await project.write('notes.txt', 'Gauge visited.\n');
+    await project.commit();
+    await project.git('checkout', '--quiet', 'main');
+    await faultIn('check');
+    const merged = async () => {
+      await project.git('checkout', '--quiet', '--detach', 'main');
+      await project.git('merge', '--quiet', '-m', 'Pull request', 'change');
+      return check(project.folder, ...againstMain);
+    };
+    const sound = await merged();
+    expect(sound.verdict.base).toBe((await project.git('rev-parse', '--short=7', 'main')).trim());
+    expect(sound.finding('seal.stale', 'inputs.check-gauge').standing).toBe(true);
+    expect(sound.status).toBe(0);
+
+    await project.git('checkout', '--quiet', 'change');
+    await faultIn('flow');
+    const faulty = await merged();
+    expect(faulty.finding('seal.stale', 'inputs.check-gauge').standing).toBe(true);
+    expect(faulty.finding('seal.stale', 'inputs.streamflow').standing).toBe(false);
+    expect(faulty.status).toBe(1);
+  });
+
+  it('is one of several after a criss-cross of merges, which is said', async () => {
+    project = await soundRepository();
+    await project.git('branch', 'change');
+    await faultIn('check');
+    await project.git('checkout', '--quiet', 'change');
+    await faultIn('flow');
+    const [one, two] = [await project.git('rev-parse', 'main'), await project.git('rev-parse', 'change')];
+    for (const [branch, other] of [['main', two] as const, ['change', one] as const]) {
+      await project.git('checkout', '--quiet', branch);
+      await project.git('merge', '--quiet', '-m', 'Crossed', other.trim());
+    }
+    const crossed = await check(project.folder, ...againstMain);
+    const stands = ['check-gauge', 'streamflow'].map(
+      (input) => crossed.finding('seal.stale', `inputs.${input}`).standing,
+    );
+    expect(stands.sort()).toEqual([false, true]);
+    expect(crossed.status).toBe(1);
+    expect(crossed.verdict.comparison?.notes).toEqual([
+      expect.stringMatching(/^main and this were merged crosswise.*Merge main into this/),
+    ]);
+    await project.git('merge', '--quiet', '-m', 'Once more', 'main');
+    expect(await check(project.folder, ...againstMain)).toMatchObject({
+      status: 0,
+      verdict: { comparison: { notes: [] } },
+    });
+  });
+
+  it('is followed where the model was moved to another folder', async () => {
+    await legacyRepository();
+    const names = (await project.git('ls-tree', '--name-only', 'HEAD')).trim().split('\n');
+    await mkdir(join(project.folder, 'models/harrow'), { recursive: true });
+    await project.git('mv', ...names, 'models/harrow');
+    await project.commit();
+    const moved = await check(project.folder, ...againstMain);
+    expect(moved.status).toBe(0);
+    expect(moved.verdict.totals).toMatchObject({ block: 0, cured: 0 });
+    const base = (await project.git('rev-parse', '--short=7', 'main')).trim();
+    expect(moved.verdict.comparison?.notes).toEqual([
+      `models/harrow/stoplog.yaml is compared with stoplog.yaml of ${base}.`,
+    ]);
+
+    await project.edit('models/harrow/stoplog.yaml', (text) =>
+      text.replace('phase: application', 'phase: setup'),
+    );
+    await project.commit();
+    expect((await check(project.folder, ...againstMain)).found[0]).toBe('manifest.loosened manifest');
   });
 });
 
