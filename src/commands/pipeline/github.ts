@@ -22,7 +22,7 @@ const memory = (version: string) => `        with:
 const compared = `          # A first push has no base: git writes it as zeros, and the whole state is checked.
           case "$BASE" in *[!0]*) set -- --base "$BASE" ;; *) set -- ;; esac
 `;
-const base = `          BASE: \${{ github.event.pull_request.base.sha || github.event.before }}
+const base = `          BASE: \${{ github.base_ref && format('origin/{0}', github.base_ref) || github.event.before }}
 `;
 
 /** A job that does one part of the work in each run of its matrix. */
@@ -97,6 +97,8 @@ ${inParts(gathers)}    runs-on: ubuntu-latest
     timeout-minutes: 30
     permissions:
       contents: read
+    outputs:
+      verdict: \${{ steps.check.outputs.verdict }}
     steps:
 ${state}      - name: What Stoplog remembers of unchanged files
         uses: actions/cache@v4
@@ -123,7 +125,7 @@ ${inParts(placeParts)}${compared}          npx --yes stoplog@${version} check --
           if-no-files-found: ignore
   code-scanning:
     needs: records
-    if: \${{ !cancelled() && !github.event.repository.private && !github.event.pull_request.head.repo.fork }}
+    if: \${{ !cancelled() && needs.records.outputs.verdict != '' && !github.event.repository.private && !github.event.pull_request.head.repo.fork }}
     runs-on: ubuntu-latest
     timeout-minutes: 10
     permissions:
@@ -133,7 +135,7 @@ ${inParts(placeParts)}${compared}          npx --yes stoplog@${version} check --
         with:
           name: stoplog-reports
           path: stoplog-reports
-      - uses: github/codeql-action/upload-sarif@v3
+      - uses: github/codeql-action/upload-sarif@v4
         with:
           sarif_file: stoplog-reports/findings.sarif
           category: stoplog

@@ -23,8 +23,9 @@ const safe = `    # The clone belongs to another user than this job's.
 `;
 
 /** The words by which `check` compares, or none. */
-const compared = `      # A first push has no base: git writes it as zeros, and the whole state is checked.
-      base="\${CI_MERGE_REQUEST_DIFF_BASE_SHA:-$CI_COMMIT_BEFORE_SHA}"
+const compared = `      # Where GitLab merges before it checks, the base is what it merged with. A first push has none: git writes it as
+      # zeros, and the whole state is checked.
+      base="\${CI_MERGE_REQUEST_TARGET_BRANCH_SHA:-\${CI_MERGE_REQUEST_DIFF_BASE_SHA:-$CI_COMMIT_BEFORE_SHA}}"
       case "$base" in *[!0]*) set -- --base "$base" ;; *) set -- ;; esac
 `;
 
