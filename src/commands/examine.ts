@@ -74,7 +74,8 @@ export async function examineWithFacts(snapshot: Snapshot, options: ExamineOptio
         : await examineStudy(study, all, seen, chosen, options);
     const same = before.find(({ verdict }) => verdict.path === was);
     studies.push(
-      same === undefined
+      // Of a manifest that can't be read nothing is known, so nothing of it is cured.
+      same === undefined || examined.facts === null
         ? examined
         : { ...examined, verdict: againstBase(judged(examined), judged(same), chosen.includes) },
     );

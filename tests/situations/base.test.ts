@@ -113,8 +113,21 @@ describe('a repository with forty findings', () => {
   it('stays passed when lines move and reasons are reworded', async () => {
     await legacyRepository();
     await project.edit('stoplog.yaml', (text) => `# Moved down\n# by two lines.\n${text}`);
+    await project.edit('stoplog.yaml', (text) =>
+      text.replaceAll('rain differs little', 'rain hardly differs'),
+    );
     await project.commit();
-    expect((await check(project.folder, ...againstMain)).status).toBe(0);
+    const reworded = await check(project.folder, ...againstMain);
+    expect(reworded.finding('seal.reworded', 'setup').standing).toBe(false);
+    expect(reworded.verdict.totals).toMatchObject({ block: 0, cured: 0 });
+  });
+
+  it('has nothing cured by a manifest that can’t be read any more', async () => {
+    await legacyRepository();
+    await project.write('stoplog.yaml', 'stoplog: 1\nstudy: [\n');
+    await project.commit();
+    const broken = await check(project.folder, ...againstMain);
+    expect(broken.verdict).toMatchObject({ verdict: 'blocked', totals: { standing: 0, cured: 0 } });
   });
 });
 
