@@ -1,5 +1,5 @@
 import { type ChildProcess, execFile, execFileSync, spawn } from 'node:child_process';
-import { mkdir, mkdtemp, readdir, realpath, rm, symlink } from 'node:fs/promises';
+import { mkdir, mkdtemp, readdir, realpath, rm, symlink, writeFile } from 'node:fs/promises';
 import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import { delimiter, join, resolve } from 'node:path';
@@ -145,6 +145,34 @@ describe('a push over file://', () => {
     expect((await push('--force', 'main:side')).words).toMatch(faulty);
     expect((await push('--force', `${start}:side`)).accepted).toBe(true);
     expect(await gitIn(server)('rev-parse', 'side')).toBe(`${start}\n`);
+  });
+
+  it('first meets the hook that was there before, with the same input and objects', async () => {
+    server = join(place, 'served/model.git');
+    await project.git('clone', '--quiet', '--bare', project.folder, server);
+    const hook =
+      '#!/bin/sh\ninput=$(cat)\necho "$input"\nset -- $input\ngit cat-file -t "$2"\n[ ! -e refuse ]\n';
+    await writeFile(join(server, 'hooks/pre-receive'), hook, { mode: 0o755 });
+    await stoplog(server, ['hook', 'add', '--for', 'pre-receive']);
+    const old = (await project.git('rev-parse', 'HEAD')).trim();
+    await commitNote();
+    await project.git('tag', 'delivered');
+    await writeFile(join(server, 'refuse'), '');
+    const before = await stateOfServer();
+    const refused = await push('main', 'delivered');
+    const now = (await project.git('rev-parse', 'HEAD')).trim();
+    expect(refused.words).toMatch(
+      new RegExp(
+        `remote: ${old} ${now} refs/heads/main *\nremote: 0{40} ${now} refs/tags/delivered *\nremote: commit`,
+      ),
+    );
+    expect(refused.words).not.toContain('PASS');
+    expect(await stateOfServer()).toEqual(before);
+    await rm(join(server, 'refuse'));
+    expect(await push('main', 'delivered')).toMatchObject({
+      accepted: true,
+      words: expect.stringMatching(/refs\/heads\/main[\s\S]*PASS/),
+    });
   });
 
   it('into an empty repository is checked whole', async () => {
