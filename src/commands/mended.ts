@@ -1,5 +1,5 @@
 import { posix } from 'node:path';
-import { takeVersions, type Versions } from '../records/conflict.ts';
+import { conflictLine, takeVersions, type Versions } from '../records/conflict.ts';
 import { type FollowedMoves, followMoves } from '../records/follow-moves.ts';
 import { type HealedRecord, healSeals, recoverSeals } from '../records/heal.ts';
 import type { SealsFile } from '../records/seal.ts';
@@ -21,7 +21,7 @@ export interface Mended {
   readonly moved: FollowedMoves;
 }
 
-const nothingMoved: FollowedMoves = { seals: new Map(), files: [], records: [], ambiguous: [] };
+export const nothingMoved: FollowedMoves = { seals: new Map(), files: [], records: [], ambiguous: [] };
 
 /** A study whose seals are whole again after a merge and, where asked for, follow what was renamed. */
 export async function mended(
@@ -31,9 +31,8 @@ export async function mended(
   snapshot: Snapshot,
 ): Promise<Mended> {
   const { path, faults } = study.sealsFile;
-  const versions = faults.some(({ kind }) => kind === 'conflict')
-    ? await versionsOf(path, repository, snapshot)
-    : null;
+  const isTorn = faults.some(({ kind }) => kind === 'conflict' || kind === 'not-json');
+  const versions = isTorn ? await versionsOf(path, repository, snapshot) : null;
   const healed = versions === null ? null : healSeals(versions, study.records);
   const whole = healed === null ? study : withSeals(study, healed);
   const recovered = await recovery(whole, repository, snapshot);
@@ -60,17 +59,30 @@ function withSeals(study: Study, changed: Pick<SealsFile, 'seals'> & Partial<Sea
   return { ...study, sealsFile, standings: judgeStandings(study.records, sealsFile) };
 }
 
-/** From the index, where git keeps whole versions; else from the markers in the text. */
+/**
+ * From the index, where git keeps whole versions; else from the markers in the text; else, where these were torn, from the commits
+ * that were merged. Null where there is nothing to put together.
+ */
 async function versionsOf(
   path: string,
   repository: Repository,
   snapshot: Snapshot,
 ): Promise<Versions | null> {
   const sides = await conflictSides(repository, path, snapshot);
-  const ours = textOf(sides?.ours ?? null);
-  const theirs = textOf(sides?.theirs ?? null);
-  if (ours !== null && theirs !== null) return { base: textOf(sides?.base ?? null), ours, theirs };
-  return takeVersions(textOf(await snapshot.read(path)) ?? '');
+  const staged = { ours: textOf(sides?.ours ?? null), theirs: textOf(sides?.theirs ?? null) };
+  if (staged.ours !== null && staged.theirs !== null) return { ...staged, base: textOf(sides?.base ?? null) };
+  const text = textOf(await snapshot.read(path)) ?? '';
+  const marked = conflictLine(text) === null ? null : takeVersions(text);
+  if (marked !== null && isWhole(marked.ours) && isWhole(marked.theirs)) return marked;
+  const merged = await mergedVersions(path, repository, snapshot);
+  const [ours, theirs] = ['ours', 'theirs'].map(
+    (side) => merged.find((one) => one.side === side)?.text ?? null,
+  );
+  return isWhole(ours) && isWhole(theirs) ? { base: null, ours, theirs } : marked;
+}
+
+function isWhole(text: string | null | undefined): text is string {
+  return typeof text === 'string' && readSealsFile('', text).faults.every(({ record }) => record !== null);
 }
 
 /** Where a conflict was settled by taking one side of the file, the seals of the other are still in its commit. */
@@ -80,20 +92,37 @@ async function recovery(
   snapshot: Snapshot,
 ): Promise<readonly HealedRecord[]> {
   if ([...standings.values()].every(({ state }) => state === 'sealed')) return [];
-  const sides: ['ours' | 'theirs', SealsFile][] = [];
+  const merged = await mergedVersions(sealsFile.path, repository, snapshot);
+  return recoverSeals(
+    merged.map(({ side, text }) => [side, readSealsFile(sealsFile.path, text)]),
+    sealsFile,
+    records,
+  );
+}
+
+interface MergedVersion {
+  readonly side: 'ours' | 'theirs';
+  readonly text: string | null;
+}
+
+/** The seals files of the commits that are put together. Where one has none at the path, its folder had another name there. */
+async function mergedVersions(
+  path: string,
+  repository: Repository,
+  snapshot: Snapshot,
+): Promise<readonly MergedVersion[]> {
   const merged = await mergedCommits(repository);
+  const versions: MergedVersion[] = [];
   for (const side of ['ours', 'theirs'] as const)
     for (const commit of merged[side]) {
       // A clone may lack the trees of older commits.
-      const files = (await ask(repository, { ...treeEntries(commit), statuses: [128] })).filter(
-        ({ path }) => posix.basename(path) === sealsName,
-      );
-      // Where a side has none at the path, its folder had another name there.
-      const same = files.filter(({ path }) => path === sealsFile.path);
-      for (const { path, blob } of same.length > 0 ? same : files)
-        sides.push([side, readSealsFile(path, textOf(await snapshot.readBlob(blob)))]);
+      const entries = await ask(repository, { ...treeEntries(commit), statuses: [128] });
+      const files = entries.filter((entry) => posix.basename(entry.path) === sealsName);
+      const same = files.filter((entry) => entry.path === path);
+      for (const { blob } of same.length > 0 ? same : files)
+        versions.push({ side, text: textOf(await snapshot.readBlob(blob)) });
     }
-  return recoverSeals(sides, sealsFile, records);
+  return versions;
 }
 
 function textOf(bytes: Uint8Array | null): string | null {

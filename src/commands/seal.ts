@@ -12,7 +12,7 @@ import type { Snapshot } from '../repository/snapshot.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { contradictionsIn } from './contradictions.ts';
 import { withFigures } from './figures.ts';
-import { mended } from './mended.ts';
+import { mended, nothingMoved } from './mended.ts';
 import { choose, onlyFromTop, pathOf } from './only.ts';
 import { readStudies, type Study, stoplogFiles, type Unread } from './studies.ts';
 import { writeFileSafely } from './write-file.ts';
@@ -24,6 +24,8 @@ export interface SealOptions {
   readonly moved?: boolean;
   readonly only?: string;
 }
+
+const nothingDone = { healed: [], moved: nothingMoved, figures: [], contradictions: [], written: [] };
 
 /** `stoplog seal`, of the work tree as `git add` would store it: 0 when all that was asked for is sealed, 1 when something was refused. Writes the seals file only, and with `--figures` the manifest. */
 export async function sealCommand(
@@ -59,25 +61,28 @@ export async function sealCommand(
       today: context.today,
       evidence: await evidenceFor(study, snapshot),
     });
+    const about = { plan, person, today: context.today, of: every.length > 1 ? study.manifest.path : null };
     // Of a seals file that can't be read in whole, entries would be lost.
-    const lossless = plan.refused.every(({ reason }) => reason !== 'unreadable-seals');
+    if (plan.refused.some(({ reason }) => reason === 'unreadable-seals')) {
+      context.write(sealReport({ ...about, ...nothingDone }));
+      return 1;
+    }
     const hasSeals = plan.seals.size > 0 || study.sealsFile.exists;
     const files: readonly (readonly [path: string, text: string])[] = [
       [study.manifest.path, study.manifest.text],
       ...(hasSeals ? [[study.sealsFile.path, writeSealsFile(plan.seals, plan.unreadable)] as const] : []),
     ];
     const changed: { readonly target: string; readonly text: string }[] = [];
-    for (const [path, text] of lossless ? files : [])
+    for (const [path, text] of files)
       if (text !== (await textOf(snapshot, path))) changed.push({ target: await ownPath(top, path), text });
     for (const { target, text } of changed) await writeFileSafely(target, text);
     const here = await realpath(context.cwd);
     const written = changed.map(({ target }) => relative(here, target));
-    const { today } = context;
     const sealed = plan.sealed.map(({ record }) => record);
-    const contradictions = await contradictionsIn(sealed, study, snapshot, today);
-    const of = every.length > 1 ? study.manifest.path : null;
-    const outcome = { of, plan, healed, moved, figures: newFigures, contradictions, written, person, today };
-    context.write(sealReport(outcome));
+    const contradictions = await contradictionsIn(sealed, study, snapshot, context.today);
+    const stillHealed = healed.filter(({ record }) => !sealed.includes(record));
+    const done = { healed: stillHealed, moved, figures: newFigures, contradictions, written };
+    context.write(sealReport({ ...about, ...done }));
     return plan.refused.length > 0 ? 1 : 0;
   } finally {
     await snapshot.close();

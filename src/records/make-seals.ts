@@ -71,7 +71,8 @@ export function makeSeals(request: SealRequest, schemes: Schemes = known): SealP
   const { records, sealsFile, standings, wanted } = request;
   const { unreadable } = sealsFile;
   const fault = unreadableSeals(sealsFile);
-  if (fault !== null) return { ...sealsFile, sealed: [], refused: [fault], dropped: [] };
+  if (fault !== null)
+    return { seals: sealsFile.seals, unreadable: new Map(), sealed: [], refused: [fault], dropped: [] };
 
   const links = linksOf(records, schemes)(newest(schemes).number);
   const { asked, refused } = askedRecords(wanted, records);

@@ -143,6 +143,26 @@ describe('two branches that both sealed are merged', () => {
     expect(text).toMatch(/catchment {3}the other branch’s seal is kept/);
   });
 
+  it('puts the seals together from the commits of the merge where the file was torn by hand', async () => {
+    await mergeOfDecisions();
+    await project.edit('stoplog.seals.json', (text) => text.replaceAll(/^(<{7}|={7}|>{7}).*\n|,$/gm, ''));
+    await project.commit('Merged');
+    expect((await check(project.folder)).blocking).toContain('seal.unreadable manifest');
+    const { text } = await stoplog(project.folder, ['seal']);
+    expect(text).toMatch(/study {3}the other branch’s seal is kept/);
+    expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+  });
+
+  it('claims nothing and writes nothing where there is no whole version', async () => {
+    project = await soundRepository();
+    await project.edit('stoplog.seals.json', (text) => text.slice(0, 3000));
+    const torn = await project.read('stoplog.seals.json');
+    const { text, status } = await stoplog(project.folder, ['seal', '--all', '--figures']);
+    expect(text).toMatch(/^NOT SEALED\n {2}stoplog\.seals\.json\n/);
+    expect(text).toContain('git checkout HEAD -- :/stoplog.seals.json');
+    expect([status, await project.read('stoplog.seals.json')]).toEqual([1, torn]);
+  });
+
   it('leaves a record stale where neither side’s seal fits', async () => {
     project = await soundRepository();
     await sealOnBranch('one', newDecision);
