@@ -1,5 +1,6 @@
 // Makes from the schemas what is not written by hand: the manifest's types, its validators, and the notes on its
 // keys that messages and seals need. `node src/build/generate.mjs` writes them all.
+import { hash } from 'node:crypto';
 import { readFile, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -69,6 +70,9 @@ function notes(schema) {
   return `${banner}
 /** Kind of fragment -> the kind of its keys, of its list entries (\`[]\`) and of its named entries (\`*\`), where they are \`prose\` or \`accepts\` or hold such. */
 export const kinds: Readonly<Record<string, Readonly<Record<string, string>>>> = ${JSON.stringify(kindsOf(schema), null, 2)};
+
+/** Tells one version of the schema from another. */
+export const schemaDigest = '${hash('sha256', JSON.stringify(schema)).slice(0, 16)}';
 `;
 }
 

@@ -2,7 +2,7 @@ import { buildFacts } from '../facts/build.ts';
 import type { Facts, KnownRules } from '../facts/facts.ts';
 import { Failure } from '../failure.ts';
 import type { Manifest } from '../manifest/manifest.ts';
-import { readManifest } from '../manifest/read.ts';
+import { rememberedManifest } from '../manifest/remembered-manifest.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { knownRules, rules } from '../rules/index.ts';
 import type { Phase } from '../rules/rule.ts';
@@ -155,8 +155,9 @@ async function manifestBefore(manifest: Manifest, snapshot: Snapshot): Promise<M
   const bytes = await snapshot.readBefore(manifest.path);
   if (bytes === null) return null;
   const text = new TextDecoder().decode(bytes);
-  // Reading a manifest costs more than the rest of a check, and most commits leave it as it is.
-  return text === manifest.text ? manifest : readManifest(manifest.path, text).manifest;
+  return text === manifest.text
+    ? manifest
+    : (await rememberedManifest(manifest.path, text, snapshot)).manifest;
 }
 
 function ownedByOthers(

@@ -1,7 +1,7 @@
 import { Failure } from '../failure.ts';
 import { discoverManifests, manifestName } from '../manifest/discover.ts';
 import type { Manifest, Problem } from '../manifest/manifest.ts';
-import { readManifest } from '../manifest/read.ts';
+import { rememberedManifest } from '../manifest/remembered-manifest.ts';
 import { buildRecords } from '../records/build.ts';
 import { gitPath } from '../records/paths.ts';
 import type { Records } from '../records/record.ts';
@@ -45,7 +45,7 @@ async function readStudy(snapshot: Snapshot, path: string): Promise<Study | Unre
     const message = 'The manifest can’t be read, so nothing about this study can be checked.';
     return { path, problems: [{ line: 1, column: 1, field: '', message, expected, found }] };
   }
-  const { manifest, problems } = readManifest(path, text);
+  const { manifest, problems } = await rememberedManifest(path, text, snapshot);
   if (manifest === null) return { path, problems };
   const records = await buildRecords(manifest, snapshot);
   const sealsPath = sealsPathOf(manifest);

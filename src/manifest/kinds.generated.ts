@@ -201,3 +201,6 @@ export const kinds: Readonly<Record<string, Readonly<Record<string, string>>>> =
     "scenarios": "Scenarios"
   }
 };
+
+/** Tells one version of the schema from another. */
+export const schemaDigest = 'f8d446823faa807b';
