@@ -14,9 +14,11 @@ export interface RainYears {
   /** Named by the calendar year in which they end. */
   readonly years: readonly number[];
   readonly totalsMm: readonly number[];
+  /** Years that have no total, since a total needs every step, with the steps that are missing. */
+  readonly leftOut: readonly { readonly year: number; readonly missing: number; readonly steps: number }[];
 }
 
-const version = 1;
+const version = 2;
 
 /** By name: the yearly rain of every precipitation input; undefined where its content is not here, or has no unit of rain. */
 export async function rainYearsOf(
@@ -56,6 +58,13 @@ async function rainYears(input: string, records: Records, snapshot: Snapshot): P
     const complete = groups.flatMap(({ label, value }) =>
       isDefined(value) ? [{ year: Number(label), total: value.value }] : [],
     );
-    return defined({ years: complete.map(({ year }) => year), totalsMm: complete.map(({ total }) => total) });
+    const leftOut = groups.flatMap(({ label, value, missing, steps }) =>
+      isDefined(value) ? [] : [{ year: Number(label), missing, steps }],
+    );
+    return defined({
+      years: complete.map(({ year }) => year),
+      totalsMm: complete.map(({ total }) => total),
+      leftOut,
+    });
   });
 }

@@ -48,6 +48,23 @@ ruleCases(periodsOneSided, {
       },
     },
     {
+      name: 'a year with one day missing is left out, and said to be',
+      files: {
+        'data/rain.csv': editColumn('rain_mm', (date) =>
+          date === '2005-02-14' ? '' : (perDay[waterYear(date)] ?? 0),
+        ),
+      },
+      finds: {
+        subject: 'dry',
+        detail: [
+          expect.stringContaining('of 8 complete hydrological years'),
+          'calibration: 2004 average 732 mm, 2006 average 803 mm, 2007 wet 1 168 mm',
+          expect.any(String),
+          'left out, since a total needs every step: 2005 (1 of 365 steps missing)',
+        ],
+      },
+    },
+    {
       name: 'average years only',
       files,
       set: { 'periods.calibration': ['2003-10-01/2006-09-30'] },
@@ -78,6 +95,9 @@ ruleCases(periodsOneSided, {
       finds: {
         subject: 'untold',
         message: '0 complete hydrological years: three classes need at least three years',
+        detail: [
+          'left out, since a total needs every step: 2002 (1 of 365 steps missing), 2003 (1 of 365 steps missing), 2004 (1 of 366 steps missing), 2005 (1 of 365 steps missing), 2006 (1 of 365 steps missing), 2007 (1 of 365 steps missing) and 3 more',
+        ],
       },
     },
   ],

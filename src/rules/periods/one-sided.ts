@@ -7,7 +7,7 @@ import { type Wetness, wetnessClasses } from '../../hydrology/windows/wetness-cl
 import type { RecordNode } from '../../records/record.ts';
 import { parseDate } from '../../series/calendar.ts';
 import { calendarYears, daysOfYear, parseYearBegins } from '../../series/hydrological-year.ts';
-import { figure } from '../figures.ts';
+import { few, figure } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
 
 const classes: readonly Wetness[] = ['wet', 'average', 'dry'];
@@ -77,6 +77,7 @@ function judge(set: WindowSet, first: StatedWindow, rain: LongRecord, facts: Fac
         ...about,
         subject: 'untold',
         message: `Whether the calibration saw wet, average and dry years can’t be told from inputs.${rain.input}, which has ${rain.years.length} complete hydrological years: ${reason}.`,
+        detail: yearsLeftOut(rain),
         clear: 'Use a longer record of rain, or fill its gaps and say how.',
       },
     ];
@@ -104,9 +105,19 @@ function judge(set: WindowSet, first: StatedWindow, rain: LongRecord, facts: Fac
         `by inputs.${rain.input}: dry below ${figure(lowerTercile)} mm, wet above ${figure(upperTercile)} mm, of ${rain.years.length} complete hydrological years`,
         shown('calibration', calibration),
         shown('validation', validation),
+        ...yearsLeftOut(rain),
       ],
     },
   ];
+}
+
+const namedAtMost = 6;
+
+/** The years of the record that count for nothing because of what is missing in them. */
+function yearsLeftOut({ leftOut }: LongRecord): readonly string[] {
+  if (leftOut.length === 0) return [];
+  const named = leftOut.map(({ year, missing, steps }) => `${year} (${missing} of ${steps} steps missing)`);
+  return [`left out, since a total needs every step: ${few(named, namedAtMost)}`];
 }
 
 function ofKind({ windows }: WindowSet, kind: StatedWindow['kind']): readonly StatedWindow[] {
