@@ -5,7 +5,7 @@ import { type BalanceBasis, balanceOf, type RecomputedBalance } from './balances
 import { type Amounts, columnsOf, inOneUnit, unitOfTotals } from './balances/columns.ts';
 import { areaKm2Of, yearBeginsOf } from './catchment.ts';
 import type { Figure } from './figures.ts';
-import type { Unusable } from './input.ts';
+import type { Away, Unusable } from './input.ts';
 import { nodesIn } from './nodes-in.ts';
 import { findOutput, type OutputFile, readOutput } from './output.ts';
 import { type Days, daysOver } from './over.ts';
@@ -19,8 +19,8 @@ type Volume = RecordNode<'balance'>;
 export interface VolumeFigures {
   readonly record: string;
   readonly recomputed: Statistic<RecomputedBalance>;
-  /** False where a file's content is not here, so that nothing can be said. */
-  readonly isHere: boolean;
+  /** Where a file's content is not here, so that nothing can be said: why. */
+  readonly away: Away | null;
   readonly stated: readonly ComparedFigure[];
 }
 
@@ -45,7 +45,7 @@ async function figuresOfVolume(volume: Volume, records: Records, snapshot: Snaps
   const compared = (of: Statistic<RecomputedBalance>) =>
     compareFigures(volume.fragment.stated, base, isDefined(of) ? balanceFigures(of.value) : of, manifest);
   if ('undefined' in subject)
-    return { record: volume.id, recomputed: subject, isHere: !subject.isAway, stated: compared(subject) };
+    return { record: volume.id, recomputed: subject, away: subject.away, stated: compared(subject) };
   const { days, from, basis } = subject.value;
   const recomputed = await remembered(
     snapshot,
@@ -58,7 +58,7 @@ async function figuresOfVolume(volume: Volume, records: Records, snapshot: Snaps
   const stated = compared(recomputed);
   const isClear = stated.every(({ agrees }) => agrees) || !isDefined(recomputed);
   const elsewhere = isClear ? new Map() : await overOtherWindows(volume, records, await basis());
-  return { record: volume.id, recomputed, isHere: true, stated: withWindows(stated, elsewhere) };
+  return { record: volume.id, recomputed, away: null, stated: withWindows(stated, elsewhere) };
 }
 
 interface Subject {
@@ -79,21 +79,20 @@ async function subjectOf(
   const withoutFlow = (['inflow', 'outflow'] as const).filter((side) =>
     columns.every((one) => one.side !== side),
   );
-  if (withoutFlow.length > 0)
-    return { undefined: `it names no ${withoutFlow.join(' and no ')}`, isAway: false };
+  if (withoutFlow.length > 0) return { undefined: `it names no ${withoutFlow.join(' and no ')}`, away: null };
   const values = [...new Set(columns.map(({ column }) => column))];
   const { unit: _, ...layout } = fragment;
   const output = await findOutput({ ...layout, values }, records, snapshot);
   if ('undefined' in output) return output;
   const run = runOf(volume, records);
   const over = daysOver(fragment.over ?? 'simulation', run, windowsOfRun(run, records), data);
-  if (!isDefined(over)) return { ...over, isAway: false };
+  if (!isDefined(over)) return { ...over, away: null };
   const areaKm2 =
     fragment.area === undefined
       ? areaKm2Of(data)
       : areaKm2Of({ ...data, catchment: { area: fragment.area } });
   const unit = unitOfTotals(fragment.unit);
-  if (!isDefined(unit)) return { ...unit, isAway: false };
+  if (!isDefined(unit)) return { ...unit, away: null };
   const settings = {
     unit: unit.value,
     yearBegins: yearBeginsOf(data),

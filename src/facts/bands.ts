@@ -8,7 +8,7 @@ import { formatTime } from '../series/step.ts';
 import { type BandOver, bandOver, crossings } from './bands/band-over.ts';
 import { areaKm2Of, yearBeginsOf } from './catchment.ts';
 import type { Figure } from './figures.ts';
-import { findInput, readInputSeries, type Unusable } from './input.ts';
+import { type Away, findInput, readInputSeries, type Unusable } from './input.ts';
 import { findOutput, readOutput, readOutputSeries } from './output.ts';
 import { type Days, daysOver } from './over.ts';
 import { remembered } from './remembered.ts';
@@ -39,8 +39,8 @@ export interface BandFigures {
   /** `validation` unless the record says otherwise. */
   readonly over: string;
   readonly recomputed: Statistic<RecomputedBand>;
-  /** False where a file's content is not here, so that nothing can be said. */
-  readonly isHere: boolean;
+  /** Where a file's content is not here, so that nothing can be said: why. */
+  readonly away: Away | null;
   readonly stated: readonly ComparedFigure[];
 }
 
@@ -85,7 +85,7 @@ async function figuresOfBand(
     variable: record?.fragment.variable ?? 'other',
     over,
     recomputed,
-    isHere: !isUnusable(subject) || !subject.isAway,
+    away: isUnusable(subject) ? subject.away : null,
     stated: withWindows(stated, elsewhere),
   };
 }
@@ -125,7 +125,7 @@ async function subjectOf(
   const { data } = records.manifest;
   const observed = target?.fragment.observed;
   if (target === undefined || observed === undefined)
-    return { undefined: 'its target names no observed input', isAway: false };
+    return { undefined: 'its target names no observed input', away: null };
   const input = findInput(observed, records);
   if (isUnusable(input)) return input;
   const output = await findOutput(endsOf(fragment), records, snapshot);

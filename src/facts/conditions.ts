@@ -17,7 +17,7 @@ import { type CaseParameters, caseParameters } from './conditions/parameters.ts'
 import { type JointReach, jointReach, jointVersion, type Reach, reachOf } from './conditions/reach.ts';
 import { type ConditionSource, sourceOf } from './conditions/source.ts';
 import { daysOfCondition, daysOfDriver } from './conditions/windows.ts';
-import type { Unusable } from './input.ts';
+import type { Away, Unusable } from './input.ts';
 import { nodesIn } from './nodes-in.ts';
 import type { Days } from './over.ts';
 import { remembered } from './remembered.ts';
@@ -25,8 +25,8 @@ import { remembered } from './remembered.ts';
 /** What a condition or a driver was. */
 export interface Quantity {
   readonly figures: Statistic<ConditionFigures>;
-  /** False where content is not here, so that nothing can be said. */
-  readonly isHere: boolean;
+  /** Where content is not here, so that nothing can be said: why. */
+  readonly away: Away | null;
 }
 
 /** A driver of a scenario, held against the condition of its name. */
@@ -65,7 +65,7 @@ export async function scenariosOf(records: Records, snapshot: Snapshot): Promise
   for (const node of nodesIn(records.nodes, 'scenarios'))
     cases.set(node.id, await caseFigures(node, conditions, records, snapshot));
   return {
-    conditions: new Map([...conditions].map(([name, { figures, isHere }]) => [name, { figures, isHere }])),
+    conditions: new Map([...conditions].map(([name, { figures, away }]) => [name, { figures, away }])),
     cases,
   };
 }
@@ -89,7 +89,7 @@ async function measure(
   records: Records,
   snapshot: Snapshot,
 ): Promise<Measured> {
-  if (!isDefined(days)) return { figures: days, isHere: true, series: { ...days, isAway: false } };
+  if (!isDefined(days)) return { figures: days, away: null, series: { ...days, away: null } };
   const { data } = records.manifest;
   const { by = 'year', total = false, unit } = condition;
   const making: Making = {
@@ -100,7 +100,7 @@ async function measure(
     months: condition.months as Making['months'],
   };
   const source = await sourceOf(stated, records, snapshot);
-  if ('undefined' in source) return { figures: source, isHere: !source.isAway, series: source };
+  if ('undefined' in source) return { figures: source, away: source.away, series: source };
   const areaKm2 = areaKm2Of(data);
   const series = sourceWithin(source.value, unit, areaKm2, making);
   const basis = { what: 'condition', version: conditionVersion, from: series.from };
@@ -108,7 +108,7 @@ async function measure(
     const read = await series.read();
     return isDefined(read) ? conditionFigures(read.value, making) : read;
   });
-  return { figures, isHere: true, series };
+  return { figures, away: null, series };
 }
 
 function sourceWithin(
@@ -142,17 +142,17 @@ async function caseFigures(
     if (condition === undefined || calibrated === undefined) continue;
     const days = daysOfDriver(driver, fragment.run, records);
     const measured = await measure(driver, condition, days, records, snapshot);
-    const { figures, isHere } = measured;
+    const { figures, away } = measured;
     const envelope = await envelopeOf(calibrated, measured, snapshot);
     if (isDefined(figures) && isDefined(calibrated.figures)) {
       const sides = { calibrated: calibrated.figures.value, scenario: figures.value };
       const reach = { value: reachOf(sides.calibrated, sides.scenario) };
-      drivers.set(name, { figures, isHere, reach, envelope });
+      drivers.set(name, { figures, away, reach, envelope });
       if ((condition.by ?? 'year') === 'year') yearly.set(name, sides);
     } else {
       const why = isDefined(figures) ? calibrated.figures : figures;
       const lacking = undefinedBecause('undefined' in why ? why.undefined : '');
-      drivers.set(name, { figures, isHere, reach: lacking, envelope: lacking });
+      drivers.set(name, { figures, away, reach: lacking, envelope: lacking });
     }
   }
   const joint = { what: 'joint reach', version: jointVersion, from: [...yearly] };

@@ -15,14 +15,30 @@ export interface InputSeries {
   readonly hasStep: boolean;
 }
 
-/** Why a series can't be read; `isAway` where the content of a file is not here, so that nobody is to blame. */
+/** Why content is not here: git holds no such file, or a link that leads to none, or holds it elsewhere (LFS, a partial clone). */
+export type Away = 'not-in-git' | 'link' | 'not-fetched';
+
+/** Why a series can't be read; `away` where the content of a file is not here, so that nothing can be said of it. */
 export interface Unusable {
   readonly undefined: string;
-  readonly isAway: boolean;
+  readonly away: Away | null;
 }
 
-export function contentAway(path: string): Unusable {
-  return { undefined: `the content of ${path} is not here`, isAway: true };
+export function contentAway(path: string, identity: FileIdentity | undefined): Unusable {
+  const away = awayBy(identity);
+  const reasons: Readonly<Record<Away, string>> = {
+    'not-in-git': `git holds no file ${path}`,
+    link: `${path} is a link that leads to no file of the repository`,
+    'not-fetched': `the content of ${path} is not here`,
+  };
+  return { undefined: reasons[away], away };
+}
+
+/** How content is away that is not here. */
+export function awayBy(identity: FileIdentity | undefined): Away {
+  const why = identity?.kind === 'unavailable' ? identity.why : identity === undefined ? 'absent' : null;
+  if (why === 'absent' || why === 'intent-to-add') return 'not-in-git';
+  return why === 'link-outside' || why === 'link-dangling' ? 'link' : 'not-fetched';
 }
 
 /** Finds an input with all its files. */
@@ -31,7 +47,7 @@ export function findInput(
   records: Records,
 ): { readonly value: InputSeries } | Unusable {
   const holders = inputsNamed(reference.input, records);
-  if (holders.length === 0) return { undefined: `there is no input ${reference.input}`, isAway: false };
+  if (holders.length === 0) return { undefined: `there is no input ${reference.input}`, away: null };
   const from = holders.map((holder) => ({
     id: holder.id,
     layout: layoutOf(holder.fragment.series ?? {}),
@@ -40,7 +56,9 @@ export function findInput(
   }));
   const files = holders.flatMap(seriesFilesOf);
   const away = files.find(({ identity }) => !isContentHere(identity));
-  if (away !== undefined) return contentAway(away.path);
+  if (away !== undefined) return contentAway(away.path, away.identity);
+  if (files.length === 0 && holders.some(({ elsewhere }) => elsewhere.length > 0))
+    return { undefined: `the files of inputs.${reference.input} are kept outside git`, away: 'not-in-git' };
   const hasStep = holders.every(({ fragment }) => fragment.series?.step !== undefined);
   return defined({ reference, from: { from, ...reference }, hasStep });
 }

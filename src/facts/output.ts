@@ -28,13 +28,13 @@ export async function findOutput(
   { manifest }: Pick<Records, 'manifest'>,
   snapshot: Snapshot,
 ): Promise<{ readonly value: OutputFile } | Unusable> {
-  if (output.file === undefined) return { undefined: 'no file is named', isAway: false };
+  if (output.file === undefined) return { undefined: 'no file is named', away: null };
   const place = resolvePattern(manifest.folder, output.file);
-  if (place === null) return { undefined: `${output.file} lies outside the repository`, isAway: false };
+  if (place === null) return { undefined: `${output.file} lies outside the repository`, away: null };
   const path = place.root + place.rest;
   const identity = (await snapshot.identify([path])).get(path);
   const blob = identity === undefined || !isContentHere(identity) ? null : identity.blob;
-  if (blob === null) return contentAway(path);
+  if (blob === null) return contentAway(path, identity);
   return defined({ path, blob, layout: layoutOf(output) });
 }
 

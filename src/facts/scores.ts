@@ -2,6 +2,7 @@ import { isDefined, type Statistic, undefinedBecause } from '../hydrology/paired
 import { scores as statistics } from '../hydrology/scores.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
+import type { Away } from './input.ts';
 import { nodesIn } from './nodes-in.ts';
 import { remembered } from './remembered.ts';
 import { type Cause, fits, likelyCauses } from './scores/causes.ts';
@@ -23,8 +24,8 @@ export interface TargetFigures {
   readonly record: string;
   /** Undefined where the files can't be compared. */
   readonly recomputed: Statistic<RecomputedFigures>;
-  /** False where a file's content is not here, so that nothing can be said. */
-  readonly isHere: boolean;
+  /** Where a file's content is not here, so that nothing can be said: why. */
+  readonly away: Away | null;
   readonly stated: readonly ComparedScore[];
   /** Rows of its score table that hold no score. */
   readonly unread: readonly UnreadRow[];
@@ -66,7 +67,7 @@ async function figuresOf(
   const of = { record: target.id, unread };
   if ('undefined' in subject) {
     const failed = stated.map((score) => ({ ...score, recomputed: subject, agrees: false, causes: [] }));
-    return { ...of, recomputed: subject, isHere: !subject.isAway, stated: failed };
+    return { ...of, recomputed: subject, away: subject.away, stated: failed };
   }
   const { basis, pairable, asked } = subject.value;
   const recomputed = await remembered(snapshot, basis, async () => {
@@ -90,7 +91,7 @@ async function figuresOf(
   return {
     ...of,
     recomputed,
-    isHere: true,
+    away: null,
     stated: compared.map(({ score, figure, agrees }) => ({
       ...score,
       recomputed: figure,

@@ -132,7 +132,7 @@ describe('drivers of a scenario', () => {
       },
     });
     expect(scenarios.cases.get('scenarios.dry')?.drivers.get('annual_rainfall')).toMatchObject({
-      isHere: false,
+      away: 'not-fetched',
     });
   });
 });

@@ -211,7 +211,7 @@ describe('no scores, with a reason', () => {
   it.each(cases)('$name', async ({ name: _, reason, ...edits }) => {
     const figures = await target(edits);
     expect(figures.recomputed).toMatchObject({ undefined: expect.stringContaining(reason) });
-    expect(figures.isHere).toBe(true);
+    expect(figures.away).toBeNull();
     expect(figures.stated.some(({ agrees }) => agrees)).toBe(false);
   });
 
@@ -219,7 +219,7 @@ describe('no scores, with a reason', () => {
     const pointer = `version https://git-lfs.github.com/spec/v1\noid sha256:${'0'.repeat(64)}\nsize 9\n`;
     for (const path of ['data/flow.csv', 'runs/calibrated/daily.csv'])
       expect(await target({ files: { [path]: pointer } })).toMatchObject({
-        isHere: false,
+        away: 'not-fetched',
         recomputed: { undefined: `the content of ${path} is not here` },
       });
   });

@@ -34,7 +34,7 @@ export async function subjectOf(
   snapshot: Snapshot,
 ): Promise<{ readonly value: Subject } | Unusable> {
   const { observed, simulated } = target.fragment;
-  if (observed === undefined) return { undefined: 'no observed input is named', isAway: false };
+  if (observed === undefined) return { undefined: 'no observed input is named', away: null };
   const input = findInput(observed, records);
   if ('undefined' in input) return input;
   const output = await findOutput(simulated ?? {}, records, snapshot);

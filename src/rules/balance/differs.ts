@@ -5,6 +5,7 @@ import { agreesAsPrinted } from '../../hydrology/stated/printed-number.ts';
 import type { RecordNode } from '../../records/record.ts';
 import { asPrinted } from '../evaluation/score-names.ts';
 import { type Draft, rule } from '../rule.ts';
+import { whileAway } from '../while-away.ts';
 
 const names: Readonly<Record<string, string>> = {
   residual_share: 'share that is left over',
@@ -40,7 +41,7 @@ export const balanceDiffers = rule({
 
 function asAWhole(
   { id, name, field, fragment }: RecordNode<'balance'>,
-  { isHere }: VolumeFigures,
+  { away }: VolumeFigures,
   reason: string,
 ): readonly Draft[] {
   // That the catchment's balance lacks its flows has a rule of its own.
@@ -51,13 +52,9 @@ function asAWhole(
       field,
       subject: 'as a whole',
       message: `The water balance of ${name} can’t be computed: ${reason}.`,
-      ...(isHere
+      ...(away === null
         ? { clear: 'State file, columns, unit and window so that the balance can be computed.' }
-        : {
-            from: 'archive',
-            before: 'warn',
-            clear: 'Fetch the content (git lfs pull, or a full clone) and check again.',
-          }),
+        : whileAway(away)),
     },
   ];
 }

@@ -117,6 +117,32 @@ ruleCases(evaluationScoreDiffers, {
       },
     },
     {
+      name: 'an output that git does not hold',
+      set: { [`${target}.simulated.file`]: 'runs/calibrated/hourly.csv' },
+      finds: {
+        level: 'warn',
+        message: /can’t be recomputed: git holds no file runs\/calibrated\/hourly\.csv\.$/,
+        clear: /^Correct the path, or add the file to git/,
+      },
+    },
+    {
+      name: 'an input that is kept outside git',
+      set: {
+        'inputs.streamflow.stored': 'elsewhere',
+        'inputs.streamflow.files': [{ path: 'archive/flow.csv', sha256: 'a'.repeat(64) }],
+      },
+      finds: {
+        level: 'warn',
+        message: 'can’t be recomputed: the files of inputs.streamflow are kept outside git.',
+        clear: 'add the file to git',
+      },
+    },
+    {
+      name: 'an output that is a link to nothing',
+      files: { 'runs/calibrated/daily.csv': { link: 'gone.csv' } },
+      finds: { level: 'warn', message: 'is a link that leads to no file', clear: 'in place of the link' },
+    },
+    {
       name: 'content that is not here when archived',
       files: { 'data/flow.csv': pointer },
       phase: 'archive',

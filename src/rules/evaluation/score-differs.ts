@@ -4,6 +4,7 @@ import { isDefined } from '../../hydrology/paired.ts';
 import type { RecordNode } from '../../records/record.ts';
 import { figure } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
+import { whileAway } from '../while-away.ts';
 import { causesInWords } from './causes-in-words.ts';
 import { type DifferingTogether, differingTogether } from './differing-together.ts';
 import { recomputedOver } from './over.ts';
@@ -46,19 +47,15 @@ export const evaluationScoreDiffers = rule({
 
 /** One finding where none of the stated scores can be recomputed. */
 function asAWhole({ id, name, field }: RecordNode, figures: TargetFigures): Draft | null {
-  const { recomputed, isHere, stated } = figures;
+  const { recomputed, away, stated } = figures;
   if (isDefined(recomputed) || stated.length === 0) return null;
   return {
     record: id,
     field: [...field, 'simulated'],
     message: `The scores of ${name} can’t be recomputed: ${recomputed.undefined}.`,
-    ...(isHere
+    ...(away === null
       ? { clear: 'State observed and simulated so that both can be read, in units that fit.' }
-      : {
-          from: 'archive',
-          before: 'warn',
-          clear: 'Fetch the content (git lfs pull, or a full clone) and check again.',
-        }),
+      : whileAway(away)),
   };
 }
 

@@ -46,7 +46,7 @@ ruleCases(inputsUnverified, {
     {
       name: 'a link that leads nowhere',
       files: { 'data/dem.asc': { link: 'gone.asc' } },
-      finds: { record: 'inputs.terrain', message: 'leads nowhere' },
+      finds: { record: 'inputs.terrain', message: 'leads nowhere', clear: 'in place of the link' },
     },
     {
       name: 'kept elsewhere, and another file at its path',

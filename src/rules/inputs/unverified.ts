@@ -1,7 +1,9 @@
 import type { Facts } from '../../facts/facts.ts';
+import { awayBy } from '../../facts/input.ts';
 import type { Elsewhere } from '../../records/record.ts';
 import type { Unavailable } from '../../repository/snapshot.ts';
 import { type Draft, rule } from '../rule.ts';
+import { bringHere } from '../while-away.ts';
 
 const why: Readonly<Record<Unavailable, string>> = {
   'not-fetched': 'is not in this clone (partial or shallow, or an object is missing)',
@@ -41,6 +43,7 @@ export const inputsUnverified = rule({
               field,
               subject: path,
               message: `${path} ${says}, so its content could not be checked.`,
+              clear: bringHere[awayBy(identity)],
             };
       }),
       ...elsewhere.flatMap((file) => keptElsewhere(id, file, beside)),

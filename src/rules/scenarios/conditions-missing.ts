@@ -1,5 +1,7 @@
+import type { Away } from '../../facts/input.ts';
 import { isDefined } from '../../hydrology/paired.ts';
 import { type Draft, rule } from '../rule.ts';
+import { whileAway } from '../while-away.ts';
 import { firstCase } from './first-case.ts';
 
 export const scenariosConditionsMissing = rule({
@@ -30,20 +32,16 @@ export const scenariosConditionsMissing = rule({
       ];
     }
     const drafts: Draft[] = [];
-    const untold = (about: Pick<Draft, 'field' | 'subject' | 'message'>, isHere: boolean): void => {
+    const untold = (about: Pick<Draft, 'field' | 'subject' | 'message'>, away: Away | null): void => {
       drafts.push({
         record: id,
         ...about,
-        ...(isHere
+        ...(away === null
           ? {
               clear:
                 'Name the file, columns, unit and window so that they can be read; `over` names another window.',
             }
-          : {
-              from: 'archive',
-              before: 'warn',
-              clear: 'Fetch the content (git lfs pull, or a full clone) and check again.',
-            }),
+          : whileAway(away)),
       });
     };
     for (const driver of drivers) {
@@ -66,7 +64,7 @@ export const scenariosConditionsMissing = rule({
             subject: `condition ${driver}`,
             message: `The calibrated ${what} can’t be computed: ${condition.figures.undefined}.`,
           },
-          condition.isHere,
+          condition.away,
         );
       const found = scenarios.cases.get(id)?.drivers.get(driver);
       if (found !== undefined && !isDefined(found.figures))
@@ -76,7 +74,7 @@ export const scenariosConditionsMissing = rule({
             subject: `driver ${driver}`,
             message: `The ${what} of scenario ${name} can’t be computed: ${found.figures.undefined}.`,
           },
-          found.isHere,
+          found.away,
         );
     }
     return drafts;

@@ -3,6 +3,7 @@ import { isDefined } from '../../hydrology/paired.ts';
 import { figure } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
 import { isStated } from '../stand-in.ts';
+import { whileAway } from '../while-away.ts';
 
 export const uncertaintyBandBroken = rule({
   id: 'uncertainty.band-broken',
@@ -23,7 +24,7 @@ export const uncertaintyBandBroken = rule({
 });
 
 function faultsOf(band: BandFigures): readonly Omit<Draft, 'record'>[] {
-  const { target, fragment, field, recomputed, isHere, over } = band;
+  const { target, fragment, field, recomputed, away, over } = band;
   const unstated = [
     ...(fragment.level === undefined ? ['level'] : []),
     ...(isStated(fragment.unit) ? [] : ['unit']),
@@ -41,13 +42,7 @@ function faultsOf(band: BandFigures): readonly Omit<Draft, 'record'>[] {
           {
             subject: `${target} unread`,
             message: `The band of ${target} can’t be held against its target: ${recomputed.undefined}.`,
-            ...(isHere
-              ? {}
-              : {
-                  from: 'archive' as const,
-                  before: 'warn' as const,
-                  clear: 'Fetch the content (git lfs pull, or a full clone) and check again.',
-                }),
+            ...(away === null ? {} : whileAway(away)),
           },
         ];
   const { crossed, stated } = recomputed.value;
