@@ -1,5 +1,6 @@
 import { buildFacts } from '../facts/build.ts';
 import type { Facts, KnownRules } from '../facts/facts.ts';
+import { resealedOf } from '../facts/resealed.ts';
 import { Failure } from '../failure.ts';
 import type { Manifest } from '../manifest/manifest.ts';
 import { rememberedManifest } from '../manifest/remembered-manifest.ts';
@@ -8,6 +9,7 @@ import { knownRules, rules } from '../rules/index.ts';
 import type { Phase } from '../rules/rule.ts';
 import { runFileRules, runRules } from '../rules/run.ts';
 import { againstBase, type Judged } from '../verdict/against-base.ts';
+import { changedIn } from '../verdict/changed.ts';
 import type { Comparison, ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { concludeVerdict, judgeManifest, judgeUnread } from '../verdict/judge.ts';
 import { formerly, formerPaths } from './former.ts';
@@ -73,12 +75,14 @@ export async function examineWithFacts(snapshot: Snapshot, options: ExamineOptio
         ? { facts: null, verdict: judgeUnread(runFileRules(rules, study), study.path) }
         : await examineStudy(study, all, seen, chosen, options);
     const same = before.find(({ verdict }) => verdict.path === was);
-    studies.push(
-      // Of a manifest that can't be read nothing is known, so nothing of it is cured.
-      same === undefined || examined.facts === null
-        ? examined
-        : { ...examined, verdict: againstBase(judged(examined), judged(same), chosen.includes) },
-    );
+    // Of a manifest that can't be read nothing is known, so nothing of it is cured.
+    if (same === undefined || examined.facts === null) studies.push(examined);
+    else {
+      const verdict = againstBase(judged(examined), judged(same), chosen.includes);
+      const changed = changedIn(examined.facts, await resealedOf(examined.facts, seen));
+      const asked = changed.filter(({ record }) => chosen.includes(record));
+      studies.push({ ...examined, verdict: { ...verdict, changed: asked } });
+    }
   }
   const comparison =
     against === undefined ? null : compared(against, before, only === undefined ? all : null, former);

@@ -43,7 +43,7 @@ export function markdownReport(verdict: Verdict, bytes = commentBytes): string {
         'This change asks for less',
         shown.filter(({ finding }) => isLoosening(finding)),
       ),
-      ...changes(others),
+      ...changes(verdict, others),
       ...headings.flatMap(([weight, heading]) => {
         const told = others.filter((one) => one.weight === weight);
         return weight === 'block' ? open(heading, told) : folded(heading, told.map(item));
@@ -54,13 +54,23 @@ export function markdownReport(verdict: Verdict, bytes = commentBytes): string {
       '',
     ].join('\n');
   };
-  return withinLimit(everyFinding(verdict), render, bytes);
+  const report = withinLimit(everyFinding(verdict), render, bytes);
+  return Buffer.byteLength(report) <= bytes ? report : brief(verdict);
+}
+
+/** Where names and reasons alone are longer than a host takes. */
+function brief(verdict: Verdict): string {
+  return `<!-- stoplog -->\n${title(verdict)}\n\n${tally(verdict)}. There is no room here for more.\n`;
+}
+
+function title({ verdict }: Verdict): string {
+  return `## Stoplog: ${verdict}`;
 }
 
 function opening(verdict: Verdict): readonly string[] {
   const { at, base, manifests } = verdict;
   return [
-    `## Stoplog: ${verdict.verdict}`,
+    title(verdict),
     '',
     `${tally(verdict)}. Checked: ${literal(at)}${base === null ? '' : `, against ${literal(base)}`}.`,
     ...remarks(verdict)
@@ -91,13 +101,19 @@ function cured({ manifests }: Verdict): readonly string[] {
     .map(({ rule, record, message }) => `- **${short(record)}** (${short(rule)})<br>${short(message)}`);
 }
 
-/** Data that differ from what was sealed, and figures that are not those of the files, at a glance. */
-function changes(told: readonly Told[]): readonly string[] {
-  const rows = told.flatMap(({ finding, weight }) => {
-    const what = [...statedAndFound(finding), ...dataDifference(finding)];
-    const open = weight !== 'standing' && weight !== 'answered';
-    return open && what.length > 0 ? [`| ${short(finding.record)} | ${what.map(short).join('; ')} |`] : [];
-  });
+/** At a glance: data and figures that moved since the base, that differ from what was sealed, or that are not those of the files. */
+function changes({ manifests }: Verdict, told: readonly Told[]): readonly string[] {
+  const records = new Set(manifests.flatMap((manifest) => manifest.records.map(({ id }) => id)));
+  const isOpen = ({ weight }: Told) => weight !== 'standing' && weight !== 'answered';
+  const rows = [
+    ...manifests.flatMap((manifest) => manifest.changed),
+    ...told.filter(isOpen).map(({ finding }) => ({
+      record: finding.record,
+      what: [...statedAndFound(finding), ...dataDifference(finding, records)],
+    })),
+  ]
+    .filter(({ what }) => what.length > 0)
+    .map(({ record, what }) => `| ${short(record)} | ${literal(clip(what.join('; '), 1000))} |`);
   if (rows.length === 0) return [];
   const left = rows.length - listed;
   return [
@@ -111,10 +127,10 @@ function changes(told: readonly Told[]): readonly string[] {
   ];
 }
 
-/** The first line of what differs, where a record's own statement or files changed; and scores that are told together. */
-function dataDifference({ rule, trail, detail }: Finding): readonly string[] {
-  if (rule === 'seal.stale') return trail.length <= 2 ? detail.slice(0, 1) : [];
-  return rule === 'evaluation.score-differs' ? detail.filter((line) => line.includes(': stated ')) : [];
+/** The first line of what differs, where a record itself changed and not only what it rests on. */
+function dataDifference({ rule, trail, detail }: Finding, records: ReadonlySet<string>): readonly string[] {
+  const own = trail.length === 2 && !records.has(trail[1] ?? '');
+  return rule === 'seal.stale' && own ? detail.slice(0, 1) : [];
 }
 
 function open(heading: string, told: readonly Told[]): readonly string[] {

@@ -47,6 +47,7 @@ function verdictOf(findings: readonly Finding[], over: Partial<ManifestVerdict> 
       findings,
       departures: [],
       cured: [],
+      changed: [],
       ...over,
     },
   ]);

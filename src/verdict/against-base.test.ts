@@ -29,7 +29,15 @@ function finding(over: Partial<Finding>): Finding {
 
 const judged = (findings: readonly Finding[], digest = 'old'): Judged => ({
   verdict: {
-    ...{ path: 'stoplog.yaml', study: null, phase: 'calibration', records: [], departures: [], cured: [] },
+    ...{
+      path: 'stoplog.yaml',
+      study: null,
+      phase: 'calibration',
+      records: [],
+      departures: [],
+      cured: [],
+      changed: [],
+    },
     findings,
   },
   digests: new Map([['inputs.rainfall', digest]]),

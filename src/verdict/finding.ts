@@ -54,6 +54,12 @@ export interface Cured {
   readonly fingerprint: string;
 }
 
+/** A record that was sealed anew since the base, with what moved in its data and figures, a line each. */
+export interface Changed {
+  readonly record: string;
+  readonly what: readonly string[];
+}
+
 export interface ManifestVerdict {
   readonly path: string;
   readonly study: string | null;
@@ -63,6 +69,8 @@ export interface ManifestVerdict {
   readonly departures: readonly DepartureSummary[];
   /** Empty where nothing was compared. */
   readonly cured: readonly Cured[];
+  /** Empty where nothing was compared. */
+  readonly changed: readonly Changed[];
 }
 
 export interface Totals {

@@ -50,6 +50,7 @@ export function judgeManifest(
     findings: sorted(findings, ids),
     departures: departuresOf(facts),
     cured: [],
+    changed: [],
   };
 }
 
@@ -67,7 +68,7 @@ export function judgeUnread(raised: readonly Raised[], path: string): ManifestVe
     }),
   );
   return {
-    ...{ path, study: null, phase: 'setup', records: [], departures: [], cured: [] },
+    ...{ path, study: null, phase: 'setup', records: [], departures: [], cured: [], changed: [] },
     findings: sorted(findings, []),
   };
 }

@@ -139,6 +139,7 @@ describe('the schema of findings', () => {
         ],
         departures: [{ of: 'evaluation.drop', now: 'blocks', because: 'licence', loosens: false }],
         cured: [{ rule: 'seal.stale', record: 'model', message: 'It changed.', fingerprint: 'cd34' }],
+        changed: [{ record: 'evaluation.outlet-flow', what: ['calibration.nse 0.78 -> 0.8'] }],
       },
     ],
     totals: {

@@ -38,6 +38,27 @@ describe('a comment on a change', () => {
     expect(markdownReport(await faulty)).toMatch(/### To clear\n\n- \*\*/);
   });
 
+  it('shows what moved and was sealed anew, and no way as a difference', () => {
+    const what = ['14 of 5 113 values differ', 'calibration.nse 0.78 -> 0.8'];
+    const rests = { record: 'runs.a', trail: ['runs.a', 'model'], detail: ['also rests on inputs.rainfall'] };
+    const report = markdownReport(verdictOf([finding(rests)], { changed: [{ record: 'runs.b', what }] }));
+    expect(report).toContain('| runs.b | 14 of 5 113 values differ; calibration.nse 0.78 -&gt; 0.8 |');
+    expect(report).not.toContain('| runs.a |');
+  });
+
+  it('is short where names alone would be too long', () => {
+    const long = '&'.repeat(5000);
+    const departures = Array.from({ length: 30 }, () => ({
+      of: long,
+      now: long,
+      because: long,
+      loosens: true,
+    }));
+    const report = markdownReport(verdictOf([finding()], { departures }));
+    expect(Buffer.byteLength(report)).toBeLessThanOrEqual(commentBytes);
+    expect(report).toMatch(/^## Stoplog: blocked\n\n1 finding to clear/m);
+  });
+
   it('says first what the change loosens, and lists what stands, is answered for and is cured', () => {
     const report = markdownReport(
       verdictOf(

@@ -59,7 +59,14 @@ export function verdictOf(
     comparison === null ? null : '4be1c07',
     [
       {
-        ...{ path: 'stoplog.yaml', study: 'Low-flow model', phase: 'application', departures: [], cured: [] },
+        ...{
+          path: 'stoplog.yaml',
+          study: 'Low-flow model',
+          phase: 'application',
+          departures: [],
+          cured: [],
+          changed: [],
+        },
         ...{ records, findings },
         ...over,
       },
@@ -121,6 +128,7 @@ export const hostile: Verdict = verdictOf(
     study: hostileTexts.join(' '),
     departures: hostileTexts.map((text) => ({ of: text, now: text, because: text, loosens: true })),
     cured: hostileTexts.map((text) => ({ rule: text, record: text, message: text, fingerprint: 'd' })),
+    changed: hostileTexts.map((text) => ({ record: `inputs.${text}`, what: [text, text] })),
   },
   { asked: '::error::mine', strict: false, unavailable: null, notes: hostileTexts },
 );

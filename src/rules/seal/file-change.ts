@@ -11,7 +11,7 @@ export function fileChange(
   { path, was, now }: FileChange,
   named: boolean,
   record: RecordNode,
-  { differences }: Facts,
+  { differences }: Pick<Facts, 'differences'>,
 ): readonly string[] {
   const difference = differences.get(path);
   const before = named ? `${path}: ` : '';
