@@ -36,15 +36,9 @@ export async function mended(
   const healed = versions === null ? null : healSeals(versions, study.records);
   const whole = healed === null ? study : withSeals(study, healed);
   const recovered = await recovery(whole, repository, snapshot);
+  const found = recovered.map(({ record, seal }) => [record, seal] as const);
   const complete =
-    recovered.length === 0
-      ? whole
-      : withSeals(whole, {
-          seals: new Map([
-            ...whole.sealsFile.seals,
-            ...recovered.map(({ record, seal }) => [record, seal] as const),
-          ]),
-        });
+    found.length === 0 ? whole : withSeals(whole, { seals: new Map([...whole.sealsFile.seals, ...found]) });
   const moved = followRenames ? followMoves(complete.records, complete.sealsFile) : nothingMoved;
   return {
     study: followRenames ? withSeals(complete, moved) : complete,

@@ -4,6 +4,7 @@ import { evidenceFor } from '../facts/evidence.ts';
 import { Failure } from '../failure.ts';
 import { discoverManifests, governing } from '../manifest/discover.ts';
 import { makeSeals } from '../records/make-seals.ts';
+import { unreadableSeals } from '../records/refusal.ts';
 import { writeSealsFile } from '../records/seals-file.ts';
 import { sealReport } from '../reports/seal.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
@@ -52,7 +53,8 @@ export async function sealCommand(
       ? await withFigures(read, asked, snapshot, context.today)
       : { study: read, written: [] };
     const { study, healed, moved } = await mended(stated, follow, repository, snapshot);
-    if (healed.length === 0 && names.length === 0 && !all && !follow) throw nothingAsked();
+    const isWhole = unreadableSeals(study.sealsFile) === null;
+    if (isWhole && healed.length === 0 && names.length === 0 && !all && !follow) throw nothingAsked();
     const plan = makeSeals({
       ...study,
       wanted: all ? 'all' : names,
@@ -63,10 +65,12 @@ export async function sealCommand(
     });
     const about = { plan, person, today: context.today, of: every.length > 1 ? study.manifest.path : null };
     // Of a seals file that can't be read in whole, entries would be lost.
-    if (plan.refused.some(({ reason }) => reason === 'unreadable-seals')) {
+    if (!isWhole) {
       context.write(sealReport({ ...about, ...nothingDone }));
       return 1;
     }
+    const sealed = plan.sealed.map(({ record }) => record);
+    const contradictions = await contradictionsIn(sealed, study, snapshot, context.today);
     const hasSeals = plan.seals.size > 0 || study.sealsFile.exists;
     const files: readonly (readonly [path: string, text: string])[] = [
       [study.manifest.path, study.manifest.text],
@@ -78,8 +82,6 @@ export async function sealCommand(
     for (const { target, text } of changed) await writeFileSafely(target, text);
     const here = await realpath(context.cwd);
     const written = changed.map(({ target }) => relative(here, target));
-    const sealed = plan.sealed.map(({ record }) => record);
-    const contradictions = await contradictionsIn(sealed, study, snapshot, context.today);
     const stillHealed = healed.filter(({ record }) => !sealed.includes(record));
     const done = { healed: stillHealed, moved, figures: newFigures, contradictions, written };
     context.write(sealReport({ ...about, ...done }));

@@ -27,12 +27,9 @@ export async function mergedCommits(repository: Repository): Promise<MergedCommi
     ['CHERRY_PICK_HEAD', 'REBASE_HEAD'].map((name) => ask(repository, commitOf(name))),
   );
   const coming = [...merging.split('\n'), ...picked].flatMap((commit) => commit || []);
-  const [first, ...others] = await ask(repository, parentsOfHead);
+  const parents = await ask(repository, parentsOfHead);
   return {
-    ours: [
-      ...(coming.length > 0 ? ['HEAD'] : []),
-      ...(others.length > 0 && first !== undefined ? [first] : []),
-    ],
-    theirs: [...coming, ...others],
+    ours: [...(coming.length > 0 ? ['HEAD'] : []), ...parents.slice(0, parents.length > 1 ? 1 : 0)],
+    theirs: [...coming, ...parents.slice(1)],
   };
 }
