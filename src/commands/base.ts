@@ -10,7 +10,7 @@ export async function openBase(
   repository: Repository,
   asked: string,
   snapshot: Snapshot,
-  opening: Pick<SnapshotOptions, 'remember' | 'sharing'>,
+  opening: SnapshotOptions,
 ): Promise<Omit<Against, 'asked' | 'strict'>> {
   const parting = await partingFrom(repository, asked, snapshot.commit);
   if ('unavailable' in parting) return { base: null, crossed: false, unavailable: parting.unavailable };

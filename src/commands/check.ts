@@ -75,7 +75,7 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
     const { phase, quiet = false } = options;
     const only = onlyFromTop(options.only, repository.here, snapshot);
     if (typeof sharing === 'object') {
-      await workOnPart([snapshot, ...(against?.base ? [against.base] : [])], only);
+      await workOnPart(snapshot, base, only);
       if (!quiet) context.write(partDone(sharing.part, snapshot));
       return 0;
     }

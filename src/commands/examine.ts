@@ -1,7 +1,6 @@
 import { buildFacts } from '../facts/build.ts';
 import type { Facts, KnownRules } from '../facts/facts.ts';
 import { resealedOf } from '../facts/resealed.ts';
-import { Failure } from '../failure.ts';
 import type { Manifest } from '../manifest/manifest.ts';
 import { rememberedManifest } from '../manifest/remembered-manifest.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
@@ -14,7 +13,7 @@ import type { Comparison, ManifestVerdict, Verdict } from '../verdict/finding.ts
 import { concludeVerdict, judgeManifest, judgeUnread } from '../verdict/judge.ts';
 import { formerly, formerPaths } from './former.ts';
 import { type Chosen, choose, pathOf } from './only.ts';
-import { readStudies, type Study, type Unread } from './studies.ts';
+import { readStudies, type Study, type Unread, withoutManifest } from './studies.ts';
 
 export interface ExamineOptions {
   readonly today: string;
@@ -95,12 +94,7 @@ async function examineBase(
   base: Snapshot,
   { today, phase }: ExamineOptions,
 ): Promise<readonly ExaminedStudy[]> {
-  try {
-    return (await examineWithFacts(base, { today, phase })).studies;
-  } catch (error) {
-    if (error instanceof Failure && error.code === 'no-manifest') return [];
-    throw error;
-  }
+  return examineWithFacts(base, { today, phase }).then(({ studies }) => studies, withoutManifest);
 }
 
 function judged({ facts, verdict }: ExaminedStudy): Judged {

@@ -4,7 +4,7 @@ import { partsIn } from '../repository/memory-folders.ts';
 import { type Part, parsePart, partName } from '../repository/part.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { choose } from './only.ts';
-import { readStudies } from './studies.ts';
+import { readStudies, type Study, type Unread, withoutManifest } from './studies.ts';
 
 /** Reads `--part`. */
 export function readPart(given: string): Part {
@@ -17,13 +17,18 @@ export function readPart(given: string): Part {
   );
 }
 
-/** Works out one part of what a check of these states takes; closing them keeps it. Nothing is judged. */
-export async function workOnPart(states: readonly Snapshot[], only: string | undefined): Promise<void> {
-  for (const snapshot of states) {
-    for (const study of choose(await readStudies(snapshot), only).studies) {
-      if (!('problems' in study)) await workOut(study.records, snapshot);
-    }
-  }
+/** Works out one part of what a check of a state takes, and of its base; closing them keeps it. Nothing is judged. */
+export async function workOnPart(
+  snapshot: Snapshot,
+  base: Snapshot | null,
+  only: string | undefined,
+): Promise<void> {
+  await workOn(choose(await readStudies(snapshot), only).studies, snapshot);
+  if (base !== null) await workOn(await readStudies(base).catch(withoutManifest), base);
+}
+
+async function workOn(studies: readonly (Study | Unread)[], snapshot: Snapshot): Promise<void> {
+  for (const study of studies) if (!('problems' in study)) await workOut(study.records, snapshot);
 }
 
 /** What `--gather` says where parts are missing: their work is done anew, so the verdict is the same. Null where none is. */

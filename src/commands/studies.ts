@@ -37,6 +37,12 @@ export async function readStudies(snapshot: Snapshot): Promise<readonly (Study |
   return studies;
 }
 
+/** For `catch`, where a state without any manifest is no failure: of a base nothing is known then. */
+export function withoutManifest(error: unknown): readonly never[] {
+  if (error instanceof Failure && error.code === 'no-manifest') return [];
+  throw error;
+}
+
 async function readStudy(snapshot: Snapshot, path: string): Promise<Study | Unread> {
   const text = await readText(snapshot, path);
   if (text === null) {

@@ -123,6 +123,17 @@ describe('work shared in parts', () => {
     expect(gathered.reports).toEqual(alone.reports);
   });
 
+  it('may be compared with a time before there was a manifest', async () => {
+    const empty = (await source.git('hash-object', '-t', 'tree', '/dev/null')).trim();
+    const first = (await source.git('commit-tree', '-m', 'Nothing yet', empty)).trim();
+    await source.git('reset', '--quiet', '--soft', first);
+    await source.git('commit', '--quiet', '--message', 'The example, later');
+    const { status, text } = await stoplog(source.folder, [
+      ...['check', '--at', 'HEAD', '--base', 'HEAD~1', '--part', '1of2'],
+    ]);
+    expect({ status, text }).toEqual({ status: 0, text: expect.stringContaining('part 1 of 2') });
+  });
+
   it.each([
     [['--part', '3of2'], 'no part of a whole'],
     [['--part', '0of2'], 'no part of a whole'],
