@@ -1,3 +1,4 @@
+import { jsonText } from '../reports/json.ts';
 import type { State } from '../verdict/finding.ts';
 import type { DossierContent, DossierFile } from './content.ts';
 import { contentsName, documentPath, payloadPath } from './layout.ts';
@@ -63,5 +64,5 @@ export function contentsDocument(content: DossierContent, payload: Payload, bagg
     ),
     files: files.sort((a, b) => (a.path < b.path ? -1 : 1)),
   };
-  return { path: documentPath(contentsName), content: `${JSON.stringify(contents, null, 2)}\n` };
+  return { path: documentPath(contentsName), content: jsonText(contents) };
 }

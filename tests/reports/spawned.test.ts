@@ -1,6 +1,6 @@
 import { spawnSync } from 'node:child_process';
 import { cpSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
-import { mkdtemp, readFile, rm } from 'node:fs/promises';
+import { mkdtemp, readdir, readFile, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join, resolve } from 'node:path';
 import { gzipSync } from 'node:zlib';
@@ -126,15 +126,21 @@ interface Ran {
   readonly stderr: string;
 }
 
-function check(folder: string, words: readonly string[], surroundings: NodeJS.ProcessEnv = {}): Ran {
-  const env = cleanEnvironment({ SOURCE_DATE_EPOCH: String(Date.UTC(2026, 2, 1) / 1000), ...surroundings });
-  return spawnSync(process.execPath, [bundle, 'check', ...words], {
+function spawned(folder: string, words: readonly string[], surroundings: NodeJS.ProcessEnv = {}): Ran {
+  const env = cleanEnvironment({
+    SOURCE_DATE_EPOCH: String(Date.UTC(2026, 2, 1) / 1000),
+    ...surroundings,
+  });
+  return spawnSync(process.execPath, [bundle, ...words], {
     cwd: folder,
     env,
     encoding: 'utf8',
     maxBuffer: 1e8,
   });
 }
+
+const check = (folder: string, words: readonly string[], surroundings?: NodeJS.ProcessEnv): Ran =>
+  spawned(folder, ['check', ...words], surroundings);
 
 describe.each([
   ['the example', exampleProject, ['--base', 'HEAD~1'], 5],
@@ -277,6 +283,21 @@ describe('a project of hostile names', { timeout: 300_000 }, () => {
     expect(stderr).toBe('');
     expect(stdout).toBe(await readFile(file, 'utf8'));
     expect(obeyedIn(stdout)).toEqual([]);
+  });
+
+  it('has a dossier of which nothing is obeyed when its texts are printed', async () => {
+    const { folder } = repository;
+    const drafted = spawned(folder, ['dossier', '--draft', '--out', '.git/draft'], {
+      GITHUB_ACTIONS: 'true',
+    });
+    expect(drafted).toMatchObject({ status: 0, stderr: '' });
+    expect(obeyedIn(drafted.stdout)).toEqual([]);
+    const texts = (await readdir(join(folder, '.git/draft'))).filter((name) =>
+      /\.(?:json|md|txt)$/.test(name),
+    );
+    expect(texts.length).toBeGreaterThan(5);
+    for (const name of texts)
+      expect.soft(obeyedIn(await readFile(join(folder, '.git/draft', name), 'utf8')), name).toEqual([]);
   });
 
   it.each([

@@ -1,11 +1,10 @@
-import { jsonReport } from '../../reports/json.ts';
+import { jsonReport, jsonText } from '../../reports/json.ts';
 import type { DossierContent, DossierFile } from '../content.ts';
 import { documentPath } from '../layout.ts';
 import { citation } from './citation.ts';
 import { crosswalksOf } from './crosswalk.ts';
 import { deposit } from './deposit.ts';
 import { factsDocument } from './facts-document.ts';
-import { jsonText } from './json-text.ts';
 import { provenance } from './provenance/provenance.ts';
 
 export { crateDocument } from './crate/crate.ts';

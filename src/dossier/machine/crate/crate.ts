@@ -1,8 +1,8 @@
+import { jsonText } from '../../../reports/json.ts';
 import type { DossierContent, DossierFile } from '../../content.ts';
 import { dossierIdentifier } from '../../identifier.ts';
 import { crateName, documentPath } from '../../layout.ts';
 import type { Payload } from '../../payload.ts';
-import { jsonText } from '../json-text.ts';
 import { licencesOf } from '../licence.ts';
 import { authorsOfAll } from '../people.ts';
 import { descriptionOf, keywordsOf, titleOf } from '../telling.ts';
