@@ -132,6 +132,10 @@ function describe(run: Run): Command {
         hookNames,
       ),
     )
+    .option(
+      '--base <revision>',
+      'hold back only what is new since this revision, such as `origin/main`: for a repository with a past',
+    )
     .action(run(hookAdd));
   hook
     .command('remove')

@@ -7,8 +7,16 @@ import type { HookName } from './hook/script.ts';
 import { describeHooks } from './hook/text.ts';
 
 /** `stoplog hook add`: writes the hooks and says what it did. */
-export const hookAdd = (context: Context, { for: hook }: { readonly for?: HookName } = {}) =>
-  run(context, (repository) => addHooks(repository, hook === undefined ? {} : { hooks: [hook] }));
+export const hookAdd = (
+  context: Context,
+  { for: hook, base }: { readonly for?: HookName; readonly base?: string } = {},
+) =>
+  run(context, (repository) =>
+    addHooks(repository, {
+      ...(hook === undefined ? {} : { hooks: [hook] }),
+      ...(base === undefined ? {} : { base }),
+    }),
+  );
 
 /** `stoplog hook remove`: takes them away and says what is back. */
 export const hookRemove = (context: Context) => run(context, removeHooks);

@@ -8,9 +8,10 @@ const hooks = hookNames.flatMap((hook) => {
   const before = { was: 'nothing', foldersMade: 0 } as const;
   const text = (rest: string, script: string) => withBlock(rest, script, before);
   return [
-    [`${hook} for git`, text('#!/bin/sh\n', scriptForGit(hook, null))],
-    [`${hook} after an earlier one`, text('#!/bin/sh\n', scriptForGit(hook, `${hook}.local`))],
-    [`${hook} for husky`, text('#!/bin/sh\nnpm test\n', scriptForHusky(hook))],
+    [`${hook} for git`, text('#!/bin/sh\n', scriptForGit(hook, null, null))],
+    [`${hook} after an earlier one`, text('#!/bin/sh\n', scriptForGit(hook, null, `${hook}.local`))],
+    [`${hook} with a base`, text('#!/bin/sh\n', scriptForGit(hook, 'origin/main', null))],
+    [`${hook} for husky`, text('#!/bin/sh\nnpm test\n', scriptForHusky(hook, null))],
   ] as const;
 });
 

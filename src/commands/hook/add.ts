@@ -10,21 +10,24 @@ import { type HookName, hooksInClone, hooksOnServer, scriptForGit, scriptForHusk
 import { change, writeHook } from './write.ts';
 
 /**
- * Writes the hooks. One that is there is kept and runs first; one of ours that someone changed is left alone.
- * Failures: 'usage' (a repository where they would not run, see `hookHome`), 'unreadable-file', 'unwritable-file'.
+ * Writes the hooks. One that is there is kept and runs first; one of ours that someone changed is left alone. `base` is the
+ * revision that they compare with; without it, the one that a hook of ours has already, or none.
+ * Failures: 'usage' (a repository where they would not run, see `hookHome`; a base that is no name of a revision),
+ * 'unreadable-file', 'unwritable-file'.
  */
 export async function addHooks(
   repository: Repository,
-  { hooks = hooksInClone }: { readonly hooks?: readonly HookName[] } = {},
+  { hooks = hooksInClone, base }: { readonly hooks?: readonly HookName[]; readonly base?: string } = {},
 ): Promise<HookReport> {
   refuseElsewhere(repository, hooks);
+  if (base !== undefined) refuseBase(base, hooks);
   const home = await hookHome(repository);
   if (home.refusal !== null) throw home.refusal;
   let foldersMade = await makeFolders(home.folder);
   const done = new Map<string, Done>();
   for (const hook of hooks) {
     const there = await lookAtHook(home, hook);
-    done.set(there.file, await addHook(there, foldersMade));
+    done.set(there.file, await addHook(there, base, foldersMade));
     foldersMade = 0; // The first hook remembers them for all.
   }
   return reportHooks(repository, home, done);
@@ -49,27 +52,45 @@ function refuseElsewhere({ bare, cwd }: Repository, hooks: readonly HookName[]):
   }
 }
 
-async function addHook(there: HookContent, foldersMade: number): Promise<Done> {
+/** A base stands in quotes in the hook, and is found there again. */
+function refuseBase(base: string, hooks: readonly HookName[]): void {
+  const server: readonly HookName[] = hooksOnServer;
+  if (hooks.some((hook) => server.includes(hook)))
+    throw new Failure(
+      'usage',
+      '`--base` is not for pre-receive: a push is always compared with what its branch held.',
+      'Leave it out: `stoplog hook add --for pre-receive`.',
+    );
+  if (!/^[\w./@][\w./@{}^~+-]*$/.test(base))
+    throw new Failure(
+      'usage',
+      `\`--base ${base}\` is no name of a revision that a hook can hold.`,
+      'Name a branch, such as `--base origin/main`, or `--base HEAD`.',
+    );
+}
+
+async function addHook(there: HookContent, asked: string | undefined, foldersMade: number): Promise<Done> {
+  const base = asked ?? there.block?.base ?? null;
   if (there.found === 'changed') return 'left';
-  if (there.block !== null) return renew(there, there.block);
+  if (there.block !== null) return renew(there, { ...there.block, base });
   if (there.content === null) {
     const mode = there.home.starter === 'git' ? 0o755 : 0o644;
-    await writeHook(there.file, compose(there, { was: 'nothing', foldersMade }, ''), mode);
+    await writeHook(there.file, compose(there, { was: 'nothing', foldersMade, base }, ''), mode);
     return 'written';
   }
   if (there.home.starter === 'husky') {
-    const content = compose(there, { was: 'the lines below', foldersMade }, there.content);
+    const content = compose(there, { was: 'the lines below', foldersMade, base }, there.content);
     await writeHook(there.file, content, there.mode);
     return 'written';
   }
   await moveAside(there, async (earlier) => {
-    await writeHook(there.file, compose(there, { was: `the hook ${earlier}`, foldersMade }, ''), 0o755);
+    await writeHook(there.file, compose(there, { was: `the hook ${earlier}`, foldersMade, base }, ''), 0o755);
   });
   return 'written';
 }
 
 /** Brings a hook of ours to the text of this version, with what it remembers. */
-async function renew(there: HookContent, block: Before & { readonly rest: string }): Promise<Done> {
+async function renew(there: HookContent, block: Written & { readonly rest: string }): Promise<Done> {
   const content = compose(there, block, block.rest);
   const skipped = there.home.starter === 'git' && !there.executable;
   if (content === there.content && !skipped) return 'none';
@@ -77,11 +98,15 @@ async function renew(there: HookContent, block: Before & { readonly rest: string
   return 'renewed';
 }
 
+interface Written extends Before {
+  readonly base: string | null;
+}
+
 /** The text of a hook of ours: with husky around the project's own lines, else whole. */
-function compose({ hook, home }: HookContent, before: Before, rest: string): string {
+function compose({ hook, home }: HookContent, { base, ...before }: Written, rest: string): string {
   return home.starter === 'husky'
-    ? withBlock(rest, scriptForHusky(hook), before)
-    : withBlock(interpreter, scriptForGit(hook, earlierName(before)), before);
+    ? withBlock(rest, scriptForHusky(hook, base), before)
+    : withBlock(interpreter, scriptForGit(hook, base, earlierName(before)), before);
 }
 
 /** Gives the earlier hook a free name beside it, and its own back where ours could not be written. */

@@ -8,8 +8,13 @@ export interface Before {
   readonly foldersMade: number;
 }
 
+/** What a hook of ours compares with; null where it checks the whole state. */
+const compared = / --base '([^'\n]+)'/;
+
 /** Our part of a hook: the lines between two marks, with a checksum that shows whether someone changed them. */
 export interface Block extends Before {
+  /** The revision that it compares with; null where it checks the whole state. */
+  readonly base: string | null;
   /** The content without our part. */
   readonly rest: string;
   readonly changed: boolean;
@@ -37,6 +42,7 @@ export function findBlock(content: string): Block | null {
   const whole = end !== null && digest(ours.slice(0, end.index)) === end[1];
   return {
     rest: whole ? content.slice(0, start) + ours.slice(end.index + end[0].length) : content,
+    base: compared.exec(ours)?.[1] ?? null,
     changed: !whole || state === null,
     was: (state?.[1] ?? 'nothing') as Before['was'],
     foldersMade: Number(state?.[2] ?? 0),

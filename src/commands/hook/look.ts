@@ -14,6 +14,8 @@ export interface HookState {
   /** `changed`: has our marks, but the lines between are not ours any more. */
   readonly found: 'nothing' | 'ours' | 'changed' | 'another';
   readonly executable: boolean;
+  /** The revision that ours compares with; null where it checks the whole state. */
+  readonly base: string | null;
   /** The hook that ours runs first, where it was moved aside. */
   readonly earlier: { readonly file: string; readonly executable: boolean; readonly exists: boolean } | null;
 }
@@ -42,6 +44,7 @@ export async function lookAtHook(home: HookHome, hook: HookName): Promise<HookCo
     found:
       content === null ? 'nothing' : block === null ? 'another' : isChanged(home, block) ? 'changed' : 'ours',
     executable: isExecutable(mode),
+    base: block?.base ?? null,
     earlier:
       earlier === null
         ? null

@@ -109,24 +109,26 @@ const checkPairs = `echo "$pairs" | {
 exit
 `;
 
-/** `first` runs what comes before the check; it is given what to put in front of a command that reads the hook's input. */
-function script(hook: HookName, first: (input: string) => string): string {
+/**
+ * `first` runs what comes before the check; it is given what to put in front of a command that reads the hook's input.
+ * `base` is what a change is compared with where people work; null for the whole state.
+ */
+function script(hook: HookName, base: string | null, first: (input: string) => string): string {
   if (hook === 'pre-receive') {
     return readPushed + first('tell_pushed | ') + checkReceived + findStoplog(hook) + checkPairs;
   }
-  if (hook !== 'pre-push')
-    return `${first('')}${findStoplog(hook)}stoplog check --brief --if-touched --at index\nexit\n`;
-  const check =
-    'status=0\nfor commit in $commits; do stoplog check --brief --if-touched --at "$commit" || status=1; done\nexit $status\n';
-  return readPushed + first('tell_pushed | ') + findCommits + findStoplog(hook) + check;
+  const check = `stoplog check --brief --if-touched${base === null ? '' : ` --base '${base}'`}`;
+  if (hook !== 'pre-push') return `${first('')}${findStoplog(hook)}${check} --at index\nexit\n`;
+  const checks = `status=0\nfor commit in $commits; do ${check} --at "$commit" || status=1; done\nexit $status\n`;
+  return readPushed + first('tell_pushed | ') + findCommits + findStoplog(hook) + checks;
 }
 
 /**
  * Our part of a hook that git starts itself. `earlier` names the hook that was there before, moved aside in the
  * same folder: it runs first, if executable (git skips others), with the same arguments and input.
  */
-export function scriptForGit(hook: HookName, earlier: string | null): string {
-  return script(hook, (input) =>
+export function scriptForGit(hook: HookName, base: string | null, earlier: string | null): string {
+  return script(hook, base, (input) =>
     earlier === null
       ? ''
       : `# The hook that was here before runs first; what it holds back stays held back.
@@ -140,9 +142,10 @@ if [ -x "$earlier" ]; then ${input}"$earlier" "$@" || exit; fi
  * Our part of a hook that husky starts with `sh -e`. The lines below it run first, in a shell of their own: they
  * may stage files or end with `exit 0`, and the check still sees what will be committed.
  */
-export function scriptForHusky(hook: HookName): string {
+export function scriptForHusky(hook: HookName, base: string | null): string {
   const text = script(
     hook,
+    base,
     (input) => `# The lines below this block run first; what they hold back stays held back.
 ${input}STOPLOG_BELOW=run sh -e "$0" "$@" || exit
 `,

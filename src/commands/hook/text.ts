@@ -71,10 +71,11 @@ function statement({ done, found }: Hook): string {
 }
 
 function details(
-  { done, found, executable, earlier, home, hook, file }: Hook,
+  { done, found, executable, base, earlier, home, hook, file }: Hook,
   show: Show,
 ): readonly string[] {
   const details: string[] = [];
+  if (base !== null && found === 'ours') details.push(`holds back only what is new since ${base}`);
   if (earlier !== null && !earlier.exists) {
     details.push(`the hook that was here before, ${show(earlier.file)}, is gone`);
   } else if (earlier !== null) {
