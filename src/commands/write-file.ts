@@ -1,10 +1,11 @@
 import { randomBytes } from 'node:crypto';
-import { open, realpath, rename, rm, stat, writeFile } from 'node:fs/promises';
+import { mkdir, open, realpath, rename, rm, stat, writeFile } from 'node:fs/promises';
+import { dirname } from 'node:path';
 import { Failure } from '../failure.ts';
 
 /**
- * Writes a file whole or not at all: to a temporary file beside it, then renamed. Keeps the mode of a file that
- * is there, and writes through a link to the file it leads to. Throws Failure 'unwritable-file'.
+ * Writes a file whole or not at all: to a temporary file beside it, then renamed. Makes the folders that it lacks, keeps the mode of
+ * a file that is there, and writes through a link to the file it leads to. Throws Failure 'unwritable-file'.
  */
 export async function writeFileSafely(path: string, content: string | Uint8Array): Promise<void> {
   const target = await realpath(path).catch(() => path);
@@ -13,6 +14,7 @@ export async function writeFileSafely(path: string, content: string | Uint8Array
   if (there !== null && !there.isFile() && !there.isDirectory()) return writeFile(target, content);
   const temporary = `${target}.${randomBytes(6).toString('hex')}.tmp`;
   try {
+    await mkdir(dirname(target), { recursive: true });
     const mode = there === null ? 0o666 : there.mode & 0o777;
     const file = await open(temporary, 'wx', mode);
     try {

@@ -55,7 +55,6 @@ async function workInParts(of: number, gathering: string, ...words: string[]): P
 
 /** Every report of a check, by kind; and what was said beside them. */
 async function reportsOf(cloned: string, ...words: string[]) {
-  await mkdir(join(cloned, 'reports'), { recursive: true });
   const asked = kinds.flatMap((kind) => ['--report', `${kind}=reports/${kind}`]);
   const ran = await stoplog(cloned, ['check', ...words, ...asked]);
   expect(ran.failure).toBeNull();
