@@ -1,6 +1,6 @@
 import type { ErrorObject } from 'ajv';
 import { isScalar } from 'yaml';
-import { type Fault, quoted, shown } from './fault.ts';
+import { type Fault, quoted, shortened, shown } from './fault.ts';
 import type { Locate } from './locate.ts';
 import { type FieldPath, fieldName } from './manifest.ts';
 import { meantValues, type Wanted } from './meant.ts';
@@ -95,7 +95,7 @@ function perhaps({ data, params, parentSchema = {} }: ErrorObject): string {
 /** A value as it is written in a manifest: quotes only where YAML would take a text for something else. */
 function asYaml(value: unknown): string {
   if (Array.isArray(value)) return `[${value.map(asYaml).join(', ')}]`;
-  return typeof value === 'string' && /^[+\d][\d:]*$/.test(value) ? `"${value}"` : String(value);
+  return typeof value === 'string' && /^[+\d][\d:]*$/.test(value) ? quoted(value) : shortened(String(value));
 }
 
 /** Whether a number, true or false would do as a text, as a version does. */

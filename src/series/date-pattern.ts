@@ -34,7 +34,7 @@ export function parsePattern(pattern: string, step: Step | null): readonly Part[
   for (const [piece] of pattern.matchAll(/Y+|M+|D+|h+|m+|s+|[^YMDhms]/gu)) {
     const part = tokens[piece];
     if (part === undefined && /^[A-Za-z]/.test(piece) && piece !== 'T' && piece !== 'Z')
-      return `"${piece}" stands for no part of a time`;
+      return `"${piece}" stands for no part of a time; what does: ${Object.keys(tokens).join(', ')}`;
     if (part === undefined) for (const byte of Buffer.from(piece)) parts.push({ kind: 'text', byte });
     else {
       const field = part.kind === 'digits' ? part.field : 'month';

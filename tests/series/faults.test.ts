@@ -210,7 +210,7 @@ const faulty: readonly {
       [{ time: 'date' }, 'no column of values is stated'],
       [
         { ...plain, time: { column: 'date', pattern: 'DD.MM.YY' } },
-        'the pattern "DD.MM.YY" can\'t be used: "YY" stands for no part of a time',
+        'the pattern "DD.MM.YY" can\'t be used: "YY" stands for no part of a time; what does: YYYY, MMM, MM, M, DDD, DD, D, hh, h, mm, ss',
       ],
       [
         { ...plain, time: { column: 'date', pattern: 'DD.MM.' } },
