@@ -71,11 +71,12 @@ describe('scores that are written into the manifest', () => {
       .map(({ field, stated, found }) => [fieldName(field), stated, found]);
   const calibration = `${target}.scores.calibration`;
 
-  it('are those that differ, in the decimals that are stated, small ones in two at least', async () => {
+  it('are those that differ, in the decimals that are stated, small ones in two at least, and one of the low flows that are needed', async () => {
     expect(await written({})).toEqual([]);
     expect(await written({ set: { [calibration]: { nse: 0.5, pbias: 1.2, r2: 1, kge: 0.903 } } })).toEqual([
       [`${calibration}.nse`, 0.5, 0.97],
       [`${calibration}.pbias`, 1.2, 7.8],
+      [`${calibration}.log_nse`, null, 0.96],
     ]);
   });
 
@@ -85,6 +86,7 @@ describe('scores that are written into the manifest', () => {
       [`${calibration}.pbias`, null, 7.77],
       [`${calibration}.r2`, null, 1],
       [`${calibration}.kge`, null, 0.9],
+      [`${calibration}.log_nse`, null, 0.96],
     ]);
   });
 
