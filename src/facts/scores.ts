@@ -1,11 +1,11 @@
-import { isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
+import { defined, isDefined, type Statistic, undefinedBecause } from '../hydrology/paired.ts';
 import { scores as statistics } from '../hydrology/scores.ts';
 import type { RecordNode, Records } from '../records/record.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import type { Away } from './input.ts';
 import { nodesIn } from './nodes-in.ts';
 import { remembered } from './remembered.ts';
-import { type Cause, fits, likelyCauses } from './scores/causes.ts';
+import { type Cause, causesVersion, fits, likelyCauses } from './scores/causes.ts';
 import { type RecomputedFigures, recompute } from './scores/recompute.ts';
 import {
   type ScoredWindow,
@@ -82,11 +82,17 @@ async function figuresOf(
   for (const window of scoredWindows) {
     const here = compared.filter(({ score }) => score.window === window);
     const differing = here.filter(({ agrees, figure }) => !agrees && isDefined(figure));
-    const read = differing.length > 0 ? await pairable() : null;
-    if (read === null || !isDefined(read)) continue;
-    const scores = (some: typeof here) => some.map(({ score }) => score);
-    for (const [score, found] of likelyCauses(read.value, window, scores(here), scores(differing)))
-      causes.set(score, found);
+    if (differing.length === 0) continue;
+    const from = { basis, window, stated: here.map(({ score: { score, printed } }) => [score, printed]) };
+    const found = await remembered(snapshot, { what: 'causes', version: causesVersion, from }, async () => {
+      const read = await pairable();
+      if (!isDefined(read)) return read;
+      const scores = (some: typeof here) => some.map(({ score }) => score);
+      const likely = likelyCauses(read.value, window, scores(here), scores(differing));
+      return defined(here.map(({ score }) => likely.get(score) ?? []));
+    });
+    if (isDefined(found))
+      for (const [place, { score }] of here.entries()) causes.set(score, found.value[place] ?? []);
   }
   return {
     ...of,

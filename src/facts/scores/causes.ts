@@ -9,6 +9,9 @@ import type { Sides } from './comparable.ts';
 import { daysOf, type Pairable, pairedOver, pairsOf, simulatedDays } from './pairings.ts';
 import type { ScoredWindow, StatedScore } from './stated.ts';
 
+/** Raised whenever the same scores may be explained otherwise. */
+export const causesVersion = 1;
+
 /** Why a stated score may be another than the recomputed one. Each was tried and gives the stated figure. */
 export type Cause =
   | { readonly is: 'sign-reversed' | 'sample-deviation' | 'swapped-sides' | 'warm-up-inside' }
