@@ -57,12 +57,11 @@ function suite(manifest: ManifestVerdict, about: readonly string[], told: readon
     ...manifest.cured.map(
       ({ rule, record, message }) => ['cured', `${record}: ${rule}: ${clip(message, 300)}`] as const,
     ),
-  ];
+  ].map(([name, value]) => `      <property name="${name}" value="${xml(plain(value))}"/>`);
   const lines = [
     `  <testsuite name="${xml(manifest.path)}" tests="${tests}" failures="${failures}" errors="0" skipped="${skipped}">`,
-    '    <properties>',
-    ...properties.map(([name, value]) => `      <property name="${name}" value="${xml(plain(value))}"/>`),
-    '    </properties>',
+    // The schema wants no empty list.
+    ...(properties.length === 0 ? [] : ['    <properties>', ...properties, '    </properties>']),
     ...cases,
     ...silent.map(
       ({ id }) =>

@@ -140,5 +140,6 @@ export async function everyVerdict(): Promise<readonly (readonly [name: string, 
     ['the example with faults', await faulty],
     ['3 000 findings', large],
     ['hostile texts', hostile],
+    ['a manifest that can’t be read', await checked({ 'stoplog.yaml': 'stoplog: 1\nstudy: [\n' })],
   ];
 }
