@@ -37,7 +37,10 @@ export async function withFigures(
   if (figures.length === 0) return { study, written: [] };
   const text = replaceScalars(
     study.manifest,
-    figures.map(({ field, found }) => ({ field, value: found })),
+    figures.map(({ field, found, decimals }) => ({
+      field,
+      value: decimals === undefined ? found : { value: found, decimals },
+    })),
   );
   const { manifest, problems } = readManifest(study.manifest.path, text);
   if (manifest === null) {

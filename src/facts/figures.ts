@@ -14,6 +14,8 @@ export interface Figure {
   readonly stated: number | null;
   /** Rounded to the decimals that are stated, at least to those that are usual. */
   readonly found: number;
+  /** With which it is written; without them, with those of the stated figure, or as few as it needs. */
+  readonly decimals?: number;
 }
 
 /** What `seal --figures` writes into the manifest, record after record. */

@@ -54,6 +54,7 @@ function figuresOver(
       field: [...field, 'scores', window, score],
       stated: printed?.value ?? null,
       found: Number(found.value.toFixed(decimals)),
+      decimals,
     };
   });
 }

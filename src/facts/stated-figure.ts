@@ -98,8 +98,9 @@ export function figuresOf(
         }));
   return wanted.flatMap(({ field: place, stated: before, decimals, recomputed }) => {
     if (!isDefined(recomputed)) return [];
+    const shown = Math.min(100, Math.max(0, decimals));
     // Adding zero makes of -0 what people write.
-    const rounded = Number(recomputed.value.toFixed(Math.min(100, Math.max(0, decimals)))) + 0;
-    return { record: id, field: place, stated: before, found: rounded };
+    const rounded = Number(recomputed.value.toFixed(shown)) + 0;
+    return { record: id, field: place, stated: before, found: rounded, decimals: shown };
   });
 }

@@ -82,6 +82,15 @@ describe('a figure that is not there yet', () => {
     expect(edited(scores(before), { field: nse, value: 0.7 })).toBe(scores(after));
   });
 
+  it('keeps the decimals that it was rounded to, and so does one that stood there with fewer', () => {
+    const rounded = { value: 1, decimals: 2 };
+    const both = [
+      { field: kge, value: rounded },
+      { field: nse, value: { value: -0.5, decimals: 3 } },
+    ];
+    expect(edited(scores('{kge: 1}'), ...both)).toBe(scores('{kge: 1.00, nse: -0.500}'));
+  });
+
   it('comes with its sibling, in one map', () => {
     const text = 'stoplog: 1\nevaluation: {q: {step: P1D}}\n';
     expect(edited(text, { field: nse, value: 0.7 }, { field: kge, value: 0.8 })).toBe(

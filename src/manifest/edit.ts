@@ -2,12 +2,12 @@ import { isMap, isScalar, isSeq, type Node, type Pair, type Scalar, type YAMLMap
 import { Failure } from '../failure.ts';
 import { locator } from './locate.ts';
 import { type FieldPath, fieldName, type Manifest } from './manifest.ts';
-import { type ScalarValue, scalarText, writtenKey } from './scalar-text.ts';
+import { type Rounded, type ScalarValue, scalarText, writtenKey } from './scalar-text.ts';
 import { parseYaml } from './yaml-text.ts';
 
 export interface ScalarEdit {
   readonly field: FieldPath;
-  readonly value: ScalarValue;
+  readonly value: ScalarValue | Rounded;
 }
 
 /** New text for a part of the old. */
@@ -18,11 +18,11 @@ interface Splice {
 }
 
 /** Keys that are missing below a node, with the maps between. */
-type Missing = Map<string, ScalarValue | Missing>;
+type Missing = Map<string, ScalarEdit['value'] | Missing>;
 
 /**
  * The manifest's text with other values in single fields. Every other byte stays: comments, order, blanks, line ends. A
- * value keeps its quoting, a number at least the decimals it was written with. A key that is not there yet is put
+ * value keeps its quoting, a number at least the decimals it was written with, a rounded one those it was rounded to. A key that is not there yet is put
  * after its siblings, with the maps that are missing between. Throws Failure 'cannot-seal' for a field that is a list or a map,
  * and for one that repeats another part of the manifest through an alias.
  */
@@ -50,7 +50,7 @@ function add(
   missing: Map<YAMLMap, Missing>,
   map: YAMLMap,
   below: readonly string[],
-  value: ScalarValue,
+  value: ScalarEdit['value'],
 ): void {
   let keys = missing.get(map) ?? new Map();
   missing.set(map, keys);
@@ -62,7 +62,7 @@ function add(
   keys.set(below.at(-1) ?? '', value);
 }
 
-function replaced(text: string, scalar: Scalar, value: ScalarValue): Splice {
+function replaced(text: string, scalar: Scalar, value: ScalarEdit['value']): Splice {
   const [start = 0, end = 0] = scalar.range ?? [];
   // A block text (`|`) ends with its line end, which the next key needs.
   const after = /\r?\n$/.exec(text.slice(start, end))?.[0] ?? '';

@@ -2,8 +2,16 @@ import { isScalar, isSeq, parseDocument, type Scalar } from 'yaml';
 
 export type ScalarValue = string | number | boolean;
 
+/** A number with the decimals that it was rounded to. */
+export interface Rounded {
+  readonly value: number;
+  readonly decimals: number;
+}
+
 /** A value as YAML; in the manner of the scalar that it takes the place of, if there is one. */
-export function scalarText(value: ScalarValue, old?: Scalar): string {
+export function scalarText(value: ScalarValue | Rounded, old?: Scalar): string {
+  // 1.00 is another statement than 1: it says that a figure of 0.97 would have been seen.
+  if (typeof value === 'object') return value.value.toFixed(value.decimals);
   if (old?.value === value && old.type === 'PLAIN') return old.source ?? String(value);
   if (typeof value === 'number') return numberText(value, old?.source);
   if (typeof value === 'boolean') return String(value);

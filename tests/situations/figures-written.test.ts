@@ -49,4 +49,9 @@ it('writes the score that tells of the low flows which the purpose needs', async
   expect((await check(project.folder)).found).not.toContain(
     'evaluation.need-unscored evaluation.outlet-flow',
   );
+  // A figure says by its decimals how exact it is: 1 would also be said of 0.6.
+  const target = /\n {2}outlet-flow:[\s\S]*?(?=\n {2}\S)/.exec(await project.read('stoplog.yaml'))?.[0] ?? '';
+  expect(target.match(/(?<=(nse|pbias|r2|kge): )[-\d.]+/g)?.length).toBeGreaterThan(8);
+  for (const written of target.match(/(?<=(nse|pbias|r2|kge): )[-\d.]+/g) ?? [])
+    expect(written).toMatch(/\.\d\d$/);
 });
