@@ -1,5 +1,5 @@
 import { execFile } from 'node:child_process';
-import { cp, mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
+import { cp, mkdir, mkdtemp, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join, resolve } from 'node:path';
 import { pathToFileURL } from 'node:url';
@@ -115,6 +115,8 @@ describe('their scripts, played with the bundle in place of npx', () => {
   ) {
     await gitIn(host.home)('clone', '--quiet', `file://${project.folder}`, name);
     const cloned = join(host.home, name);
+    // As on a machine that keeps its clone from job to job.
+    await mkdir(join(cloned, '.git/stoplog/parts/1of2'), { recursive: true });
     for (const artifact of brought) await cp(artifact, join(cloned, 'stoplog-parts'), { recursive: true });
     const { status } = await host.play(cloned, script, more);
     return { cloned, status };
@@ -153,11 +155,13 @@ describe('their scripts, played with the bundle in place of npx', () => {
       for (const part of parts) {
         const { cloned, status } = await ofHost.part(part);
         expect(status).toBe(0);
+        expect(await readdir(join(cloned, ofHost.artifact))).toEqual([part]);
         artifacts.push(join(cloned, ofHost.artifact));
       }
       const gathered = await inClone('gathering', ofHost.gather, ofHost.variables, artifacts);
       const alone = await inClone('alone', `mkdir -p stoplog-reports\n${ofHost.alone}`, ofHost.variables);
       expect([gathered.status, alone.status]).toEqual([1, 1]);
+      expect((await readdir(join(gathered.cloned, '.git/stoplog/parts'))).sort()).toEqual(parts);
       expect(await json(gathered.cloned)).toBe(await json(alone.cloned));
     },
   );

@@ -18,6 +18,10 @@ const memory = (version: string) => `        with:
           restore-keys: stoplog-${version}-
 `;
 
+/** A machine of one's own keeps its clone, and what an earlier job left there. */
+const clearParts = `          rm -rf .git/stoplog/parts
+`;
+
 /** In a step with `BASE` from `base`: the words by which `check` compares, or none. */
 const compared = `          # A first push has no base: git writes it as zeros, and the whole state is checked.
           case "$BASE" in *[!0]*) set -- --base "$BASE" ;; *) set -- ;; esac
@@ -44,7 +48,7 @@ ${memory(version)}      - name: Work
         env:
 ${base}          PART: \${{ matrix.part }}
         run: |
-${compared}          npx --yes stoplog@${version} check --at HEAD "$@" --part "$PART"
+${clearParts}${compared}          npx --yes stoplog@${version} check --at HEAD "$@" --part "$PART"
           cp -R .git/stoplog/parts stoplog-part
       - uses: actions/upload-artifact@v4
         with:
@@ -65,7 +69,7 @@ const fetchParts = `      - uses: actions/download-artifact@v4
           merge-multiple: true
           path: stoplog-parts
 `;
-const placeParts = `          mkdir -p stoplog-parts .git/stoplog
+const placeParts = `${clearParts}          mkdir -p stoplog-parts .git/stoplog
           mv stoplog-parts .git/stoplog/parts
 `;
 

@@ -22,6 +22,10 @@ const safe = `    # The clone belongs to another user than this job's.
     - git config --global --add safe.directory "$CI_PROJECT_DIR"
 `;
 
+/** A runner may keep its clone, and what an earlier job left there. */
+const clearParts = `    - rm -rf .git/stoplog/parts
+`;
+
 /** The words by which `check` compares, or none. */
 const compared = `      # Where GitLab merges before it checks, the base is what it merged with. A first push has none: git writes it as
       # zeros, and the whole state is checked.
@@ -34,7 +38,7 @@ function partsJob(version: string, parts: number): string {
   return `stoplog-parts:
 ${state(version, 'pull')}  parallel: ${parts}
   before_script:
-${safe}  script:
+${safe}${clearParts}  script:
     - |
 ${compared}      npx --yes stoplog@${version} check --at HEAD "$@" --part "\${CI_NODE_INDEX}of\${CI_NODE_TOTAL}"
     - cp -R .git/stoplog/parts stoplog-parts
@@ -48,7 +52,7 @@ ${compared}      npx --yes stoplog@${version} check --at HEAD "$@" --part "\${CI
 /** The one that comes after them. */
 const gathers = `  needs: [stoplog-parts]
 `;
-const placeParts = `    - mkdir -p .git/stoplog
+const placeParts = `${clearParts}    - mkdir -p .git/stoplog
     - mv stoplog-parts .git/stoplog/parts
 `;
 
