@@ -7,6 +7,7 @@ import { junitReport } from '../reports/junit.ts';
 import { markdownReport } from '../reports/markdown.ts';
 import { sarifReport } from '../reports/sarif.ts';
 import { textReport } from '../reports/text.ts';
+import { openMemories } from '../repository/memories.ts';
 import type { Sharing } from '../repository/memory-folders.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
 import { type Part, partName } from '../repository/part.ts';
@@ -55,7 +56,9 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
   const reports = (options.report ?? ['text']).map(readReport);
   const sharing = readSharing(options);
   const repository = await openRepository(context.cwd, context.environment);
-  const opening = { remember: options.cache, sharing, progress: context.progress };
+  const { progress } = context;
+  const memories = await openMemories(repository, { remember: options.cache, sharing, progress });
+  const opening = { memories, progress };
   const snapshot = await openSnapshot(repository, readAt(options.at), {
     ...opening,
     alsoUntracked: stoplogFiles,

@@ -1,11 +1,12 @@
 import { createHash, hash } from 'node:crypto';
 import { Failure } from '../failure.ts';
 import { type Blobs, blobOf, type FoundBlob } from './blobs.ts';
-import type { BlobDigest, DigestMemory } from './digest-memory.ts';
+import type { BlobDigest } from './digest-memory.ts';
 import type { FindLarge } from './large-files.ts';
 import type { Listing } from './listing.ts';
 import { type Located, locator } from './locate.ts';
-import { blobsOfOthers, type Part } from './part.ts';
+import type { Memories } from './memories.ts';
+import { blobsOfOthers } from './part.ts';
 import { parsePointer, pointerBytesBelow } from './pointer.ts';
 import type { FileIdentity, Snapshot, Unavailable } from './snapshot.ts';
 
@@ -16,14 +17,6 @@ const defaultLimitBytes = 256 * 1024 * 1024;
 /** Up to here one call on the whole is faster than a hash fed in chunks. */
 const hashedWholeBytes = 256 * 1024;
 
-/** How content is read. */
-interface Reading {
-  /** The share of the files that this run digests. */
-  readonly part?: Part | undefined;
-  /** Told how far it has come. */
-  readonly progress?: ((text: string) => void) | undefined;
-}
-
 /** In place of a digest that another part works out; nothing that comes of it is ever shown. */
 const ofAnotherPart = 'of another part';
 
@@ -32,27 +25,26 @@ export function contentOf(
   listing: Listing,
   blobs: Blobs,
   findLarge: FindLarge,
-  memory: DigestMemory,
-  { part, progress = () => {} }: Reading = {},
+  { digests, part, left }: Pick<Memories, 'digests' | 'part' | 'left'>,
+  /** Told how far it has come. */
+  progress: (text: string) => void = () => {},
 ): Content {
   const locate = locator(listing, blobs);
-  /** What other parts are to read, with its bytes. */
-  const left = new Map<string, number>();
 
   async function digestAll(located: Iterable<Located>): Promise<void> {
     const asked = new Set<string>();
-    for (const found of located) if ('mode' in found && !left.has(found.blob)) asked.add(found.blob);
-    const unknown = new Set([...asked].filter((blob) => memory.get(blob) === undefined));
+    for (const found of located) if ('mode' in found) asked.add(found.blob);
+    const unknown = new Set([...asked].filter((blob) => !left.has(blob) && digests.get(blob) === undefined));
     if (unknown.size === 0) return;
     if (part !== undefined) {
-      // By all that is asked about: how the work is shared must not depend on what one of the runs remembers.
+      // By all that is asked about: how the work is shared must not depend on what one of the runs knows.
       for (const [blob, bytes] of await blobsOfOthers([...asked], part, blobs))
         if (unknown.delete(blob)) left.set(blob, bytes);
     }
     let read = 0;
     await blobs.visit([...unknown], async (id, blob) => {
       progress(`reading files: ${read++} of ${unknown.size}`);
-      if (blob !== null) memory.set(id, await digestOf(blob));
+      if (blob !== null) digests.set(id, await digestOf(blob));
     });
   }
 
@@ -61,7 +53,7 @@ export function contentOf(
     const { blob } = found;
     const bytesLeft = left.get(blob);
     if (bytesLeft !== undefined) return { kind: 'file', sha256: ofAnotherPart, bytes: bytesLeft, blob };
-    const known = memory.get(blob);
+    const known = digests.get(blob);
     if (known === undefined) return { kind: 'unavailable', why: 'not-fetched', blob };
     const { kind, sha256, bytes } = known;
     if (kind === 'content') return { kind: 'file', sha256, bytes, blob };

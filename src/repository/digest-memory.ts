@@ -41,6 +41,8 @@ export async function openDigestMemory(folders: MemoryFolders): Promise<DigestMe
       // Another run may have saved meanwhile; what it found is as true as ours.
       const all = new Map([...(await load(file)), ...fresh]);
       await saveLines(file, firstLine, toLines(all));
+      for (const [blob, digest] of fresh) known.set(blob, digest);
+      fresh.clear();
     },
   };
 }

@@ -34,7 +34,10 @@ export function snapshotFromMemory(files: FilesInMemory, before: FilesInMemory =
     ...listing,
     untracked: [],
     onDisk: async () => [],
-    ...contentOf(listing, blobsOf(contents), async () => null, forgetfulMemory()),
+    ...contentOf(listing, blobsOf(contents), async () => null, {
+      digests: forgetfulMemory(),
+      left: new Map(),
+    }),
     readBefore: async (path: string) => snapshotFromMemory(before).read(path),
     fileBeside: async () => null,
     remember: forgetfulValues().remember,

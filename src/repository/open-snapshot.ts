@@ -2,26 +2,24 @@ import { Failure } from '../failure.ts';
 import { type Aside, objectsOnly, openAside } from './aside.ts';
 import { fileBeside } from './beside.ts';
 import { contentOf } from './content.ts';
-import { forgetfulMemory, openDigestMemory } from './digest-memory.ts';
 import { ask, type Place } from './git.ts';
 import { gitBlobs } from './git-blobs.ts';
 import { largeFilesIn } from './large-files.ts';
 import { byPath, type Listing, listCommit, listIndex, treeEntries, untrackedFiles } from './listing.ts';
-import { memoryFolders, type Sharing } from './memory-folders.ts';
+import { type Memories, openMemories } from './memories.ts';
 import { nameFromBytes } from './names.ts';
 import { onDisk } from './on-disk.ts';
 import { commitOf, type Repository } from './repository.ts';
 import type { At, Snapshot } from './snapshot.ts';
-import { forgetfulValues, openValueMemory } from './value-memory.ts';
 import { storeWorkTree } from './work-tree.ts';
 
 export interface SnapshotOptions {
   /** Names (without folder) of files that belong to a work-tree snapshot even before their first `git add`; ignored ones do not. */
   readonly alsoUntracked?: readonly string[];
-  /** False to hash and compute everything anew and keep nothing under the git directory. */
+  /** What the run knows already, where it opens several states; else opened for this one. */
+  readonly memories?: Memories | undefined;
+  /** Without `memories`: false to hash and compute everything anew and keep nothing under the git directory. */
   readonly remember?: boolean;
-  /** How the work is shared with other runs; without it this run does all of it. */
-  readonly sharing?: Sharing | undefined;
   /** Told how far long work has come. */
   readonly progress?: ((text: string) => void) | undefined;
 }
@@ -47,14 +45,11 @@ export async function openSnapshot(
     const { listing, objects, ...state } = await stateOf(repository, at, aside, options.alsoUntracked ?? []);
     const { objectFormat, commonDirectory } = repository;
     const blobs = gitBlobs(await objectsOnly(aside, { ...objects, objectFormat }), objectFormat);
-    const { sharing, remember = true, progress = () => {} } = options;
-    const part = typeof sharing === 'object' ? sharing.part : undefined;
-    const keeps = remember || sharing !== undefined;
-    const folders = await memoryFolders(commonDirectory, sharing, remember);
-    const memory = keeps ? await openDigestMemory(folders) : forgetfulMemory();
-    const values = keeps ? openValueMemory(folders, { part, progress }) : forgetfulValues(progress);
+    const { progress } = options;
+    const memories = options.memories ?? (await openMemories(repository, options));
+    const { digests, values } = memories;
     const contentIn = (listed: Listing) =>
-      contentOf(listed, blobs, largeFilesIn(commonDirectory), memory, { part, progress });
+      contentOf(listed, blobs, largeFilesIn(commonDirectory), memories, progress);
     return Object.freeze({
       at,
       ...state,
@@ -75,7 +70,7 @@ export async function openSnapshot(
       remember: values.remember,
       async close() {
         await blobs.close();
-        await Promise.all([memory.save(), values.save(), aside.remove()]);
+        await Promise.all([digests.save(), values.save(), aside.remove()]);
       },
     });
   } catch (cause) {

@@ -43,6 +43,7 @@ export function openValueMemory({ own, others }: MemoryFolders, computing: Compu
         if (text !== undefined) all.set(key, text);
       }
       await saveLines(file, firstLine, newestLines(all));
+      fresh.clear();
     },
   };
 }
