@@ -7,6 +7,7 @@ import { progressLine } from './commands/progress-line.ts';
 import { withoutCommands } from './commands/without-commands.ts';
 import { Failure } from './failure.ts';
 import { plain } from './reports/escape.ts';
+import { version } from './version.ts';
 
 const line = process.stderr.isTTY ? progressLine((text) => process.stderr.write(text), Date.now) : null;
 
@@ -60,7 +61,7 @@ function wantsColor(): boolean {
 function internal(error: unknown): Failure {
   const details = error instanceof Error ? (error.stack ?? error.message) : String(error);
   const file = join(mkdtempSync(join(tmpdir(), 'stoplog-')), 'fault.txt');
-  writeFileSync(file, `stoplog ${STOPLOG_VERSION}, node ${process.version}\n${details}\n`);
+  writeFileSync(file, `stoplog ${version}, node ${process.version}\n${details}\n`);
   return new Failure(
     'internal',
     'a fault in Stoplog itself stopped this run.',

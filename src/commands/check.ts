@@ -15,6 +15,7 @@ import { openRepository } from '../repository/repository.ts';
 import type { At, Snapshot } from '../repository/snapshot.ts';
 import type { Phase } from '../rules/rule.ts';
 import type { Verdict } from '../verdict/finding.ts';
+import { version } from '../version.ts';
 import { openBase } from './base.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { type Against, examine } from './examine.ts';
@@ -23,7 +24,6 @@ import { missingParts, readPart, workOnPart } from './part.ts';
 import { stoplogFiles } from './studies.ts';
 import { tellGithub } from './tell-github.ts';
 import { touchesGoverned } from './touched.ts';
-import { version } from './version.ts';
 import { writeFileSafely } from './write-file.ts';
 
 export interface CheckOptions {

@@ -3,6 +3,7 @@ import { Failure } from '../failure.ts';
 import { caution } from '../reports/caution.ts';
 import { wrap } from '../reports/wrap.ts';
 import { phases } from '../rules/rule.ts';
+import { version } from '../version.ts';
 import { checkCommand, kinds } from './check.ts';
 import type { Context, ExitStatus } from './command.ts';
 import type { DossierOptions } from './dossier.ts';
@@ -11,7 +12,6 @@ import { hookAdd, hookList, hookRemove } from './hook.ts';
 import { hosts, pipelineCommand } from './pipeline.ts';
 import { rulesCommand } from './rules.ts';
 import { sealCommand } from './seal.ts';
-import { version } from './version.ts';
 
 /** Reads the command line, runs the command, returns the exit status. Throws a Failure for what could not be done. */
 export async function runCommandLine(words: readonly string[], context: Context): Promise<ExitStatus> {

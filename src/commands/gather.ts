@@ -8,10 +8,10 @@ import { openSnapshot } from '../repository/open-snapshot.ts';
 import { openRepository } from '../repository/repository.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import type { Verdict } from '../verdict/finding.ts';
+import { version } from '../version.ts';
 import type { Context } from './command.ts';
 import { examineWithFacts } from './examine.ts';
 import { onlyFromTop } from './only.ts';
-import { version } from './version.ts';
 
 export interface Gathered {
   readonly verdict: Verdict;

@@ -1,9 +1,9 @@
 import { Failure } from '../failure.ts';
 import { parsePart } from '../repository/part.ts';
+import { version } from '../version.ts';
 import type { Context, ExitStatus } from './command.ts';
 import { githubJob } from './pipeline/github.ts';
 import { gitlabJob } from './pipeline/gitlab.ts';
-import { version } from './version.ts';
 
 const jobs = { github: githubJob, gitlab: gitlabJob };
 export const hosts = Object.keys(jobs) as (keyof typeof jobs)[];

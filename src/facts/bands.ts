@@ -141,7 +141,7 @@ async function subjectOf(
   const from = {
     input: input.value.from,
     output: output.value,
-    simulated: isUnusable(simulated) ? null : simulated.value,
+    simulated: isUnusable(simulated) ? simulated : simulated.value,
     level: fragment.level,
     variable: target.fragment.variable,
     areaKm2: areaKm2Of(data),

@@ -60,7 +60,9 @@ export function findInput(
   if (files.length === 0 && holders.some(({ elsewhere }) => elsewhere.length > 0))
     return { undefined: `the files of inputs.${reference.input} are kept outside git`, away: 'not-in-git' };
   const hasStep = holders.every(({ fragment }) => fragment.series?.step !== undefined);
-  return defined({ reference, from: { from, ...reference }, hasStep });
+  // A reference names a file as seen from the manifest's folder.
+  const { folder } = records.manifest;
+  return defined({ reference, from: { from, folder, ...reference }, hasStep });
 }
 
 /** Whether a file's content can be read; a Git LFS pointer alone can't. */

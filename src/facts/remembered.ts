@@ -2,8 +2,9 @@ import { type Statistic, undefinedBecause } from '../hydrology/paired.ts';
 import { sha256OfJson } from '../records/canonical.ts';
 import { OfAnotherPart } from '../repository/part.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
+import { version } from '../version.ts';
 
-/** All that a computed value depends on. */
+/** All that a computed value depends on, beside the program that computes it: a release may read the same file otherwise. */
 export interface Basis {
   /** What is computed. */
   readonly what: string;
@@ -23,7 +24,7 @@ export async function remembered<T>(
   compute: () => Promise<Statistic<T>>,
 ): Promise<Statistic<T>> {
   try {
-    return await snapshot.remember(sha256OfJson(basis), compute);
+    return await snapshot.remember(sha256OfJson({ ...basis, program: version }), compute);
   } catch (error) {
     if (error instanceof OfAnotherPart) return undefinedBecause('another part of the run works it out');
     throw error;

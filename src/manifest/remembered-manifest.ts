@@ -1,6 +1,7 @@
 import { hash } from 'node:crypto';
 import { OfAnotherPart } from '../repository/part.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
+import { version as program } from '../version.ts';
 import type { ManifestData } from './data.generated.ts';
 import { folderOf } from './discover.ts';
 import { schemaDigest } from './kinds.generated.ts';
@@ -25,7 +26,7 @@ export async function rememberedManifest(
   text: string,
   { remember }: Pick<Snapshot, 'remember'>,
 ): Promise<ReadManifest> {
-  const key = hash('sha256', `manifest ${version} ${schemaDigest}\0${text}`);
+  const key = hash('sha256', `manifest ${version} ${program} ${schemaDigest}\0${text}`);
   let read: ReadManifest | undefined;
   const kept = await remember(key, async () => {
     read = readManifest(path, text);

@@ -35,7 +35,9 @@ describe('a file that did not change', () => {
   afterEach(() => repository.remove());
 
   /** The files whose content one run reads for the profiles, and what the profiles say. */
-  async function run(options: { readonly remember?: boolean; readonly text?: string } = {}) {
+  async function run(
+    options: { readonly remember?: boolean; readonly text?: string; readonly folder?: string } = {},
+  ) {
     const opened = await openRepository(repository.folder, repository.environment);
     const snapshot = await openSnapshot(opened, { kind: 'index' }, { remember: options.remember ?? true });
     const read: string[] = [];
@@ -50,7 +52,7 @@ describe('a file that did not change', () => {
         return snapshot.stream(path);
       },
     };
-    const { manifest } = readManifest('stoplog.yaml', options.text ?? manifestText);
+    const { manifest } = readManifest(`${options.folder ?? ''}stoplog.yaml`, options.text ?? manifestText);
     if (manifest === null) throw new Error('unreadable');
     const profiles = await profilesOf(await buildRecords(manifest, counted), counted);
     await snapshot.close();
@@ -88,5 +90,34 @@ describe('a file that did not change', () => {
     await repository.git('mv', 'data/temperature.csv', 'data/warmth.csv');
     const text = manifestText.replace('data/temperature.csv', 'data/warmth.csv');
     expect((await run({ text })).read).toEqual([]);
+  });
+
+  it('is not taken for one of the same name beside another manifest', async () => {
+    const text = (rain: string, ...gauges: string[]) => `stoplog: 1
+inputs:
+  rainfall:
+    role: precipitation
+    files: [${rain}]
+    series: {time: date, values: rain_mm, unit: mm/d, step: P1D}
+    compare_with: {input: gauges, file: rain.csv}
+  gauges:
+    role: precipitation
+    files: [${gauges}]
+    series: {time: date, values: rain_mm, unit: mm/d, step: P1D}
+`;
+    const days = Array.from({ length: 28 }, (_, day) => `2001-02-${`${day + 1}`.padStart(2, '0')}`);
+    const table = (amount: number) =>
+      `date,rain_mm\n${days.map((day, place) => `${day},${amount * (place % 4)}\n`).join('')}`;
+    await repository.write('catchment.csv', table(1));
+    await repository.write('rain.csv', table(2));
+    await repository.write('data/rain.csv', table(3));
+    await repository.git('add', '.');
+    const above = { text: text('catchment.csv', 'rain.csv', 'data/rain.csv') };
+    const below = { text: text('../catchment.csv', 'rain.csv', '../rain.csv'), folder: 'data/' };
+    const heldIn = async (given: Parameters<typeof run>[0]) =>
+      (await run(given)).profiles.get('rainfall')?.comparisons;
+    const [first, second] = [await heldIn(above), await heldIn(below)];
+    expect(second).toEqual(await heldIn({ ...below, remember: false }));
+    expect(second).not.toEqual(first);
   });
 });
