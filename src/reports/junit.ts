@@ -1,6 +1,6 @@
 import type { ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { isUnread } from '../verdict/judge.ts';
-import { plain } from './escape.ts';
+import { obeyedAnywhere, plain } from './escape.ts';
 import { clip, everyFinding, explain, type Told } from './explain.ts';
 import { remarks } from './remarks.ts';
 import { withinLimit } from './within-limit.ts';
@@ -94,5 +94,5 @@ function xml(text: string): string {
     )
     .replace(/[&<>"]/g, (sign) => entities[sign] ?? sign)
     .replace(/^(\s*):/gm, '$1&#58;')
-    .replace(/##(?=\w*\[)/g, '#&#35;');
+    .replace(obeyedAnywhere, '&#35;');
 }
