@@ -135,12 +135,12 @@ function common({ rule, draft }: Raised, folder: string): Omit<Finding, Placed> 
     source: rule.source.citation,
     clear: draft.clear ?? rule.clear,
     standing: false,
-    fingerprint: fingerprint(rule.id, draft.record, fromFolder(folder, draft.subject ?? '')),
+    fingerprint: fingerprint(rule.id, draft.record, withoutFolder(draft.subject ?? '', folder)),
   };
 }
 
 /** Files in a subject are named from the manifest's folder, so that findings of a model that moves stay the same. */
-function fromFolder(folder: string, subject: string): string {
+function withoutFolder(subject: string, folder: string): string {
   return folder === '' ? subject : ` ${subject}`.replaceAll(` ${folder}/`, ' ').slice(1);
 }
 
