@@ -30,28 +30,29 @@ export interface Healed extends Pick<SealsFile, 'seals' | 'unreadable'> {
  * Makes one seals file of the versions that a merge left. For each record the seal stays that fits the content as it is
  * merged now; where both do, the one of the better grade, then the later; where none does, the base's, or without a
  * base the better. A seal fits also where files or records were renamed since, and is then kept under the new names. A
- * record that is sealed on one side only stays sealed. An entry that can't be read stays as it is
- * where no side has a seal to put in its place. `records` are those of the merged content.
+ * record that is sealed on one side only stays sealed. An entry that can't be read stays as it is where no side has a seal
+ * to put in its place. `records` are those of the merged content.
  */
 export function healSeals(versions: Versions, records: Records, schemes: Schemes = known): Healed {
   const read = (side: Side): SealsFile => readSealsFile('', versions[side], newest(schemes).number);
   // What is wrong in the base was so before the merge, or is torn by the markers.
   const [base, ours, theirs] = [read('base').seals, read('ours'), read('theirs')];
-  const fitsOf = fitting(records, schemes);
-  const [here, there] = [withNewNames(ours, records, fitsOf), withNewNames(theirs, records, fitsOf)];
+  const fits = fitting(records, schemes);
+  const [here, there] = [withNewNames(ours, records, fits), withNewNames(theirs, records, fits)];
   const seals = new Map<string, Seal>();
   const healed: HealedRecord[] = [];
   for (const record of [...new Set([...here.keys(), ...there.keys()])].sort()) {
-    const isFit = fitsOf(record);
-    const chosen = choose(base.get(record), here.get(record), there.get(record), isFit);
+    const chosen = choose(base.get(record), here.get(record), there.get(record), (seal) =>
+      fits(record, seal),
+    );
     if (chosen === null) continue;
     const { kept } = chosen;
-    const fits = isFit(chosen.seal);
-    const rerunDropped = chosen.seal.grade === 'rerun' && !fits;
+    const isFit = fits(record, chosen.seal);
+    const rerunDropped = chosen.seal.grade === 'rerun' && !isFit;
     const seal = rerunDropped ? withoutRerun(chosen.seal) : chosen.seal;
     seals.set(record, seal);
     if (kept !== 'both' || seal !== ours.seals.get(record))
-      healed.push({ record, kept, seal, fits, rerunDropped });
+      healed.push({ record, kept, seal, fits: isFit, rerunDropped });
   }
   const unreadable = new Map([...theirs.unreadable, ...ours.unreadable].filter(([id]) => !seals.has(id)));
   const faults = Object.entries({ 'this side': ours, 'the other side': theirs }).flatMap(([side, file]) =>
@@ -70,33 +71,34 @@ export function recoverSeals(
   records: Records,
   schemes: Schemes = known,
 ): readonly HealedRecord[] {
-  const fitsOf = fitting(records, schemes);
-  const candidates = sides.map(([kept, of]) => ({ kept, of: withNewNames(of, records, fitsOf) }));
+  const fits = fitting(records, schemes);
+  const candidates = sides.map(([kept, of]) => ({ kept, of: withNewNames(of, records, fits) }));
   return [...records.nodes.keys()].flatMap((record) => {
-    const fits = fitsOf(record);
     const own = seals.get(record);
-    if (own !== undefined && fits(own)) return [];
+    if (own !== undefined && fits(record, own)) return [];
     const [best] = candidates
-      .map(({ kept, of }) => ({ kept, seal: of.get(record) }))
-      .flatMap(({ kept, seal }) => (seal !== undefined && fits(seal) ? { kept, seal } : []))
+      .flatMap(({ kept, of }) => {
+        const seal = of.get(record);
+        return seal !== undefined && fits(record, seal) ? { kept, seal } : [];
+      })
       .sort((a, b) => better(a.seal, b.seal));
     return best === undefined ? [] : { record, ...best, fits: true, rerunDropped: false };
   });
 }
 
-type FitsOf = (record: string) => (seal: Seal) => boolean;
+type Fits = (record: string, seal: Seal) => boolean;
 
 /** The seals of a side, those that only names keep from fitting under the names of now. */
 function withNewNames(
   file: Pick<SealsFile, 'seals'>,
   records: Records,
-  fitsOf: FitsOf,
+  fits: Fits,
 ): ReadonlyMap<string, Seal> {
   const seals = new Map(file.seals);
   const moved = followMoves(records, file);
   const from = new Map(moved.records.map((one) => [one.to, one.from]));
   for (const [record, seal] of moved.seals) {
-    if (!fitsOf(record)(seal)) continue;
+    if (!fits(record, seal)) continue;
     seals.set(record, seal);
     seals.delete(from.get(record) ?? '');
   }
@@ -104,9 +106,9 @@ function withNewNames(
 }
 
 /** Whether a seal fits a record as it is now, by the scheme that the seal was made with. */
-function fitting(records: Records, schemes: Schemes): FitsOf {
+function fitting(records: Records, schemes: Schemes): Fits {
   const linksBy = linksOf(records, schemes);
-  return (record) => (seal) => linksBy(seal.scheme).digests.get(record) === seal.digest;
+  return (record, seal) => linksBy(seal.scheme).digests.get(record) === seal.digest;
 }
 
 function choose(
