@@ -92,6 +92,16 @@ it('gives the project’s pre-push lines the words and the input of git, and its
   await remote.remove();
 });
 
+it('takes no base from the project’s lines', async () => {
+  setUp();
+  await repository.write('.husky/pre-commit', "echo --base 'main'\n");
+  await addHooks(await open());
+  const { hooks } = await addHooks(await open());
+  expect(hooks.map(({ base }) => base)).toEqual([null, null, null]);
+  await addHooks(await open(), { base: 'origin/main' });
+  expect((await listHooks(await open())).hooks.map(({ base }) => base)).toEqual(Array(3).fill('origin/main'));
+});
+
 it('starts the project’s own Stoplog', async () => {
   setUp();
   const dist = join(repository.folder, 'node_modules/stoplog/dist');

@@ -65,7 +65,7 @@ function refuseBase(base: string, hooks: readonly HookName[]): void {
     throw new Failure(
       'usage',
       `\`--base ${base}\` is no name of a revision that a hook can hold.`,
-      'Name a branch, such as `--base origin/main`, or `--base HEAD`.',
+      'Name the branch that changes go to, such as `--base origin/main`.',
     );
 }
 

@@ -42,7 +42,7 @@ export function findBlock(content: string): Block | null {
   const whole = end !== null && digest(ours.slice(0, end.index)) === end[1];
   return {
     rest: whole ? content.slice(0, start) + ours.slice(end.index + end[0].length) : content,
-    base: compared.exec(ours)?.[1] ?? null,
+    base: compared.exec(ours.slice(0, end?.index))?.[1] ?? null,
     changed: !whole || state === null,
     was: (state?.[1] ?? 'nothing') as Before['was'],
     foldersMade: Number(state?.[2] ?? 0),
