@@ -106,10 +106,10 @@ function untouched({ at, label }: Snapshot, base: Snapshot | null): string {
 
 /** Reads `--part` and `--gather`. */
 function readSharing({ part, gather = false, report, cache }: CheckOptions): Sharing | undefined {
-  if (part === undefined) {
-    if (gather && !cache) throw unlikely('--gather', '--no-cache', 'what the parts left is a memory');
-    return gather ? 'gather' : undefined;
-  }
+  if (part === undefined && !gather) return undefined;
+  if (!cache)
+    throw unlikely(gather ? '--gather' : '--part', '--no-cache', 'what parts leave for others is a memory');
+  if (part === undefined) return 'gather';
   if (gather) throw unlikely('--part', '--gather', 'the parts come first, in runs of their own');
   if (report !== undefined) throw unlikely('--part', '--report', 'one part alone gives no verdict');
   return { part: readPart(part) };

@@ -30,6 +30,25 @@ describe('the text of a memory', () => {
     expect(digestsFromText(`${text}x`).size).toBe(0);
   });
 
+  it('says nothing of a blob by a line of another form', () => {
+    const forged = [
+      { ...digest, sha256: `../../../${'a'.repeat(55)}` },
+      { ...digest, bytes: -1 },
+      { ...digest, kind: 'link' as 'content' },
+    ];
+    for (const wrong of forged)
+      expect(
+        digestsFromText(
+          digestsToText(
+            new Map([
+              [one, wrong],
+              [two, pointer],
+            ]),
+          ),
+        ),
+      ).toEqual(new Map([[two, pointer]]));
+  });
+
   it('lets the oldest go above 200 000 entries', () => {
     const many = new Map(
       Array.from({ length: 200_001 }, (_, place) => [place.toString(16).padStart(40, '0'), digest]),

@@ -73,11 +73,15 @@ function toLines(digests: ReadonlyMap<string, BlobDigest>): string[] {
     .map(([blob, { kind, sha256, bytes }]) => `${blob} ${kind} ${sha256} ${bytes}`);
 }
 
+const form = /^([0-9a-f]{40}|[0-9a-f]{64}) (content|pointer|extended-pointer) ([0-9a-f]{64}) (\d{1,15})$/;
+
+/** A line of another form is left out: the file may come from another machine, and a digest becomes part of a path. */
 function fromLines(lines: readonly string[]): Map<string, BlobDigest> {
-  return new Map(
-    lines.map((line) => {
-      const [blob, kind, sha256, bytes] = line.split(' ') as [string, BlobDigest['kind'], string, string];
-      return [blob, { kind, sha256, bytes: Number(bytes) }];
-    }),
-  );
+  const digests = new Map<string, BlobDigest>();
+  for (const line of lines) {
+    const [, blob, kind, sha256, bytes] = form.exec(line) ?? [];
+    if (blob !== undefined && sha256 !== undefined)
+      digests.set(blob, { kind: kind as BlobDigest['kind'], sha256, bytes: Number(bytes) });
+  }
+  return digests;
 }

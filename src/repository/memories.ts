@@ -17,7 +17,7 @@ export interface Memories {
 export interface Remembering {
   /** False to hash and compute everything anew and keep nothing under the git directory. */
   readonly remember?: boolean | undefined;
-  /** How the work is shared with other runs; without it this run does all of it. */
+  /** How the work is shared with other runs, by what is kept; without it this run does all of it. */
   readonly sharing?: Sharing | undefined;
   /** Told how far long work has come. */
   readonly progress?: ((text: string) => void) | undefined;
@@ -29,10 +29,9 @@ export async function openMemories(
   { remember = true, sharing, progress }: Remembering,
 ): Promise<Memories> {
   const left = new Map<string, number>();
-  if (!remember && sharing === undefined)
-    return { digests: forgetfulMemory(), values: forgetfulValues(progress), left };
+  if (!remember) return { digests: forgetfulMemory(), values: forgetfulValues(progress), left };
   const part = typeof sharing === 'object' ? sharing.part : undefined;
-  const folders = await memoryFolders(commonDirectory, sharing, remember);
+  const folders = await memoryFolders(commonDirectory, sharing);
   return {
     digests: await openDigestMemory(folders),
     values: openValueMemory(folders, { part, progress }),

@@ -12,11 +12,10 @@ export interface MemoryFolders {
 /** How a run shares its work: it does one part of it for others, or takes in what the parts did. */
 export type Sharing = { readonly part: Part } | 'gather';
 
-/** The folders of a repository's memory below its common git directory. `remember` false leaves out what earlier runs kept. */
+/** The folders of a repository's memory below its common git directory. */
 export async function memoryFolders(
   commonDirectory: string,
   sharing: Sharing | undefined,
-  remember: boolean,
 ): Promise<MemoryFolders> {
   const usual = join(commonDirectory, 'stoplog');
   if (sharing === undefined) return { own: usual, others: [] };
@@ -24,7 +23,7 @@ export async function memoryFolders(
     const parts = await partsIn(commonDirectory);
     return { own: usual, others: parts.map((part) => partFolder(commonDirectory, part)) };
   }
-  return { own: partFolder(commonDirectory, sharing.part), others: remember ? [usual] : [] };
+  return { own: partFolder(commonDirectory, sharing.part), others: [usual] };
 }
 
 /** Where a part leaves its work. */

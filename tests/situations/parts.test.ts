@@ -140,6 +140,7 @@ describe('work shared in parts', () => {
     [['--part', '1of2', '--gather'], 'do not go together'],
     [['--part', '1of2', '--report', 'json'], 'do not go together'],
     [['--gather', '--no-cache'], 'do not go together'],
+    [['--part', '1of2', '--no-cache'], 'do not go together'],
   ])('is asked for in words that make sense: %j', async (words, said) => {
     const { status, failure } = await stoplog(source.folder, ['check', ...words]);
     expect(status).toBe(2);
