@@ -1,6 +1,7 @@
 import { buildFacts } from '../facts/build.ts';
 import type { Facts } from '../facts/facts.ts';
 import { figuresToWrite } from '../facts/figures.ts';
+import { unscorable } from '../facts/score-figures.ts';
 import { Failure } from '../failure.ts';
 import { replaceScalars } from '../manifest/edit.ts';
 import { fieldName } from '../manifest/manifest.ts';
@@ -17,6 +18,8 @@ export interface WithFigures {
   /** The study as it reads with the new figures. */
   readonly study: Study;
   readonly written: readonly WrittenFigure[];
+  /** Asked records that state no score, and why none can be computed: by record id. */
+  readonly unscored: ReadonlyMap<string, string>;
 }
 
 /** The facts of one study on its own. */
@@ -34,7 +37,8 @@ export async function withFigures(
 ): Promise<WithFigures> {
   const facts = await factsOf(study, snapshot, today, 'archive');
   const figures = figuresToWrite(facts).filter(({ record }) => asked(record));
-  if (figures.length === 0) return { study, written: [] };
+  const unscored = new Map([...unscorable(facts)].filter(([record]) => asked(record)));
+  if (figures.length === 0) return { study, written: [], unscored };
   const text = replaceScalars(
     study.manifest,
     figures.map(({ field, found, decimals }) => ({
@@ -58,5 +62,6 @@ export async function withFigures(
       before: study.manifest.source(field) ?? 'nothing',
       after: manifest.source(field) ?? '',
     })),
+    unscored,
   };
 }

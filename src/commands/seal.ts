@@ -26,7 +26,15 @@ export interface SealOptions {
   readonly only?: string;
 }
 
-const nothingDone = { healed: [], moved: nothingMoved, figures: [], contradictions: [], written: [] };
+const noFigures = { written: [], unscored: new Map<string, string>() };
+const nothingDone = {
+  healed: [],
+  moved: nothingMoved,
+  figures: [],
+  unscored: noFigures.unscored,
+  contradictions: [],
+  written: [],
+};
 
 /** `stoplog seal`, of the work tree as `git add` would store it: 0 when all that was asked for is sealed, 1 when something was refused. Writes the seals file only, and with `--figures` the manifest. */
 export async function sealCommand(
@@ -49,9 +57,11 @@ export async function sealCommand(
     const { all = false, figures = false, moved: follow = false } = options;
     const asked = (record: string): boolean =>
       all || names.some((name) => record === name || record.startsWith(`${name}.`));
-    const { study: stated, written: newFigures } = figures
-      ? await withFigures(read, asked, snapshot, context.today)
-      : { study: read, written: [] };
+    const {
+      study: stated,
+      written: newFigures,
+      unscored,
+    } = figures ? await withFigures(read, asked, snapshot, context.today) : { study: read, ...noFigures };
     const { study, healed, moved } = await mended(stated, follow, repository, snapshot);
     const isWhole = unreadableSeals(study.sealsFile) === null;
     if (isWhole && healed.length === 0 && names.length === 0 && !all && !follow) throw nothingAsked();
@@ -63,7 +73,13 @@ export async function sealCommand(
       today: context.today,
       evidence: await evidenceFor(study, snapshot),
     });
-    const about = { plan, person, today: context.today, of: every.length > 1 ? study.manifest.path : null };
+    const about = {
+      plan,
+      person,
+      today: context.today,
+      of: every.length > 1 ? study.manifest.path : null,
+      onlyMoves: follow && names.length === 0 && !all,
+    };
     // Of a seals file that can't be read in whole, entries would be lost.
     if (!isWhole) {
       context.write(sealReport({ ...about, ...nothingDone }));
@@ -83,7 +99,7 @@ export async function sealCommand(
     const here = await realpath(context.cwd);
     const written = changed.map(({ target }) => relative(here, target));
     const stillHealed = healed.filter(({ record }) => !sealed.includes(record));
-    const done = { healed: stillHealed, moved, figures: newFigures, contradictions, written };
+    const done = { healed: stillHealed, moved, figures: newFigures, unscored, contradictions, written };
     context.write(sealReport({ ...about, ...done }));
     return plan.refused.length > 0 ? 1 : 0;
   } finally {

@@ -35,6 +35,24 @@ export function scoreFigures(facts: Pick<Facts, 'manifest' | 'records' | 'scores
   });
 }
 
+/** Why no score of a window can be computed, in words; null where it can. */
+export function whyUnscored({ recomputed }: TargetFigures, window: ScoredWindow): string | null {
+  const found = recomputedScore(recomputed, window, 'nse');
+  return isDefined(found) ? null : found.undefined;
+}
+
+/** Targets without any score, of which none can be computed either, and why: by record id. */
+export function unscorable({ scores }: Pick<Facts, 'scores'>): ReadonlyMap<string, string> {
+  const found = new Map<string, string>();
+  for (const figures of scores.values()) {
+    const reasons = scoredWindows.flatMap((window) => whyUnscored(figures, window) ?? []);
+    const [why] = reasons;
+    if (why !== undefined && figures.stated.length === 0 && reasons.length === scoredWindows.length)
+      found.set(figures.record, why);
+  }
+  return found;
+}
+
 function figuresOver(
   window: ScoredWindow,
   missing: readonly StatedName[],

@@ -26,10 +26,14 @@ export interface Contradiction {
 export interface SealOutcome {
   /** The manifest, where the repository holds others too. */
   readonly of: string | null;
+  /** Whether nothing else was asked for than to follow what was renamed. */
+  readonly onlyMoves: boolean;
   readonly plan: SealPlan;
   readonly healed: readonly HealedRecord[];
   readonly moved: FollowedMoves;
   readonly figures: readonly WrittenFigure[];
+  /** Records without a score, and why none can be computed: by record id. */
+  readonly unscored: ReadonlyMap<string, string>;
   readonly contradictions: readonly Contradiction[];
   /** Paths that were written, from the top of the repository. */
   readonly written: readonly string[];
@@ -40,9 +44,13 @@ export interface SealOutcome {
 const width = 100;
 const indent = ' '.repeat(5);
 
+const noMove =
+  'no sealed record names its files, unchanged, by other paths than before.\nAfter renaming a file, write its new path in the manifest first.';
+
 /** What a `seal` did, what it refused and why, and what to stage. */
 export function sealReport(outcome: SealOutcome): string {
-  const { of, plan, healed, moved, figures, contradictions, written, person, today } = outcome;
+  const { of, onlyMoves, plan, healed, moved, figures, unscored, contradictions, written, person, today } =
+    outcome;
   const lines = [
     ...titled('HEALED after a merge', healed.map(healedLine)),
     ...titled('MOVED, with who sealed it and when', [
@@ -56,6 +64,10 @@ export function sealReport(outcome: SealOutcome): string {
     ...titled(
       'FIGURES written into the manifest',
       figures.map(({ field, before, after }) => `${field}   ${before} -> ${after}`),
+    ),
+    ...titled(
+      'NO SCORES could be computed',
+      [...unscored].flatMap(([record, why]) => [record, ...indented(`${why}.`)]),
     ),
     ...titled(`SEALED by ${person} on ${today}`, plan.sealed.flatMap(sealedLines)),
     ...titled(
@@ -73,7 +85,8 @@ export function sealReport(outcome: SealOutcome): string {
     ),
   ];
   const head = of === null ? '' : `Records of ${plain(of)}\n\n`;
-  if (lines.length === 0) return `${head}Nothing to do: what was asked for is sealed, and unchanged since.\n`;
+  if (lines.length === 0)
+    return `${head}Nothing to do: ${onlyMoves ? noMove : 'what was asked for is sealed, and unchanged since.'}\n`;
   if (written.length > 0) lines.push('', `To stage   git add ${written.map(shellPath).join(' ')}`);
   return `${head}${lines.slice(lines[0] === '' ? 1 : 0).join('\n')}\n`;
 }

@@ -55,3 +55,20 @@ it('writes the score that tells of the low flows which the purpose needs', async
   for (const written of target.match(/(?<=(nse|pbias|r2|kge): )[-\d.]+/g) ?? [])
     expect(written).toMatch(/\.\d\d$/);
 });
+
+it('says why no score can be computed, as the check does', async () => {
+  project = await soundRepository();
+  await project.edit('stoplog.yaml', (text) =>
+    text
+      .replace(/^( {4}scores:)\n {6}calibration:.*\n {6}validation:.*\n/m, '')
+      .replace(/^ {2}(?:calibration|validation): \[.*\n/gm, ''),
+  );
+  const { text } = await stoplog(project.folder, ['seal', 'evaluation.outlet-flow', '--figures']);
+  expect(text).toMatch(
+    /NO SCORES could be computed\n {2}evaluation\.outlet-flow\n {5}no calibration window is stated\./,
+  );
+  const { verdict } = await check(project.folder);
+  const told = verdict.manifests[0]?.findings.find(({ rule }) => rule === 'evaluation.missing');
+  expect(told?.message).toContain('nor can they be computed: no calibration window is stated.');
+  expect(told?.clear).toMatch(/^Clear that first\. Then/);
+});

@@ -13,8 +13,19 @@ describe('a file is renamed, its bytes are the same', () => {
     project = await soundRepository();
     await mkdir(join(project.folder, 'data/gauges'));
     await project.git('mv', 'data/rain.csv', 'data/gauges/rain.csv');
+    const tooEarly = await stoplog(project.folder, ['seal', '--moved']);
+    expect(tooEarly.text).toContain('write its new path in the manifest first');
+
     await project.edit('stoplog.yaml', (text) => text.replaceAll('data/rain.csv', 'data/gauges/rain.csv'));
-    expect((await check(project.folder)).state('inputs.rainfall')).toBe('stale');
+    const { state, verdict } = await check(project.folder);
+    expect(state('inputs.rainfall')).toBe('stale');
+    expect(verdict.manifests[0]?.findings).toContainEqual(
+      expect.objectContaining({
+        rule: 'seal.stale',
+        record: 'inputs.rainfall',
+        clear: expect.stringContaining('stoplog seal --moved'),
+      }),
+    );
 
     const moved = await stoplog(project.folder, ['seal', '--moved'], '2021-04-01');
     expect(moved.text).toContain('data/rain.csv -> data/gauges/rain.csv');

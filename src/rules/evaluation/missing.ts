@@ -1,5 +1,6 @@
 import type { Facts } from '../../facts/facts.ts';
 import { nodesIn } from '../../facts/nodes-in.ts';
+import { whyUnscored } from '../../facts/score-figures.ts';
 import { scoredWindows } from '../../facts/scores/stated.ts';
 import type { RecordNode } from '../../records/record.ts';
 import { type Draft, rule } from '../rule.ts';
@@ -66,15 +67,18 @@ function withoutScores(
   { scores }: Facts,
 ): readonly Draft[] {
   if (isStated(fragment.none_because)) return [];
-  const stated = scores.get(name ?? '')?.stated ?? [];
+  const figures = scores.get(name ?? '');
   return scoredWindows
-    .filter((window) => stated.every((score) => score.window !== window))
-    .map((window) => ({
-      record: id,
-      field: [...field, 'scores'],
-      subject: window,
-      from: window,
-      message: `No ${window} scores are stated for ${name}.`,
-      clear: `\`stoplog seal --figures ${id}\` computes and writes them; or state them under scores.${window}.`,
-    }));
+    .filter((window) => !figures?.stated.some((score) => score.window === window))
+    .map((window) => {
+      const hindrance = figures === undefined ? null : whyUnscored(figures, window);
+      return {
+        record: id,
+        field: [...field, 'scores'],
+        subject: window,
+        from: window,
+        message: `No ${window} scores are stated for ${name}${hindrance === null ? '.' : `, nor can they be computed: ${hindrance}.`}`,
+        clear: `${hindrance === null ? '' : 'Clear that first. Then '}\`stoplog seal --figures ${id}\` computes and writes them; or state them under scores.${window}.`,
+      };
+    });
 }

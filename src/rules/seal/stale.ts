@@ -47,7 +47,7 @@ function stale(record: RecordNode, { changes, trails }: Standing, seal: Seal, fa
         .slice(0, shownAtMost)
         .map((trail) => `also rests on ${trail.slice(1).join(' <- ')}`),
     ],
-    clear: nextStep(record, own.length > 0),
+    clear: wasRenamed(files) ? renamed(record) : nextStep(record, own.length > 0),
   };
 }
 
@@ -79,6 +79,20 @@ function kindOf({ was, now }: FileChange): 'changed' | 'gone' | 'added' | 'unrea
   if (now === null) return 'gone';
   if (was === null) return 'added';
   return now.kind === 'unavailable' ? 'unread' : 'changed';
+}
+
+/** Whether a file is gone, and one with the same bytes is there instead. */
+function wasRenamed(files: readonly FileChange[]): boolean {
+  const added = new Set(
+    files.flatMap(({ was, now }) =>
+      was === null && now !== null && now.kind !== 'unavailable' ? now.sha256 : [],
+    ),
+  );
+  return files.some(({ was, now }) => now === null && was?.sha256 != null && added.has(was.sha256));
+}
+
+function renamed({ id }: RecordNode): string {
+  return `For the renamed file: stoplog seal --moved (keeps who sealed it, and when). If more changed, look at it, then: stoplog seal ${id}`;
 }
 
 function nextStep({ id, area }: RecordNode, own: boolean): string {
