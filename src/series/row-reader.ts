@@ -137,6 +137,9 @@ export class RowReader {
     let count = rows.count;
     while (count > widest && rows.starts[count - 1] === rows.ends[count - 1]) count--;
     if (count >= this.narrowest && count <= widest) return true;
+    const text = rows.text(0);
+    if (conflictMarker.test(text))
+      return this.refuse('a row', quoted(text), 'git left a merge conflict here');
     this.refuse(
       count > widest ? `${widest} columns` : `at least ${this.narrowest} columns`,
       String(count),
@@ -181,6 +184,9 @@ export class RowReader {
     return false;
   }
 }
+
+/** What git writes about and between the two sides of a conflict. */
+const conflictMarker = /^(?:<{7}|\|{7}|={7}|>{7})(?: |$)/;
 
 /** `1,234.5`, `1.234,5`, `1 234`. */
 const grouped = /^[+-]?\d{1,3}(?:[.,' ]\d{3})+(?:[.,]\d*)?$/;

@@ -117,6 +117,16 @@ const faulty: readonly {
     rows: ['2010-02-02 2'],
   },
   {
+    name: 'a merge conflict that was left',
+    text: 'date,flow\n<<<<<<< HEAD\n2010-01-31,1\n=======\n2010-01-31,2\n>>>>>>> other\n2010-02-01,3\n',
+    says: [
+      'flow.csv line 2: expected a row, found "<<<<<<< HEAD"; git left a merge conflict here',
+      'flow.csv line 4: expected a row, found "======="; git left a merge conflict here',
+      'flow.csv line 6: expected a row, found ">>>>>>> other"; git left a merge conflict here',
+    ],
+    rows: ['2010-01-31 1', '2010-01-31 2', '2010-02-01 3'],
+  },
+  {
     name: 'text after a quoted field',
     text: 'date,flow\n2010-01-31,"1"5\n2010-02-01,2\n',
     says: [

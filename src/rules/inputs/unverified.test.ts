@@ -41,7 +41,7 @@ ruleCases(inputsUnverified, {
     {
       name: 'kept elsewhere without a digest',
       set: { 'inputs.terrain.files': [{ path: 'dem.tif' }] },
-      finds: { message: 'nothing identifies it' },
+      finds: { message: 'without its SHA-256, so nothing identifies it', clear: 'named by its path alone' },
     },
     {
       name: 'a link that leads nowhere',

@@ -57,10 +57,18 @@ function keptElsewhere(
   beside: Facts['beside'],
 ): readonly Draft[] {
   const draft = { record, field, subject: path };
-  const kept = `${path} is kept outside git${location === undefined ? '' : ` (${location})`}`;
+  const where = location === undefined ? '' : ` (${location})`;
   if (sha256 === undefined) {
-    return [{ ...draft, message: `${kept}, and no SHA-256 is stated, so nothing identifies it.` }];
+    return [
+      {
+        ...draft,
+        message: `${path} is stated as a file kept outside git${where} without its SHA-256, so nothing identifies it.`,
+        clear:
+          'Write its `sha256` there (`sha256sum FILE` prints it). A file that git tracks is named by its path alone: [path/to/file].',
+      },
+    ];
   }
+  const kept = `${path} is kept outside git${where}`;
   const here = beside.get(path);
   if (!here)
     return [{ ...draft, message: `${kept} and not at its path here, so its content could not be checked.` }];
