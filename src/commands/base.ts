@@ -3,7 +3,7 @@ import { partingFrom } from '../repository/merge-base.ts';
 import { openSnapshot, type SnapshotOptions } from '../repository/open-snapshot.ts';
 import type { Repository } from '../repository/repository.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
-import type { Against } from './examine.ts';
+import type { Against } from './comparison.ts';
 
 /** Opens the state to compare with: that of the commit at which this one left the base. The caller closes it. */
 export async function openBase(

@@ -18,7 +18,8 @@ import type { Verdict } from '../verdict/finding.ts';
 import { version } from '../version.ts';
 import { openBase } from './base.ts';
 import type { Context, ExitStatus } from './command.ts';
-import { type Against, examine } from './examine.ts';
+import type { Against } from './comparison.ts';
+import { examine } from './examine.ts';
 import { onlyFromTop } from './only.ts';
 import { missingParts, readPart, workOnPart } from './part.ts';
 import { stoplogFiles } from './studies.ts';
@@ -108,14 +109,18 @@ function untouched({ at, label }: Snapshot, base: Snapshot | null): string {
 function readSharing({ part, gather = false, report, cache }: CheckOptions): Sharing | undefined {
   if (part === undefined && !gather) return undefined;
   if (!cache)
-    throw unlikely(gather ? '--gather' : '--part', '--no-cache', 'what parts leave for others is a memory');
+    throw notTogether(
+      gather ? '--gather' : '--part',
+      '--no-cache',
+      'what parts leave for others is a memory',
+    );
   if (part === undefined) return 'gather';
-  if (gather) throw unlikely('--part', '--gather', 'the parts come first, in runs of their own');
-  if (report !== undefined) throw unlikely('--part', '--report', 'one part alone gives no verdict');
+  if (gather) throw notTogether('--part', '--gather', 'the parts come first, in runs of their own');
+  if (report !== undefined) throw notTogether('--part', '--report', 'one part alone gives no verdict');
   return { part: readPart(part) };
 }
 
-function unlikely(one: string, other: string, why: string): Failure {
+function notTogether(one: string, other: string, why: string): Failure {
   return new Failure(
     'usage',
     `\`${one}\` and \`${other}\` do not go together: ${why}.`,
@@ -128,7 +133,7 @@ function partDone(part: Part, { label }: Snapshot): string {
 }
 
 /** `worktree`, `index`, or anything else as a revision. */
-export function readAt(at: string): At {
+function readAt(at: string): At {
   return at === 'worktree' || at === 'index' ? { kind: at } : { kind: 'revision', revision: at };
 }
 

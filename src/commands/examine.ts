@@ -9,8 +9,9 @@ import type { Phase } from '../rules/rule.ts';
 import { runFileRules, runRules } from '../rules/run.ts';
 import { againstBase, type Judged } from '../verdict/against-base.ts';
 import { changedIn } from '../verdict/changed.ts';
-import type { Comparison, ManifestVerdict, Verdict } from '../verdict/finding.ts';
+import type { ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { concludeVerdict, judgeManifest, judgeUnread } from '../verdict/judge.ts';
+import { type Against, compared } from './comparison.ts';
 import { formerly, formerPaths } from './former.ts';
 import { type Chosen, choose, pathOf } from './only.ts';
 import { readStudies, type Study, type Unread, withoutManifest } from './studies.ts';
@@ -21,14 +22,6 @@ export interface ExamineOptions {
   /** Judge as if the study had come this far, whatever the manifest says. */
   readonly phase?: Phase | undefined;
   readonly against?: Against | undefined;
-}
-
-/** What a state is compared with. */
-export interface Against extends Pick<Comparison, 'asked' | 'strict' | 'unavailable'> {
-  /** The state of the base; null where there is none to be had. */
-  readonly base: Snapshot | null;
-  /** Whether it is one of several from which the two histories could be said to part. */
-  readonly crossed: boolean;
 }
 
 const known: KnownRules = knownRules();
@@ -83,8 +76,9 @@ export async function examineWithFacts(snapshot: Snapshot, options: ExamineOptio
       studies.push({ ...examined, verdict: { ...verdict, changed: asked } });
     }
   }
-  const comparison =
-    against === undefined ? null : compared(against, before, only === undefined ? all : null, former);
+  const paths = only === undefined ? all.map(pathOf) : null;
+  const inBase = before.map(({ verdict }) => verdict);
+  const comparison = against === undefined ? null : compared(against, inBase, paths, former);
   const manifests = studies.map(({ verdict }) => verdict);
   return { studies, verdict: concludeVerdict(snapshot.label, base?.label ?? null, manifests, comparison) };
 }
@@ -100,31 +94,6 @@ async function examineBase(
 function judged({ facts, verdict }: ExaminedStudy): Judged {
   const nodes = [...(facts?.records.nodes.values() ?? [])];
   return { verdict, digests: new Map(nodes.map(({ id, digest }) => [id, digest])) };
-}
-
-/** `all` is null where only some of what is there was asked about. */
-function compared(
-  { asked, strict, unavailable, base, crossed }: Against,
-  before: readonly ExaminedStudy[],
-  all: readonly (Study | Unread)[] | null,
-  former: ReadonlyMap<string, string>,
-): Comparison {
-  const moved = [...former].map(([path, was]) => `${path} is compared with ${was} of ${base?.label}.`);
-  const others = crossed
-    ? [
-        `${asked} and this were merged crosswise and have several newest commits in common. This is compared with ${base?.label} alone; what only another of them brought counts as new. Merge ${asked} into this to have one again.`,
-      ]
-    : [];
-  const followed = new Set(former.values());
-  const notes = before.flatMap(({ facts, verdict: { path } }) => [
-    ...(all === null || followed.has(path) || all.some((study) => pathOf(study) === path)
-      ? []
-      : [`${path} is gone since ${base?.label}: the model that it governed is no longer checked.`]),
-    ...(facts === null
-      ? [`${path} could not be read in ${base?.label}, so all that is found in it counts as new.`]
-      : []),
-  ]);
-  return { asked, strict, unavailable, notes: [...others, ...moved, ...notes] };
 }
 
 async function examineStudy(
