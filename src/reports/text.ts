@@ -46,8 +46,10 @@ function opening(verdict: Verdict, manifest: ManifestVerdict, name: string): rea
   const study = plain(manifest.study ?? manifest.path);
   const column = Math.min(Math.max(study.length, 28), width / 2);
   const where = verdict.base === null ? verdict.at : `${verdict.at}, against ${verdict.base}`;
+  const isOneOfSeveral = verdict.manifests.length > 1 && manifest.study !== null;
   return [
     `${name}   ${study.padEnd(column)}    ${plain(where)}`,
+    ...(isOneOfSeveral ? [' '.repeat(10) + plain(manifest.path)] : []),
     ' '.repeat(10) +
       (isUnread(manifest) ? unread : `${`phase ${manifest.phase}`.padEnd(column)}    ${soundOf(manifest)}`),
   ];

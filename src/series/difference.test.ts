@@ -27,6 +27,7 @@ describe('the difference of two versions of a series', () => {
       first: null,
       last: null,
       unit: 'mm',
+      unread: 0,
     });
   });
 
@@ -49,6 +50,7 @@ describe('the difference of two versions of a series', () => {
       first: '2010-01-02',
       last: '2010-01-04',
       unit: 'mm',
+      unread: 0,
     });
   });
 

@@ -13,6 +13,8 @@ export interface SeriesDifference {
   readonly first: string | null;
   readonly last: string | null;
   readonly unit: string;
+  /** Rows of the new file that can't be read; they take no part. */
+  readonly unread: number;
 }
 
 /**
@@ -50,6 +52,7 @@ export function differenceOfSeries(before: SeriesTable, after: SeriesTable): Ser
     first: changed === 0 ? null : formatTime(first, step),
     last: changed === 0 ? null : formatTime(last, step),
     unit: after.unit,
+    unread: after.problems.total,
   };
 }
 

@@ -51,6 +51,9 @@ describe('two models in one repository', () => {
     expect(one.verdict.manifests.map(({ phase }) => phase)).toEqual(['calibration', 'application']);
     const { text } = await stoplog(project.folder, ['check']);
     expect(text.match(/^ +phase (calibration|application) /gm)).toHaveLength(2);
+    // Both studies have one title.
+    for (const folder of [lower, upper])
+      expect(text).toMatch(new RegExp(`^ {10}${folder}/stoplog.yaml$`, 'm'));
     expect(text.match(/^(PASS|BLOCKED {3}\d+ finding)/gm)).toHaveLength(1);
   });
 

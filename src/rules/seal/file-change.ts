@@ -22,7 +22,9 @@ export function fileChange(
 
 /** `14 of 5 113 values differ; total 11 402 -> 11 655 mm (+2.2 %), 2007-01-03 to 2007-01-16` */
 function seriesChange(difference: SeriesDifference, step: string | undefined): string {
-  const { values, changed, totalBefore, totalAfter, first, last, unit } = difference;
+  const { values, changed, totalBefore, totalAfter, first, last, unit, unread } = difference;
+  if (changed === 0 && unread > 0)
+    return `no value that can be read differs, but ${figure(unread)} ${unread === 1 ? 'row' : 'rows'} can’t be read`;
   if (changed === 0) return 'no value differs; only how the file is written (line ends, names, order)';
   const amount = amountUnit(unit, step);
   const share = totalBefore === 0 ? '' : ` (${percent((totalAfter - totalBefore) / Math.abs(totalBefore))})`;

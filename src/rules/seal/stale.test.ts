@@ -66,6 +66,18 @@ ruleCases(sealStale, {
       ],
     },
     {
+      name: 'a row that can’t be read, and no other value',
+      seals: 'sound',
+      files: { 'data/leaf-area.csv': (old) => `${old}x\n` },
+      finds: [
+        {
+          record: 'inputs.vegetation',
+          detail: ['no value that can be read differs, but 1 row can’t be read'],
+        },
+        { record: 'interventions' },
+      ],
+    },
+    {
       name: 'a sum that tells no amount',
       seals: 'sound',
       files: { 'data/temperature.csv': (old) => old.replace('2001-10-01,11.1688', '2001-10-01,21.1688') },
