@@ -71,7 +71,8 @@ describe('the rules by which GitHub takes files in, as Microsoft’s program has
   // The project has no address of its own to name.
   const homeless = 'SARIF2005 Warning_ProvideToolnformationUri runs[0].tool.driver stoplog';
 
-  it.skipIf(!multitool.available).each(verdicts)(
+  // Of thousands of findings it takes long; those of a whole run are held against it beside the other reports.
+  it.skipIf(!multitool.available).each(verdicts.filter(([, verdict]) => verdict !== large))(
     `pass %s ${because}`,
     { timeout: 300_000 },
     async (_, verdict) => {
