@@ -170,5 +170,12 @@ function readReport(given: string): Report {
       `Kinds: ${kinds.join(', ')}; as \`--report json=findings.json\`, or \`--report json\` for standard output.`,
     );
   }
-  return { kind: known, to: path.length === 0 ? '-' : path.join('=') };
+  const to = path.length === 0 ? '-' : path.join('=');
+  if (to === '')
+    throw new Failure(
+      'usage',
+      `\`--report ${given}\` names no file after the equals sign.`,
+      `Write \`--report ${kind}=PATH\`, or \`--report ${kind}\` for standard output.`,
+    );
+  return { kind: known, to };
 }

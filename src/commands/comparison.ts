@@ -35,5 +35,11 @@ export function compared(
       ? [`${manifest.path} could not be read in ${base?.label}, so all that is found in it counts as new.`]
       : []),
   ]);
-  return { asked, strict, unavailable, notes: [...others, ...moved, ...notes] };
+  const isFirst = base !== null && now !== null && before.length === 0;
+  const first = isFirst
+    ? [
+        `${base.label} holds no manifest yet, so all that is found counts as new. Once this one is committed, changes are compared with it.`,
+      ]
+    : [];
+  return { asked, strict, unavailable, notes: [...others, ...moved, ...first, ...notes] };
 }

@@ -365,3 +365,21 @@ describe('where the base can’t be had, all is checked and the way out is said'
     expect(checked.verdict.comparison?.unavailable).toMatch(/base could not be read.*--refetch/s);
   });
 });
+
+describe('a first manifest', () => {
+  it('is told that the base has none, so that everything counts as new', async () => {
+    project = await soundRepository();
+    await project.state({ set: legacy });
+    await project.git('rm', '--quiet', '--cached', 'stoplog.yaml', 'stoplog.seals.json');
+    await project.git('commit', '--quiet', '--message', 'As it was for years');
+    await project.git('add', 'stoplog.yaml', 'stoplog.seals.json');
+    await project.commit('Records begun');
+    const { verdict, status } = await check(project.folder, '--at', 'HEAD', '--base', 'HEAD~1');
+    expect(status).toBe(1);
+    expect(verdict.comparison?.notes).toEqual([
+      expect.stringMatching(/^[0-9a-f]{7,} holds no manifest yet, so all that is found counts as new\./),
+    ]);
+    const same = await check(project.folder, '--at', 'HEAD', '--base', 'HEAD');
+    expect([same.status, same.verdict.comparison?.notes]).toEqual([0, []]);
+  });
+});
