@@ -51,8 +51,7 @@ export function choose(all: readonly (Study | Unread)[], only: string | undefine
   const withRecord = all.filter(
     (study) => 'problems' in study || [...study.records.nodes.keys()].some(includes),
   );
-  const named = withRecord.some((study) => !('problems' in study));
-  if (named || withRecord.length > 0) return { studies: withRecord, includes };
+  if (withRecord.length > 0) return { studies: withRecord, includes };
   throw new Failure(
     'usage',
     `\`--only ${only}\` names no record, no area and no manifest’s folder.`,
