@@ -1,16 +1,12 @@
-import { execFile } from 'node:child_process';
-import { mkdtemp, readFile, realpath, rm, symlink } from 'node:fs/promises';
-import { tmpdir } from 'node:os';
-import { delimiter, join, resolve } from 'node:path';
-import { promisify } from 'node:util';
+import { readFile } from 'node:fs/promises';
+import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { stoplog } from '../harness/command.ts';
-import { cleanEnvironment } from '../harness/repository.ts';
+import { type Installed, installed } from '../harness/installed.ts';
 import { type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
 
-const run = promisify(execFile);
 let project: SoundRepository;
-let tools: string;
+let tools: Installed;
 
 /** A value outside the range that it was searched in, as an old model may bring along. */
 const parameter = (name: string, value: number) => ({
@@ -24,24 +20,19 @@ beforeEach(async () => {
   await project.state({ set: { 'parameters.values': [parameter('old', 9)] } });
   await project.commit('What was always there');
   await project.git('checkout', '--quiet', '-b', 'change');
-  tools = await realpath(await mkdtemp(join(tmpdir(), 'stoplog-tools-')));
-  await symlink(resolve('dist/stoplog.mjs'), join(tools, 'stoplog'));
+  tools = await installed();
 });
 afterEach(async () => {
   await project.remove();
-  await rm(tools, { recursive: true });
+  await tools.remove();
 });
 
 const hook = (...words: string[]) => stoplog(project.folder, ['hook', ...words]);
 const preCommit = () => readFile(join(project.folder, '.git/hooks/pre-commit'), 'latin1');
 
-async function commit(...words: readonly string[]): Promise<{ done: boolean; words: string }> {
-  const env = cleanEnvironment({ PATH: `${tools}${delimiter}${process.env.PATH}` });
+async function commit(...words: readonly string[]) {
   await project.git('add', '--all');
-  return run('git', ['commit', '--message', 'Work', ...words], { cwd: project.folder, env }).then(
-    ({ stdout, stderr }) => ({ done: true, words: stdout + stderr }),
-    (error: { stdout: string; stderr: string }) => ({ done: false, words: error.stdout + error.stderr }),
-  );
+  return tools.git(project.folder, 'commit', '--message', 'Work', ...words);
 }
 
 describe('hooks with a base, in a repository with a past', () => {

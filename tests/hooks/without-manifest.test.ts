@@ -1,23 +1,18 @@
-import { execFile } from 'node:child_process';
-import { mkdtemp, realpath, rm, symlink } from 'node:fs/promises';
-import { tmpdir } from 'node:os';
-import { delimiter, join, resolve } from 'node:path';
-import { promisify } from 'node:util';
+import { join } from 'node:path';
 import { afterEach, beforeEach, expect, it } from 'vitest';
 import { stoplog } from '../harness/command.ts';
-import { cleanEnvironment, gitIn } from '../harness/repository.ts';
+import { type Installed, installed } from '../harness/installed.ts';
+import { gitIn } from '../harness/repository.ts';
 import { type SoundRepository, soundRepository } from '../harness/sound-repository.ts';
 
-const run = promisify(execFile);
 let project: SoundRepository;
-let place: string;
+let tools: Installed;
 
 // A repository that was there before its first manifest: `main` has one, `old` and the tag `v0` have none.
 beforeEach(async () => {
   project = await soundRepository();
-  place = await realpath(await mkdtemp(join(tmpdir(), 'stoplog-tools-')));
-  await symlink(resolve('dist/stoplog.mjs'), join(place, 'stoplog'));
-  await gitIn(place)('init', '--quiet', '--bare', 'server.git');
+  tools = await installed();
+  await gitIn(tools.folder)('init', '--quiet', '--bare', 'server.git');
   await project.git('checkout', '--quiet', '--orphan', 'old');
   await project.git('rm', '--quiet', '--cached', '-r', '.');
   await project.git('add', 'data');
@@ -28,19 +23,13 @@ beforeEach(async () => {
 });
 afterEach(async () => {
   await project.remove();
-  await rm(place, { recursive: true });
+  await tools.remove();
 });
 
-async function git(...words: readonly string[]): Promise<{ done: boolean; words: string }> {
-  const env = cleanEnvironment({ PATH: `${place}${delimiter}${process.env.PATH}` });
-  return run('git', words, { cwd: project.folder, env }).then(
-    ({ stdout, stderr }) => ({ done: true, words: stdout + stderr }),
-    (error: { stdout: string; stderr: string }) => ({ done: false, words: error.stdout + error.stderr }),
-  );
-}
+const git = (...words: readonly string[]) => tools.git(project.folder, ...words);
 
 it('a branch and a tag from before the first manifest are pushed, and one line says why', async () => {
-  const pushed = await git('push', join(place, 'server.git'), 'old', 'v0');
+  const pushed = await git('push', join(tools.folder, 'server.git'), 'old', 'v0');
   const id = (await project.git('rev-parse', '--short=7', 'old')).trim();
   expect(pushed.words).toContain(`stoplog   ${id} holds no manifest, so there is nothing to check\n`);
   expect(pushed.done).toBe(true);
