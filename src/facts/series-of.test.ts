@@ -76,7 +76,18 @@ describe('the series that an input stands for', () => {
     ['another file', `files: [a.csv], series: ${series}`, { file: 'c.csv' }, /no file c.csv/],
     ['another input', `files: [a.csv], series: ${series}`, { input: 'snow' }, /inputs.snow has no file/],
     ['no such column', `files: [a.csv], series: ${series}`, { values: 'hail' }, /can't be read/],
-    ['no series', 'files: [a.csv]', {}, /can't be read/],
+    [
+      'no series',
+      'files: [a.csv]',
+      {},
+      /^inputs\.rainfall does not say under `series` how study\/a\.csv is to be read$/,
+    ],
+    [
+      'another layout',
+      'files: [a.csv], series: {time: day, values: rain, unit: mm/d, step: P1D}',
+      {},
+      /a\.csv can't be read/,
+    ],
   ])('is none: %s', async (_, input, reference, reason) => {
     expect(await valuesOf(input, reference)).toMatch(reason);
   });

@@ -119,7 +119,12 @@ export async function seriesOfInput(
       if (file !== undefined && name !== file) continue;
       const table = await seriesOfFile(path, layout, snapshot);
       if (table === null) return undefinedBecause(`the content of ${path} is not here`);
-      if (table.columns.length === 0) return undefinedBecause(`${path} can't be read as a series`);
+      if (table.columns.length === 0)
+        return undefinedBecause(
+          holder.fragment.series === undefined
+            ? `${holder.id} does not say under \`series\` how ${path} is to be read`
+            : `${path} can't be read as a series`,
+        );
       for (const [place, column] of table.columns.entries())
         parts.push({ entry: holder.id, file: name, column: column.name, series: columnOf(table, place + 1) });
     }
