@@ -142,8 +142,7 @@ function write(kind: Kind, verdict: Verdict, options: CheckOptions, color: boole
     case 'text':
       return textReport(verdict, {
         color: options.color ?? color,
-        quiet: options.quiet ?? false,
-        brief: options.brief ?? false,
+        extent: options.quiet ? 'quiet' : options.brief ? 'brief' : 'whole',
       });
     case 'json':
       return jsonReport(verdict);

@@ -38,7 +38,7 @@ async function make(
   { verdict, content }: Gathered,
 ): Promise<ExitStatus> {
   if (content === null || (content.draft && draft !== true)) {
-    context.write(textReport(verdict, { color: context.color, quiet: true, brief: false }));
+    context.write(textReport(verdict, { color: context.color, extent: 'quiet' }));
     context.write(`\nNo dossier was written: ${refusal(content)}\n`);
     return 1;
   }

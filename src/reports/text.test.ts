@@ -4,7 +4,7 @@ import { concludeVerdict } from '../verdict/judge.ts';
 import { jsonReport } from './json.ts';
 import { textReport } from './text.ts';
 
-const plainText = { color: false, quiet: false, brief: false };
+const plainText = { color: false, extent: 'whole' } as const;
 
 function finding(over: Partial<Finding> = {}): Finding {
   return {
@@ -79,7 +79,7 @@ BLOCKED   1 finding to clear, 0 warnings, 0 notes
   });
 
   it('is silent on a quiet pass and shows only what blocks on a quiet hold', () => {
-    const quiet = { ...plainText, quiet: true };
+    const quiet = { ...plainText, extent: 'quiet' } as const;
     expect(textReport(verdictOf([finding({ level: 'warn' })]), quiet)).toBe('');
     const text = textReport(verdictOf([finding(), finding({ level: 'note', record: 'study' })]), quiet);
     expect(text).toContain('inputs.rainfall');
@@ -87,7 +87,7 @@ BLOCKED   1 finding to clear, 0 warnings, 0 notes
   });
 
   it('is brief where it is read at every commit: what blocks or asks for less, else a line and the tally', () => {
-    const brief = { ...plainText, brief: true };
+    const brief = { ...plainText, extent: 'brief' } as const;
     const doubts = [
       finding({ level: 'warn' }),
       finding({ level: 'warn', rule: 'inputs.day-unstated' }),

@@ -11,10 +11,11 @@ import { wrap } from './wrap.ts';
 
 export interface TextOptions {
   readonly color: boolean;
-  /** Only what blocks, and nothing at all on a pass. */
-  readonly quiet: boolean;
-  /** In full only what blocks or asks for less; a line for each record that warns, and notes are counted. */
-  readonly brief: boolean;
+  /**
+   * `brief` tells in full only what blocks or asks for less, with a line for each record that warns, and counts notes; `quiet` tells
+   * only what blocks, and nothing at all on a pass.
+   */
+  readonly extent: 'whole' | 'brief' | 'quiet';
 }
 
 const width = 100;
@@ -22,22 +23,24 @@ const indent = ' '.repeat(5);
 const headings: Readonly<Record<Level, string>> = { block: 'BLOCKED', warn: 'WARNED', note: 'NOTED' };
 
 /** The verdict for a terminal: what is held back and why, what to do, then the tally. */
-export function textReport(verdict: Verdict, { color, quiet, brief }: TextOptions): string {
+export function textReport(verdict: Verdict, { color, extent }: TextOptions): string {
+  const [brief, quiet] = [extent === 'brief', extent === 'quiet'];
   if (quiet && verdict.verdict === 'pass') return '';
   const paint = new Chalk({ level: color ? 1 : 0 });
-  const isShown = (one: Finding): boolean => one.level === 'block' || (!quiet && (!brief || loosens(one)));
+  const isShown = (one: Finding): boolean =>
+    one.level === 'block' || extent === 'whole' || (brief && loosens(one));
   const lines = verdict.manifests.flatMap((manifest, index) => [
     ...(index > 0 ? [''] : []),
     ...opening(verdict, manifest, index === 0 ? paint.bold('stoplog') : ' '.repeat(7)),
     ...sections(verdict, manifest, isShown, paint),
-    ...(brief && !quiet ? warned(verdict, manifest) : []),
+    ...(brief ? warned(verdict, manifest) : []),
     ...(quiet ? [] : [...standing(verdict, manifest), ...cured(verdict, manifest), ...answered(manifest)]),
   ]);
   const pass = verdict.verdict === 'pass';
   lines.push(...remarks(verdict).flatMap((remark) => ['', ...wrap(plain(remark), width)]));
   lines.push('', `${pass ? paint.green.bold('PASS') : paint.red.bold('BLOCKED')}   ${tally(verdict)}`);
   const { warn, note } = verdict.totals;
-  if (brief && !quiet && warn + note > 0) lines.push('`stoplog check` prints warnings and notes in full.');
+  if (brief && warn + note > 0) lines.push('`stoplog check` prints warnings and notes in full.');
   if (pass) lines.push('', ...wrap(caution, width).map((line) => paint.dim(line)));
   return inert(`${lines.join('\n')}\n`);
 }

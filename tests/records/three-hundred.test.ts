@@ -117,7 +117,7 @@ async function sealed(files: FilesInMemory): Promise<FilesInMemory> {
 }
 
 const check = async (files: FilesInMemory) => examine(snapshotFromMemory(files), { today });
-const quietly = { color: false, quiet: false, brief: false };
+const plainText = { color: false, extent: 'whole' } as const;
 
 describe('three hundred gauges', () => {
   let files: FilesInMemory;
@@ -148,7 +148,7 @@ describe('three hundred gauges', () => {
     // The parameters, the run and three hundred targets rest on it.
     expect(stale).toHaveLength(303);
     expect(new Set(stale.map(({ trail }) => trail.at(-1)))).toEqual(new Set([path]));
-    const text = textReport(verdict, quietly);
+    const text = textReport(verdict, plainText);
     expect(text).toContain(`more records that rest on ${path}`);
     expect(text.match(/^ +rests on/gm)?.length).toBeLessThan(20);
   }, 120_000);
@@ -178,7 +178,7 @@ describe('three hundred gauges', () => {
       ...files,
       'stoplog.yaml': manifest.replace('unit: m3/s, step: P1M, missing', 'step: P1M, missing'),
     });
-    const text = textReport(verdict, quietly);
+    const text = textReport(verdict, plainText);
     expect(text).toContain('297 more records that stand in inputs.gauge and have the same findings');
     expect(text.split('\n').length).toBeLessThan(400);
   }, 120_000);

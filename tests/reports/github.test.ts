@@ -155,7 +155,7 @@ describe('a stranger’s words in other output', () => {
   });
 
   it.each([
-    ['text', textReport(hostile, { color: false, quiet: false, brief: false })],
+    ['text', textReport(hostile, { color: false, extent: 'whole' })],
     ['json', jsonReport(hostile)],
     ['sarif', sarifReport(hostile, '1.2.3')],
     ['junit', junitReport(hostile)],
