@@ -40,6 +40,7 @@ const mistakes: readonly (readonly [text: string, ending: string])[] = [
   ['study: {needs: [{regime: low flows}]}', 'Perhaps `low` is meant.'],
   ['study: {purpose: [low flows, floods]}', 'is a list; expected a text.'],
   ['catchment: {area: 61 km2}', 'expected a map of keys such as {value: ..., unit: ...}.'],
+  ['balance: {catchment: {inflow: [P]}}', 'is a list; expected a map of keys such as {NAME: ...}.'],
   ['catchment: {outlet: [-1.5, 52.5]}', 'such as {longitude: ..., latitude: ...}.'],
   ['parameters: {values: [{name: a, change: multiply}]}', 'Perhaps `scale` is meant.'],
   ['parameters: {values: [{name: a, range: 50-400}]}', 'least and greatest, such as [50, 400].'],

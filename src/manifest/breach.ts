@@ -116,7 +116,9 @@ function expectation({ keyword, params, parentSchema = {} }: ErrorObject): strin
     exclusiveMaximum !== undefined && `and below ${exclusiveMaximum}`,
     minItems !== undefined && `of at least ${minItems} ${minItems === 1 ? 'entry' : 'entries'}`,
   ];
-  const keys = type === 'object' ? Object.keys(parentSchema.properties ?? {}).slice(0, 3) : [];
+  // Where the keys are names that the writer gives, `propertyNames` says what they may hold.
+  const named = parentSchema.properties ?? (parentSchema.propertyNames === undefined ? {} : { NAME: null });
+  const keys = type === 'object' ? Object.keys(named).slice(0, 3) : [];
   const example = keys.length > 0 && `such as {${keys.map((key) => `${key}: ...`).join(', ')}}`;
   return [typeWords(type), ...limits, example].filter(Boolean).join(' ');
 }
