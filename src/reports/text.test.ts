@@ -155,6 +155,16 @@ BLOCKED   1 finding to clear, 0 warnings, 0 notes
     );
   });
 
+  it('prints one acceptance of two findings once', () => {
+    const accepted = 'recessions alone are used (A. Writer, 2026-12-01)';
+    const text = textReport(
+      verdictOf([finding({ accepted }), finding({ accepted, message: 'As over calibration.' })]),
+      plainText,
+    );
+    expect(text.match(/^ {2}accepted: /gm)).toHaveLength(1);
+    expect(text).toContain('2 accepted');
+  });
+
   it('colours only when asked', () => {
     const controlSequence = '\u001b[';
     expect(textReport(verdictOf([finding()]), plainText)).not.toContain(controlSequence);

@@ -195,5 +195,6 @@ function answered(manifest: ManifestVerdict): readonly string[] {
     ),
   ];
   if (lines.length === 0) return [];
-  return ['', 'BY SOMEBODY’S WORD', ...lines.flatMap(hanging)];
+  // One word may stand for several findings, as for those of two windows.
+  return ['', 'BY SOMEBODY’S WORD', ...[...new Set(lines)].flatMap(hanging)];
 }
