@@ -1,12 +1,5 @@
 import { resolve } from 'node:path';
 import { Failure } from '../failure.ts';
-import { githubReport } from '../reports/github.ts';
-import { gitlabReport } from '../reports/gitlab.ts';
-import { jsonReport } from '../reports/json.ts';
-import { junitReport } from '../reports/junit.ts';
-import { markdownReport } from '../reports/markdown.ts';
-import { sarifReport } from '../reports/sarif.ts';
-import { textReport } from '../reports/text.ts';
 import { openMemories } from '../repository/memories.ts';
 import type { Sharing } from '../repository/memory-folders.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
@@ -14,14 +7,13 @@ import { type Part, partName } from '../repository/part.ts';
 import { openRepository } from '../repository/repository.ts';
 import type { At, Snapshot } from '../repository/snapshot.ts';
 import type { Phase } from '../rules/rule.ts';
-import type { Verdict } from '../verdict/finding.ts';
-import { version } from '../version.ts';
 import { openBase } from './base.ts';
 import type { Context, ExitStatus } from './command.ts';
 import type { Against } from './comparison.ts';
 import { examine } from './examine.ts';
 import { onlyFromTop } from './only.ts';
 import { missingParts, readPart, workOnPart } from './part.ts';
+import { readReport, reportOf } from './report-kinds.ts';
 import { stoplogFiles } from './studies.ts';
 import { tellGithub } from './tell-github.ts';
 import { touchesGoverned } from './touched.ts';
@@ -41,15 +33,6 @@ export interface CheckOptions {
   readonly quiet?: boolean;
   readonly brief?: boolean;
   readonly color?: boolean;
-}
-
-export const kinds = ['text', 'json', 'sarif', 'junit', 'github', 'gitlab', 'markdown'] as const;
-type Kind = (typeof kinds)[number];
-
-interface Report {
-  readonly kind: Kind;
-  /** `-` for standard output, else a path. */
-  readonly to: string;
 }
 
 /** `stoplog check`: 0 when nothing blocks, 1 when something does. */
@@ -86,8 +69,10 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
     const missing = sharing === 'gather' ? await missingParts(repository.commonDirectory) : null;
     if (missing !== null && !quiet) context.tell(`${missing}\n`);
     const verdict = await examine(snapshot, { today: context.today, only, phase, against });
+    const extent = quiet ? 'quiet' : options.brief ? 'brief' : 'whole';
     for (const { kind, to } of reports) {
-      const text = write(kind, verdict, options, to === '-' && context.color);
+      const color = options.color ?? (to === '-' && context.color);
+      const text = reportOf(kind, verdict, { color, extent });
       if (to === '-') context.write(text, kind === 'github' ? 'command' : undefined);
       else await writeFileSafely(resolve(context.cwd, to), text);
       if (kind === 'github') await tellGithub(context, verdict);
@@ -135,46 +120,4 @@ function partDone(part: Part, { label }: Snapshot): string {
 /** `worktree`, `index`, or anything else as a revision. */
 function readAt(at: string): At {
   return at === 'worktree' || at === 'index' ? { kind: at } : { kind: 'revision', revision: at };
-}
-
-function write(kind: Kind, verdict: Verdict, options: CheckOptions, color: boolean): string {
-  switch (kind) {
-    case 'text':
-      return textReport(verdict, {
-        color: options.color ?? color,
-        extent: options.quiet ? 'quiet' : options.brief ? 'brief' : 'whole',
-      });
-    case 'json':
-      return jsonReport(verdict);
-    case 'sarif':
-      return sarifReport(verdict, version);
-    case 'junit':
-      return junitReport(verdict);
-    case 'github':
-      return githubReport(verdict);
-    case 'gitlab':
-      return gitlabReport(verdict);
-    case 'markdown':
-      return markdownReport(verdict);
-  }
-}
-
-function readReport(given: string): Report {
-  const [kind, ...path] = given.split('=');
-  const known = kinds.find((one) => one === kind);
-  if (known === undefined) {
-    throw new Failure(
-      'usage',
-      `\`--report ${given}\` asks for a kind of report that does not exist.`,
-      `Kinds: ${kinds.join(', ')}; as \`--report json=findings.json\`, or \`--report json\` for standard output.`,
-    );
-  }
-  const to = path.length === 0 ? '-' : path.join('=');
-  if (to === '')
-    throw new Failure(
-      'usage',
-      `\`--report ${given}\` names no file after the equals sign.`,
-      `Write \`--report ${kind}=PATH\`, or \`--report ${kind}\` for standard output.`,
-    );
-  return { kind: known, to };
 }

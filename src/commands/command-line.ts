@@ -4,12 +4,13 @@ import { caution } from '../reports/caution.ts';
 import { wrap } from '../reports/wrap.ts';
 import { phases } from '../rules/rule.ts';
 import { version } from '../version.ts';
-import { checkCommand, kinds } from './check.ts';
+import { checkCommand } from './check.ts';
 import type { Context, ExitStatus } from './command.ts';
 import type { DossierOptions } from './dossier.ts';
 import { hookNames } from './hook/script.ts';
 import { hookAdd, hookList, hookRemove } from './hook.ts';
 import { hosts, pipelineCommand } from './pipeline.ts';
+import { kinds } from './report-kinds.ts';
 import { rulesCommand } from './rules.ts';
 import { sealCommand } from './seal.ts';
 

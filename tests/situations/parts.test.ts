@@ -2,7 +2,7 @@ import { cp, mkdir, mkdtemp, readdir, readFile, realpath, rm } from 'node:fs/pro
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import { kinds } from '../../src/commands/check.ts';
+import { kinds } from '../../src/commands/report-kinds.ts';
 import { check, stoplog } from '../harness/command.ts';
 import { gitIn, type TemporaryRepository, temporaryRepository } from '../harness/repository.ts';
 
