@@ -13,6 +13,14 @@ describe('a file is renamed, its bytes are the same', () => {
     project = await soundRepository();
     await mkdir(join(project.folder, 'data/gauges'));
     await project.git('mv', 'data/rain.csv', 'data/gauges/rain.csv');
+    const lost = (await check(project.folder)).verdict.manifests[0]?.findings;
+    expect(lost).toContainEqual(
+      expect.objectContaining({
+        rule: 'seal.stale',
+        record: 'inputs.rainfall',
+        clear: expect.stringMatching(/^If it was renamed, write its new path .* stoplog seal --moved/),
+      }),
+    );
     const tooEarly = await stoplog(project.folder, ['seal', '--moved']);
     expect(tooEarly.text).toContain('write its new path in the manifest first');
 
@@ -23,7 +31,7 @@ describe('a file is renamed, its bytes are the same', () => {
       expect.objectContaining({
         rule: 'seal.stale',
         record: 'inputs.rainfall',
-        clear: expect.stringContaining('stoplog seal --moved'),
+        clear: expect.stringMatching(/^For the renamed file: stoplog seal --moved/),
       }),
     );
 

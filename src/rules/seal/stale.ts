@@ -47,7 +47,7 @@ function stale(record: RecordNode, { changes, trails }: Standing, seal: Seal, fa
         .slice(0, shownAtMost)
         .map((trail) => `also rests on ${trail.slice(1).join(' <- ')}`),
     ],
-    clear: wasRenamed(files) ? renamed(record) : nextStep(record, own.length > 0),
+    clear: ofLostFiles(record, files) ?? nextStep(record, own.length > 0),
   };
 }
 
@@ -81,18 +81,20 @@ function kindOf({ was, now }: FileChange): 'changed' | 'gone' | 'added' | 'unrea
   return now.kind === 'unavailable' ? 'unread' : 'changed';
 }
 
-/** Whether a file is gone, and one with the same bytes is there instead. */
-function wasRenamed(files: readonly FileChange[]): boolean {
+/** What to do where files are gone, which may only be called otherwise now; null where none is. */
+function ofLostFiles({ id }: RecordNode, files: readonly FileChange[]): string | null {
+  const gone = files.flatMap(({ was, now }) => (now === null ? [was?.sha256 ?? null] : []));
+  if (gone.length === 0) return null;
   const added = new Set(
     files.flatMap(({ was, now }) =>
       was === null && now !== null && now.kind !== 'unavailable' ? now.sha256 : [],
     ),
   );
-  return files.some(({ was, now }) => now === null && was?.sha256 != null && added.has(was.sha256));
-}
-
-function renamed({ id }: RecordNode): string {
-  return `For the renamed file: stoplog seal --moved (keeps who sealed it, and when). If more changed, look at it, then: stoplog seal ${id}`;
+  const isFound = gone.some((sha256) => sha256 !== null && added.has(sha256));
+  const first = isFound
+    ? 'For the renamed file'
+    : 'If it was renamed, write its new path in the manifest, then';
+  return `${first}: stoplog seal --moved (keeps who sealed it, and when). Otherwise check what changed, then: stoplog seal ${id}`;
 }
 
 function nextStep({ id, area }: RecordNode, own: boolean): string {
