@@ -11,17 +11,6 @@ const rain = 'data/rain/high-tarrow.csv';
 
 let folder: string;
 let source: TemporaryRepository;
-beforeEach(async () => {
-  folder = await realpath(await mkdtemp(join(tmpdir(), 'stoplog-test-')));
-  source = await temporaryRepository();
-  await cp(example, source.folder, { recursive: true });
-  await source.git('add', '--all');
-  await source.git('commit', '--quiet', '--message', 'The example');
-});
-afterEach(async () => {
-  await source.remove();
-  await rm(folder, { recursive: true });
-});
 
 /** A clone of the source, by default a whole one. */
 async function clone(name: string, ...options: string[]): Promise<string> {
@@ -67,6 +56,18 @@ async function reportsOf(cloned: string, ...words: string[]) {
 }
 
 describe('work shared in parts', () => {
+  beforeEach(async () => {
+    folder = await realpath(await mkdtemp(join(tmpdir(), 'stoplog-test-')));
+    source = await temporaryRepository();
+    await cp(example, source.folder, { recursive: true });
+    await source.git('add', '--all');
+    await source.git('commit', '--quiet', '--message', 'The example');
+  });
+  afterEach(async () => {
+    await source.remove();
+    await rm(folder, { recursive: true });
+  });
+
   it('gives the reports of one run, byte for byte, of a change against a base', async () => {
     // The same in every run: what it is compared with, a changed gauge, and a stated score that is no longer so.
     const path = join(source.folder, rain);
@@ -132,18 +133,18 @@ describe('work shared in parts', () => {
     ]);
     expect({ status, text }).toEqual({ status: 0, text: expect.stringContaining('part 1 of 2') });
   });
+});
 
-  it.each([
-    [['--part', '3of2'], 'no part of a whole'],
-    [['--part', '0of2'], 'no part of a whole'],
-    [['--part', '2/8'], 'no part of a whole'],
-    [['--part', '1of2', '--gather'], 'do not go together'],
-    [['--part', '1of2', '--report', 'json'], 'do not go together'],
-    [['--gather', '--no-cache'], 'do not go together'],
-    [['--part', '1of2', '--no-cache'], 'do not go together'],
-  ])('is asked for in words that make sense: %j', async (words, said) => {
-    const { status, failure } = await stoplog(source.folder, ['check', ...words]);
-    expect(status).toBe(2);
-    expect(failure?.message).toContain(said);
-  });
+it.each([
+  [['--part', '3of2'], 'no part of a whole'],
+  [['--part', '0of2'], 'no part of a whole'],
+  [['--part', '2/8'], 'no part of a whole'],
+  [['--part', '1of2', '--gather'], 'do not go together'],
+  [['--part', '1of2', '--report', 'json'], 'do not go together'],
+  [['--gather', '--no-cache'], 'do not go together'],
+  [['--part', '1of2', '--no-cache'], 'do not go together'],
+])('a share of the work is asked for in words that make sense: %j', async (words, said) => {
+  const { status, failure } = await stoplog(tmpdir(), ['check', ...words]);
+  expect(status).toBe(2);
+  expect(failure?.message).toContain(said);
 });
