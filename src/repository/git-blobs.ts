@@ -16,8 +16,11 @@ export function gitBlobs(place: Place, objectFormat: ObjectFormat): Blobs {
   const living = new Set<ObjectReader>();
   let free: ObjectReader | null = null;
   let turn: Promise<unknown> = Promise.resolve();
+  let closed = false;
 
   const start = (list?: readonly string[]) => {
+    // Where one of several tasks fails, others go on for a while; a child that they started now would never end, nor this run.
+    if (closed) throw new Error('These blobs are closed.');
     const reader = new ObjectReader(place, list);
     living.add(reader);
     return reader;
@@ -76,6 +79,7 @@ export function gitBlobs(place: Place, objectFormat: ObjectFormat): Blobs {
           })
         : null,
     async close() {
+      closed = true;
       await Promise.all([...living].map(end));
     },
   };

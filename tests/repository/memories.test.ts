@@ -53,3 +53,13 @@ describe('what one run knows', () => {
     ]);
   });
 });
+
+it('asks git nothing more once a state is closed, so that a run that failed ends', async () => {
+  const repository = await temporaryRepository(files);
+  const opened = await openRepository(repository.folder, repository.environment);
+  const snapshot = await openSnapshot(opened, { kind: 'revision', revision: 'HEAD' });
+  await snapshot.close();
+  await expect(snapshot.read('a.csv')).rejects.toThrow(/closed/);
+  await expect(snapshot.identify(['b.csv'])).rejects.toThrow(/closed/);
+  await repository.remove();
+});
