@@ -63,7 +63,8 @@ export function healSeals(versions: Versions, records: Records, schemes: Schemes
 
 /**
  * Of the seals that the sides of a merge have, those that fit the content as it is now, for the records whose own seal does
- * not: what was reviewed on either side stays reviewed, however the conflict in the seals file was settled.
+ * not: what was reviewed on either side stays reviewed, however the conflict in the seals file was settled. A seal that only
+ * names keep from fitting, here as there, is none of a merge's: something was renamed since.
  */
 export function recoverSeals(
   sides: readonly (readonly [kept: 'ours' | 'theirs', of: Pick<SealsFile, 'seals'>])[],
@@ -72,14 +73,22 @@ export function recoverSeals(
   schemes: Schemes = known,
 ): readonly HealedRecord[] {
   const fits = fitting(records, schemes);
-  const candidates = sides.map(([kept, of]) => ({ kept, of: withNewNames(of, records, fits) }));
+  const followed = withNewNames({ seals }, records, fits);
+  const candidates = sides.map(([kept, before]) => ({
+    kept,
+    before: before.seals,
+    of: withNewNames(before, records, fits),
+  }));
   return [...records.nodes.keys()].flatMap((record) => {
     const own = seals.get(record);
     if (own !== undefined && fits(record, own)) return [];
+    const moved = followed.get(record);
+    const isMoved = moved !== undefined && fits(record, moved);
     const [best] = candidates
-      .flatMap(({ kept, of }) => {
+      .flatMap(({ kept, before, of }) => {
         const seal = of.get(record);
-        return seal !== undefined && fits(record, seal) ? { kept, seal } : [];
+        const isAsked = !isMoved || before.get(record) === seal;
+        return isAsked && seal !== undefined && fits(record, seal) ? { kept, seal } : [];
       })
       .sort((a, b) => better(a.seal, b.seal));
     return best === undefined ? [] : { record, ...best, fits: true, rerunDropped: false };

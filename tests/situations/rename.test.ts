@@ -11,6 +11,12 @@ afterEach(() => project.remove());
 describe('a file is renamed, its bytes are the same', () => {
   it('is followed by `seal --moved`, with the person and the date of the seal', async () => {
     project = await soundRepository();
+    // That the commit before was a merge makes no difference.
+    await project.git('checkout', '--quiet', '-b', 'visit');
+    await project.write('notes.txt', 'Gauge visited.\n');
+    await project.commit('Visit');
+    await project.git('checkout', '--quiet', 'main');
+    await project.git('merge', '--quiet', '--no-ff', '--no-edit', 'visit');
     await mkdir(join(project.folder, 'data/gauges'));
     await project.git('mv', 'data/rain.csv', 'data/gauges/rain.csv');
     const lost = (await check(project.folder)).verdict.manifests[0]?.findings;
@@ -37,6 +43,7 @@ describe('a file is renamed, its bytes are the same', () => {
 
     const moved = await stoplog(project.folder, ['seal', '--moved'], '2021-04-01');
     expect(moved.text).toContain('data/rain.csv -> data/gauges/rain.csv');
+    expect(moved.text).not.toContain('HEALED');
     const { records } = JSON.parse(await project.read('stoplog.seals.json')) as {
       records: Record<string, Seal>;
     };
