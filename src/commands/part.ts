@@ -34,12 +34,14 @@ async function workOn(studies: readonly (Study | Unread)[], snapshot: Snapshot):
 /** What `--gather` says where parts are missing: their work is done anew, so the verdict is the same. Null where none is. */
 export async function missingParts(commonDirectory: string): Promise<string | null> {
   const parts = await partsIn(commonDirectory);
-  const [first] = parts;
-  if (first === undefined)
+  /** Of another number some may have stayed from an earlier time. */
+  const ofOneNumber = (of: number) => parts.filter((part) => part.of === of).length;
+  const [of] = parts.map((part) => part.of).sort((one, other) => ofOneNumber(other) - ofOneNumber(one));
+  if (of === undefined)
     return 'no part of the work was left here, so all of it is done now. `stoplog check --part 1of2` and so on leave it in stoplog/parts below the git directory.';
-  const all = Array.from({ length: first.of }, (_, place) => ({ number: place + 1, of: first.of }));
+  const all = Array.from({ length: of }, (_, place) => partName({ number: place + 1, of }));
   const names = new Set(parts.map(partName));
-  const missing = all.map(partName).filter((name) => !names.has(name));
+  const missing = all.filter((name) => !names.has(name));
   return missing.length === 0
     ? null
     : `${missing.join(', ')} left no work here, so that part of it is done now.`;

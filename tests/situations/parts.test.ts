@@ -115,8 +115,9 @@ describe('work shared in parts', () => {
     const gathering = await clone('gathering');
     await workInParts(3, gathering, '--at', 'HEAD');
     await rm(join(partsOf(gathering), '2of3'), { recursive: true });
+    await mkdir(join(partsOf(gathering), '1of2'));
     const gathered = await reportsOf(gathering, '--at', 'HEAD', '--gather');
-    expect(gathered.said).toContain('2of3 left no work here');
+    expect(gathered.said).toMatch(/^2of3 left no work here/);
     const none = await clone('none');
     const alone = await reportsOf(none, '--at', 'HEAD', '--gather');
     expect(alone.said).toContain('no part of the work was left here');
