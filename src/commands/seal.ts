@@ -64,7 +64,8 @@ export async function sealCommand(
     } = figures ? await withFigures(read, asked, snapshot, context.today) : { study: read, ...noFigures };
     const { study, healed, moved } = await mended(stated, follow, repository, snapshot);
     const isWhole = unreadableSeals(study.sealsFile) === null;
-    if (isWhole && healed.length === 0 && names.length === 0 && !all && !follow) throw nothingAsked();
+    const wasWhole = unreadableSeals(stated.sealsFile) === null;
+    if (wasWhole && healed.length === 0 && names.length === 0 && !all && !follow) throw nothingAsked();
     const plan = makeSeals({
       ...study,
       wanted: all ? 'all' : names,

@@ -85,6 +85,8 @@ export function sealReport(outcome: SealOutcome): string {
     ),
   ];
   const head = of === null ? '' : `Records of ${plain(of)}\n\n`;
+  if (lines.length === 0 && written.length > 0)
+    lines.push('HEALED after a merge', '  both sides hold the same seals for what is merged');
   if (lines.length === 0)
     return `${head}Nothing to do: ${onlyMoves ? noMove : 'what was asked for is sealed, and unchanged since.'}\n`;
   if (written.length > 0) lines.push('', `To stage   git add ${written.map(shellPath).join(' ')}`);

@@ -52,4 +52,29 @@ describe('a file is renamed, its bytes are the same', () => {
     expect(records['runs.calibrated']?.sealed_on).toBe('2021-02-01');
     expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
   });
+
+  it('on two branches, to another name on each: `seal` puts the seals together', async () => {
+    project = await soundRepository();
+    for (const [branch, path] of [
+      ['ours', 'data/rain-a.csv'],
+      ['theirs', 'data/rain-b.csv'],
+    ] as const) {
+      await project.git('checkout', '--quiet', '-b', branch, 'main');
+      await project.git('mv', 'data/rain.csv', path);
+      await project.edit('stoplog.yaml', (text) => text.replaceAll('data/rain.csv', path));
+      await stoplog(project.folder, ['seal', '--moved']);
+      await project.commit(branch);
+    }
+    await project.git('checkout', '--quiet', 'ours');
+    await expect(project.git('merge', '--quiet', 'theirs')).rejects.toThrow();
+    await project.git('checkout', 'HEAD', '--', 'stoplog.yaml');
+    await project.git('rm', '--quiet', '--cached', 'data/rain.csv', 'data/rain-b.csv');
+    await project.git('add', 'data/rain-a.csv');
+    expect(await project.read('stoplog.seals.json')).toContain('<<<<<<<');
+
+    const healed = await stoplog(project.folder, ['seal']);
+    expect(healed.text).toMatch(/^HEALED after a merge\n {2}both sides hold the same seals/);
+    expect(healed.text).toContain('git add stoplog.seals.json');
+    expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+  });
 });
