@@ -1,9 +1,6 @@
 import { resolve } from 'node:path';
-import { Failure } from '../failure.ts';
 import { openMemories } from '../repository/memories.ts';
-import type { Sharing } from '../repository/memory-folders.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
-import { type Part, partName } from '../repository/part.ts';
 import { openRepository } from '../repository/repository.ts';
 import type { At, Snapshot } from '../repository/snapshot.ts';
 import type { Phase } from '../rules/rule.ts';
@@ -12,24 +9,20 @@ import type { Context, ExitStatus } from './command.ts';
 import type { Against } from './comparison.ts';
 import { examine } from './examine.ts';
 import { onlyFromTop } from './only.ts';
-import { missingParts, readPart, workOnPart } from './part.ts';
+import { missingParts, partDone, readSharing, type SharingOptions, workOnPart } from './part.ts';
 import { readReport, reportOf } from './report-kinds.ts';
 import { stoplogFiles } from './studies.ts';
 import { tellGithub } from './tell-github.ts';
 import { touchesGoverned } from './touched.ts';
 import { writeFileSafely } from './write-file.ts';
 
-export interface CheckOptions {
+export interface CheckOptions extends SharingOptions {
   readonly at: string;
   readonly base?: string;
   readonly strict?: boolean;
   readonly ifTouched?: boolean;
   readonly only?: string;
   readonly phase?: Phase;
-  readonly part?: string;
-  readonly gather?: boolean;
-  readonly report?: readonly string[];
-  readonly cache: boolean;
   readonly quiet?: boolean;
   readonly brief?: boolean;
   readonly color?: boolean;
@@ -63,7 +56,7 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
     const only = onlyFromTop(options.only, repository.here, snapshot);
     if (typeof sharing === 'object') {
       await workOnPart(snapshot, base, only);
-      if (!quiet) context.write(partDone(sharing.part, snapshot));
+      if (!quiet) context.write(partDone(sharing, snapshot));
       return 0;
     }
     const missing = sharing === 'gather' ? await missingParts(repository.commonDirectory) : null;
@@ -88,33 +81,6 @@ function untouched({ at, label }: Snapshot, base: Snapshot | null): string {
   return base === null
     ? `stoplog   ${at.kind === 'index' ? 'what is ' : ''}${label} holds no manifest, so there is nothing to check\n`
     : `stoplog   nothing that a manifest governs differs between ${base.label} and ${label}\n`;
-}
-
-/** Reads `--part` and `--gather`. */
-function readSharing({ part, gather = false, report, cache }: CheckOptions): Sharing | undefined {
-  if (part === undefined && !gather) return undefined;
-  if (!cache)
-    throw notTogether(
-      gather ? '--gather' : '--part',
-      '--no-cache',
-      'what parts leave for others is a memory',
-    );
-  if (part === undefined) return 'gather';
-  if (gather) throw notTogether('--part', '--gather', 'the parts come first, in runs of their own');
-  if (report !== undefined) throw notTogether('--part', '--report', 'one part alone gives no verdict');
-  return { part: readPart(part) };
-}
-
-function notTogether(one: string, other: string, why: string): Failure {
-  return new Failure(
-    'usage',
-    `\`${one}\` and \`${other}\` do not go together: ${why}.`,
-    'Run `stoplog check --part 1of8`, `--part 2of8` and so on, each with the same `--at`, `--base` and `--only`; when all are done, `stoplog check --gather` with these and with `--report`.',
-  );
-}
-
-function partDone(part: Part, { label }: Snapshot): string {
-  return `stoplog   part ${part.number} of ${part.of} of the work on ${label} is done; stoplog/parts/${partName(part)} below the git directory holds it for \`stoplog check --gather\`\n`;
 }
 
 /** `worktree`, `index`, or anything else as a revision. */

@@ -1,13 +1,43 @@
 import { workOut } from '../facts/work-out.ts';
 import { Failure } from '../failure.ts';
-import { partsIn } from '../repository/memory-folders.ts';
+import { partsIn, type Sharing } from '../repository/memory-folders.ts';
 import { type Part, parsePart, partName } from '../repository/part.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
 import { choose } from './only.ts';
 import { readStudies, type Study, type Unread, withoutManifest } from './studies.ts';
 
-/** Reads `--part`. */
-export function readPart(given: string): Part {
+/** The options that say how work is shared, and those that they do not go with. */
+export interface SharingOptions {
+  readonly part?: string;
+  readonly gather?: boolean;
+  readonly report?: readonly string[];
+  readonly cache: boolean;
+}
+
+/** Reads `--part` and `--gather`. */
+export function readSharing({ part, gather = false, report, cache }: SharingOptions): Sharing | undefined {
+  if (part === undefined && !gather) return undefined;
+  if (!cache)
+    throw notTogether(
+      gather ? '--gather' : '--part',
+      '--no-cache',
+      'what parts leave for others is a memory',
+    );
+  if (part === undefined) return 'gather';
+  if (gather) throw notTogether('--part', '--gather', 'the parts come first, in runs of their own');
+  if (report !== undefined) throw notTogether('--part', '--report', 'one part alone gives no verdict');
+  return readPart(part);
+}
+
+function notTogether(one: string, other: string, why: string): Failure {
+  return new Failure(
+    'usage',
+    `\`${one}\` and \`${other}\` do not go together: ${why}.`,
+    'Run `stoplog check --part 1of8`, `--part 2of8` and so on, each with the same `--at`, `--base` and `--only`; when all are done, `stoplog check --gather` with these and with `--report`.',
+  );
+}
+
+function readPart(given: string): Part {
   const part = parsePart(given);
   if (part !== null) return part;
   throw new Failure(
@@ -29,6 +59,11 @@ export async function workOnPart(
 
 async function workOn(studies: readonly (Study | Unread)[], snapshot: Snapshot): Promise<void> {
   for (const study of studies) if (!('problems' in study)) await workOut(study.records, snapshot);
+}
+
+/** What a run that did its part says. */
+export function partDone(part: Part, { label }: Snapshot): string {
+  return `stoplog   part ${part.number} of ${part.of} of the work on ${label} is done; stoplog/parts/${partName(part)} below the git directory holds it for \`stoplog check --gather\`\n`;
 }
 
 /** What `--gather` says where parts are missing: their work is done anew, so the verdict is the same. Null where none is. */

@@ -18,13 +18,13 @@ export async function pipelineCommand(
   host: keyof typeof jobs,
   { parts }: PipelineOptions,
 ): Promise<ExitStatus> {
-  const last = parsePart(`${parts}of${parts}`);
-  if (last === null)
+  const first = parsePart(`1of${parts}`);
+  if (first === null)
     throw new Failure(
       'usage',
       `\`--parts ${parts}\` is no number of machines.`,
       'Write a whole number from 1 to 256: `stoplog pipeline github --parts 8`.',
     );
-  context.write(jobs[host](version, last.of));
+  context.write(jobs[host](version, first.of));
   return 0;
 }

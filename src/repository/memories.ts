@@ -30,7 +30,7 @@ export async function openMemories(
 ): Promise<Memories> {
   const left = new Map<string, number>();
   if (!remember) return { digests: forgetfulMemory(), values: forgetfulValues(progress), left };
-  const part = typeof sharing === 'object' ? sharing.part : undefined;
+  const part = sharing === 'gather' ? undefined : sharing;
   const folders = await memoryFolders(commonDirectory, sharing);
   return {
     digests: await openDigestMemory(folders),

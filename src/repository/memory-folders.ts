@@ -10,7 +10,7 @@ export interface MemoryFolders {
 }
 
 /** How a run shares its work: it does one part of it for others, or takes in what the parts did. */
-export type Sharing = { readonly part: Part } | 'gather';
+export type Sharing = Part | 'gather';
 
 /** The folders of a repository's memory below its common git directory. */
 export async function memoryFolders(
@@ -23,11 +23,11 @@ export async function memoryFolders(
     const parts = await partsIn(commonDirectory);
     return { own: usual, others: parts.map((part) => partFolder(commonDirectory, part)) };
   }
-  return { own: partFolder(commonDirectory, sharing.part), others: [usual] };
+  return { own: partFolder(commonDirectory, sharing), others: [usual] };
 }
 
 /** Where a part leaves its work. */
-export function partFolder(commonDirectory: string, part: Part): string {
+function partFolder(commonDirectory: string, part: Part): string {
   return join(commonDirectory, 'stoplog', 'parts', partName(part));
 }
 
