@@ -44,8 +44,7 @@ describe('what one run knows', () => {
     await repository.git('add', '.');
     const [some, all] = [Object.keys(files), [...Object.keys(files), 'd.csv']];
     const shares: number[][] = [];
-    for (const number of [1, 2])
-      shares.push(await digested([some, all], { sharing: { number, of: 2 } }));
+    for (const number of [1, 2]) shares.push(await digested([some, all], { sharing: { number, of: 2 } }));
     // By size, largest first, to whoever has less: a | b, c; and of all four: a, c | d, b.
     expect(shares).toEqual([
       [1, 0],
