@@ -22,6 +22,12 @@ export interface DossierOptions {
 export async function dossierCommand(context: Context, options: DossierOptions): Promise<ExitStatus> {
   const { verify, out, at, only } = options;
   if (verify !== undefined) return verifyDossier(context, verify);
+  if (out !== undefined && /\.(?:tar|7z|rar|tar\.(?:xz|bz2|zst)|txz|tbz2?)$/i.test(out))
+    throw new Failure(
+      'usage',
+      `\`--out ${out}\` asks for an archive of a kind that is not written.`,
+      'Name a `.zip`, a `.tar.gz`, or a folder.',
+    );
   if (out !== undefined)
     return gather(context, at, (gathered) => make(context, options, out, gathered), only);
   throw new Failure(

@@ -12,8 +12,8 @@ import { wrap } from './wrap.ts';
 export interface TextOptions {
   readonly color: boolean;
   /**
-   * `brief` tells in full only what blocks or asks for less, with a line for each record that warns, and counts notes; `quiet` tells
-   * only what blocks, and nothing at all on a pass.
+   * `brief` tells in full only what blocks or asks for less, with a line for each record that warns, and counts all else; `quiet`
+   * tells only what blocks, and nothing at all on a pass.
    */
   readonly extent: 'whole' | 'brief' | 'quiet';
 }
@@ -34,7 +34,8 @@ export function textReport(verdict: Verdict, { color, extent }: TextOptions): st
     ...opening(verdict, manifest, index === 0 ? paint.bold('stoplog') : ' '.repeat(7)),
     ...sections(verdict, manifest, isShown, paint),
     ...(brief ? warned(verdict, manifest) : []),
-    ...(quiet ? [] : [...standing(verdict, manifest), ...cured(verdict, manifest), ...answered(manifest)]),
+    ...(quiet || brief ? [] : [...standing(verdict, manifest), ...cured(verdict, manifest)]),
+    ...(quiet ? [] : answered(manifest)),
   ]);
   const pass = verdict.verdict === 'pass';
   lines.push(...remarks(verdict).flatMap((remark) => ['', ...wrap(plain(remark), width)]));

@@ -32,6 +32,11 @@ it('names the filter whose program is not there', () => {
   expect(gitFailure(['add'], 128, words).next).toContain("'lfs'");
 });
 
+it('names the program of a filter that talks to git, where it is not there', () => {
+  const words = 'git-lfs filter-process: 1: git-lfs: not found\nfatal: the remote end hung up unexpectedly\n';
+  expect(gitFailure(['add'], 128, words).next).toContain('git-lfs, which is not on PATH: install it');
+});
+
 it('gives the words of git otherwise, with the command that said them', () => {
   const failure = gitFailure(
     ['-c', 'core.safecrlf=false', 'ls-tree', '-r'],

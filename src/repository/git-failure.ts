@@ -33,5 +33,9 @@ function nextStep(words: string): string {
   if (filter !== undefined) {
     return `.gitattributes sends this file through the filter '${filter}': install its program, or see \`git config filter.${filter}.clean\`.`;
   }
+  const program = /^(\S+) .*: (?:command )?not found$/m.exec(words)?.[1];
+  if (program !== undefined) {
+    return `.gitattributes sends files through ${program}, which is not on PATH: install it, or check what is staged or committed (--at index, --at HEAD).`;
+  }
   return 'Mend what git names; `git status` and `git fsck` may show more.';
 }

@@ -102,6 +102,8 @@ it('of several studies, one by its folder is packed alone', async () => {
 it('without a place to write is no command', async () => {
   const project = await soundRepository();
   expect((await stoplog(project.folder, ['dossier'])).failure).toMatchObject({ code: 'usage' });
+  for (const out of ['dossier.tar', 'dossier.tar.xz', 'dossier.7z'])
+    expect((await stoplog(project.folder, ['dossier', '--out', out])).failure?.next).toContain('.tar.gz');
   expect(
     (await stoplog(project.folder, ['dossier', '--at', 'no-such', '--out', out()])).failure,
   ).toMatchObject({

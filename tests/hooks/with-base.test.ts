@@ -55,7 +55,11 @@ describe('hooks with a base, in a repository with a past', () => {
   });
 
   it('keep their base when they are brought up to date, until another is named', async () => {
-    await hook('add', '--base', 'origin/main');
+    expect((await hook('add', '--base', 'main')).text).not.toContain('names no commit');
+    const added = (await hook('add', '--base', 'origin/main')).text.replace(/\s+/g, ' ');
+    expect(added).toContain(
+      'origin/main names no commit here yet. Until it does, the whole state is checked',
+    );
     expect(await preCommit()).toContain(" --base 'origin/main' --at index\n");
     const before = await preCommit();
     expect((await hook('add')).text).toContain('holds back only what is new since origin/main');

@@ -30,7 +30,14 @@ export async function addHooks(
     done.set(there.file, await addHook(there, base, foldersMade));
     foldersMade = 0; // The first hook remembers them for all.
   }
-  return reportHooks(repository, home, done);
+  const isKnown = base === undefined || (await repository.resolve(base).then(Boolean, () => false));
+  const notes = isKnown
+    ? home.notes
+    : [
+        ...home.notes,
+        `${base} names no commit here yet. Until it does, the whole state is checked; if it is misspelt, run \`stoplog hook add --base\` with the right name.`,
+      ];
+  return reportHooks(repository, { ...home, notes }, done);
 }
 
 /** Hooks that would never run here. */

@@ -64,6 +64,11 @@ function outputsOfNoRun(facts: Facts): readonly Draft[] {
           field,
           subject: file,
           message: `${file} is used as a simulated result, but ${run === undefined ? 'no run says' : `run ${run} does not say`} that it gives it.`,
+          ...(run !== undefined && runs.some(({ name }) => name === run)
+            ? {
+                clear: `Add ${file} to gives of runs.${run}, if that run made it; else name the run that did.`,
+              }
+            : {}),
         },
   );
 }
