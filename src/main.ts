@@ -39,7 +39,7 @@ try {
   process.exitCode = 2;
   const failure = error instanceof Failure ? error : internal(error);
   // Names of files and words of git are a stranger's.
-  const words = `stoplog could not do this: ${failure.message}\n${failure.next}`;
+  const words = `stoplog could not do this.\n${failure.message}\n${failure.next}`;
   context.tell(`${words.split('\n').map(plain).join('\n')}\n`);
 }
 
@@ -64,7 +64,7 @@ function internal(error: unknown): Failure {
   writeFileSync(file, `stoplog ${version}, node ${process.version}\n${details}\n`);
   return new Failure(
     'internal',
-    'a fault in Stoplog itself stopped this run.',
+    'A fault in Stoplog itself stopped this run.',
     `Nothing was changed. Please report it with the details in ${file}.`,
     error,
   );

@@ -152,10 +152,10 @@ function collect(value: string, before: readonly string[] = []): readonly string
 
 function usage(error: CommanderError, program: Command): Failure {
   const known = program.commands.map((command) => command.name()).join(', ');
-  const said = error.message.replace(/^error: /, '');
+  const said = error.message.replace(/^(?:error: )?./, (start) => start.slice(-1).toUpperCase());
   return new Failure(
     'usage',
-    error.code === 'commander.help' ? 'no command was given.' : `${said}.`.replace(/\.\.$/, '.'),
+    error.code === 'commander.help' ? 'No command was given.' : `${said}.`.replace(/\.\.$/, '.'),
     `Commands: ${known}. \`stoplog --help\` or \`stoplog COMMAND --help\` says more.`,
     error,
   );

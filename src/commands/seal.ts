@@ -154,7 +154,7 @@ function theOne(studies: readonly (Study | Unread)[], names: readonly string[], 
   if (study === undefined) {
     throw new Failure(
       'usage',
-      'this repository holds several manifests, and it is not plain whose records are meant.',
+      'This repository holds several manifests, and it is not plain whose records are meant.',
       `Go into the folder of one of them, or add --only with it: ${studies.map(pathOf).join(', ')}.`,
     );
   }
@@ -172,7 +172,7 @@ function theOne(studies: readonly (Study | Unread)[], names: readonly string[], 
 function nothingAsked(): Failure {
   return new Failure(
     'usage',
-    'no record was named to seal.',
+    'No record was named to seal.',
     'Name what you have reviewed, such as `stoplog seal inputs.rainfall`, or `stoplog seal --all`.',
   );
 }

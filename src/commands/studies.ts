@@ -77,7 +77,7 @@ function noManifest(snapshot: Snapshot): Failure {
       )
     : new Failure(
         'no-manifest',
-        `there is no ${manifestName} in ${snapshot.at.kind === 'revision' ? '' : 'the '}${snapshot.label}: no catchment model is recorded here yet.`,
+        `There is no ${manifestName} in ${snapshot.at.kind === 'revision' ? '' : 'the '}${snapshot.label}: no catchment model is recorded here yet.`,
         `To begin, write a ${manifestName} beside the model with \`stoplog: 1\`, a \`study\` (purpose, decision, phase) and a ` +
           '`model` (name, version, release); then run `stoplog check` and answer what it asks.',
       );

@@ -10,7 +10,7 @@ export function commitDate(commit: string): Question<string> {
       if (seconds !== undefined) return `${new Date(Number(seconds) * 1000).toISOString().slice(0, -5)}Z`;
       throw new Failure(
         'git-failed',
-        `the commit ${commit} has no date of its committer that can be read.`,
+        `The commit ${commit} has no date of its committer that can be read.`,
         'See `git fsck`; make the commit anew.',
       );
     },

@@ -219,7 +219,7 @@ describe('a push that touches no model', () => {
     // A new history of its own holds no model; put in the place of one that does, it takes the model away.
     expect(await push('--force', 'pages:main')).toMatchObject({
       accepted: false,
-      words: expect.stringContaining('there is no stoplog.yaml'),
+      words: expect.stringContaining('There is no stoplog.yaml'),
     });
     expect(await push('pages')).toMatchObject({
       accepted: true,
@@ -231,7 +231,7 @@ describe('a push that touches no model', () => {
     await project.git('rm', '--quiet', 'models/harrow/stoplog.yaml');
     await project.git('commit', '--quiet', '-m', 'Nobody needs it');
     const { accepted, words } = await push('main');
-    expect(words).toContain('there is no stoplog.yaml');
+    expect(words).toContain('There is no stoplog.yaml');
     expect(accepted).toBe(false);
   });
 });

@@ -54,6 +54,6 @@ it('a commit that leaves the manifest out, or takes it away, is held', async () 
   await project.git('rm', '--quiet', 'stoplog.yaml');
   expect(await git('commit', '-m', 'Nobody needs it')).toMatchObject({
     done: false,
-    words: expect.stringContaining('there is no stoplog.yaml'),
+    words: expect.stringContaining('There is no stoplog.yaml'),
   });
 });
