@@ -127,6 +127,29 @@ describe('two branches that both sealed are merged', () => {
     expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
   });
 
+  it.each([
+    ['cherry-pick', ['cherry-pick', 'work']],
+    ['stash pop', ['stash', 'pop']],
+  ])('heals a conflict of git %s', async (name, command) => {
+    project = await soundRepository();
+    await sealOnBranch('both', (text) =>
+      newArea(text.replace('between June and September', 'between May and October')),
+    );
+    await project.git('switch', '--quiet', '--create', 'work', 'main');
+    await project.edit('stoplog.yaml', newDecision);
+    await stoplog(project.folder, ['seal', '--all', '--because', 'no number changed'], '2021-03-05');
+    await (name === 'stash pop' ? project.git('stash', '--quiet') : project.commit());
+    await project.git('switch', '--quiet', 'both');
+    await expect(project.git(...command)).rejects.toThrow(/CONFLICT/);
+    await project.git('checkout', '--theirs', 'stoplog.yaml');
+    await project.edit('stoplog.yaml', newArea);
+
+    const { text, failure } = await stoplog(project.folder, ['seal']);
+    expect(failure).toBeNull();
+    expect(text).toMatch(/study {3}the other branch’s seal is kept \(.*2021-03-05\)/);
+    expect((await check(project.folder)).found.filter((one) => one.startsWith('seal.'))).toEqual([]);
+  });
+
   it('finds again what any branch of an octopus sealed', async () => {
     project = await soundRepository();
     await sealOnBranch('area', newArea);
