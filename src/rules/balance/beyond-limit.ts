@@ -4,6 +4,7 @@ import { isDefined } from '../../hydrology/paired.ts';
 import { figure } from '../figures.ts';
 import { type Draft, rule } from '../rule.ts';
 import { computedBalance } from './computed-balance.ts';
+import { shortYears } from './short-years.ts';
 
 /** Columns are rounded, so that what is equal may differ by its last digits. */
 const rounding = 1e-6;
@@ -24,12 +25,7 @@ export const balanceBeyondLimit = rule({
   clear:
     'Check rain, area and potential evapotranspiration. Where water is imported or forest and open water evaporate more than grass, say so under `accepts`, with name and date.',
   limits: {
-    short_years: {
-      default: 5,
-      unit: 'years',
-      states: 'fewest complete years over which storage may be left out',
-      looser: 'lower',
-    },
+    short_years: shortYears,
   },
   check: (record, { balances }, limits) => {
     const balance = computedBalance(record, balances);
@@ -48,7 +44,7 @@ export const balanceBeyondLimit = rule({
 
 type Part = Omit<Draft, 'record' | 'field'>;
 
-function beyond(balance: RecomputedBalance, shortYears: number, isForGrass: boolean): readonly Part[] {
+function beyond(balance: RecomputedBalance, fewestYears: number, isForGrass: boolean): readonly Part[] {
   const { terms, storageChangeMm: stored, inflowMm: inflow, budyko, evaporativeRatio } = balance;
   const [rain, runoff, evaporated] = (['precipitation', 'streamflow', 'evapotranspiration'] as const).map(
     (quantity) => knownTerm(terms, quantity),
@@ -58,7 +54,7 @@ function beyond(balance: RecomputedBalance, shortYears: number, isForGrass: bool
     part !== undefined && limit !== undefined && part > limit * (1 + rounding);
   // What the stores gave may be used up; where they are left out, only long windows tell.
   const taken = stored === null ? 0 : Math.max(0, -stored);
-  const storageTells = stored !== null || balance.years.length >= shortYears;
+  const storageTells = stored !== null || balance.years.length >= fewestYears;
   const parts: Part[] = [];
   if (storageTells && rain !== undefined && isAbove(evaporated, rain + taken))
     parts.push({

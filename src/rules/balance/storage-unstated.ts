@@ -4,6 +4,7 @@ import { figure } from '../figures.ts';
 import { type Draft, type Limits, rule } from '../rule.ts';
 import { isStated } from '../stand-in.ts';
 import { computedBalance } from './computed-balance.ts';
+import { shortYears } from './short-years.ts';
 
 /** Fewer years that all rise may be chance: one in sixteen for five. */
 const fewestYears = 5;
@@ -24,12 +25,7 @@ export const balanceStorageUnstated = rule({
   clear:
     'Name the columns of storage, or give `storage_neglected_because` and a longer window. If a store fills for ever, call it what it is: an outflow out of the catchment.',
   limits: {
-    short_years: {
-      default: 5,
-      unit: 'years',
-      states: 'fewest complete years over which storage may be left out',
-      looser: 'lower',
-    },
+    short_years: shortYears,
     steady_share: {
       default: 0.01,
       unit: '1',
