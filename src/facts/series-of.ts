@@ -61,36 +61,14 @@ function letGo(tables: Map<string, Held>): void {
   }
 }
 
+const layoutKeys = [
+  ...(['time', 'values', 'separator', 'widths', 'decimal', 'skip_lines'] as const),
+  ...(['header', 'comment', 'missing', 'unit', 'step', 'utc_offset'] as const),
+] satisfies readonly (keyof SeriesLayout)[];
+
 /** What of a manifest's fragment says how a file is read; for keys of what was computed from it. */
 export function layoutOf(fragment: SeriesLayout): SeriesLayout {
-  const {
-    time,
-    values,
-    separator,
-    widths,
-    decimal,
-    skip_lines,
-    header,
-    comment,
-    missing,
-    unit,
-    step,
-    utc_offset,
-  } = fragment;
-  return {
-    time,
-    values,
-    separator,
-    widths,
-    decimal,
-    skip_lines,
-    header,
-    comment,
-    missing,
-    unit,
-    step,
-    utc_offset,
-  };
+  return Object.fromEntries(layoutKeys.map((key) => [key, fragment[key]]));
 }
 
 /** The data files of an input, in order of path. */

@@ -1,34 +1,11 @@
 import { describe, expect, it } from 'vitest';
+import { finding } from '../../tests/harness/finding.ts';
 import type { Finding, ManifestVerdict, Verdict } from '../verdict/finding.ts';
 import { concludeVerdict } from '../verdict/judge.ts';
 import { jsonReport } from './json.ts';
 import { textReport } from './text.ts';
 
 const plainText = { color: false, extent: 'whole' } as const;
-
-function finding(over: Partial<Finding> = {}): Finding {
-  return {
-    rule: 'seal.stale',
-    level: 'block',
-    record: 'inputs.rainfall',
-    message: 'data/rain/upper.csv is not the file that was sealed on 2026-03-02.',
-    file: 'stoplog.yaml',
-    line: 41,
-    column: 3,
-    stated: null,
-    found: null,
-    unit: null,
-    trail: ['inputs.rainfall', 'data/rain/upper.csv'],
-    detail: ['14 of 5 113 values differ; total 11 402 -> 11 655 mm (+2.2 %)'],
-    source: 'definition',
-    clear: 'Check the new data, then: stoplog seal inputs.rainfall',
-    standing: false,
-    waived: null,
-    accepted: null,
-    fingerprint: 'f00d',
-    ...over,
-  };
-}
 
 function verdictOf(findings: readonly Finding[], over: Partial<ManifestVerdict> = {}): Verdict {
   const ids = [...new Set(findings.map((one) => one.record))];
@@ -41,7 +18,7 @@ function verdictOf(findings: readonly Finding[], over: Partial<ManifestVerdict> 
         id,
         state: 'stale',
         grade: 'stated',
-        sealed_on: '2026-03-02',
+        sealed_on: '2020-03-02',
         sealed_by: 'A <a@b.example>',
       })),
       findings,
@@ -63,7 +40,7 @@ describe('the text report', () => {
 BLOCKED   1 record
 
   inputs.rainfall   stale                                                            stoplog.yaml:41
-     data/rain/upper.csv is not the file that was sealed on 2026-03-02.
+     data/rain/upper.csv is not the file that was sealed on 2020-03-02.
      14 of 5 113 values differ; total 11 402 -> 11 655 mm (+2.2 %)
      to clear   Check the new data, then: stoplog seal inputs.rainfall
                 (seal.stale)

@@ -15,9 +15,10 @@ import { junitReport } from '../../src/reports/junit.ts';
 import { markdownReport } from '../../src/reports/markdown.ts';
 import { sarifReport } from '../../src/reports/sarif.ts';
 import { textReport } from '../../src/reports/text.ts';
+import { finding } from '../harness/finding.ts';
 import { outsidePackage } from '../harness/outside.ts';
 import { obeyedIn } from './runner.ts';
-import { everyVerdict, faulty, finding, hostile, hostileTexts, large, sound, verdictOf } from './verdicts.ts';
+import { everyVerdict, faulty, hostile, hostileTexts, large, sound, verdictOf } from './verdicts.ts';
 
 const verdicts = await everyVerdict();
 const one = (over: object) => verdictOf([finding(over)]);

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { gitlabReport } from '../../src/reports/gitlab.ts';
+import { finding } from '../harness/finding.ts';
 import { gitlabJudge } from './validators.ts';
-import { everyVerdict, finding, verdictOf } from './verdicts.ts';
+import { everyVerdict, verdictOf } from './verdicts.ts';
 
 const verdicts = await everyVerdict();
 const entriesOf = (report: string) => JSON.parse(report) as { fingerprint: string; severity: string }[];

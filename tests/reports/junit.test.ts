@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { junitReport } from '../../src/reports/junit.ts';
+import { finding } from '../harness/finding.ts';
 import { junitJudge, junitSchema } from './validators.ts';
-import { everyVerdict, finding, hostile, large, verdictOf } from './verdicts.ts';
+import { everyVerdict, hostile, large, verdictOf } from './verdicts.ts';
 
 const verdicts = await everyVerdict();
 

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { commentBytes, markdownReport, summaryBytes } from '../../src/reports/markdown.ts';
-import { everyVerdict, faulty, finding, hostile, large, verdictOf } from './verdicts.ts';
+import { finding } from '../harness/finding.ts';
+import { everyVerdict, faulty, hostile, large, verdictOf } from './verdicts.ts';
 
 const verdicts = await everyVerdict();
 

@@ -3,9 +3,10 @@ import { gzipSync } from 'node:zlib';
 import { describe, expect, it } from 'vitest';
 import { sarifReport } from '../../src/reports/sarif.ts';
 import type { Verdict } from '../../src/verdict/finding.ts';
+import { finding } from '../harness/finding.ts';
 import { multitool, saidByMultitool } from './multitool.ts';
 import { sarifJudge, sarifSchema } from './validators.ts';
-import { everyVerdict, finding, hostile, large, verdictOf } from './verdicts.ts';
+import { everyVerdict, hostile, large, verdictOf } from './verdicts.ts';
 
 /** What the tests ask of a log. */
 interface Log {

@@ -2,6 +2,7 @@ import { examine } from '../../src/commands/examine.ts';
 import { snapshotFromMemory } from '../../src/repository/memory.ts';
 import type { Comparison, Finding, ManifestVerdict, Verdict } from '../../src/verdict/finding.ts';
 import { concludeVerdict } from '../../src/verdict/judge.ts';
+import { finding } from '../harness/finding.ts';
 import { example } from '../planted/fennock.ts';
 
 const checked = (files: Readonly<Record<string, string>>) =>
@@ -18,31 +19,6 @@ export const faulty = checked({
   [rain]: (example[rain] ?? '').split('\n').slice(0, -200).join('\n'),
   'stoplog.yaml': (example['stoplog.yaml'] ?? '').replace(/^ {2}release: .*\n/m, ''),
 });
-
-/** An invented finding. */
-export function finding(over: Partial<Finding> = {}): Finding {
-  return {
-    rule: 'seal.stale',
-    level: 'block',
-    record: 'inputs.rainfall',
-    message: 'data/rain/upper.csv is not the file that was sealed on 2020-03-02.',
-    file: 'stoplog.yaml',
-    line: 41,
-    column: 3,
-    stated: null,
-    found: null,
-    unit: null,
-    trail: ['inputs.rainfall', 'data/rain/upper.csv'],
-    detail: ['14 of 5 113 values differ; total 11 402 -> 11 655 mm (+2.2 %)'],
-    source: 'definition',
-    clear: 'Check the new data, then: stoplog seal inputs.rainfall',
-    standing: false,
-    waived: null,
-    accepted: null,
-    fingerprint: 'f00d',
-    ...over,
-  };
-}
 
 /** An invented verdict on these findings. */
 export function verdictOf(
