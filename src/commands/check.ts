@@ -1,5 +1,6 @@
 import { resolve } from 'node:path';
 import { openMemories } from '../repository/memories.ts';
+import { partFolder } from '../repository/memory-folders.ts';
 import { openSnapshot } from '../repository/open-snapshot.ts';
 import { openRepository } from '../repository/repository.ts';
 import type { At, Snapshot } from '../repository/snapshot.ts';
@@ -56,7 +57,7 @@ export async function checkCommand(context: Context, options: CheckOptions): Pro
     const only = onlyFromTop(options.only, repository.here, snapshot);
     if (typeof sharing === 'object') {
       await workOnPart(snapshot, base, only);
-      if (!quiet) context.write(partDone(sharing, snapshot));
+      if (!quiet) context.write(partDone(sharing, snapshot, partFolder(repository.commonDirectory, sharing)));
       return 0;
     }
     const missing = sharing === 'gather' ? await missingParts(repository.commonDirectory) : null;

@@ -1,5 +1,6 @@
 import { workOut } from '../facts/work-out.ts';
 import { Failure } from '../failure.ts';
+import { plain } from '../reports/escape.ts';
 import { partsIn, type Sharing } from '../repository/memory-folders.ts';
 import { type Part, parsePart, partName } from '../repository/part.ts';
 import type { Snapshot } from '../repository/snapshot.ts';
@@ -61,9 +62,9 @@ async function workOn(studies: readonly (Study | Unread)[], snapshot: Snapshot):
   for (const study of studies) if (!('problems' in study)) await workOut(study.records, snapshot);
 }
 
-/** What a run that did its part says. */
-export function partDone(part: Part, { label }: Snapshot): string {
-  return `stoplog   part ${part.number} of ${part.of} of the work on ${label} is done; stoplog/parts/${partName(part)} below the git directory holds it for \`stoplog check --gather\`\n`;
+/** What a run that did its part says; `folder` is where its work lies. */
+export function partDone({ number, of }: Part, { label }: Snapshot, folder: string): string {
+  return `stoplog   part ${number} of ${of} of the work on ${label} is done and lies in ${plain(folder)} for \`stoplog check --gather\`\n`;
 }
 
 /** What `--gather` says where parts are missing: their work is done anew, so the verdict is the same. Null where none is. */
@@ -73,7 +74,7 @@ export async function missingParts(commonDirectory: string): Promise<string | nu
   const ofOneNumber = (of: number) => parts.filter((part) => part.of === of).length;
   const [of] = parts.map((part) => part.of).sort((one, other) => ofOneNumber(other) - ofOneNumber(one));
   if (of === undefined)
-    return 'no part of the work was left here, so all of it is done now. `stoplog check --part 1of2` and so on leave it in stoplog/parts below the git directory.';
+    return 'no part of the work was left here, so all of it is done now. `stoplog check --part 1of2` and so on leave it in .git/stoplog/parts.';
   const all = Array.from({ length: of }, (_, place) => partName({ number: place + 1, of }));
   const names = new Set(parts.map(partName));
   const missing = all.filter((name) => !names.has(name));

@@ -27,7 +27,7 @@ export async function memoryFolders(
 }
 
 /** Where a part leaves its work. */
-function partFolder(commonDirectory: string, part: Part): string {
+export function partFolder(commonDirectory: string, part: Part): string {
   return join(commonDirectory, 'stoplog', 'parts', partName(part));
 }
 
