@@ -20,12 +20,23 @@ export function neededRegimes({ data }: Manifest): readonly Regime[] {
   return [...new Set(regimes)];
 }
 
-/** Those of them for which no target has a score in each of its windows that have scores. */
+/** Those of them for which no target has a score in each of its windows that have scores; none while no target has any. */
 export function unscoredRegimes(facts: Pick<Facts, 'manifest' | 'records' | 'scores'>): readonly Regime[] {
-  const targets = flowTargets(facts).map(({ name }) => facts.scores.get(name ?? '')?.stated ?? []);
+  const targets = flowTargets(facts)
+    .map((target) => scoresOfTarget(target, facts))
+    .filter((stated) => stated.length > 0);
+  if (targets.length === 0) return [];
   return neededRegimes(facts.manifest).filter(
     (regime) => !targets.some((stated) => stated.every(({ window }) => isScored(regime, window, stated))),
   );
+}
+
+/** What is stated of a target. */
+export function scoresOfTarget(
+  { name }: RecordNode<'evaluation'>,
+  { scores }: Pick<Facts, 'scores'>,
+): TargetFigures['stated'] {
+  return scores.get(name ?? '')?.stated ?? [];
 }
 
 /** The targets that evaluate streamflow. */

@@ -22,6 +22,12 @@ ruleCases(evaluationNeedUnscored, {
       remove: [`${scores}.validation.log_nse`],
       finds: { subject: 'low', message: 'no validation score of outlet-flow' },
     },
+    {
+      name: 'a second target without any score answers nothing',
+      set: { 'evaluation.upper': { variable: 'streamflow' } },
+      remove: [`${scores}.calibration.log_nse`, `${scores}.validation.log_nse`],
+      finds: { record: 'evaluation.outlet-flow', subject: 'low', message: 'score of outlet-flow' },
+    },
     { name: 'high flows without peaks', set: high, finds: { subject: 'high', message: '`peaks_hit`' } },
     { name: 'only noted while calibrating', set: high, phase: 'calibration', finds: { level: 'note' } },
   ],
@@ -46,6 +52,7 @@ ruleCases(evaluationNeedUnscored, {
       set: { 'study.needs': [{ variable: 'groundwater_level', regime: 'low' }] },
       remove: [`${scores}.calibration.log_nse`],
     },
+    { name: 'no score at all, which is another rule’s', remove: [scores] },
     { name: 'nothing is evaluated, which is another rule’s', remove: ['evaluation'] },
   ],
 });

@@ -1,4 +1,10 @@
-import { flowTargets, isScored, type Regime, unscoredRegimes } from '../../facts/scores/needs.ts';
+import {
+  flowTargets,
+  isScored,
+  type Regime,
+  scoresOfTarget,
+  unscoredRegimes,
+} from '../../facts/scores/needs.ts';
 import { scoredWindows } from '../../facts/scores/stated.ts';
 import { rule } from '../rule.ts';
 
@@ -28,9 +34,9 @@ export const evaluationNeedUnscored = rule({
   },
   clear: 'Add the score to each window of the target; `stoplog seal --figures` computes it.',
   check: (_, facts) => {
-    const [first] = flowTargets(facts);
+    const first = flowTargets(facts).find((target) => scoresOfTarget(target, facts).length > 0);
     if (first === undefined) return [];
-    const stated = facts.scores.get(first.name ?? '')?.stated ?? [];
+    const stated = scoresOfTarget(first, facts);
     const unscored = (regime: Regime) =>
       scoredWindows.filter(
         (window) => stated.some((one) => one.window === window) && !isScored(regime, window, stated),
